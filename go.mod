@@ -1,0 +1,3 @@
+module gloamwright
+
+go 1.26
