@@ -31,7 +31,11 @@ type Site struct {
 	Circuits   []*Circuit
 	Parts      []*SinglePart
 	TestPoints []*ExtraTestPoint
+	Sources    Sources // the description and the shared files it reads, for printing lines
 }
+
+// Sources holds the texts that spans point into, by the file name of the span.
+type Sources map[string][]byte
 
 // Job identifies the work.
 type Job struct {
@@ -130,6 +134,8 @@ type Kind struct {
 	Doc    string // one or two sentences, for the reference
 	Ports  []Port
 	Fields []Field
+	// MustFeed: a stage of this kind that no other takes from is a mistake.
+	MustFeed bool
 }
 
 // Port is a place where other stages connect.
@@ -140,6 +146,9 @@ type Port struct {
 	// (0: any number). Source ports give it.
 	Sink bool
 	Max  int
+	// Signal ports carry a signal from pin to pin, others feed a rail; Auxiliary
+	// rails feed control only, not the lights.
+	Signal, Auxiliary bool
 }
 
 // Type is what a field holds.
@@ -192,7 +201,9 @@ type Field struct {
 	Min, Max string // written as a user would; empty: no bound
 	Choices  []string
 	Port     string // for a StageRef: the default port of the named stage that this field means
-	Feeds    bool   // for a StageRef: this stage feeds the named one; otherwise it is fed by it
+	// Feeds, for a StageRef: this stage feeds the named one; otherwise it is fed by
+	// it, through its own sink port that bears the field's name, or its only sink port.
+	Feeds bool
 }
 
 // Schema is all kinds known to the program.
