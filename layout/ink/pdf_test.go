@@ -1,0 +1,115 @@
+package ink
+
+import (
+	"bytes"
+	"fmt"
+	"strings"
+	"sync"
+	"testing"
+	"time"
+)
+
+var testInfo = Info{Title: "Standby lighting – Größe", Author: "A. Marlowe", Date: time.Date(2026, 12, 1, 0, 0, 0, 0, time.UTC)}
+
+func testBook(t *testing.T, plain bool, name string) []byte {
+	t.Helper()
+	p := NewPDF(testInfo)
+	p.plain = plain
+	first := p.Sheet(210, 297, "Cover")
+	second := p.Sheet(420, 297, "Circuit "+name)
+	third := p.Sheet(297, 210, "Readings")
+	testSheet(second)
+	for face := range Face(len(faceNames)) {
+		first.Text(Point{30, 30 + 8*float64(face)}, name+" "+face.String(), Font{face, 5}, Start, Black, false)
+	}
+	first.Link(Rect{30, 20, 50, 10}, Target{Sheet: 2, Anchor: "F12-place"})
+	first.Link(Rect{30, 30, 50, 10}, Target{Anchor: "TP1", File: "other.svg"})
+	first.Link(Rect{30, 40, 50, 10}, Target{Sheet: 3})
+	third.Mark("TP1", Point{20, 60})
+	out, err := p.Output()
+	if err != nil {
+		t.Fatal(err)
+	}
+	return out
+}
+
+// TestSameBytesAfterOtherDocuments fails when the font bytes are shared between
+// documents: gofpdf overwrites part of them.
+func TestSameBytesAfterOtherDocuments(t *testing.T) {
+	want := testBook(t, false, "x")
+	for i := range 50 {
+		testBook(t, false, fmt.Sprintf("other %d αβγ", i))
+		if !bytes.Equal(testBook(t, false, "x"), want) {
+			t.Fatalf("document %d differs", i)
+		}
+	}
+	var wait sync.WaitGroup
+	differs := make([]bool, 8)
+	for i := range differs {
+		wait.Add(1)
+		go func() {
+			defer wait.Done()
+			differs[i] = !bytes.Equal(testBook(t, false, "x"), want)
+		}()
+	}
+	wait.Wait()
+	for i, d := range differs {
+		if d {
+			t.Errorf("document of goroutine %d differs", i)
+		}
+	}
+}
+
+func TestPDFContents(t *testing.T) {
+	out := string(testBook(t, true, "x"))
+	const k = pointsPerMM
+	for what, want := range map[string]string{
+		"A4 page":                "/MediaBox [0 0 595.28 841.89]",
+		"A3 page":                "/MediaBox [0 0 1190.55 841.89]",
+		"A4 on its side":         "/MediaBox [0 0 841.89 595.28]",
+		"date":                   "D:20261201000000",
+		"link to a mark":         fmt.Sprintf("/Dest [5 0 R /XYZ 0 %.2f null]", (297-50)*k),
+		"link by name only":      fmt.Sprintf("/Dest [7 0 R /XYZ 0 %.2f null]", (210-60)*k),
+		"link to a sheet":        fmt.Sprintf("/Dest [7 0 R /XYZ 0 %.2f null]", 210*k),
+		"bookmark on tall sheet": fmt.Sprintf("/Dest [3 0 R /XYZ 0 %.2f null]", 297*k),
+		"frame line":             "1.98 w",
+	} {
+		if !strings.Contains(out, want) {
+			t.Errorf("%s: no %q in the document", what, want)
+		}
+	}
+	if n := strings.Count(out, "<</Title "); n != 3 {
+		t.Errorf("%d bookmarks, want one a sheet", n)
+	}
+}
+
+func TestPDFRefuses(t *testing.T) {
+	if _, err := NewPDF(testInfo).Output(); err == nil {
+		t.Error("document without sheets accepted")
+	}
+	for name, draw := range map[string]func(Canvas){
+		"leads nowhere":   func(c Canvas) { c.Link(Rect{0, 0, 1, 1}, Target{Anchor: "gone"}) },
+		"sheet 2":         func(c Canvas) { c.Link(Rect{0, 0, 1, 1}, Target{Sheet: 2}) },
+		"no sign":         func(c Canvas) { c.Text(Point{1, 1}, "✓", Font{Regular, 3}, Start, Black, false) },
+		"cannot be drawn": func(c Canvas) { c.Fill(new(Path).Line(1, 1), Black) },
+	} {
+		p := NewPDF(testInfo)
+		draw(p.Sheet(100, 100, "S"))
+		if _, err := p.Output(); err == nil || !strings.Contains(err.Error(), name) {
+			t.Errorf("error %v, want one with %q", err, name)
+		}
+	}
+}
+
+func TestOutputTwice(t *testing.T) {
+	p := NewPDF(testInfo)
+	testSheet(p.Sheet(420, 297, "A"))
+	a, err := p.Output()
+	if err != nil || len(a) == 0 {
+		t.Fatal(len(a), err)
+	}
+	b, err := p.Output()
+	if err != nil || !bytes.Equal(a, b) {
+		t.Errorf("second output: %d bytes, %v", len(b), err)
+	}
+}
