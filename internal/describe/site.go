@@ -129,6 +129,10 @@ type ExtraTestPoint struct {
 
 // Kind describes one stage or luminaire kind to the decoder: which keys it takes,
 // which ports it has. Rooms above register their kinds; describe knows none itself.
+//
+// A stage kind with a Count field "ways" is a board: circuits may be put on it, and
+// the field bounds how many circuits and further boards it feeds. Its Count field
+// "way", if it has one, pins the way of the feeding board that it takes.
 type Kind struct {
 	Name   string
 	Doc    string // one or two sentences, for the reference
@@ -136,6 +140,9 @@ type Kind struct {
 	Fields []Field
 	// MustFeed: a stage of this kind that no other takes from is a mistake.
 	MustFeed bool
+	// Nets are further names, besides ports, under which parts and test points may
+	// name a net of this stage, as in "store.plus". Nil: such names are not checked here.
+	Nets []string
 }
 
 // Port is a place where other stages connect.
@@ -147,7 +154,8 @@ type Port struct {
 	Sink bool
 	Max  int
 	// Signal ports carry a signal from pin to pin, others feed a rail; Auxiliary
-	// rails feed control only, not the lights.
+	// rails feed control only, not the lights. What enters a Signal sink is a command:
+	// it closes no loop of supply.
 	Signal, Auxiliary bool
 }
 
@@ -202,7 +210,7 @@ type Field struct {
 	Choices  []string
 	Port     string // for a StageRef: the default port of the named stage that this field means
 	// Feeds, for a StageRef: this stage feeds the named one; otherwise it is fed by
-	// it, through its own sink port that bears the field's name, or its only sink port.
+	// it, through its own sink port if one bears the field's name.
 	Feeds bool
 }
 
