@@ -1,0 +1,52 @@
+package network
+
+// Parameter positions of the comparator.
+const (
+	comparatorVos = iota
+	comparatorSat
+	comparatorOhm
+	comparatorLeak
+	comparatorOwn
+	comparatorBias
+)
+
+// comparatorModel is a comparator with an open-collector output. Its hysteresis is
+// that of the network around it: the output stays until its inputs, as they are with
+// the output where it is, call for the other position.
+var comparatorModel = &Model{
+	Name: "comparator", Doc: "Comparator with an open-collector output.",
+	Pins: pins("+", "-", "OUT", "V+", "V-"),
+	Params: []ParamSpec{
+		{Name: "vos", Unit: "V", Doc: "offset: + must exceed − by this much"},
+		param("sat_volt", "V", 0.1, "output voltage of the conducting output without current"),
+		positive(param("sat_ohm", "Ω", 40, "rise of the output voltage with current")),
+		limits(param("leak_ohm", "Ω", 100e6, "output resistance while it does not conduct"), 1, maxOhm),
+		param("own_ampere", "A", 0.8e-3, "supply current, from V+ to V−"),
+		param("bias_ampere", "A", 25e-9, "current out of each input"),
+	},
+	Law: "output conducting when v(+) − v(−) < vos: i(OUT→V−) = max((v(OUT) − v(V−) − sat_volt)/sat_ohm, 0); else (v(OUT) − v(V−))/leak_ohm; " +
+		"own_ampere from V+ to V− and bias_ampere from V+ out of each input, fading out below 3 V of supply",
+	Source: "dual comparator of the open-collector kind, datasheet values from memory: 0.25 V at 4 mA, 25 nA bias, 0.8 mA supply",
+	Memory: "conducting/blocking",
+	joined: [][2]int{{2, 4}, {3, 4}, {3, 0}, {3, 1}},
+	eval: func(c *cell) {
+		const plus, minus, out, vp, vm = 0, 1, 2, 3, 4
+		g := 1 / c.p[comparatorLeak]
+		c.flow(out, vm, c.across(out, vm)*g, g)
+		if c.on {
+			u := (c.across(out, vm) - c.p[comparatorSat]) / c.p[comparatorOhm]
+			i, s := rounded(u, 1e-4)
+			c.flow(out, vm, i, s/c.p[comparatorOhm])
+		}
+		drain(c, vp, vm, c.p[comparatorOwn], ownVolt)
+		s, ds := fade(c.across(vp, vm), ownVolt)
+		for _, in := range [2]int{plus, minus} {
+			b := c.p[comparatorBias]
+			c.f[vp] += b * s
+			c.f[in] -= b * s
+			c.flowBy(vp, in, vp, b*ds)
+			c.flowBy(vp, in, vm, -b*ds)
+		}
+	},
+	next: func(c *cell) bool { return c.across(0, 1) < c.p[comparatorVos] },
+}
