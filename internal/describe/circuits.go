@@ -16,13 +16,13 @@ const (
 	maxLeg = "2 km"
 )
 
-func (d *decoder) readCircuits(e entry, at Span) {
+func (d *decoder) readCircuits(e entry) {
 	items := d.items(e.val, "circuits")
 	if e.val.Kind == yaml.SequenceNode && len(items) == 0 {
-		d.report(codeNoCircuits, "no circuits", at, "Nothing is to be lit. Add at least one circuit, such as {name: Stair, board: board, lit: outage-night, points: [9 m lamp]}.")
+		d.report(codeNoCircuits, "no circuits", e.at, "Nothing is to be lit. Add at least one circuit, such as {name: Stair, board: board, lit: outage-night, points: [9 m lamp]}.")
 	}
 	first := map[string]Span{}
-	for _, n := range items[:d.few(len(items), maxWays, at, "circuits")] {
+	for _, n := range items[:d.few(len(items), maxWays, e.at, "circuits")] {
 		c := d.readCircuit(n)
 		if c.Name.Given {
 			if was, twice := first[c.Name.Val]; twice {
@@ -38,22 +38,13 @@ func (d *decoder) readCircuits(e entry, at Span) {
 
 func (d *decoder) readCircuit(n *yaml.Node) *Circuit {
 	c := &Circuit{Pos: d.src.of(n), Lit: At[string]{Val: litWords[0]}}
-	points, given := entry{}, false
+	var points *entry
 	what := "A circuit"
 	if name := textOf(n, "name"); name != "" {
 		what = "The circuit " + clip(name)
 	}
-	d.mapping(n, c.Pos, what, []field{
-		{"name", true, d.text(&c.Name, func(s string) error { return checkLabel(s, circuitExtra) })},
-		{"board", true, d.text(&c.Board, checkIdentifier)},
-		{"lit", false, d.choice(&c.Lit, litWords...)},
-		{"was", false, d.text(&c.Was, func(s string) error { return checkLabel(s, circuitExtra) })},
-		{"fuse", false, value(d, &c.Fuse, Current, "30 mA", "200 A")},
-		{"cable", false, value(d, &c.Cable, Size, "0.05 mm²", "400 mm²")},
-		{"way", false, value(d, &c.Way, Count, "1", "200")},
-		{"points", true, func(e entry) { points, given = e, true }},
-	})
-	if !given {
+	d.mapping(n, c.Pos, what, d.circuitFields(c, func(e entry) { points = &e }))
+	if points == nil {
 		return c
 	}
 	c.Points = d.readPoints(points.val)
@@ -61,6 +52,19 @@ func (d *decoder) readCircuit(n *yaml.Node) *Circuit {
 		d.report(codeNoPoints, "circuit without points", points.at, what+" lights nothing. List its luminaires from the board on, such as [9 m lamp, 4 m lamp].")
 	}
 	return c
+}
+
+func (d *decoder) circuitFields(c *Circuit, points func(entry)) []field {
+	return []field{
+		{"name", true, d.text(&c.Name, func(s string) error { return checkLabel(s, circuitExtra) })},
+		{"board", true, d.text(&c.Board, checkIdentifier)},
+		{"lit", false, d.choice(&c.Lit, litWords...)},
+		{"was", false, d.text(&c.Was, func(s string) error { return checkLabel(s, circuitExtra) })},
+		{"fuse", false, value(d, &c.Fuse, Current, "30 mA", "200 A")},
+		{"cable", false, value(d, &c.Cable, Size, "0.05 mm²", "400 mm²")},
+		{"way", false, value(d, &c.Way, Count, "1", "200")},
+		{"points", true, points},
+	}
 }
 
 // textOf returns the single value of a key of n, for messages; "" if there is none.

@@ -170,12 +170,16 @@ func (d *decoder) unknownKey(e entry, what string, fields []field) {
 	if d.full() {
 		return
 	}
+	d.report(codeUnknownKey, "unknown key", e.at,
+		strings.TrimSpace(fmt.Sprintf("%s has no key %q. %s", what, clip(e.key), didYouMean(e.key, "Keys here", keyNames(fields)))))
+}
+
+func keyNames(fields []field) []string {
 	names := make([]string, len(fields))
 	for i, f := range fields {
 		names[i] = f.name
 	}
-	d.report(codeUnknownKey, "unknown key", e.at,
-		strings.TrimSpace(fmt.Sprintf("%s has no key %q. %s", what, clip(e.key), didYouMean(e.key, "Keys here", names))))
+	return names
 }
 
 // items returns the entries of the list n.

@@ -11,26 +11,23 @@ import (
 // version is the version of the description language that this program reads.
 const version = "1"
 
-// description reads the top of the file.
+// description reads the top of the file. Names are resolved afterwards, so that the
+// order of its keys does not matter.
 func (d *decoder) description(top *yaml.Node) {
-	start := d.src.start()
-	circuits := start
-	hasCircuits := false
-	// Luminaires and stages are read before the circuits wherever they stand.
-	var later entry
-	d.mapping(top, start, "A description", []field{
+	d.mapping(top, d.src.start(), "A description", d.topFields())
+}
+
+func (d *decoder) topFields() []field {
+	return []field{
 		{"gloamwright", true, d.readVersion},
-		{"job", true, func(e entry) { d.readJob(e) }},
+		{"job", true, d.readJob},
 		{"practice", false, d.readPractice},
 		{"duty", true, d.readDuty},
 		{"stages", true, d.readStages},
 		{"luminaires", true, d.readLuminaires},
-		{"circuits", true, func(e entry) { later, circuits, hasCircuits = e, e.at, true }},
+		{"circuits", true, d.readCircuits},
 		{"parts", false, d.readParts},
 		{"test_points", false, d.readTestPoints},
-	})
-	if hasCircuits {
-		d.readCircuits(later, circuits)
 	}
 }
 
@@ -42,9 +39,11 @@ func (d *decoder) readVersion(e entry) {
 	}
 }
 
-func (d *decoder) readJob(e entry) {
+func (d *decoder) readJob(e entry) { d.mapping(e.val, e.at, "job", d.jobFields()) }
+
+func (d *decoder) jobFields() []field {
 	j := &d.site.Job
-	d.mapping(e.val, e.at, "job", []field{
+	return []field{
 		{"number", true, d.text(&j.Number, checkJobNumber)},
 		{"title", true, d.text(&j.Title, title)},
 		{"client", false, d.text(&j.Client, title)},
@@ -52,7 +51,7 @@ func (d *decoder) readJob(e entry) {
 		{"prepared", false, d.text(&j.Prepared, title)},
 		{"revision", false, d.text(&j.Revision, checkRevision)},
 		{"date", false, d.text(&j.Date, checkDate)},
-	})
+	}
 }
 
 // maxTitle is how many characters of a line fit the title block.

@@ -15,7 +15,7 @@ import (
 // for ten boards with a thousand luminaires many times over.
 const (
 	MaxSize    = 1 << 20 // bytes of one file
-	maxDepth   = 24      // values inside values
+	maxDepth   = 100     // values inside values
 	maxNodes   = 300_000 // values, each counted again for every alias that repeats it
 	maxAliases = 1000
 	maxLegs    = 20_000 // luminaires

@@ -73,13 +73,17 @@ func (d *decoder) hang(legs []*Leg, list *yaml.Node, at Span) {
 // legMapping reads {leg: 9 m, luminaire: corridor, place: west door, cable: 2.5 mm²}.
 func (d *decoder) legMapping(n *yaml.Node) *Leg {
 	leg := &Leg{Pos: d.src.of(n)}
-	d.mapping(n, leg.Pos, "A point", []field{
+	d.mapping(n, leg.Pos, "A point", d.legFields(leg))
+	return leg
+}
+
+func (d *decoder) legFields(leg *Leg) []field {
+	return []field{
 		{"leg", true, value(d, &leg.Length, Length, minLeg, maxLeg)},
 		{"luminaire", true, d.text(&leg.Luminaire, checkIdentifier)},
 		{"place", false, d.text(&leg.Place, place)},
 		{"cable", false, value(d, &leg.Cable, Size, "0.05 mm²", "400 mm²")},
-	})
-	return leg
+	}
 }
 
 func place(s string) error { return checkText(s, MaxName) }

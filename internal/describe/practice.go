@@ -74,8 +74,13 @@ func (d *decoder) sharedPractice(e entry) {
 }
 
 func (d *decoder) practice(n *yaml.Node, owner Span, what string) {
+	d.mapping(n, owner, what, d.practiceFields())
+	d.checkSizes()
+}
+
+func (d *decoder) practiceFields() []field {
 	p := &d.site.Practice
-	d.mapping(n, owner, what, []field{
+	return []field{
 		{"conductors", false, d.choice(&p.Conductors, "metric", "awg")},
 		{"paper", false, d.choice(&p.Paper, "iso", "ansi")},
 		{"lamp_drop", false, value(d, &p.LampDrop, Percent, "0.5 %", "20 %")},
@@ -91,8 +96,7 @@ func (d *decoder) practice(n *yaml.Node, owner Span, what string) {
 		{"blocks", false, func(e entry) { values(d, &p.Blocks, e, Capacity, "0.5 Ah", "5000 Ah") }},
 		{"prices", false, d.readPrices},
 		{"texts", false, d.text(&p.Texts, checkPath)},
-	})
-	d.checkSizes()
+	}
 }
 
 // checkSizes refuses stocked sizes of the other system.
@@ -166,14 +170,19 @@ var colourCodes = []struct{ code, word string }{
 }
 
 func (d *decoder) readColours(e entry) {
+	d.mapping(e.val, e.at, "colours", d.colourFields())
 	p := &d.site.Practice
-	d.mapping(e.val, e.at, "colours", []field{
-		{"positive", false, d.text(&p.Positive, checkColour)},
-		{"negative", false, d.text(&p.Negative, checkColour)},
-	})
 	if p.Positive.Val == p.Negative.Val {
 		d.report(codeColours, "one colour for both poles", e.at,
 			fmt.Sprintf("Both poles would be %s. Give plus and minus different colours.", p.Positive.Val))
+	}
+}
+
+func (d *decoder) colourFields() []field {
+	p := &d.site.Practice
+	return []field{
+		{"positive", false, d.text(&p.Positive, checkColour)},
+		{"negative", false, d.text(&p.Negative, checkColour)},
 	}
 }
 
@@ -223,15 +232,17 @@ func (d *decoder) readPrices(e entry) {
 	}
 }
 
-func (d *decoder) readDuty(e entry) {
+func (d *decoder) readDuty(e entry) { d.mapping(e.val, e.at, "duty", d.dutyFields()) }
+
+func (d *decoder) dutyFields() []field {
 	u := &d.site.Duty
-	d.mapping(e.val, e.at, "duty", []field{
+	return []field{
 		{"nominal", true, d.readNominal},
 		{"outage", true, value(d, &u.Outage, Duration, "1 min", "30 d")},
 		{"recharge", false, value(d, &u.Recharge, Duration, "1 h", "30 d")},
 		{"battery_room", false, value(d, &u.BatteryRoom, TemperatureRange, "-40 °C", "60 °C")},
 		{"cable_ambient", false, value(d, &u.CableAmbient, Temperature, "-40 °C", "75 °C")},
-	})
+	}
 }
 
 // nominals are the nominal voltages that the program knows cells, relays and supplies for.

@@ -19,8 +19,8 @@ func (d *decoder) resolve() {
 	r.circuits()
 	r.feedsNothing()
 	r.formerNames()
-	r.lamps()
 	r.nets()
+	r.lamps()
 }
 
 // resolver holds what the checks across the description share. Its maps are only

@@ -164,6 +164,9 @@ func (r *resolver) lamps() {
 	for _, c := range r.site.Circuits {
 		walk(c.Points)
 	}
+	if r.list.HasErrors() {
+		return // the point that uses it may be the one that could not be read
+	}
 	for _, l := range r.site.Luminaires {
 		if !used[l.Name.Val] {
 			r.add(Diagnostic{Severity: Warning, Code: codeUnused, Summary: "unused luminaire", At: l.Name.Pos,
