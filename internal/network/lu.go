@@ -3,13 +3,14 @@ package network
 import "math"
 
 // Pivoting. A column's own diagonal is taken unless it is smaller than pivotRatio
-// times the largest candidate: eliminating a branch of resistance R first divides
-// by R, which is how nodal analysis itself comes about, so that a small diagonal
-// is no loss here. A factorisation with old pivots is given up when a pivot has
-// become smaller than renewRatio times what stands below it.
+// times the largest candidate. For the currents that are eliminated first it may be
+// as small as branchRatio: dividing by a small resistance there is how nodal analysis
+// itself comes about, and is no loss. A factorisation with old pivots is given up
+// when a pivot has become smaller than renewRatio times what stands below it.
 const (
-	pivotRatio = 1e-5
-	renewRatio = 1e-9
+	pivotRatio  = 1e-2
+	branchRatio = 1e-5
+	renewRatio  = 1e-7
 )
 
 // lu is the factorisation P·A·Q = L·U of a sparse matrix.
@@ -22,6 +23,7 @@ const (
 type lu struct {
 	n     int
 	order []int32 // order[k] is the column of the k-th pivot
+	first []bool  // columns that are eliminated first
 	step  []int32 // step[r] is the pivot that row r became, −1 while it is none
 	lp    []int32 // L by columns, unit diagonal left out
 	li    []int32 // pivot numbers once the factorisation is complete, rows before
@@ -40,11 +42,16 @@ type lu struct {
 	reach []int32
 }
 
-// newLU returns an empty factorisation with the given column order.
-func newLU(order []int32) *lu {
+// newLU returns an empty factorisation of matrices of the pattern of m, in which the
+// columns marked first are eliminated first.
+func newLU(m *matrix, first []bool) *lu {
+	return orderedLU(fillOrder(m.graph(), first), first)
+}
+
+func orderedLU(order []int32, first []bool) *lu {
 	n := len(order)
 	f := &lu{
-		n: n, order: order, step: make([]int32, n), lp: make([]int32, n+1), up: make([]int32, n+1),
+		n: n, order: order, first: first, step: make([]int32, n), lp: make([]int32, n+1), up: make([]int32, n+1),
 		diag: make([]float64, n), x: make([]float64, n), seen: make([]int32, n), child: make([]int32, n),
 	}
 	return f
@@ -103,7 +110,11 @@ func (f *lu) choose(a *matrix) int {
 		if bestRow < 0 || math.IsNaN(best) || math.IsInf(best, 0) {
 			return int(col)
 		}
-		if f.step[col] < 0 && f.seen[col] == k && math.Abs(f.x[col]) >= pivotRatio*best {
+		ratio := pivotRatio
+		if f.first[col] {
+			ratio = branchRatio
+		}
+		if f.step[col] < 0 && f.seen[col] == k && math.Abs(f.x[col]) >= ratio*best {
 			bestRow = col
 		}
 		pivot := f.x[bestRow]
@@ -141,7 +152,7 @@ func (f *lu) findReach(a *matrix, col, k int32) {
 		}
 		f.stack = append(f.stack[:0], r)
 		f.seen[r] = k
-		f.child[r] = f.first(r)
+		f.child[r] = f.below(r)
 		for len(f.stack) > 0 {
 			top := f.stack[len(f.stack)-1]
 			j := f.step[top]
@@ -152,7 +163,7 @@ func (f *lu) findReach(a *matrix, col, k int32) {
 					f.child[top]++
 					if f.seen[next] != k {
 						f.seen[next] = k
-						f.child[next] = f.first(next)
+						f.child[next] = f.below(next)
 						f.stack = append(f.stack, next)
 						descended = true
 						break
@@ -167,7 +178,7 @@ func (f *lu) findReach(a *matrix, col, k int32) {
 	}
 }
 
-func (f *lu) first(r int32) int32 {
+func (f *lu) below(r int32) int32 {
 	if j := f.step[r]; j >= 0 {
 		return f.lp[j]
 	}
@@ -206,7 +217,7 @@ func (f *lu) again(a *matrix) bool {
 			below = max(below, math.Abs(v))
 			f.lx[q] = v / pivot
 		}
-		if !(math.Abs(pivot) > renewRatio*below) {
+		if !(math.Abs(pivot) > renewRatio*below) { // NaN too
 			clear(x)
 			return false
 		}

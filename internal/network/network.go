@@ -190,7 +190,7 @@ func (n *Network) layOut() {
 		}
 	}
 	n.matrix = newMatrix(n.size, entries)
-	n.lu = newLU(fillOrder(n.matrix.graph(), first))
+	n.lu = newLU(n.matrix, first)
 	n.self = make([]int32, max(len(n.nets)-1, 0))
 	for i := range n.self {
 		n.self[i] = n.matrix.place(int32(i), int32(i))
