@@ -4,8 +4,10 @@ import (
 	"errors"
 	"fmt"
 	"math"
+	"regexp"
 	"strconv"
 	"strings"
+	"unicode"
 )
 
 // Call is one recorded call of a Canvas: Stroked, Filled, Written, Grouped,
@@ -154,12 +156,25 @@ func (r *Recorder) Text(at Point, s string, f Font, a Anchor, c Color, turn bool
 	r.add(Written{at, s, f, a, c, turn})
 }
 
+// dataName is what the name of a data attribute may be.
+var dataName = regexp.MustCompile(`^[a-z][a-z0-9-]*$`)
+
 // Group implements Canvas.
 func (r *Recorder) Group(o Object, draw func()) {
 	if o.ID != "" && r.ids[o.ID] {
 		r.fault("sheet %q: two objects have the ID %q", r.Title, o.ID)
 	}
-	r.ids[o.ID] = true
+	if o.ID != "" {
+		r.ids[o.ID] = true
+	}
+	if strings.ContainsFunc(o.ID, unicode.IsSpace) {
+		r.fault("sheet %q: object ID %q has a space", r.Title, o.ID)
+	}
+	for _, a := range o.Data {
+		if !dataName.MatchString(a.Name) {
+			r.fault("sheet %q: object %q has a data attribute with the name %q", r.Title, o.ID, a.Name)
+		}
+	}
 	r.open = append(r.open, nil)
 	draw()
 	last := len(r.open) - 1

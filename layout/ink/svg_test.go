@@ -1,0 +1,168 @@
+package ink
+
+import (
+	"bytes"
+	"encoding/xml"
+	"io"
+	"math"
+	"strings"
+	"testing"
+)
+
+func testSVG(t *testing.T) []byte {
+	t.Helper()
+	s := NewSVG(420, 297, "Supply <&> battery", "A sheet with some of everything & \"more\"")
+	testSheet(s)
+	s.Link(Rect{10, 10, 20, 5}, Target{File: "schematic-2.svg", Anchor: "F 1"})
+	s.Link(Rect{10, 20, 20, 5}, Target{Anchor: "F12"})
+	s.Link(Rect{10, 30, 20, 5}, Target{Sheet: 12, Anchor: "row-9"})
+	out, err := s.Output()
+	if err != nil {
+		t.Fatal(err)
+	}
+	return out
+}
+
+// element is one XML element of a picture.
+type element struct {
+	name string
+	attr map[string]string
+	text string
+	up   *element
+}
+
+func parseXML(t *testing.T, file []byte) (list []*element) {
+	t.Helper()
+	d := xml.NewDecoder(bytes.NewReader(file))
+	var open *element
+	for {
+		tok, err := d.Token()
+		if err == io.EOF {
+			return list
+		}
+		if err != nil {
+			t.Fatal(err)
+		}
+		switch tok := tok.(type) {
+		case xml.StartElement:
+			e := &element{tok.Name.Local, map[string]string{}, "", open}
+			for _, a := range tok.Attr {
+				if _, twice := e.attr[a.Name.Local]; twice && a.Name.Space == "" {
+					t.Errorf("<%s> has two attributes %s", e.name, a.Name.Local)
+				}
+				e.attr[a.Name.Local] = a.Value
+			}
+			list, open = append(list, e), e
+		case xml.CharData:
+			if open != nil {
+				open.text += string(tok)
+			}
+		case xml.EndElement:
+			open = open.up
+		}
+	}
+}
+
+func TestSVGStructure(t *testing.T) {
+	out := testSVG(t)
+	list := parseXML(t, out)
+	root := list[0]
+	for name, want := range map[string]string{"width": "420mm", "height": "297mm", "viewBox": "0 0 420 297", "role": "img"} {
+		if root.attr[name] != want {
+			t.Errorf("%s = %q, want %q", name, root.attr[name], want)
+		}
+	}
+	if list[1].name != "title" || list[1].text != "Supply <&> battery" || list[2].name != "desc" {
+		t.Errorf("picture named %q %q", list[1].name, list[1].text)
+	}
+	byID := map[string]*element{}
+	links := map[string]bool{}
+	for _, e := range list {
+		if id := e.attr["id"]; id != "" {
+			byID[id] = e
+		}
+		if e.name == "a" {
+			links[e.attr["href"]] = true
+		}
+		if e.name == "script" || e.name == "image" {
+			t.Errorf("<%s> in a picture", e.name)
+		}
+	}
+	fuse := byID["F12"]
+	if fuse == nil || fuse.attr["class"] != "part" || fuse.attr["data-net"] != "L+ & <x>" || fuse.attr["data-value"] != "2 A" {
+		t.Fatalf("fuse %+v", fuse)
+	}
+	titled := false
+	for _, e := range list {
+		titled = titled || e.name == "title" && e.up == fuse && e.text == `-F12 "fuse"`
+	}
+	if !titled {
+		t.Error("fuse without its title")
+	}
+	if byID["F12-place"] == nil {
+		t.Error("mark without an element")
+	}
+	if len(links) != 2 || !links["schematic-2.svg#F%201"] || !links["#F12"] {
+		t.Errorf("links %v", links)
+	}
+	for _, bad := range []string{"-0.00", "NaN", "Inf", " -0 ", "\"-0\""} {
+		if bytes.Contains(out, []byte(bad)) {
+			t.Errorf("%q in the picture", bad)
+		}
+	}
+	if n := bytes.Count(out, []byte("http")); n != 2 { // the two name spaces
+		t.Errorf("%d addresses in the picture, want the name spaces only", n)
+	}
+	if !bytes.Equal(out, testSVG(t)) {
+		t.Error("second drawing differs")
+	}
+	if strings.Contains(string(out), "]]>]]>") {
+		t.Error("style ends early")
+	}
+}
+
+func TestSVGRefuses(t *testing.T) {
+	for want, draw := range map[string]func(Canvas){
+		"leads nowhere":  func(c Canvas) { c.Link(Rect{0, 0, 1, 1}, Target{Anchor: "gone"}) },
+		"has a space":    func(c Canvas) { c.Group(Object{ID: "a b"}, func() {}) },
+		"data attribute": func(c Canvas) { c.Group(Object{Data: []Attr{{"a=b", ""}}}, func() {}) },
+		"no sign":        func(c Canvas) { c.Text(Point{1, 1}, "☐", Font{Mono, 3}, Start, Black, false) },
+	} {
+		s := NewSVG(10, 10, "S", "")
+		draw(s)
+		if _, err := s.Output(); err == nil || !strings.Contains(err.Error(), want) {
+			t.Errorf("error %v, want one with %q", err, want)
+		}
+	}
+}
+
+// TestDarkContrast: what can be read on paper can be read on a dark screen. The
+// ratio is that of WCAG 2.2, which asks for 4.5 in text.
+func TestDarkContrast(t *testing.T) {
+	luminance := func(c Color) float64 {
+		part := func(v Color) float64 {
+			s := float64(v&0xFF) / 255
+			if s <= 0.04045 {
+				return s / 12.92
+			}
+			return math.Pow((s+0.055)/1.055, 2.4)
+		}
+		return 0.2126*part(c>>16) + 0.7152*part(c>>8) + 0.0722*part(c)
+	}
+	ratio := func(a, b Color) float64 {
+		x, y := luminance(a)+0.05, luminance(b)+0.05
+		return max(x, y) / min(x, y)
+	}
+	near(t, "black on white", ratio(Black, White), 21, 1e-9)
+	for _, c := range []Color{Black, Dusk, Mid} {
+		if r := ratio(Dark(c), Dark(White)); r < 4.5 {
+			t.Errorf("%06X becomes %06X: contrast %.1f", uint32(c), uint32(Dark(c)), r)
+		}
+		if r := ratio(Dark(c), Dark(Tint)); r < 4.5 {
+			t.Errorf("%06X on tint: contrast %.1f", uint32(c), r)
+		}
+	}
+	if d := Dark(Black); d>>16 != d>>8&0xFF || d>>16 != d&0xFF {
+		t.Errorf("black becomes %06X, not a grey", uint32(d))
+	}
+}
