@@ -48,6 +48,8 @@ type decoder struct {
 	list   *List // shared with the decoders of further files
 	refs   []refUse
 	legs   int
+	// compared counts the candidates that unknown words were held against.
+	compared int
 }
 
 // report adds an error at a place.
@@ -65,9 +67,18 @@ func (d *decoder) add(g Diagnostic) {
 	}
 }
 
-// full reports whether no further diagnostic is kept, so that costly proposals can
-// be left out.
-func (d *decoder) full() bool { return len(*d.list) > maxReports }
+// unknown reports a word that is none of candidates. said is a sentence about it; the
+// nearest candidate follows, or all of them as what. A file with very many unknown
+// words among very many candidates gets no proposals for the last of them.
+func (d *decoder) unknown(code, summary string, at Span, said, word, what string, candidates []string) {
+	if len(*d.list) > maxReports {
+		return
+	}
+	if d.compared += len(candidates); d.compared <= maxCompared {
+		said += " " + didYouMean(word, what, candidates)
+	}
+	d.report(code, summary, at, strings.TrimSpace(said))
+}
 
 // entry is one key of a mapping with its value.
 type entry struct {
@@ -167,11 +178,7 @@ func (d *decoder) mapping(n *yaml.Node, owner Span, what string, fields []field)
 }
 
 func (d *decoder) unknownKey(e entry, what string, fields []field) {
-	if d.full() {
-		return
-	}
-	d.report(codeUnknownKey, "unknown key", e.at,
-		strings.TrimSpace(fmt.Sprintf("%s has no key %q. %s", what, clip(e.key), didYouMean(e.key, "Keys here", keyNames(fields)))))
+	d.unknown(codeUnknownKey, "unknown key", e.at, fmt.Sprintf("%s has no key %q.", what, clip(e.key)), e.key, "Keys here", keyNames(fields))
 }
 
 func keyNames(fields []field) []string {

@@ -25,6 +25,8 @@ const (
 	maxSingles = 2000 // single parts, test points
 	maxList    = 200  // entries of a list of sizes, ratings or prices
 	maxReports = 500  // diagnostics
+
+	maxCompared = 50_000 // names that misspelt ones are held against
 )
 
 // document parses src to its one top node, nil if there is none or src is broken;
@@ -46,7 +48,7 @@ func (d *decoder) document(src []byte) *yaml.Node {
 	}
 	dec := yaml.NewDecoder(strings.NewReader(string(src)))
 	var doc, more yaml.Node
-	if err := decode(dec, &doc); err != nil {
+	if err := decode(dec, &doc); err != nil && !errors.Is(err, io.EOF) {
 		d.syntax(err)
 		return nil
 	}
@@ -93,6 +95,9 @@ func (d *decoder) syntax(err error) {
 		line, _ := strconv.Atoi(text[m[2]:m[3]])
 		text = text[:m[0]] + text[m[1]:]
 		at, where = d.src.wholeLine(line), " in this line or the next"
+		if open, ok := d.src.unclosed(line + 1); ok && strings.Contains(text, "did not find expected ','") {
+			at, where = open, " after this bracket"
+		}
 	}
 	d.report(codeSyntax, "not valid YAML", at, "The text cannot be read"+where+": "+explainYAML(text)+".")
 }
@@ -107,6 +112,30 @@ func (s *source) wholeLine(line int) Span {
 	t := strings.TrimSpace(l)
 	indent := len([]rune(l)) - len([]rune(strings.TrimLeft(l, " \t")))
 	return s.span(line, indent+1, len([]rune(t)))
+}
+
+// unclosed returns the innermost bracket that is still open at the end of a line.
+func (s *source) unclosed(line int) (Span, bool) {
+	var open []Span
+	for i, text := range s.lines[:min(line, len(s.lines))] {
+		for j := 0; j < len(text); j++ {
+			starts := j == 0 || strings.ContainsRune(" ,[{:", text[j-1])
+			switch c := text[j]; {
+			case c == '[' || c == '{':
+				open = append(open, s.span(i+1, j+1, 1))
+			case (c == ']' || c == '}') && len(open) > 0:
+				open = open[:len(open)-1]
+			case (c == '"' || c == '\'') && starts:
+				j += quoted(text[j:], c) - 1
+			case c == '#' && starts:
+				j = len(text)
+			}
+		}
+	}
+	if len(open) == 0 {
+		return Span{}, false
+	}
+	return open[len(open)-1], true
 }
 
 // explainYAML adds what usually lies behind a message of the YAML library.

@@ -37,8 +37,8 @@ func (d *decoder) readParts(e entry) {
 func (d *decoder) readPins(e entry, p *SinglePart) {
 	k := kindNamed(d.schema.Parts, p.Kind.Val)
 	for _, pin := range d.entries(e.val, "pins") {
-		if k != nil && len(k.Ports) > 0 && k.port(pin.key) == nil && !d.full() {
-			d.report(codePort, "unknown pin", pin.at, fmt.Sprintf("A %s has no pin %q. %s", k.Name, clip(pin.key), didYouMean(pin.key, "Pins", append(k.sides(false), k.sides(true)...))))
+		if k != nil && len(k.Ports) > 0 && k.port(pin.key) == nil {
+			d.unknown(codePort, "unknown pin", pin.at, fmt.Sprintf("A %s has no pin %q.", k.Name, clip(pin.key)), pin.key, "Pins", append(k.sides(false), k.sides(true)...))
 			continue
 		}
 		net, ok := d.netName(pin.val, "A pin")

@@ -120,7 +120,9 @@ func (d *decoder) legText(n *yaml.Node, s string) *Leg {
 		return leg
 	}
 	leg.Place = d.part(n, start+utf8.RuneCountInString(rest)-utf8.RuneCountInString(spot), spot)
-	if err := place(leg.Place.Val); err != nil {
+	if leg.Place.Val == "" {
+		d.report(codePoint, "point without its place", leg.Pos, fmt.Sprintf("%q ends with \"at\": name the place after it, or leave it out.", clip(s)))
+	} else if err := place(leg.Place.Val); err != nil {
 		d.fail(leg.Place.Pos, err)
 		leg.Place = At[string]{}
 	}

@@ -49,9 +49,7 @@ func (r *resolver) references() {
 		ref := u.stage.Fields.vals[u.field.Name].Val.(Ref)
 		other := r.stages[ref.Stage]
 		if other == nil {
-			if !r.full() {
-				r.report(codeUnknownName, "unknown stage", u.at, fmt.Sprintf("No stage is called %q. %s", clip(ref.Stage), didYouMean(ref.Stage, "Stages", r.names)))
-			}
+			r.unknown(codeUnknownName, "unknown stage", u.at, fmt.Sprintf("No stage is called %q.", clip(ref.Stage)), ref.Stage, "Stages", r.names)
 			continue
 		}
 		if other == u.stage {
@@ -97,18 +95,17 @@ func (r *resolver) choosePort(u refUse, ref Ref, other *Stage, k *Kind) (string,
 		if slices.Contains(suitable, ref.Port) {
 			return ref.Port, true
 		}
-		switch {
-		case k.port(ref.Port) != nil:
+		if k.port(ref.Port) != nil {
 			r.report(codePort, "unsuitable port", u.at, fmt.Sprintf("%s.%s %s nothing. %s", name, ref.Port, verb, portsOf(name, k, verb, suitable)))
-		case !r.full():
-			detail := fmt.Sprintf("%s (%s) has no port %q. ", name, k.Name, clip(ref.Port))
-			if near := nearest(ref.Port, suitable); near != "" {
-				detail += "Did you mean " + name + "." + near + "?"
-			} else {
-				detail += portsOf(name, k, verb, suitable)
-			}
-			r.report(codePort, "unknown port", u.at, detail)
+			return "", false
 		}
+		detail := fmt.Sprintf("%s (%s) has no port %q. ", name, k.Name, clip(ref.Port))
+		if near := nearest(ref.Port, suitable); near != "" {
+			detail += "Did you mean " + name + "." + near + "?"
+		} else {
+			detail += portsOf(name, k, verb, suitable)
+		}
+		r.report(codePort, "unknown port", u.at, detail)
 		return "", false
 	}
 	if slices.Contains(suitable, u.field.Port) {
@@ -267,12 +264,12 @@ func (r *resolver) nets() {
 
 func (r *resolver) net(n At[string]) {
 	stage, port, dotted := strings.Cut(n.Val, ".")
-	if !dotted || r.full() {
+	if !dotted {
 		return
 	}
 	s := r.stages[stage]
 	if s == nil {
-		r.report(codeUnknownName, "unknown stage", n.Pos, fmt.Sprintf("No stage is called %q. %s", clip(stage), didYouMean(stage, "Stages", r.names)))
+		r.unknown(codeUnknownName, "unknown stage", n.Pos, fmt.Sprintf("No stage is called %q.", clip(stage)), stage, "Stages", r.names)
 		return
 	}
 	k := r.stageKind(s)
@@ -280,5 +277,5 @@ func (r *resolver) net(n At[string]) {
 		return
 	}
 	all := append(slices.Clone(k.Nets), append(k.sides(false), k.sides(true)...)...)
-	r.report(codePort, "unknown port", n.Pos, fmt.Sprintf("%s (%s) has no port %q. %s", stage, k.Name, clip(port), didYouMean(port, "Ports", all)))
+	r.unknown(codePort, "unknown port", n.Pos, fmt.Sprintf("%s (%s) has no port %q.", stage, k.Name, clip(port)), port, "Ports", all)
 }

@@ -93,6 +93,8 @@ func properties(text []rune) int {
 // extent returns how many characters of text, which starts at n, belong to n.
 func extent(n *yaml.Node, text []rune) int {
 	switch {
+	case n.Kind == yaml.DocumentNode:
+		return until(text, func(r rune) bool { return r != '-' })
 	case n.Kind == yaml.AliasNode:
 		return until(text, func(r rune) bool { return strings.ContainsRune(" ,]}", r) })
 	case n.Kind != yaml.ScalarNode:

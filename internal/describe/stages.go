@@ -22,7 +22,6 @@ func (d *decoder) readStages(e entry) {
 	for _, s := range list[:d.few(len(list), maxStages, e.at, "stages")] {
 		if err := checkIdentifier(s.key); err != nil {
 			d.fail(s.at, err)
-			continue
 		}
 		st := &Stage{Name: At[string]{Val: s.key, Pos: s.at, Given: true}}
 		d.site.Stages = append(d.site.Stages, st)
@@ -35,7 +34,6 @@ func (d *decoder) readLuminaires(e entry) {
 	for _, l := range list[:d.few(len(list), maxTypes, e.at, "luminaire types")] {
 		if err := checkIdentifier(l.key); err != nil {
 			d.fail(l.at, err)
-			continue
 		}
 		lum := &Luminaire{Name: At[string]{Val: l.key, Pos: l.at, Given: true}}
 		d.site.Luminaires = append(d.site.Luminaires, lum)
@@ -108,10 +106,7 @@ func (d *decoder) kindOf(n *yaml.Node, owner Span, what, group string, kinds []K
 		if k := kindNamed(kinds, val.Value); k != nil {
 			return k, true
 		}
-		if !d.full() {
-			d.report(codeUnknownKind, "unknown kind", at, strings.TrimSpace(fmt.Sprintf("There is no %s kind %q. %s",
-				group, clip(val.Value), didYouMean(val.Value, "Kinds", kindNames(kinds)))))
-		}
+		d.unknown(codeUnknownKind, "unknown kind", at, fmt.Sprintf("There is no %s kind %q.", group, clip(val.Value)), val.Value, "Kinds", kindNames(kinds))
 		return nil, false
 	}
 	d.report(codeMissingKey, "missing key", owner, fmt.Sprintf("%s needs the key kind. Kinds: %s.", what, listed(kindNames(kinds))))

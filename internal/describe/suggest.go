@@ -25,9 +25,9 @@ func allowance(n int) int {
 	switch {
 	case n <= 1:
 		return 0
-	case n <= 4:
+	case n <= 5:
 		return 1
-	case n <= 8:
+	case n <= 9:
 		return 2
 	}
 	return 3

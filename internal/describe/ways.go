@@ -14,12 +14,12 @@ func (r *resolver) circuits() {
 		}
 	}
 	for _, c := range r.site.Circuits {
-		if !c.Board.Given || r.full() {
+		if !c.Board.Given {
 			continue
 		}
 		s := r.stages[c.Board.Val]
 		if s == nil {
-			r.report(codeUnknownName, "unknown board", c.Board.Pos, fmt.Sprintf("No board is called %q. %s", clip(c.Board.Val), didYouMean(c.Board.Val, "Boards", boards)))
+			r.unknown(codeUnknownName, "unknown board", c.Board.Pos, fmt.Sprintf("No board is called %q.", clip(c.Board.Val)), c.Board.Val, "Boards", boards)
 		} else if k := r.stageKind(s); k != nil && !k.board() {
 			detail := fmt.Sprintf("%s is a %s and has no ways. ", s.Name.Val, k.Name)
 			if len(boards) == 0 {
@@ -152,9 +152,8 @@ func (r *resolver) lamps() {
 		for _, leg := range legs {
 			name := leg.Luminaire.Val
 			used[name] = true
-			if leg.Luminaire.Given && !known[name] && !r.full() {
-				detail := fmt.Sprintf("No luminaire is called %q. ", clip(name)) + didYouMean(name, "Luminaires", names)
-				r.report(codeUnknownName, "unknown luminaire", leg.Luminaire.Pos, detail)
+			if leg.Luminaire.Given && !known[name] {
+				r.unknown(codeUnknownName, "unknown luminaire", leg.Luminaire.Pos, fmt.Sprintf("No luminaire is called %q.", clip(name)), name, "Luminaires", names)
 			}
 			for _, b := range leg.Branches {
 				walk(b)

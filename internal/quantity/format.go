@@ -83,7 +83,7 @@ func (d *dimension) step(magnitude int, shifts ...int) *unit {
 			break
 		}
 		for j := range d.units {
-			if d.units[j].shift == s && d.units[j].factor == 0 {
+			if d.units[j].shift == s && d.units[j].factor == (fraction{}) {
 				best = &d.units[j]
 				break
 			}

@@ -100,21 +100,11 @@ func (d *dimension) cutTerm(text, s string) (number, *unit, string, *ParseError)
 }
 
 // size returns how many of the dimension's own unit u is, for ordering.
-func (u *unit) size() float64 {
-	f := u.factor
-	if f == 0 {
-		f = 1
-	}
-	return f * math.Pow10(u.shift)
-}
+func (u *unit) size() float64 { return u.factor.of(math.Pow10(u.shift)) }
 
 // scale converts n of unit u to the dimension's own unit.
 func scale(n number, u *unit) float64 {
-	v := n.times10(u.shift) - u.zero
-	if u.factor != 0 {
-		v *= u.factor
-	}
-	return v + 0 // +0 turns a negative zero into zero
+	return u.factor.of(n.times10(u.shift)-u.zero) + 0 // +0 turns a negative zero into zero
 }
 
 // wordAt returns the run of characters at the front of s that looks like a unit.

@@ -15,14 +15,24 @@ type Quantity interface {
 }
 
 // unit is one unit of a dimension. A number n of it is (n·10^shift - zero)·factor of
-// the dimension's own unit; a zero factor stands for 1. No spelling stands in two
-// dimensions.
+// the dimension's own unit. No spelling stands in two dimensions.
 type unit struct {
 	symbol string // as printed
 	also   []string
 	shift  int
-	factor float64
+	factor fraction
 	zero   float64
+}
+
+// fraction is an exact conversion factor; the zero fraction stands for 1. Kept as two
+// whole numbers it rounds once where a decimal factor would round twice.
+type fraction struct{ num, den float64 }
+
+func (f fraction) of(v float64) float64 {
+	if f == (fraction{}) {
+		return v
+	}
+	return v * f.num / f.den
 }
 
 // dimension is what the units of one quantity have in common.
@@ -75,12 +85,15 @@ func withPrefixes(u unit, words []string, prefixes ...prefix) []unit {
 
 // Exact conversion factors of the units that are no decimal multiples.
 const (
-	metresPerFoot    = 0.3048 // ISO 80000-3, annex
-	metresPerInch    = 0.0254 // ISO 80000-3, annex
 	secondsPerMinute = 60
 	secondsPerDay    = 86400
-	celsiusPerDegF   = 5.0 / 9 // ISO 80000-5, annex
-	degFAtZeroC      = 32
+	degFAtZeroC      = 32 // ISO 80000-5, annex
+)
+
+var (
+	metresPerFoot  = fraction{3048, 10000} // ISO 80000-3, annex
+	metresPerInch  = fraction{254, 10000}  // ISO 80000-3, annex
+	celsiusPerDegF = fraction{5, 9}        // ISO 80000-5, annex
 )
 
 // The dimensions, in the order in which a unit is looked up when a message has to
@@ -111,9 +124,9 @@ var (
 	duration = &dimension{noun: "a duration", offer: []string{"h", "min", "s"}, examples: "4 h or 30 min", compound: true,
 		units: []unit{
 			{symbol: "s", also: []string{"sec", "second", "seconds"}}, {symbol: "ms", shift: -3},
-			{symbol: "min", also: []string{"minute", "minutes"}, factor: secondsPerMinute},
-			{symbol: "h", also: []string{"hr", "hrs", "hour", "hours"}, factor: SecondsPerHour},
-			{symbol: "d", also: []string{"day", "days"}, factor: secondsPerDay},
+			{symbol: "min", also: []string{"minute", "minutes"}, factor: fraction{secondsPerMinute, 1}},
+			{symbol: "h", also: []string{"hr", "hrs", "hour", "hours"}, factor: fraction{SecondsPerHour, 1}},
+			{symbol: "d", also: []string{"day", "days"}, factor: fraction{secondsPerDay, 1}},
 		}}
 	charge = &dimension{noun: "a battery capacity", offer: []string{"Ah"}, examples: "55 Ah",
 		units: withPrefixes(unit{symbol: "Ah", also: []string{"A h", "A·h"}}, nil, milli)}
