@@ -1,0 +1,30 @@
+package finding
+
+import (
+	"fmt"
+
+	"gloamwright/internal/facts"
+)
+
+// fuseBreaking holds the breaking capacity against the prospective current.
+var fuseBreaking = &Check{
+	Name:  "fuse-breaking",
+	Title: "fuse cannot break the short-circuit current",
+	Doc: "The prospective short-circuit current at the fuse must not exceed its DC breaking capacity, or the fuse bursts and the arc goes on. " +
+		"Take a fuse of a higher breaking capacity or one before it that limits the current.",
+	Source: "IEC 60364-4-43 clause 434.5.1; current after IEC 61660-1",
+	Run: func(f *facts.Facts, report func(Finding)) {
+		for _, x := range f.Fuses {
+			if x.Breaking <= 0 || !over(x.Prospective, x.Breaking) {
+				continue
+			}
+			v, bound := pair(x.Prospective, x.Breaking)
+			report(Finding{
+				Severity: Stop, Subject: x.Part.Designation, At: x.Part.At,
+				Message: fmt.Sprintf("%s: short-circuit current %s, breaks %s", fuseTitle(x), v, bound),
+				Remedy:  fmt.Sprintf("A fuse that breaks at least %s DC; this kind (%s) breaks %s.", sayUp(x.Prospective), x.Style, bound),
+				Value:   float64(x.Prospective), Limit: float64(x.Breaking), Unit: "A",
+			})
+		}
+	},
+}
