@@ -102,6 +102,9 @@ type Part struct {
 	Pins        []*Pin
 	Pinned      []string // names of values that the user gave
 	Elements    []*Element
+	Strip       string // for a terminal: key of its strip
+	Order       int    // for a terminal: wanted number on its strip, 0 for the next free
+	Lower       bool   // for a terminal of the cabinet's strip: in the lower row
 	Note        string // extra requirement for the parts list: "DC rated"
 	At          describe.Span
 }
@@ -134,7 +137,7 @@ type Pin struct {
 
 // String returns the full terminal identity, such as "-K1:A1".
 func (p *Pin) String() string {
-	if p.Part.Kind == Terminal {
+	if p.Part.Kind == Terminal || p.Part.Kind == BusBar {
 		return p.Part.Designation
 	}
 	return p.Part.Designation + ":" + p.Name

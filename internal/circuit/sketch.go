@@ -46,7 +46,8 @@ type SketchItem struct {
 	Name   string
 	Names  []string
 	Pts    [][2]int
-	Ys     []int
+	Ys     []int // levels of a mains frame's rings, or of a converter's left pins
+	Ys2    []int // levels of a converter's right pins
 	Wire   *Conductor
 	Cable  *Cable
 	TP     *TestPoint

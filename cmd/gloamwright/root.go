@@ -1,0 +1,64 @@
+package main
+
+import (
+	"errors"
+	"fmt"
+	"io"
+
+	"github.com/spf13/cobra"
+)
+
+// Exit codes.
+const (
+	exitOK     = 0
+	exitStop   = 1 // documents written, but a stop finding stands
+	exitInput  = 2 // the description or the command line is wrong, nothing written
+	exitFailed = 3 // something failed, nothing written
+)
+
+// exitError carries an exit code. Its text has been printed already when it is empty.
+type exitError struct {
+	code int
+	text string
+}
+
+func (e exitError) Error() string { return e.text }
+
+const longHelp = `Gloamwright sizes extra-low-voltage DC standby lighting from one description,
+proves it by solving the circuit in every operating condition, and writes the
+schematic and the build packet.
+
+Exit codes: 0 good; 1 documents written, but a stop finding stands; 2 the
+description or the command line is wrong, nothing written; 3 something failed,
+nothing written.`
+
+// run is the program without its process. It returns the exit code.
+func run(args []string, stdin io.Reader, stdout, stderr io.Writer) int {
+	root := &cobra.Command{
+		Use:           "gloamwright",
+		Short:         "Size, prove and document DC standby lighting",
+		Long:          longHelp,
+		Example:       "  gloamwright new my-site --from building-24v\n  gloamwright build my-site.yaml",
+		SilenceErrors: true,
+		SilenceUsage:  true,
+	}
+	root.SetArgs(args)
+	root.SetIn(stdin)
+	root.SetOut(stdout)
+	root.SetErr(stderr)
+	root.CompletionOptions.HiddenDefaultCmd = true
+	root.AddCommand(buildCommand(), sizeCommand(), newCommand())
+	err := root.Execute()
+	if err == nil {
+		return exitOK
+	}
+	var e exitError
+	if errors.As(err, &e) {
+		if e.text != "" {
+			fmt.Fprintln(stderr, e.text)
+		}
+		return e.code
+	}
+	fmt.Fprintf(stderr, "%v\nSee 'gloamwright --help'.\n", err)
+	return exitInput
+}

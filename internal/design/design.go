@@ -1,0 +1,79 @@
+// Package design joins description, circuit, sizing, solution, endurance and
+// findings into one value, the Design. Every document is a view of it.
+package design
+
+import (
+	"gloamwright/internal/circuit"
+	"gloamwright/internal/facts"
+	"gloamwright/internal/finding"
+)
+
+// Design is one resolved site. It is read-only.
+type Design struct {
+	*facts.Facts
+	Findings []finding.Finding
+	// Labels is every label by its stable key.
+	Labels circuit.Labels
+	// Issued is set on documents that `issue` froze; otherwise they carry DRAFT.
+	Issued bool
+	// Changes is the change notice against the revision before; nil on a first one.
+	Changes *Changes
+}
+
+// ForConstruction reports whether no stop finding stands.
+func (d *Design) ForConstruction() bool {
+	for _, f := range d.Findings {
+		if f.Severity == finding.Stop {
+			return false
+		}
+	}
+	return true
+}
+
+// Count returns the number of findings of a severity.
+func (d *Design) Count(s finding.Severity) int {
+	n := 0
+	for _, f := range d.Findings {
+		if f.Severity == s {
+			n++
+		}
+	}
+	return n
+}
+
+// Changes is what a revision makes a technician redo.
+type Changes struct {
+	From, To string // revision letters
+	Values   []ValueChange
+	Work     []WorkItem
+	Stays    []Stay
+	// Touched holds the labels whose rows and symbols are marked as changed.
+	Touched   map[string]bool
+	Revisions []Revision
+}
+
+// Revision is one line of the revision table.
+type Revision struct{ Index, Issued, Why, Sheets, By string }
+
+// ValueChange is one value of the description that changed.
+type ValueChange struct {
+	Number        int
+	What, Was, Is string
+	Why           string
+}
+
+// WorkItem is one thing to do because of it.
+type WorkItem struct {
+	Tool    string // "re-cut", "replace", "re-fuse", "adjust", "relabel", "test again"
+	What    string // designation
+	Do      string
+	Was, Is string
+	From    int // number of the ValueChange
+}
+
+// Stay is a kind of thing that needs no touching.
+type Stay struct {
+	Count, Of int
+	Things    string
+	Text      string
+}

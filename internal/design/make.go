@@ -1,0 +1,49 @@
+package design
+
+import (
+	"gloamwright/internal/circuit"
+	"gloamwright/internal/describe"
+	"gloamwright/internal/facts"
+	"gloamwright/internal/finding"
+	"gloamwright/internal/network"
+	"gloamwright/internal/stage"
+)
+
+// Make designs a site: it expands the description, gives labels (kept ones stay),
+// sizes everything, solves the circuit in every operating condition and judges what
+// came out. The site must have passed the decoder without errors.
+func Make(site *describe.Site, kept circuit.Labels) (*Design, error) {
+	c := stage.Expand(site)
+	labels := c.Label(kept)
+	f := &facts.Facts{Site: site, Circuit: c}
+	plan := stage.Size(site, c, f)
+	f.Netlist = c.Resolve()
+	n, err := network.New(f.Netlist)
+	if err != nil {
+		return nil, err
+	}
+	m := &maker{site: site, plan: plan, f: f, net: n, solved: map[string]*network.Solution{}}
+	if err := m.conditions(); err != nil {
+		return nil, err
+	}
+	m.luminaires()
+	m.farEnds()
+	m.conductors()
+	m.function()
+	if err := m.readings(); err != nil {
+		return nil, err
+	}
+	m.relay()
+
+	return &Design{Facts: f, Findings: finding.Judge(f), Labels: labels}, nil
+}
+
+// maker is a design in the making.
+type maker struct {
+	site   *describe.Site
+	plan   *stage.Plan
+	f      *facts.Facts
+	net    *network.Network
+	solved map[string]*network.Solution // by condition key
+	envs   []network.Environment        // by condition
+}

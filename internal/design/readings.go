@@ -1,0 +1,97 @@
+package design
+
+import (
+	"fmt"
+	"math"
+
+	"gloamwright/internal/facts"
+	"gloamwright/internal/network"
+	"gloamwright/internal/quantity"
+)
+
+// The error of the technician's multimeter on its direct-voltage range, and the
+// highest reading of a point that is dead (common practice, no source).
+const (
+	meterShare = 0.005
+	meterVolt  = quantity.Volt(0.02)
+	deadVolt   = quantity.Volt(0.1)
+)
+
+// readings records what every test point shows in every condition, with its band:
+// worst case over the tolerances of all parts, and the meter's own error.
+func (m *maker) readings() error {
+	points := m.f.Circuit.TestPoints
+	for _, tp := range points {
+		if tp.Black == nil {
+			tp.Black = m.f.Circuit.Black
+		}
+		m.f.Readings = append(m.f.Readings, &facts.Reading{Point: tp})
+	}
+	for _, c := range m.f.Conditions {
+		sol := m.solved[c.Key]
+		var control, field []network.Output
+		for _, tp := range points {
+			o := network.Between(tp.Red.Net, tp.Black.Net)
+			if tp.Stage != "" && c.Shown {
+				control = append(control, o)
+			} else {
+				field = append(field, o)
+			}
+		}
+		// Cards bend their laws: their bands are solved at the corners. Behind the
+		// boards all is nearly linear.
+		corners, err := sol.Bands(control, network.Corners)
+		if err != nil {
+			return fmt.Errorf("bands in condition %q: %w", c.Name, err)
+		}
+		linear, err := sol.Bands(field, network.Linear)
+		if err != nil {
+			return fmt.Errorf("bands in condition %q: %w", c.Name, err)
+		}
+		for i, tp := range points {
+			var b network.Band
+			if tp.Stage != "" && c.Shown {
+				b, corners = corners[0], corners[1:]
+			} else {
+				b, linear = linear[0], linear[1:]
+			}
+			m.f.Readings[i].Bands = append(m.f.Readings[i].Bands, band(b))
+		}
+	}
+	return m.fuseLoads()
+}
+
+// band adds the meter's error to a band of the network.
+func band(b network.Band) facts.Band {
+	meter := func(v float64) quantity.Volt { return quantity.Volt(math.Abs(v)*meterShare) + meterVolt }
+	out := facts.Band{
+		Low: quantity.Volt(b.Low) - meter(b.Low), Typical: quantity.Volt(b.Typical), High: quantity.Volt(b.High) + meter(b.High),
+		Root: quantity.Volt(b.RSS),
+	}
+	if max(math.Abs(b.Low), math.Abs(b.High)) < float64(deadVolt) {
+		out = facts.Band{Low: 0, Typical: 0, High: deadVolt}
+	}
+	return out
+}
+
+// fuseLoads records the band of the current that each fuse carries while the lights
+// are on with a full battery.
+func (m *maker) fuseLoads() error {
+	sol := m.solved["outage-night"]
+	if sol == nil {
+		return nil
+	}
+	var outs []network.Output
+	for _, f := range m.f.Fuses {
+		outs = append(outs, network.Into(f.Part.Designation))
+	}
+	bands, err := sol.Bands(outs, network.Linear)
+	if err != nil {
+		return fmt.Errorf("bands of the fuses: %w", err)
+	}
+	for i, f := range m.f.Fuses {
+		lo, hi := math.Abs(bands[i].Low), math.Abs(bands[i].High)
+		f.LoadLow, f.LoadHigh = quantity.Ampere(min(lo, hi)), quantity.Ampere(max(lo, hi))
+	}
+	return nil
+}

@@ -1,0 +1,67 @@
+// Package job takes a description from its file to the finished documents. It joins
+// the rooms and computes nothing itself.
+package job
+
+import (
+	"errors"
+	"fmt"
+	"io/fs"
+	"os"
+	"path/filepath"
+
+	"gloamwright/internal/describe"
+	"gloamwright/internal/design"
+	"gloamwright/internal/stage"
+)
+
+// Mistakes is returned when a description is wrong: every mistake, with its place.
+type Mistakes struct {
+	List   describe.List
+	Source []byte
+}
+
+// Error returns the mistakes as they are shown to the user.
+func (m *Mistakes) Error() string { return m.List.Render(m.Source) }
+
+// Unreadable is returned when a description cannot be read.
+type Unreadable struct{ Err error }
+
+// Error says which file and why.
+func (u *Unreadable) Error() string {
+	var p *fs.PathError
+	if errors.As(u.Err, &p) {
+		if errors.Is(u.Err, fs.ErrNotExist) {
+			return fmt.Sprintf("there is no file %s", p.Path)
+		}
+		return fmt.Sprintf("cannot read %s: %v", p.Path, p.Err)
+	}
+	return u.Err.Error()
+}
+
+// Load reads the description at path and designs it. set holds changes of single
+// values, as "duty.outage=6h", that are made to the text in memory only.
+func Load(path string, set []string) (*design.Design, error) {
+	src, err := os.ReadFile(path)
+	if err != nil {
+		return nil, &Unreadable{err}
+	}
+	return Design(path, src, set)
+}
+
+// Design designs a description whose text is src; path names it in messages and
+// is where its shared files and register are looked for.
+func Design(path string, src []byte, set []string) (*design.Design, error) {
+	for _, s := range set {
+		changed, err := override(src, s)
+		if err != nil {
+			return nil, err
+		}
+		src = changed
+	}
+	read := describe.Options{ReadFile: describe.FolderReader(filepath.Dir(path))}
+	site, list := read.Parse(filepath.Base(path), src, stage.Schema())
+	if list.HasErrors() {
+		return nil, &Mistakes{list, src}
+	}
+	return design.Make(site, nil)
+}

@@ -1,0 +1,81 @@
+package job
+
+import (
+	"fmt"
+	"io"
+	"strings"
+
+	"gloamwright/internal/design"
+	"gloamwright/internal/finding"
+	"gloamwright/internal/quantity"
+)
+
+// Summary writes what a contractor wants to see first: what was sized, how long
+// it holds, and what was judged.
+func Summary(w io.Writer, d *design.Design) {
+	j := d.Site.Job
+	fmt.Fprintf(w, "%s  %s, %s (revision %s)\n\n", j.Number.Val, j.Title.Val, j.Site.Val, j.Revision.Val)
+	row := func(name, format string, a ...any) { fmt.Fprintf(w, "  %-10s %s\n", name, fmt.Sprintf(format, a...)) }
+	duty := d.Site.Duty
+	b := d.Battery
+	if b.Part != nil {
+		row("Battery", "%s %s, %d × %v V %s; needs %s", b.Part.Designation, b.Capacity, b.Blocks*b.Parallel, float64(b.BlockVolt), b.ClassName, b.Required)
+	}
+	if d.Endurance.Held > 0 {
+		row("Holds", "%s at %v, end of life; %v asked", hours(d.Endurance.Held), duty.BatteryRoom.Val.Low, duty.Outage.Val)
+	}
+	if c := d.Charger; c.Part != nil {
+		text := fmt.Sprintf("%s %v, float %v", c.Part.Designation, c.Current, quantity.Format(c.Float, 3))
+		if d.Endurance.Recharge > 0 {
+			text += fmt.Sprintf("; full again after %s, %v asked", hours(d.Endurance.Recharge), duty.Recharge.Val)
+		}
+		row("Charger", "%s", text)
+	}
+	row("Lights", "%d on %d circuits, %s, %s at the end of discharge", d.Totals.Luminaires, len(d.Site.Circuits), d.Totals.LoadWatt, quantity.Format(d.Totals.LoadA, 3))
+	row("Cables", "%d runs, %s; worst drop %.2f %% at %s, limit %v", len(d.Circuit.Cables), d.Totals.CableM, 100*float64(d.Totals.WorstDrop), d.Totals.WorstLamp, d.Site.Practice.LampDrop.Val)
+	row("Fuses", "%s", fuseLine(d))
+	fmt.Fprintln(w)
+	Findings(w, d)
+}
+
+func hours(s quantity.Second) string { return fmt.Sprintf("%.1f h", s.Hours()) }
+
+func fuseLine(d *design.Design) string {
+	var order []string
+	count := map[string]int{}
+	for _, f := range d.Fuses {
+		if f.Way != nil && f.Way.Spare() {
+			continue
+		}
+		r := f.Rating.String()
+		if count[r] == 0 {
+			order = append(order, r)
+		}
+		count[r]++
+	}
+	for i, r := range order {
+		order[i] = fmt.Sprintf("%d × %s", count[r], r)
+	}
+	return strings.Join(order, ", ")
+}
+
+// Findings writes the findings, gravest first.
+func Findings(w io.Writer, d *design.Design) {
+	fmt.Fprintf(w, "  Findings: %d stop, %s, %s\n", d.Count(finding.Stop), plural(d.Count(finding.Caution), "caution"), plural(d.Count(finding.Note), "note"))
+	for _, f := range d.Findings {
+		fmt.Fprintf(w, "  %-8s %s\n", f.Severity, f.Message)
+		if f.Remedy != "" {
+			fmt.Fprintf(w, "           %s\n", f.Remedy)
+		}
+		if f.At.Line > 0 {
+			fmt.Fprintf(w, "           at %s:%d:%d\n", f.At.File, f.At.Line, f.At.Col)
+		}
+	}
+}
+
+func plural(n int, what string) string {
+	if n == 1 {
+		return "1 " + what
+	}
+	return fmt.Sprintf("%d %ss", n, what)
+}

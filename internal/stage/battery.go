@@ -1,0 +1,285 @@
+package stage
+
+import (
+	"strings"
+
+	"gloamwright/internal/catalogue"
+	"gloamwright/internal/circuit"
+	"gloamwright/internal/describe"
+	"gloamwright/internal/facts"
+	"gloamwright/internal/quantity"
+	"gloamwright/internal/sizing"
+)
+
+// battery returns the kind: the store: blocks in series and parallel, the main fuse at its plus
+// terminal, an isolator if asked.
+func battery() *Kind {
+	return &Kind{
+		Kind: describe.Kind{
+			Name: "battery",
+			Doc:  "The store: blocks in series and parallel, a main fuse at the plus terminal and an isolator.",
+			Ports: []describe.Port{
+				{Name: "plus", Doc: "plus behind main fuse and isolator"},
+				{Name: "charge", Doc: "where a charger feeds in; the same rail", Sink: true, Max: 1},
+			},
+			MustFeed: true,
+			Fields: fields(
+				describe.Field{Name: "cells", Type: describe.Choice, Required: true, Choices: cellChoices(), Doc: "Battery class."},
+				describe.Field{Name: "capacity", Type: describe.Capacity, Min: "0.5 Ah", Max: "5000 Ah", Doc: "Capacity of the whole battery at its class's rated time; without it sized."},
+				describe.Field{Name: "series", Type: describe.Count, Min: "1", Max: "40", Doc: "Cells in series; without it from the nominal voltage."},
+				describe.Field{Name: "parallel", Type: describe.Count, Min: "1", Max: "8", Doc: "Strings in parallel; without it as few as the block list allows."},
+				describe.Field{Name: "along", Type: describe.Length, Default: "2 m", Min: "0.1 m", Max: "100 m", Doc: "Length of the battery cable, battery to cabinet."},
+				describe.Field{Name: "cable", Type: describe.Size, Doc: "Size of the battery cable; without it sized."},
+				describe.Field{Name: "fuse", Type: describe.Current, Min: "0.5 A", Max: "500 A", Doc: "Main fuse; without it sized."},
+				describe.Field{Name: "isolator", Type: describe.Bool, Default: "yes", Doc: "Isolator between main fuse and cabinet."},
+				describe.Field{Name: "end", Type: describe.Voltage, Min: "1 V", Max: "60 V", Doc: "End-of-discharge voltage of the whole battery; without it from the class, the lamps and the cut-off."},
+				describe.Field{Name: "table", Type: describe.Curve, Doc: "Capacity against discharge time of the battery at hand; without it the class's table."},
+			),
+		},
+		Class: SupplyClass, Rank: 2, Heading: "Battery",
+		Expand: func(b *Build, s *describe.Stage) {
+			home := b.cur.Place
+			b.cur.Place = b.Place(s.Name.Val, "B", Text(s, "place", "Battery box"))
+			g := b.Part("battery", circuit.Battery, "Battery", "+", "-")
+			b.Element(g, "", "battery", "+", "+", "-", "-")
+			f := b.Part("fuse", circuit.Fuse, "Main fuse and holder, at the plus pole", "1", "2")
+			b.Element(f, "", "fuse", "1", "1", "2", "2")
+			withIsolator := false
+			if v, ok := describe.Get[bool](s.Fields, "isolator"); ok {
+				withIsolator = v.Val
+			}
+			var q *circuit.Part
+			if withIsolator {
+				q = b.Part("isolator", circuit.SwitchIsolator, "Isolator, DC rated", "1", "2")
+				b.Element(q, "", "switch", "1", "1", "2", "2")
+			}
+			box := b.cur.Place
+			along := must[quantity.Metre](s, "along")
+			b.cur.Place = home
+			tPlus := b.Terminal(cabinet, "plus")
+			tMinus := b.Terminal(cabinet, "minus")
+			tMinus.Lower = true
+			b.cur.Place = box
+			w := b.Cable("cable", box, home, along)
+			pin, _ := describe.Get[quantity.WireSize](s.Fields, "cable")
+			w.Pinned = pin.Given
+
+			b.sketch(28, "carries the lights", "through an outage")
+			top := f.Pin("1")
+			if q != nil {
+				top = q.Pin("1")
+			}
+			wPlus := b.Core(w, top, tPlus.Pin("in"), true)
+			wMinus := b.Core(w, g.Pin("-"), tMinus.Pin("in"), false)
+			rail := s.Name.Val + ".plus"
+			b.onRail(b.rails[rail], tPlus.Pin("out"))
+			b.onRail(b.rails[Minus], tMinus.Pin("out"))
+			if b.C.Black == nil {
+				b.C.Black = tMinus.Pin("out")
+			}
+			if q != nil {
+				b.add(circuit.SketchItem{Op: circuit.OpUp, Part: tPlus, Wire: wPlus, Rail: b.rails[rail].Name, Pts: points([]int{22, 14, 22, upEnd})})
+				b.symbol("switch_disc", q, 22, 16, "V", "L")
+				link := b.Wire(f.Pin("1"), q.Pin("2"), true, bridgeLength)
+				b.line(link, 22, 18, 22, 21)
+			} else {
+				b.add(circuit.SketchItem{Op: circuit.OpUp, Part: tPlus, Wire: wPlus, Rail: b.rails[rail].Name, Pts: points([]int{22, 21, 22, upEnd})})
+			}
+			b.symbol("fuse", f, 22, 23, "V", "L")
+			pole := b.Wire(g.Pin("+"), f.Pin("2"), true, bridgeLength)
+			b.line(pole, 22, 25, 22, 33)
+			b.number(pole, 22, 27)
+			b.point(b.TestPoint("terminals", "Battery terminals", g.Pin("+")), 22, 29, "W")
+			b.symbol("battery", g, 22, 35, "V", "L")
+			b.add(circuit.SketchItem{Op: circuit.OpDown, Part: tMinus, Wire: wMinus, Rail: b.rails[Minus].Name, Pts: points([]int{22, 37, 22, downEnd})})
+			b.add(circuit.SketchItem{Op: circuit.OpCore, Wire: wPlus, X: 22, Y: 9.4})
+			b.add(circuit.SketchItem{Op: circuit.OpCore, Wire: wMinus, X: 22, Y: 42})
+
+			for _, c := range b.feedersOf(s.Name.Val, "charge") {
+				if c.Kind.Val == "charger" && compensated(c) {
+					b.probe(s, c, along)
+				}
+			}
+			b.cur.Place = box
+		},
+		Steps: []Step{{Storage, sizeBattery}, {Trunk, sizeMainFuse}},
+	}
+}
+
+// cellChoices are the battery classes of the catalogue.
+func cellChoices() []string {
+	var out []string
+	for _, c := range catalogue.BatteryClasses() {
+		out = append(out, c.Name)
+	}
+	return out
+}
+
+// probe adds the charger's temperature probe at the battery and its cable.
+func (b *Build) probe(s, c *describe.Stage, along quantity.Metre) {
+	n := b.Part("probe", circuit.NTC, "Temperature probe, on the battery", "1", "2")
+	n.Values = []circuit.Value{{Name: "resistance", Text: "10 kΩ", Num: 10e3, Unit: "Ω", Show: true}}
+	w := b.Cable("probe-cable", b.places["cabinet"], b.cur.Place, along)
+	w.Size = quantity.WireSize{Area: 0.5}
+	plus := b.Core(w, b.outs[c.Name.Val+".θ+"], n.Pin("1"), true)
+	minus := b.Core(w, b.outs[c.Name.Val+".θ-"], n.Pin("2"), false)
+	b.add(circuit.SketchItem{Op: circuit.OpLeft, Name: "temp+", Y: pairLevel, Wire: plus, Cable: w})
+	b.add(circuit.SketchItem{Op: circuit.OpLeft, Name: "temp-", Y: pairLevel + 4, Wire: minus, Cable: w})
+	b.line(plus, 0, pairLevel, 8, pairLevel)
+	b.line(minus, 0, pairLevel+4, 8, pairLevel+4)
+	b.symbol("ntc", n, 8, 29, "V", "L")
+	// The charger's side of the pair is the same wire.
+	for _, st := range b.C.Stages {
+		if st.Name != c.Name.Val {
+			continue
+		}
+		for i := range st.Sketch.Items {
+			switch it := &st.Sketch.Items[i]; {
+			case it.Op == circuit.OpRight && it.Name == "temp+":
+				it.Wire, it.Cable = plus, w
+			case it.Op == circuit.OpRight && it.Name == "temp-":
+				it.Wire, it.Cable = minus, w
+			case it.Op == circuit.OpWire && it.Wire == nil && len(it.Pts) == 2 && it.Pts[1] == [2]int{25, pairLevel}:
+				it.Wire = plus
+			case it.Op == circuit.OpWire && it.Wire == nil && len(it.Pts) == 2 && it.Pts[1] == [2]int{25, pairLevel + 4}:
+				it.Wire = minus
+			}
+		}
+	}
+}
+
+// must returns a field that has a default or is required.
+func must[T any](s *describe.Stage, name string) T {
+	v, ok := describe.Get[T](s.Fields, name)
+	if !ok {
+		panic("stage: " + s.Kind.Val + " has no " + name + "; the decoder must supply it")
+	}
+	return v.Val
+}
+
+// sizeMainFuse chooses the main fuse for the greater of load and charge current, the
+// class by the short-circuit current of the battery, and the size of the trunk:
+// battery cable, rails and leads in the energy's way.
+func sizeMainFuse(p *Plan, s *describe.Stage) {
+	part := p.part(s, "fuse")
+	load := max(p.Light+p.Standing, p.F.Charger.Current)
+	prospective, w := sizing.Prospective(sizing.FaultInput{Source: p.Full, Internal: p.Internal})
+	p.work(p.part(s, "battery").Designation, "prospective short-circuit current", w)
+	p.F.Battery.Prospective = prospective
+	given, _ := describe.Get[quantity.Ampere](s.Fields, "fuse")
+	need := load / quantity.Ampere(p.Site.Practice.LoadFactor.Val)
+	if largest := p.largestWay(); !given.Given {
+		need = max(need, largest*discriminationRatio)
+	} else {
+		need = given.Val
+	}
+	class, err := sizing.MainFuseClass(need, p.Highest, prospective)
+	if err != nil {
+		p.block(part.Designation, part.At, "", err)
+		class = catalogue.FuseKnife
+	}
+	rating := given.Val
+	if !given.Given {
+		k := p.Site.Practice.LoadFactor.Val
+		r, w, err := sizing.ChooseFuse(sizing.FuseInput{Class: class, Load: need * quantity.Ampere(k), LoadFactor: k})
+		if err != nil {
+			p.block(part.Designation, part.At, w.Source, err)
+			r = class.Ratings[len(class.Ratings)-1]
+		}
+		p.work(part.Designation, "fuse rating", w)
+		rating = r
+	}
+	f := p.fit(part, class, rating, "everything", load, given.Given)
+	part.Description = class.Title + " and holder, at the plus pole"
+	p.TrunkOhm += quantity.Ohm(fuseOhm(rating))
+
+	size, iz := p.leastFor(part.Designation, class, rating, catalogue.LeastFixed, 1)
+	p.TrunkSize = size
+	cable := p.cable(s, "cable")
+	if v, ok := describe.Get[quantity.WireSize](s.Fields, "cable"); ok {
+		size, iz = v.Val, p.ampacity(v.Val, 1)
+	}
+	f.CableAmpacity, f.CableSize = iz, size
+	c, _ := catalogue.ConductorOf(size)
+	p.run(cable, size, sizing.PerMetre(c, p.running(size)))
+	if q := p.part(s, "isolator"); q != nil {
+		p.isolator(q, p.nextRating(q, "rated current", catalogue.IsolatorCurrents, load), false)
+	}
+	p.TrunkOhm += 2 * quantity.Ohm(cable.Length) * sizing.PerMetre(c, p.running(size))
+	t, _ := catalogue.ConductorOf(p.TrunkSize)
+	p.TrunkOhm += quantity.Ohm(p.trunkLength()) * sizing.PerMetre(t, p.running(p.TrunkSize))
+}
+
+// largestWay estimates the largest way fuse: that of the circuit or board with the
+// greatest load, or one given.
+func (p *Plan) largestWay() quantity.Ampere {
+	var most quantity.Ampere
+	list := p.fuseClass().Ratings
+	for _, b := range p.C.Boards {
+		if b.Parent != nil {
+			continue
+		}
+		for _, w := range b.Ways {
+			var ib quantity.Ampere
+			add := func(pt *circuit.Point) { ib += p.LampDesign(p.loads[pt.Type]) }
+			given := describe.At[quantity.Ampere]{}
+			switch {
+			case w.Lighting != nil:
+				w.Lighting.Walk(func(pt, _ *circuit.Point) { add(pt) })
+				given = p.circuitOf(w.Lighting.Name).Fuse
+			case w.Feeds != nil:
+				p.below(w.Feeds, add)
+				given, _ = describe.Get[quantity.Ampere](p.stageOf(w.Feeds.Name).Fields, "fuse")
+			}
+			r := given.Val
+			if !given.Given {
+				r, _ = catalogue.NextRating(list, ib/quantity.Ampere(p.Site.Practice.LoadFactor.Val))
+			}
+			most = max(most, r)
+		}
+	}
+	return most
+}
+
+// trunkLength is the length of all single wires in the energy's way, both poles.
+func (p *Plan) trunkLength() quantity.Metre {
+	var sum quantity.Metre
+	for _, w := range p.C.Conductors {
+		if w.Cable == nil && p.onTrunk(w) {
+			sum += w.Length
+		}
+	}
+	return sum
+}
+
+// cable returns a cable of stage s by its local key.
+func (p *Plan) cable(s *describe.Stage, local string) *circuit.Cable {
+	for _, c := range p.C.Cables {
+		if c.Key == s.Name.Val+"/"+local {
+			return c
+		}
+	}
+	return nil
+}
+
+// sizeBattery sizes the battery over the load cycle of an outage.
+func sizeBattery(p *Plan, s *describe.Stage) {
+	g := p.part(s, "battery")
+	amps := p.Light + p.Standing
+	hours := p.Site.Duty.Outage.Val.Hours()
+	need, cap := shimBattery(p, amps, hours)
+	given, pinned := describe.Get[quantity.AmpereHour](s.Fields, "capacity")
+	if pinned {
+		cap = given.Val
+	}
+	p.Internal = quantity.Ohm(float64(p.Cells) * p.Class.OhmAh.Typical / float64(cap))
+	blocks := p.Cells / 6
+	set(g, "capacity", p.Site.Duty.Nominal.Val.String()+" "+cap.String(), float64(cap), "Ah", true, pinned)
+	set(g, "class", strings.ToUpper(p.Class.Name), 0, "", true, true)
+	params(g, "", circuit.Param{Name: "emf", Value: float64(p.Full)}, circuit.Param{Name: "ohm", Value: float64(p.Internal)})
+	p.F.Battery = facts.Battery{
+		Part: g, Class: p.Class.Name, ClassName: p.Class.Title, Series: p.Cells, Blocks: blocks, Parallel: 1,
+		BlockVolt: quantity.Volt(6) * p.Class.Cell, Capacity: cap, Required: need, Pinned: pinned, RatedHours: p.Class.RatedTime.Hours(),
+		EndVolt: p.End, FullVolt: p.Full, FloatVolt: p.Float, Resistance: p.Internal, Fuse: p.part(s, "fuse"),
+	}
+}

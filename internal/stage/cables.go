@@ -1,0 +1,320 @@
+package stage
+
+import (
+	"gloamwright/internal/catalogue"
+	"gloamwright/internal/circuit"
+	"gloamwright/internal/describe"
+	"gloamwright/internal/facts"
+	"gloamwright/internal/quantity"
+	"gloamwright/internal/sizing"
+)
+
+// discriminationRatio is how much a feeder fuse should be above the largest fuse
+// behind it: the 1.6 to 1 of gG fuse-links in IEC 60269-1 (from memory), taken as the
+// starting point for other classes; the gates then say up to which current it holds.
+const discriminationRatio = 1.6
+
+// usedBattery is the resistance of a battery at the end of its life as a multiple of
+// that when new (common practice, no source).
+const usedBattery = 1.5
+
+// sizeBoard sizes feeders, legs and way fuses of all boards together, once.
+func sizeBoard(p *Plan, _ *describe.Stage) {
+	if p.cabled || len(p.C.Boards) == 0 {
+		return
+	}
+	p.cabled = true
+	t := &tree{p: p, class: p.fuseClass()}
+	t.Volts = p.End
+	t.Ahead = p.Internal * usedBattery
+	t.Taper = p.Site.Practice.Taper.Val
+	t.options()
+	trunk := t.leg(sizing.Leg{Name: "trunk", Parent: -1, Extra: p.TrunkOhm, Pinned: &t.Options[len(t.Options)-1]}, nil)
+	for _, b := range p.C.Boards {
+		if b.Parent == nil {
+			t.board(b, trunk)
+		}
+	}
+	res, err := t.Choose()
+	if err != nil {
+		p.block("cables", p.C.Boards[0].At, "", err)
+		if res == nil {
+			res = t.thickest()
+		}
+	}
+	t.assign(res)
+}
+
+// tree is the tree of feeders and legs with what belongs to each leg.
+type tree struct {
+	sizing.Tree
+	p      *Plan
+	class  *catalogue.FuseClass
+	cables []*circuit.Cable // by leg; nil for the trunk
+	ways   []*circuit.Way   // the way whose fuse protects the leg
+}
+
+func (t *tree) leg(l sizing.Leg, c *circuit.Cable) int {
+	t.Legs = append(t.Legs, l)
+	t.cables = append(t.cables, c)
+	t.ways = append(t.ways, nil)
+	return len(t.Legs) - 1
+}
+
+// options lists the sizes that a leg may take.
+func (t *tree) options() {
+	for _, c := range t.p.sizes() {
+		if o, ok := t.option(c.Size); ok {
+			t.Options = append(t.Options, o)
+		}
+	}
+}
+
+// option returns the figures of one size as laid. Its resistance is that at the
+// temperature at which it runs with the load factor's share of its ampacity: the
+// temperature rise goes with the square of the current (IEC 60287-1-1).
+func (t *tree) option(size quantity.WireSize) (sizing.Option, bool) {
+	c, ok := catalogue.ConductorOf(size)
+	if !ok {
+		return sizing.Option{}, false
+	}
+	iz := t.p.ampacity(c.Size, t.p.Site.Practice.Grouping.Val)
+	if iz == 0 {
+		return sizing.Option{}, false
+	}
+	return sizing.Option{
+		Size: c.Size, PerMetre: sizing.PerMetre(c, t.p.running(size)),
+		Fault:    sizing.PerMetre(c, catalogue.AmpacityOf(systemOf(size)).Conductor),
+		Ampacity: iz, Price: t.p.price(c.Size),
+	}, true
+}
+
+// running is the temperature of a conductor that carries the load factor's share of
+// its ampacity.
+func (p *Plan) running(size quantity.WireSize) quantity.Celsius {
+	k := quantity.Celsius(p.Site.Practice.LoadFactor.Val)
+	ambient := p.Site.Duty.CableAmbient.Val
+	hot := catalogue.AmpacityOf(systemOf(size)).Conductor
+	return ambient + max(0, hot-ambient)*k*k
+}
+
+// price returns what the firm pays for a metre of cable of that size; 0 if it does
+// not say.
+func (p *Plan) price(size quantity.WireSize) float64 {
+	for _, x := range p.Site.Practice.Prices {
+		if x.Of.Val == size.String() {
+			return x.Cost.Val
+		}
+	}
+	return 0
+}
+
+// board adds the ways of a board below leg at.
+func (t *tree) board(b *circuit.Board, at int) {
+	for _, w := range b.Ways {
+		switch {
+		case w.Lighting != nil:
+			t.lighting(w, at)
+		case w.Feeds != nil:
+			t.feeder(w, at)
+		default:
+			t.spare(w)
+		}
+	}
+}
+
+// spare leaves a way without a fuse-link.
+func (t *tree) spare(w *circuit.Way) {
+	w.Fuse.Description = t.class.Title + " holder, spare"
+	params(w.Fuse, "", circuit.Param{Name: "ohm", Value: fuseOhm(t.class.Ratings[0])})
+}
+
+// wayExtra is the resistance of a way before its cable: fuse and the two leads to
+// its terminals in the thinnest size that a fixed cable may have.
+func (t *tree) wayExtra(rating quantity.Ampere) quantity.Ohm {
+	return quantity.Ohm(fuseOhm(rating)) + 2*quantity.Ohm(boardLead)*t.Options[0].PerMetre
+}
+
+func (t *tree) lighting(w *circuit.Way, at int) {
+	p := t.p
+	var ib quantity.Ampere
+	w.Lighting.Walk(func(pt, _ *circuit.Point) { ib += p.LampDesign(p.loads[pt.Type]) })
+	d := p.circuitOf(w.Lighting.Name)
+	f := p.wayFuse(w, w.Lighting.Name, ib, d.Fuse, 0)
+	legs := map[*circuit.Point]int{}
+	w.Lighting.Walk(func(pt, before *circuit.Point) {
+		l := p.loads[pt.Type]
+		leg := t.protected(f, sizing.Leg{
+			Name: pt.Luminaire.Designation, Parent: at, Circuit: w.Lighting.Name, Length: pt.Leg.Length,
+			Load: l.Tree, MinVolt: max(p.LampEnd(), l.Works.Low),
+		})
+		if before != nil {
+			leg.Parent = legs[before]
+		} else {
+			leg.Extra = t.wayExtra(f.Rating)
+		}
+		if size, ok := p.pinnedLeg(d, pt.Leg); ok {
+			if o, ok := t.option(size); ok {
+				leg.Pinned = &o
+			}
+		}
+		legs[pt] = t.leg(leg, pt.Leg)
+		t.ways[legs[pt]] = w
+	})
+}
+
+func (t *tree) feeder(w *circuit.Way, at int) {
+	p := t.p
+	var ib, largest quantity.Ampere
+	p.below(w.Feeds, func(pt *circuit.Point) { ib += p.LampDesign(p.loads[pt.Type]) })
+	// The ways behind come first, so that the feeder's fuse can stand above theirs.
+	// Their legs need the feeder's leg as parent: it is filled in afterwards.
+	i := t.leg(sizing.Leg{}, w.Feeds.Feeder)
+	t.ways[i] = w
+	before := len(p.F.Fuses)
+	t.board(w.Feeds, i)
+	for _, f := range p.F.Fuses[before:] {
+		largest = max(largest, f.Rating)
+	}
+	s := p.stageOf(w.Feeds.Name)
+	given, _ := describe.Get[quantity.Ampere](s.Fields, "fuse")
+	f := p.wayFuse(w, w.Feeds.Title, ib, given, largest)
+	leg := t.protected(f, sizing.Leg{Name: w.Feeds.Feeder.Designation, Parent: at, Length: w.Feeds.Feeder.Length, Extra: t.wayExtra(f.Rating)})
+	if v, ok := describe.Get[quantity.WireSize](s.Fields, "cable"); ok {
+		if o, ok := t.option(v.Val); ok {
+			leg.Pinned = &o
+		}
+	}
+	t.Legs[i] = leg
+}
+
+// protected fills in what the fuse asks of a leg.
+func (t *tree) protected(f *facts.Fuse, l sizing.Leg) sizing.Leg {
+	p := t.p
+	l.Carry = sizing.CableFor(f.Class, f.Rating)
+	l.Least = catalogue.LeastFixed.Least(p.System)
+	need, _, err := sizing.CurrentToOpen(f.Class, f.Rating, p.Site.Practice.ClearWithin.Val)
+	if err != nil {
+		p.block(f.Part.Designation, f.Part.At, "", err)
+		return l
+	}
+	l.Loop = sizing.MostLoop(p.Empty, need)
+	return l
+}
+
+// wayFuse chooses or checks the fuse of a way. Behind stands the largest fuse behind
+// it, 0 if there is none.
+func (p *Plan) wayFuse(w *circuit.Way, feeds string, load quantity.Ampere, given describe.At[quantity.Ampere], behind quantity.Ampere) *facts.Fuse {
+	f := p.systemFuse(w.Fuse, feeds, max(load, behind*discriminationRatio*quantity.Ampere(p.Site.Practice.LoadFactor.Val)), given)
+	f.Design = load
+	f.Board, f.Way = w.Board, w
+	return f
+}
+
+// below calls fn for every luminaire behind a board.
+func (p *Plan) below(b *circuit.Board, fn func(*circuit.Point)) {
+	for _, w := range b.Ways {
+		if w.Lighting != nil {
+			w.Lighting.Walk(func(pt, _ *circuit.Point) { fn(pt) })
+		} else if w.Feeds != nil {
+			p.below(w.Feeds, fn)
+		}
+	}
+}
+
+func (p *Plan) circuitOf(name string) *describe.Circuit {
+	for _, c := range p.Site.Circuits {
+		if c.Name.Val == name {
+			return c
+		}
+	}
+	panic("stage: no circuit " + name)
+}
+
+func (p *Plan) stageOf(name string) *describe.Stage {
+	for _, s := range p.Site.Stages {
+		if s.Name.Val == name {
+			return s
+		}
+	}
+	panic("stage: no stage " + name)
+}
+
+// pinnedLeg returns the size that the user gave for a leg: its own, or its circuit's.
+func (p *Plan) pinnedLeg(c *describe.Circuit, leg *circuit.Cable) (quantity.WireSize, bool) {
+	var find func(legs []*describe.Leg) (quantity.WireSize, bool)
+	find = func(legs []*describe.Leg) (quantity.WireSize, bool) {
+		for _, l := range legs {
+			if l.Pos == leg.At && l.Cable.Given {
+				return l.Cable.Val, true
+			}
+			for _, b := range l.Branches {
+				if s, ok := find(b); ok {
+					return s, true
+				}
+			}
+		}
+		return quantity.WireSize{}, false
+	}
+	if s, ok := find(c.Points); ok {
+		return s, true
+	}
+	return c.Cable.Val, c.Cable.Given
+}
+
+// thickest is what stands when nothing fits: pinned sizes as given, the thickest
+// option elsewhere. The findings say that it must not be built.
+func (t *tree) thickest() *sizing.TreeResult {
+	r := &sizing.TreeResult{}
+	for i := range t.Legs {
+		o := &t.Options[len(t.Options)-1]
+		if t.Legs[i].Pinned != nil {
+			o = t.Legs[i].Pinned
+		}
+		r.Sizes = append(r.Sizes, o)
+	}
+	r.Volts, r.Amps, _ = t.Solve(r.Sizes)
+	return r
+}
+
+// assign writes the chosen sizes to the cables and their fuses.
+func (t *tree) assign(r *sizing.TreeResult) {
+	p := t.p
+	thinnest := map[*circuit.Way]*sizing.Option{}
+	for i, c := range t.cables {
+		if c == nil {
+			continue
+		}
+		o := r.Sizes[i]
+		p.run(c, o.Size, o.PerMetre)
+		w := t.ways[i]
+		if th := thinnest[w]; th == nil || o.Ampacity < th.Ampacity {
+			thinnest[w] = o
+		}
+		w.WirePlus.Size, w.WireMinus.Size = p.thicker(w.WirePlus.Size, o.Size), p.thicker(w.WireMinus.Size, o.Size)
+	}
+	for _, f := range p.F.Fuses {
+		if o := thinnest[f.Way]; f.Way != nil && o != nil {
+			f.CableAmpacity, f.CableSize = o.Ampacity, o.Size
+		}
+	}
+	if r.Cost > 0 {
+		p.F.Totals.Bound, p.F.Totals.Proven = quantity.Ratio(r.Bound/r.Cost), r.Proven
+	}
+}
+
+func (p *Plan) thicker(a, b quantity.WireSize) quantity.WireSize {
+	if a.Area > b.Area {
+		return a
+	}
+	return b
+}
+
+// run gives a cable its size and its cores their resistance.
+func (p *Plan) run(c *circuit.Cable, size quantity.WireSize, perMetre quantity.Ohm) {
+	c.Size = size
+	for _, w := range c.Cores {
+		w.Size = size
+		w.Ohm = perMetre * quantity.Ohm(w.Length)
+	}
+}

@@ -1,0 +1,198 @@
+package stage
+
+import (
+	"gloamwright/internal/catalogue"
+	"gloamwright/internal/facts"
+	"gloamwright/internal/quantity"
+	"strconv"
+
+	"gloamwright/internal/circuit"
+	"gloamwright/internal/describe"
+)
+
+// changeoverRelay lights its boards through a break contact when nothing holds its
+// coil: no mains, no daylight.
+func changeoverRelay() *Kind {
+	return &Kind{
+		Kind: describe.Kind{
+			Name: "changeover-relay",
+			Doc:  "Relay that lights what hangs on its break contact when nothing holds its coil in.",
+			Ports: []describe.Port{
+				{Name: "break", Doc: "plus behind the break contact: live while the coil is dead"},
+				{Name: "make", Doc: "plus behind the make contact: live while the coil is held"},
+				{Name: "coil", Doc: "what holds the coil in", Sink: true, Max: 2, Signal: true},
+			},
+			Fields: fields(
+				describe.Field{Name: "coil", Type: describe.StageRef, Doc: "The supply that holds the coil in while mains is on."},
+				describe.Field{Name: "from", Type: describe.StageRef, Required: true, Doc: "The stage that it takes the plus from."},
+				describe.Field{Name: "rated", Type: describe.Current, Min: "0.1 A", Max: "200 A", Doc: "Contact rating for direct current at the nominal voltage; without it the next standard rating."},
+				describe.Field{Name: "coil_resistance", Type: describe.Resistance, Min: "1 Ω", Max: "100 kΩ", Doc: "Coil resistance at 20 °C; without it from the relay class."},
+			),
+		},
+		Class: ControlClass, Rank: 8, Heading: "Changeover",
+		Expand: expandChangeover,
+		Steps:  []Step{{Control, sizeRelay}, {Trunk, sizeContact}},
+	}
+}
+
+// feed is one source that holds a coil.
+type feed struct {
+	rail string       // rail key, or empty
+	pin  *circuit.Pin // signal output, when rail is empty
+	from string       // stage name
+}
+
+func (b *Build) coilFeeds(s *describe.Stage) []feed {
+	var out []feed
+	if key, ok := b.ref(s, "coil"); ok {
+		out = append(out, b.feedOf(key))
+	}
+	for _, f := range b.feedersOf(s.Name.Val, "coil") {
+		out = append(out, b.feedOf(f.Name.Val+".out"))
+	}
+	return out
+}
+
+func (b *Build) feedOf(key string) feed {
+	name := key
+	for i := range key {
+		if key[i] == '.' {
+			name = key[:i]
+			break
+		}
+	}
+	if p := b.outs[key]; p != nil {
+		return feed{pin: p, from: name}
+	}
+	return feed{rail: key, from: name}
+}
+
+func expandChangeover(b *Build, s *describe.Stage) {
+	k := b.Part("relay", circuit.Relay, "Changeover relay, two poles", "A1", "A2", "11", "12", "14", "21", "22", "24")
+	coil := b.Element(k, "coil", "coil", "A1", "A1", "A2", "A2")
+	contact := func(name, a, z, rest string) {
+		e := b.Element(k, name, "contact", "1", a, "2", z)
+		e.Control = coil.ID
+		e.Params = []circuit.Param{{Name: "rest_closed", Value: map[string]float64{"break": 1, "make": 0}[rest]}}
+	}
+	contact("11-12", "11", "12", "break")
+	d := b.Part("suppressor", circuit.Diode, "Diode across the coil", "A", "K")
+	b.Element(d, "", "diode", "A", "A", "K", "K")
+	b.Join(k.Pin("A1"), d.Pin("K"))
+	b.Join(k.Pin("A2"), d.Pin("A"))
+	makeUsed := b.used(s.Name.Val+".make", "make")
+	width := 40
+	if makeUsed {
+		width = 58
+		contact("21-24", "21", "24", "make")
+	}
+	b.sketch(width, "lights the board", "without mains", "in the dark")
+
+	feeds := b.coilFeeds(s)
+	levels := []int{coilLevel1, coilLevel2, coilLevel3}
+	for i, f := range feeds {
+		y := levels[i]
+		n := strconv.Itoa(i + 1)
+		end := k.Pin("A1")
+		if len(feeds) > 1 {
+			r := b.Part("feed"+n, circuit.Diode, "Diode in the coil feed", "A", "K")
+			b.Element(r, "", "diode", "A", "A", "K", "K")
+			b.Join(r.Pin("K"), k.Pin("A1"))
+			end = r.Pin("A")
+			b.symbol("diode", r, 8, float64(y), "H", "A")
+			if i == 0 {
+				b.line(nil, 10, y, 15, y, 15, 38)
+			} else {
+				b.line(nil, 10, y, 15, y)
+			}
+		}
+		if len(feeds) > 1 {
+			b.coilFeed(f, end, "coil"+n, y, 0, y, 6, y)
+		} else {
+			b.coilFeed(f, end, "coil"+n, y, 0, y, 15, y, 15, 38)
+		}
+	}
+	b.symbol("coil", k, 15, 40, "V", "L")
+	b.line(nil, 15, 36, 21, 36, 21, 38)
+	b.symbol("diode", d, 21, 40, "U", "R")
+	b.line(nil, 21, 42, 21, 44, 15, 44)
+	down := b.lead(circuit.OpDown, "minus", k.Pin("A2"), Minus, 15, 42, 15, downEnd)
+	from, _ := b.ref(s, "from")
+	in := b.lead(circuit.OpIn, "in", k.Pin("11"), from, 26, upEnd, 26, 17, 29, 17)
+	b.symbol("break", k, 31, 17, "H", "C", "1", "11", "2", "12")
+	out := b.lead(circuit.OpUp, "break", k.Pin("12"), b.outRail(s, "break"), 33, 17, 36, 17, 36, upEnd)
+	if makeUsed {
+		in2 := b.lead(circuit.OpIn, "in2", k.Pin("21"), from, 44, upEnd, 44, 17, 47, 17)
+		b.symbol("make", k, 49, 17, "H", "C", "1", "21", "2", "24")
+		out2 := b.lead(circuit.OpUp, "make", k.Pin("24"), b.outRail(s, "make"), 51, 17, 54, 17, 54, upEnd)
+		b.number(in2, 44, 11)
+		b.number(out2, 54, 11)
+	}
+	b.point(b.TestPoint("coil", "Coil of the changeover", k.Pin("A1")), 15, 29, "E")
+	b.number(in, 26, 11)
+	b.number(out, 36, 11)
+	b.number(down, 15, 48.5)
+}
+
+// sizeRelay takes the coil from the relay class, and sums what it draws.
+func sizeRelay(p *Plan, s *describe.Stage) {
+	k := p.part(s, "relay")
+	nominal := p.Site.Duty.Nominal.Val
+	class := catalogue.RelayGeneral
+	ohm := class.CoilResistance(nominal)
+	given, pinned := describe.Get[quantity.Ohm](s.Fields, "coil_resistance")
+	if pinned {
+		ohm = given.Val
+	}
+	i := quantity.Ampere(float64(nominal) / float64(ohm))
+	hot := p.Site.Duty.CableAmbient.Val + quantity.Celsius(class.CoilRise)
+	pick := quantity.Volt(float64(nominal) * float64(class.PickUp) * (234.5 + float64(hot)) / (234.5 + 20))
+	set(k, "coil", nominal.String()+" "+quantity.Format(ohm, 3), float64(ohm), "Ω", true, pinned)
+	params(k, "coil",
+		circuit.Param{Name: "ohm", Value: float64(ohm), Tol: float64(class.CoilTol)},
+		circuit.Param{Name: "pickup_volt", Value: float64(nominal) * float64(class.PickUp)},
+		circuit.Param{Name: "dropout_volt", Value: float64(nominal) * float64(class.DropOut)},
+	)
+	for _, part := range k.Elements {
+		if part.Model == "contact" {
+			part.Params = append(part.Params, circuit.Param{Name: "ohm", Value: float64(class.ContactTyp), Tol: contactTol})
+		}
+	}
+	for _, d := range p.C.Parts {
+		if d.Stage == s.Name.Val && d.Kind == circuit.Diode {
+			p.diode(d)
+		}
+	}
+	p.TrunkOhm += class.ContactTyp
+	p.Held += i
+	if r, ok := describe.Get[describe.Ref](s.Fields, "coil"); ok {
+		p.aux[r.Val.Stage] += i
+	}
+	p.F.Relay = &facts.Relay{Part: k, Coil: ohm, CoilA: i, PickUp: pick, DropOut: quantity.Volt(float64(nominal) * float64(class.DropOut))}
+}
+
+// diode records a small rectifier diode: 1N4004 class, 1 A.
+func (p *Plan) diode(d *circuit.Part) {
+	set(d, "type", "1 A, 100 V", 1, "A", true, false)
+	d.Note = "1N4002 to 1N4007 class, 1 A, at least 100 V"
+	params(d, "", circuit.Param{Name: "is", Value: diodeIS}, circuit.Param{Name: "n", Value: diodeN})
+}
+
+// The 1N4004's law as the open textbook on semiconductors prints it: 18.8 nA with an
+// emission coefficient of 2.
+const (
+	diodeIS = 18.8e-9
+	diodeN  = 2
+)
+
+// sizeContact holds the contact against the load.
+func sizeContact(p *Plan, s *describe.Stage) {
+	k := p.part(s, "relay")
+	load := p.Light
+	rated, given := describe.Get[quantity.Ampere](s.Fields, "rated")
+	if !given {
+		rated.Val = catalogue.RelayGeneral.ContactRows[0].Current
+	}
+	set(k, "contact", rated.Val.String()+" DC", float64(rated.Val), "A", false, given)
+	p.F.Relay.Contact, p.F.Relay.Rated = load, rated.Val
+}

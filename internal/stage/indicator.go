@@ -1,0 +1,62 @@
+package stage
+
+import (
+	"gloamwright/internal/circuit"
+	"gloamwright/internal/describe"
+	"gloamwright/internal/quantity"
+)
+
+// indicator returns the kind: a signal lamp between a plus rail and L−.
+func indicator() *Kind {
+	return &Kind{
+		Kind: describe.Kind{
+			Name: "indicator",
+			Doc:  "Signal lamp (LED) across a rail: shows that the rail is live.",
+			Fields: fields(
+				describe.Field{Name: "from", Type: describe.StageRef, Required: true, Doc: "The stage whose plus it watches."},
+				describe.Field{Name: "colour", Type: describe.Choice, Default: "GN", Choices: []string{"GN", "YE", "RD", "WH", "BU"}, Doc: "Colour of the lamp, an IEC 60757 code."},
+				describe.Field{Name: "current", Type: describe.Current, Default: "5 mA", Min: "0.5 mA", Max: "50 mA", Doc: "Lamp current at nominal voltage."},
+			),
+		},
+		Class: ControlClass, Rank: 1, Heading: "Indicator",
+		Expand: func(b *Build, s *describe.Stage) {
+			r := b.Part("resistor", circuit.Resistor, "Series resistor", "1", "2")
+			b.Element(r, "", "resistor", "1", "1", "2", "2")
+			p := b.Part("lamp", circuit.SignalLamp, "Signal lamp, LED", "1", "2")
+			b.Element(p, "", "led", "A", "1", "K", "2")
+			from, _ := b.ref(s, "from")
+			b.sketch(12, "shows that", "it is live")
+			up := b.lead(circuit.OpUp, "plus", r.Pin("1"), from, 6, 12, 6, upEnd)
+			b.symbol("resistor", r, 6, 14, "V", "L")
+			b.line(b.Wire(r.Pin("2"), p.Pin("1"), true, bridgeLength), 6, 16, 6, 24)
+			b.symbol("signal_lamp", p, 6, 26, "V", "L")
+			down := b.lead(circuit.OpDown, "minus", p.Pin("2"), Minus, 6, 28, 6, downEnd)
+			b.number(up, 6, 9)
+			b.number(down, 6, 42)
+		},
+		Steps: []Step{{Control, sizeIndicator}},
+	}
+}
+
+// ledForward is the forward voltage of an indicator LED (common practice, no source).
+const ledForward quantity.Volt = 2
+
+// sizeIndicator chooses the series resistor of the lamp.
+func sizeIndicator(p *Plan, s *describe.Stage) {
+	r, lamp := p.part(s, "resistor"), p.part(s, "lamp")
+	i := must[quantity.Ampere](s, "current")
+	v, w := shimString(p.Site.Duty.Nominal.Val, ledForward, 1, i)
+	p.work(r.Designation, "series resistor", w)
+	p.resistor(r, "", v, resistorTol)
+	colour := must[string](s, "colour")
+	set(lamp, "colour", colour, 0, "", true, false)
+	params(lamp, "", circuit.Param{Name: "forward_volt", Value: float64(ledForward), Tol: forwardTol}, circuit.Param{Name: "ampere", Value: float64(i)})
+	p.Standing += i
+}
+
+// resistor records a resistor's value and the power that it stands at the highest
+// voltage of the system.
+func (p *Plan) resistor(r *circuit.Part, suffix string, v quantity.Ohm, tol float64) {
+	set(r, "resistance", v.String(), float64(v), "Ω", true, false)
+	params(r, suffix, circuit.Param{Name: "ohm", Value: float64(v), Tol: tol})
+}

@@ -1,0 +1,142 @@
+package stage
+
+import (
+	"fmt"
+	"gloamwright/internal/catalogue"
+	"gloamwright/internal/circuit"
+	"gloamwright/internal/describe"
+	"gloamwright/internal/facts"
+	"gloamwright/internal/quantity"
+	"gloamwright/internal/sizing"
+	"math"
+)
+
+// lowVoltageDisconnect takes the load off the battery before it is discharged too
+// deeply, and puts it back when it has been charged.
+func lowVoltageDisconnect() *Kind {
+	return &Kind{
+		Kind: describe.Kind{
+			Name: "low-voltage-disconnect",
+			Doc:  "Cut-off: takes the load off a battery that is nearly empty and puts it back when it has been charged.",
+			Ports: []describe.Port{
+				{Name: "out", Doc: "plus behind the cut-off"},
+			},
+			Fields: fields(
+				describe.Field{Name: "from", Type: describe.StageRef, Required: true, Doc: "The stage that it takes the plus from."},
+				describe.Field{Name: "opens", Type: describe.Voltage, Min: "1 V", Max: "60 V", Doc: "Voltage at which it opens; without it from the battery's class."},
+				describe.Field{Name: "recloses", Type: describe.Voltage, Min: "1 V", Max: "60 V", Doc: "Voltage at which it closes again; without it from the battery's class."},
+				describe.Field{Name: "rated", Type: describe.Current, Min: "0.1 A", Max: "500 A", Doc: "Rated current; without it the next standard rating."},
+				describe.Field{Name: "own", Type: describe.Current, Default: "8 mA", Min: "0 mA", Max: "1 A", Doc: "Current that it takes itself."},
+				describe.Field{Name: "accuracy", Type: describe.Percent, Default: "1 %", Min: "0 %", Max: "10 %", Doc: "Tolerance of its two voltages, both ways."},
+			),
+		},
+		Class: SupplyClass, Rank: 5, Heading: "Cut-off",
+		Expand: func(b *Build, s *describe.Stage) {
+			q := b.Part("cut-off", circuit.CutOff, "Low-voltage cut-off", "in", "out", "-")
+			b.Element(q, "", "cut-off", "in", "in", "out", "out", "-", "-")
+			from, _ := b.ref(s, "from")
+			b.sketch(24, "saves the", "battery")
+			in := b.lead(circuit.OpIn, "in", q.Pin("in"), from, -3, upEnd, -3, 22, 5, 22)
+			b.add(circuit.SketchItem{Op: circuit.OpBlock, Part: q, X: 6, Y: 18, X2: 14, Y2: 28})
+			b.add(circuit.SketchItem{Op: circuit.OpStub, Part: q, Name: "in", Pts: points([]int{5, 22, 8, 22})})
+			b.add(circuit.SketchItem{Op: circuit.OpStub, Part: q, Name: "out", Pts: points([]int{15, 22, 12, 22})})
+			b.add(circuit.SketchItem{Op: circuit.OpSymbol, Symbol: "make", X: 10, Y: 22, Turn: "H"})
+			b.add(circuit.SketchItem{Op: circuit.OpField, Part: q, Name: "-", X: 10, Y: 26, Y2: 29})
+			down := b.lead(circuit.OpDown, "minus", q.Pin("-"), Minus, 10, 29, 10, downEnd)
+			up := b.lead(circuit.OpUp, "out", q.Pin("out"), b.outRail(s, "out"), 15, 22, 19, 22, 19, upEnd)
+			b.point(b.TestPoint("output", b.cur.Heading+" output", q.Pin("out")), 19, 15, "W")
+			b.number(in, -3, 13)
+			b.number(up, 19, 9)
+			b.number(down, 10, 42)
+		},
+		Steps: []Step{{Trunk, sizeCutOff}},
+	}
+}
+
+// sizeCutOff chooses or checks the cut-off's voltages and rating. It opens at the end
+// of discharge that the battery is sized for.
+func sizeCutOff(p *Plan, s *describe.Stage) {
+	q := p.part(s, "cut-off")
+	acc := float64(must[quantity.Ratio](s, "accuracy"))
+	opens, givenOpens := describe.Get[quantity.Volt](s.Fields, "opens")
+	if !givenOpens {
+		// It senses behind the battery's cable and fuse, and must not open before the
+		// battery is at its end, even if its own voltage is a little high.
+		drop := float64(p.Light+p.Standing) * float64(p.TrunkOhm)
+		v := math.Floor((float64(p.End)-drop)/(1+acc)*voltStep+stepSlack) / voltStep
+		opens.Val = quantity.Volt(v)
+		p.work(q.Designation, "opens", sizing.Working{
+			Formula:     "U_opens ≤ (U_end − I × R) ÷ (1 + accuracy), whole tenths of a volt",
+			Substituted: fmt.Sprintf("(%.3g V − %.4g A × %.4g Ω) ÷ (1 + %.3g) → %.1f V", float64(p.End), float64(p.Light+p.Standing), float64(p.TrunkOhm), acc, v),
+			Value:       v, Unit: "V", Source: p.classSource(),
+		})
+	}
+	closes, givenCloses := describe.Get[quantity.Volt](s.Fields, "recloses")
+	if !givenCloses {
+		closes.Val = quantity.Volt(p.Cells) * p.recloses()
+		p.work(q.Designation, "recloses", sizing.Working{
+			Formula: "U_recloses = n_cells × U_cell", Substituted: fmt.Sprintf("%d × %v", p.Cells, p.recloses()),
+			Value: float64(closes.Val), Unit: "V", Source: p.classSource(),
+		})
+	}
+	load := p.Light + p.Standing
+	rated, given := describe.Get[quantity.Ampere](s.Fields, "rated")
+	if !given {
+		rated.Val = p.nextRating(q, "rated current", catalogue.CutOffCurrents, load)
+	}
+	set(q, "opens", "opens "+quantity.Format(opens.Val, 3), float64(opens.Val), "V", true, givenOpens)
+	set(q, "recloses", "closes "+quantity.Format(closes.Val, 3), float64(closes.Val), "V", true, givenCloses)
+	set(q, "rating", rated.Val.String(), float64(rated.Val), "A", true, given)
+	params(q, "",
+		circuit.Param{Name: "opens_volt", Value: float64(opens.Val), Tol: acc},
+		circuit.Param{Name: "recloses_volt", Value: float64(closes.Val), Tol: acc},
+		circuit.Param{Name: "own_ampere", Value: float64(must[quantity.Ampere](s, "own")), Tol: ownTol},
+		circuit.Param{Name: "ohm", Value: cutOffOhm, Tol: contactTol},
+	)
+	p.TrunkOhm += cutOffOhm
+	p.F.CutOff = &facts.CutOff{Part: q, Opens: opens.Val, Recloses: closes.Val, Current: load, Rated: rated.Val}
+}
+
+// cutOffOhm is the resistance of a closed cut-off, and ownTol the tolerance of what
+// modules draw themselves (common practice, no source).
+const (
+	cutOffOhm = 0.01
+	ownTol    = 0.2
+)
+
+// recloses is the voltage of a cell at which a cut-off closes again.
+func (p *Plan) recloses() quantity.Volt {
+	if p.Class == nil {
+		return p.Site.Duty.Nominal.Val
+	}
+	return p.Class.Recloses
+}
+
+// classSource is the source of the battery class's voltages.
+func (p *Plan) classSource() string {
+	if p.Class == nil {
+		return ""
+	}
+	return p.Class.Title + ": " + p.Class.Evidence.String()
+}
+
+// nextRating chooses the next standard rating for a load, used at most to the
+// practice's load factor.
+func (p *Plan) nextRating(part *circuit.Part, name string, list []quantity.Ampere, load quantity.Ampere) quantity.Ampere {
+	k := p.Site.Practice.LoadFactor.Val
+	need := load / quantity.Ampere(k)
+	r, ok := catalogue.NextRating(list, need)
+	w := sizing.Working{
+		Formula: "I_rated ≥ I ÷ k_load, next standard rating", Value: float64(r), Unit: "A",
+		Substituted: fmt.Sprintf("%s ÷ %v = %s → %v", quantity.Format(load, 4), float64(k), quantity.Format(need, 4), r),
+		Source:      catalogue.CommonPractice.String(),
+	}
+	if !ok {
+		r = list[len(list)-1]
+		p.block(part.Designation, part.At, w.Source, &sizing.BlockedError{
+			Limit: sizing.LimitLoad, Value: float64(need), Bound: float64(r), Unit: "A", Frees: "split the job over two systems",
+		})
+	}
+	p.work(part.Designation, name, w)
+	return r
+}
