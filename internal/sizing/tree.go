@@ -1,0 +1,214 @@
+package sizing
+
+import (
+	"gloamwright/internal/quantity"
+)
+
+// Option is one conductor size that a leg may take, with its figures as laid.
+type Option struct {
+	Size     quantity.WireSize
+	PerMetre quantity.Ohm    // of one conductor at working temperature
+	Fault    quantity.Ohm    // the same during a fault, at least PerMetre; 0: PerMetre
+	Ampacity quantity.Ampere // with its factors
+	Price    float64         // per metre of cable; all 0: copper is minimised
+}
+
+func (o *Option) fault() float64 {
+	if o.Fault > 0 {
+		return float64(o.Fault)
+	}
+	return float64(o.PerMetre)
+}
+
+// Load is what hangs on the end of a leg. It draws Power ÷ V + Current + V ÷ Ohm, so
+// that a driver, a current source, a resistor and a string of diodes with its
+// resistor (Ohm = R, Current = −V_F ÷ R) are all exact.
+type Load struct {
+	Power   quantity.Watt
+	Current quantity.Ampere
+	Ohm     quantity.Ohm // 0: none
+}
+
+// Draws returns the current at voltage v.
+func (l Load) Draws(v quantity.Volt) quantity.Ampere {
+	i := l.Current
+	if l.Power != 0 {
+		i += quantity.Ampere(float64(l.Power) / float64(v))
+	}
+	if l.Ohm != 0 {
+		i += quantity.Ampere(float64(v) / float64(l.Ohm))
+	}
+	return i
+}
+
+// Leg is one stretch of two-core cable in a tree.
+type Leg struct {
+	Name    string
+	Parent  int    // index of the leg on whose end it hangs; −1: on the root
+	Circuit string // legs of one circuit are sized together; "": a feeder, sized by itself
+	Length  quantity.Metre
+	Extra   quantity.Ohm // in series at its start: fuse, contact, terminals
+
+	Load    Load          // at its end
+	MinVolt quantity.Volt // at its end, in the worst condition; 0: no limit
+	Carry   quantity.Ampere
+	Loop    quantity.Ohm // greatest loop from the source to its end for far-end clearing; 0: no limit
+	Least   quantity.SquareMM
+	Pinned  *Option // given by the user: checked, not chosen
+}
+
+// Tree is a source with everything that hangs on it. A leg's index is above its
+// parent's.
+type Tree struct {
+	Volts   quantity.Volt // at the root in the worst condition
+	Ahead   quantity.Ohm  // resistance of the source; counts in fault loops only
+	Legs    []Leg
+	Options []Option // standard or stocked sizes, by rising area
+	Taper   bool     // legs of one circuit may get thinner down the run
+}
+
+// TreeResult is a chosen set of sizes with its electrical state.
+type TreeResult struct {
+	Sizes  []*Option
+	Volts  []quantity.Volt   // at the end of each leg
+	Amps   []quantity.Ampere // in each leg
+	Cost   float64           // price if prices are set, else conductor volume in cm³
+	Bound  float64           // no choice that meets all limits costs less
+	Proven bool              // Cost is the least possible
+}
+
+// Copper returns the conductor volume in cm³: metres times mm², both conductors.
+func (t *Tree) Copper(sizes []*Option) float64 {
+	v := 0.0
+	for i := range t.Legs {
+		v += 2 * float64(t.Legs[i].Length) * float64(sizes[i].Size.Area)
+	}
+	return v
+}
+
+func (t *Tree) priced() bool {
+	for i := range t.Options {
+		if t.Options[i].Price > 0 {
+			return true
+		}
+	}
+	return false
+}
+
+// sweepRounds and sweepEnd bound the backward and forward sweep: drops of a few per
+// cent converge in about ten rounds; a tree near voltage collapse does not.
+const (
+	sweepRounds = 300
+	sweepEnd    = 1e-13 // of the source voltage
+	collapsed   = 0.05  // of the source voltage: below it no operating point is sought
+)
+
+// Solve returns the voltage at the end of each leg and the current in each, exactly:
+// the backward and forward sweep for radial networks (distribution textbooks),
+// repeated until the voltages stand. ok is false if there is no operating point.
+func (t *Tree) Solve(sizes []*Option) (volts []quantity.Volt, amps []quantity.Ampere, ok bool) {
+	r := make([]float64, len(t.Legs))
+	for i := range t.Legs {
+		r[i] = t.ohms(i, sizes[i])
+	}
+	v, a := make([]float64, len(r)), make([]float64, len(r))
+	ok = t.sweep(r, v, a)
+	volts, amps = make([]quantity.Volt, len(r)), make([]quantity.Ampere, len(r))
+	for i := range r {
+		volts[i], amps[i] = quantity.Volt(v[i]), quantity.Ampere(a[i])
+	}
+	return volts, amps, ok
+}
+
+// ohms is the loop resistance of leg i with an option, its extra included.
+func (t *Tree) ohms(i int, o *Option) float64 {
+	return 2*float64(t.Legs[i].Length)*float64(o.PerMetre) + float64(t.Legs[i].Extra)
+}
+
+// faultOhms is the same during a fault.
+func (t *Tree) faultOhms(i int, o *Option) float64 {
+	return 2*float64(t.Legs[i].Length)*o.fault() + float64(t.Legs[i].Extra)
+}
+
+func (t *Tree) sweep(r, v, a []float64) bool {
+	for i := range v {
+		v[i] = float64(t.Volts)
+	}
+	for range sweepRounds {
+		for i := range a {
+			a[i] = float64(t.Legs[i].Load.Draws(quantity.Volt(v[i])))
+		}
+		for i := len(a) - 1; i >= 0; i-- {
+			if p := t.Legs[i].Parent; p >= 0 {
+				a[p] += a[i]
+			}
+		}
+		change := 0.0
+		for i := range v {
+			up := float64(t.Volts)
+			if p := t.Legs[i].Parent; p >= 0 {
+				up = v[p]
+			}
+			next := up - a[i]*r[i]
+			if next < collapsed*float64(t.Volts) {
+				return false
+			}
+			change = max(change, abs(next-v[i]))
+			v[i] = next
+		}
+		if change <= sweepEnd*float64(t.Volts) {
+			return true
+		}
+	}
+	return false
+}
+
+func abs(x float64) float64 {
+	if x < 0 {
+		return -x
+	}
+	return x
+}
+
+// voltSlack is how far a voltage may stand below its limit by rounding.
+const voltSlack = 1e-9
+
+// meets reports whether sizes keep every voltage and loop limit; sizes are within
+// the allowed ones. On success the solved state is returned.
+func (t *Tree) meets(sizes []*Option) ([]quantity.Volt, []quantity.Ampere, bool) {
+	if !t.clears(sizes) {
+		return nil, nil, false
+	}
+	v, a, ok := t.Solve(sizes)
+	if !ok {
+		return nil, nil, false
+	}
+	for i := range t.Legs {
+		if float64(v[i]) < float64(t.Legs[i].MinVolt)-voltSlack {
+			return nil, nil, false
+		}
+	}
+	return v, a, true
+}
+
+// loops returns the fault loop from the source to the end of each leg.
+func (t *Tree) loops(sizes []*Option) []float64 {
+	l := make([]float64, len(t.Legs))
+	for i := range t.Legs {
+		l[i] = float64(t.Ahead)
+		if p := t.Legs[i].Parent; p >= 0 {
+			l[i] = l[p]
+		}
+		l[i] += t.faultOhms(i, sizes[i])
+	}
+	return l
+}
+
+func (t *Tree) clears(sizes []*Option) bool {
+	for i, l := range t.loops(sizes) {
+		if most := float64(t.Legs[i].Loop); most > 0 && l > most*(1+slack) {
+			return false
+		}
+	}
+	return true
+}

@@ -1,0 +1,242 @@
+package sizing
+
+import (
+	"errors"
+	"fmt"
+	"math"
+	"math/rand/v2"
+	"testing"
+	"time"
+
+	"gloamwright/internal/catalogue"
+	"gloamwright/internal/quantity"
+)
+
+// metricOptions are standard metric sizes at 70 °C without derating.
+func metricOptions(areas ...float64) []Option {
+	var out []Option
+	for _, c := range catalogue.Conductors(catalogue.Metric) {
+		for _, a := range areas {
+			if float64(c.Size.Area) == a {
+				iz, _, err := Ampacity(AmpacityInput{Table: catalogue.AmpacityB2, Size: c.Size, Ambient: 30})
+				if err != nil {
+					panic(err)
+				}
+				out = append(out, Option{Size: c.Size, PerMetre: PerMetre(c, 70), Ampacity: iz})
+			}
+		}
+	}
+	return out
+}
+
+// randomTree makes a small tree with feeders, circuits, branches, pins and all kinds
+// of load, tight enough that sizes differ.
+func randomTree(r *rand.Rand, legs int) *Tree {
+	t := &Tree{Volts: 21, Ahead: 0.02, Options: metricOptions(1, 1.5, 2.5, 4, 6), Taper: r.IntN(2) == 0}
+	circuits := 0
+	for i := range legs {
+		l := Leg{Name: fmt.Sprint("leg ", i), Parent: -1, Length: quantity.Metre(2 + 30*r.Float64()), Extra: quantity.Ohm(0.02 * r.Float64())}
+		if i > 0 {
+			l.Parent = r.IntN(i+1) - 1
+		}
+		up := ""
+		if l.Parent >= 0 {
+			up = t.Legs[l.Parent].Circuit
+		}
+		switch {
+		case up != "":
+			l.Circuit = up
+		case r.IntN(3) > 0:
+			circuits++
+			l.Circuit = fmt.Sprint("circuit ", circuits)
+		}
+		if l.Circuit != "" || r.IntN(3) == 0 {
+			l.MinVolt = quantity.Volt(19.2 + 1.2*r.Float64())
+			switch r.IntN(4) {
+			case 0:
+				l.Load.Current = quantity.Ampere(1.2 * r.Float64())
+			case 1:
+				l.Load.Ohm = quantity.Ohm(15 + 60*r.Float64())
+			case 2: // a string: V_F 15 V behind a resistor
+				l.Load.Ohm = quantity.Ohm(4 + 20*r.Float64())
+				l.Load.Current = quantity.Ampere(-15 / float64(l.Load.Ohm))
+			default:
+				l.Load.Power = quantity.Watt(25 * r.Float64())
+			}
+		}
+		if r.IntN(3) == 0 {
+			l.Loop = quantity.Ohm(0.4 + 1.5*r.Float64())
+		}
+		if r.IntN(4) == 0 {
+			l.Carry = quantity.Ampere(5 + 25*r.Float64())
+		}
+		if r.IntN(7) == 0 {
+			l.Pinned = &t.Options[r.IntN(len(t.Options))]
+		}
+		t.Legs = append(t.Legs, l)
+	}
+	return t
+}
+
+// exhaustive tries every set of sizes, by an implementation of its own of the rules.
+func exhaustive(t *Tree) (best float64, found bool) {
+	best = math.Inf(1)
+	sizes := make([]*Option, len(t.Legs))
+	var try func(i int)
+	try = func(i int) {
+		if i == len(t.Legs) {
+			if _, _, ok := t.meets(sizes); ok {
+				if c := t.Copper(sizes); c < best {
+					best, found = c, true
+				}
+			}
+			return
+		}
+		l := &t.Legs[i]
+		if l.Pinned != nil {
+			sizes[i] = l.Pinned
+			try(i + 1)
+			return
+		}
+		for k := range t.Options {
+			o := &t.Options[k]
+			if o.Ampacity < l.Carry || o.Size.Area < l.Least || !agrees(t, sizes, i, o) {
+				continue
+			}
+			sizes[i] = o
+			try(i + 1)
+		}
+	}
+	try(0)
+	return best, found
+}
+
+// agrees applies the rule of one size a circuit, or of thinning down the run, to the
+// legs already given a size.
+func agrees(t *Tree, sizes []*Option, i int, o *Option) bool {
+	l := &t.Legs[i]
+	if l.Circuit == "" {
+		return true
+	}
+	if t.Taper {
+		p := l.Parent
+		return p < 0 || t.Legs[p].Circuit != l.Circuit || t.Legs[p].Pinned != nil || o.Size.Area <= sizes[p].Size.Area
+	}
+	for j := range i {
+		if t.Legs[j].Circuit == l.Circuit && t.Legs[j].Pinned == nil && sizes[j] != o {
+			return false
+		}
+	}
+	return true
+}
+
+// TestChooseEqualsExhaustive holds the search against trying everything.
+func TestChooseEqualsExhaustive(t *testing.T) {
+	r := rand.New(rand.NewPCG(7, 11))
+	fits, blocked := 0, 0
+	for n := range 600 {
+		tree := randomTree(r, 2+r.IntN(5))
+		want, found := exhaustive(tree)
+		got, err := tree.Choose()
+		var be *BlockedError
+		switch {
+		case errors.As(err, &be):
+			blocked++
+			if found {
+				t.Fatalf("tree %d: blocked by %v, but a choice of %.3f cm³ exists", n, be, want)
+			}
+			if be.Frees == "" {
+				t.Errorf("tree %d: %v names no remedy", n, be)
+			}
+		case err != nil:
+			t.Fatalf("tree %d: %v", n, err)
+		case !found:
+			t.Fatalf("tree %d: chose %.3f cm³ where nothing fits", n, got.Cost)
+		default:
+			fits++
+			if math.Abs(got.Cost-want) > 1e-6*want {
+				t.Errorf("tree %d (taper %v): %.4f cm³, least is %.4f", n, tree.Taper, got.Cost, want)
+			}
+			if !got.Proven || got.Bound > want*(1+1e-9) {
+				t.Errorf("tree %d: bound %.4f proven %v for least %.4f", n, got.Bound, got.Proven, want)
+			}
+			if _, _, ok := tree.meets(got.Sizes); !ok {
+				t.Errorf("tree %d: the choice breaks a limit", n)
+			}
+		}
+	}
+	if fits < 100 || blocked < 50 {
+		t.Errorf("the trees are too easy or too hard: %d fit, %d blocked", fits, blocked)
+	}
+	t.Logf("%d fit, %d blocked", fits, blocked)
+}
+
+// siteTree is a generated site: boards in a chain of two levels, circuits of ten lamps.
+func siteTree(lamps int, taper bool) *Tree {
+	t := &Tree{Volts: 21.6, Ahead: 0.02, Taper: taper, Options: metricOptions(1, 1.5, 2.5, 4, 6, 10, 16, 25, 35, 50, 70, 95, 120)}
+	for i := range t.Options {
+		t.Options[i].Ampacity *= 40 // a site as large as this has several feeders in truth
+	}
+	t.Legs = append(t.Legs, Leg{Name: "battery cable", Parent: -1, Length: 2, Extra: 0.0005, MinVolt: 20})
+	const perCircuit, perBoard = 10, 10
+	board := 0
+	for c := 0; c*perCircuit < lamps; c++ {
+		if c > 0 && c%perBoard == 0 {
+			t.Legs = append(t.Legs, Leg{Name: fmt.Sprint("feeder ", c), Parent: 0, Length: quantity.Metre(10 + c%23), Extra: 0.001})
+			board = len(t.Legs) - 1
+		}
+		at := board
+		for k := range perCircuit {
+			l := Leg{
+				Name: fmt.Sprintf("lamp %d.%d", c, k), Parent: at, Circuit: fmt.Sprint("circuit ", c),
+				Length: quantity.Metre(3 + (c*7+k*5)%9), MinVolt: 20.52, Carry: 5, Loop: 1.5,
+				Load: Load{Power: quantity.Watt(0.5 + float64((c+k)%4)/3)},
+			}
+			if k == 0 {
+				l.Extra = 0.02
+			}
+			t.Legs = append(t.Legs, l)
+			at = len(t.Legs) - 1
+		}
+	}
+	return t
+}
+
+// TestChooseLarge holds the gap to the bound under two per cent and the time close to
+// linear.
+func TestChooseLarge(t *testing.T) {
+	for _, taper := range []bool{false, true} {
+		var per []float64
+		for _, n := range []int{100, 1000, 4000} {
+			tree := siteTree(n, taper)
+			start := time.Now()
+			r, err := tree.Choose()
+			took := time.Since(start)
+			if err != nil {
+				t.Fatalf("%d lamps: %v", n, err)
+			}
+			gap := r.Cost/r.Bound - 1
+			t.Logf("taper %v, %d lamps: %.0f cm³, gap %.3f %%, proven %v, %v", taper, n, r.Cost, 100*gap, r.Proven, took)
+			if gap > 0.02 {
+				t.Errorf("taper %v, %d lamps: %.2f %% above the bound", taper, n, 100*gap)
+			}
+			per = append(per, took.Seconds()/float64(n))
+		}
+		if per[2] > 6*per[1] {
+			t.Errorf("taper %v: time a lamp grows from %.3g s to %.3g s between 1000 and 4000", taper, per[1], per[2])
+		}
+	}
+}
+
+func BenchmarkChoose(b *testing.B) {
+	for _, n := range []int{10, 100, 1000} {
+		b.Run(fmt.Sprint(n), func(b *testing.B) {
+			tree := siteTree(n, false)
+			for b.Loop() {
+				if _, err := tree.Choose(); err != nil {
+					b.Fatal(err)
+				}
+			}
+		})
+	}
+}
