@@ -10,11 +10,18 @@ const (
 	ratioLeast = 1.05
 	driveFirst = 0.1
 	driveLeast = 1e-4
+
+	timeStart = 1.0   // S, capacitance over time step
+	timeEnd   = 1e-13 // below this the step is without end
+	timeMost  = 1e9   // a step this short that fails is given up
+	timeSteps = 20    // Newton steps in one time step
+	timeTurns = 2000  // time steps in all
 )
 
 // converge finds the operating point for fixed positions, from x when warm. Plain
 // Newton comes first, then Newton with bounded steps, then a conductance to net 0
-// that is taken away step by step, then all sources brought up from zero.
+// that is taken away step by step, then all sources brought up from zero, and last
+// the way the circuit itself would take with a capacitor at every net.
 func (r *run) converge(warm bool) error {
 	if warm {
 		keep := append([]float64(nil), r.x...)
@@ -31,7 +38,7 @@ func (r *run) converge(warm bool) error {
 	if r.newton(dampedSteps, true) {
 		return nil
 	}
-	if r.byConductance(false) || r.byConductance(true) || r.bySources(false) || r.bySources(true) {
+	if r.byConductance(false) || r.byConductance(true) || r.bySources(false) || r.bySources(true) || r.byTime() {
 		return nil
 	}
 	r.shunt, r.drive = 0, 1
@@ -99,11 +106,44 @@ func (r *run) bySources(damped bool) bool {
 	}
 }
 
+// byTime follows the circuit from rest with a capacitor at every net, by implicit
+// steps of time that grow as long as they succeed (C. T. Kelley, D. E. Keyes,
+// "Convergence analysis of pseudo-transient continuation", SIAM J. Numer. Anal. 35,
+// 1998).
+func (r *run) byTime() bool {
+	defer func() { r.shunt, r.anchor = 0, nil }()
+	clear(r.x)
+	r.anchor = make([]float64, len(r.n.self))
+	good := append([]float64(nil), r.x...)
+	g := timeStart
+	for range timeTurns {
+		r.shunt = g
+		if g < timeEnd {
+			r.shunt = 0
+		}
+		if r.newton(timeSteps, false) {
+			if r.shunt == 0 {
+				return true
+			}
+			copy(good, r.x)
+			copy(r.anchor, r.x)
+			g /= 2
+			continue
+		}
+		copy(r.x, good)
+		g *= 8
+		if g > timeMost {
+			return false
+		}
+	}
+	return false
+}
+
 // notConverged names the worst net and the element on it with the largest current.
 func (r *run) notConverged() error {
 	e := &ConvergenceError{
 		Condition: r.at.Name,
-		Tried:     "plain and damped Newton steps, conductance continuation, source continuation",
+		Tried:     "plain and damped Newton steps, conductance, source and time continuation",
 	}
 	nets := len(r.n.self)
 	worst := 0

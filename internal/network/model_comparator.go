@@ -10,6 +10,10 @@ const (
 	comparatorBias
 )
 
+// inputHeadroom is the voltage below V+ within which an input's bias current fades
+// out (assumed, after the input stage of two junctions).
+const inputHeadroom = 1.5
+
 // comparatorModel is a comparator with an open-collector output. Its hysteresis is
 // that of the network around it: the output stays until its inputs, as they are with
 // the output where it is, call for the other position.
@@ -25,7 +29,7 @@ var comparatorModel = &Model{
 		param("bias_ampere", "A", 25e-9, "current out of each input"),
 	},
 	Law: "output conducting when v(+) − v(−) < vos: i(OUT→V−) = max((v(OUT) − v(V−) − sat_volt)/sat_ohm, 0); else (v(OUT) − v(V−))/leak_ohm; " +
-		"own_ampere from V+ to V− and bias_ampere from V+ out of each input, fading out below 3 V of supply",
+		"own_ampere from V+ to V−, fading out below 3 V of supply; bias_ampere from V+ out of each input, fading out within 1.5 V of V+",
 	Source: "dual comparator of the open-collector kind, datasheet values from memory: 0.25 V at 4 mA, 25 nA bias, 0.8 mA supply",
 	Memory: "conducting/blocking",
 	joined: [][2]int{{2, 4}, {3, 4}, {3, 0}, {3, 1}},
@@ -39,14 +43,8 @@ var comparatorModel = &Model{
 			c.flow(out, vm, i, s/c.p[comparatorOhm])
 		}
 		drain(c, vp, vm, c.p[comparatorOwn], ownVolt)
-		s, ds := fade(c.across(vp, vm), ownVolt)
-		for _, in := range [2]int{plus, minus} {
-			b := c.p[comparatorBias]
-			c.f[vp] += b * s
-			c.f[in] -= b * s
-			c.flowBy(vp, in, vp, b*ds)
-			c.flowBy(vp, in, vm, -b*ds)
-		}
+		drain(c, vp, plus, c.p[comparatorBias], inputHeadroom)
+		drain(c, vp, minus, c.p[comparatorBias], inputHeadroom)
 	},
 	next: func(c *cell) bool { return c.across(0, 1) < c.p[comparatorVos] },
 }

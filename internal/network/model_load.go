@@ -33,7 +33,7 @@ const (
 const (
 	cutFraction = 0.8  // of low_volt: where it stops
 	stopSpan    = 0.05 // of high_volt: over which it stops
-	kneeSpan    = 0.01 // of low_volt: rounding of the corners
+	kneeSpan    = 0.01 // of low_volt: half of the rounding of a corner
 	driverLeak  = 1e6  // input resistance while stopped, Ω
 )
 
@@ -51,10 +51,10 @@ func powerCurrent(p []float64, watt, v float64) curve {
 		return curve{}
 	case v < cut+k:
 		return joint(v, cut-k, cut+k, curve{}, ramp(cut+k))
-	case v <= low-k:
+	case v <= low-2*k:
 		return ramp(v)
-	case v < low+k:
-		return joint(v, low-k, low+k, ramp(low-k), hyper(low+k))
+	case v < low:
+		return joint(v, low-2*k, low, ramp(low-2*k), hyper(low))
 	case v <= high:
 		return hyper(v)
 	case v < stop:
@@ -74,7 +74,7 @@ var powerModel = &Model{
 		limits(param("leak_ohm", "Ω", driverLeak, "input resistance beside the driver"), 1, maxOhm),
 	},
 	Law: "low_volt ≤ v ≤ high_volt: i = watt/v; below, i falls in a straight line to zero at cut_fraction·low_volt; above, it falls to zero " +
-		"within 5 % of high_volt; corners rounded over ±1 % of low_volt; beside it v/leak_ohm",
+		"within 5 % of high_volt; corners rounded over 2 % of low_volt, outside the range; beside it v/leak_ohm",
 	Source: "constant power: definition; what it does outside its range is assumed",
 	joined: [][2]int{{0, 1}},
 	works:  func(p []float64) float64 { return p[powerLow] },

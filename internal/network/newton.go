@@ -1,6 +1,9 @@
 package network
 
-import "math"
+import (
+	"math"
+	"slices"
+)
 
 // Limits of Newton's method.
 const (
@@ -10,12 +13,17 @@ const (
 
 	goodResidual = 1e-11 // polishing stops here
 	goodStep     = 1e-9  // last step of an unknown, relative to 1 V or 1 A or itself
-	plainSteps   = 60
-	dampedSteps  = 200
-	polishSteps  = 4
-	dampVolt     = 4.0  // first largest step of a damped run
-	dampEvery    = 15   // steps after which it is halved
-	dampLeast    = 0.02 // its least value
+	// A part of the circuit that only insulation ties to net 0 has its voltage
+	// against it to rounding over insulation: steps up to idleStep volts there are
+	// accepted when idleTurns steps in a row have left all laws fulfilled.
+	idleStep    = 1e-2
+	idleTurns   = 4
+	plainSteps  = 60
+	dampedSteps = 200
+	polishSteps = 4
+	dampVolt    = 4.0  // first largest step of a damped run
+	dampEvery   = 15   // steps after which it is halved
+	dampLeast   = 0.02 // its least value
 )
 
 // run is one condition being solved.
@@ -24,6 +32,7 @@ type run struct {
 	at     *Environment
 	p      [][]float64
 	tol    [][]float64
+	given  [][]bool
 	faults []*Override // open or short
 	stuck  []*bool     // by memory
 	on     []bool      // by memory
@@ -31,7 +40,8 @@ type run struct {
 	f      []float64   // what Kirchhoff's laws and the elements' own leave over
 	old    []float64   // pin voltages at which the last tangents were taken
 	known  bool        // old is filled
-	shunt  float64     // continuation: extra conductance of every net to net 0
+	shunt  float64     // continuation: extra conductance of every net to net 0, or to its anchor
+	anchor []float64   // continuation: voltages of the nets a moment before; nil: zero
 	drive  float64     // continuation: factor of all sources
 	steps  int
 	cell   cell
@@ -39,18 +49,21 @@ type run struct {
 
 // start makes a run for a condition from a state.
 func (n *Network) start(at *Environment, from State) (*run, error) {
+	// The elimination order serves every condition; the pivots are chosen anew in
+	// each, so that a result never depends on what was solved before it.
+	n.lu.ready = false
 	r := &run{
-		n: n, at: at, p: make([][]float64, len(n.devices)), tol: make([][]float64, len(n.devices)),
+		n: n, at: at, p: make([][]float64, len(n.devices)), tol: make([][]float64, len(n.devices)), given: make([][]bool, len(n.devices)),
 		faults: make([]*Override, len(n.devices)), stuck: make([]*bool, len(n.memory)), on: make([]bool, len(n.memory)),
 		x: make([]float64, n.size), f: make([]float64, n.size), drive: 1,
 	}
 	pins := 0
 	for i, d := range n.devices {
-		r.p[i], r.tol[i] = d.p, d.tol
+		r.p[i], r.tol[i], r.given[i] = d.p, d.tol, d.given
 		pins += len(d.m.Pins)
 	}
 	r.old = make([]float64, pins)
-	given := map[int][]bool{}
+	own := make([]bool, len(n.devices)) // parameters copied
 	for k := range at.Overrides {
 		o := &at.Overrides[k]
 		i, ok := n.byID[o.Element]
@@ -59,15 +72,14 @@ func (n *Network) start(at *Environment, from State) (*run, error) {
 		}
 		d := n.devices[i]
 		if len(o.Params) > 0 {
-			if given[i] == nil {
-				r.p[i] = append([]float64(nil), d.p...)
-				r.tol[i] = append([]float64(nil), d.tol...)
-				given[i] = append([]bool(nil), d.given...)
+			if !own[i] {
+				own[i] = true
+				r.p[i], r.tol[i], r.given[i] = slices.Clone(d.p), slices.Clone(d.tol), slices.Clone(d.given)
 			}
-			if err := setParams(d.el, d.m, o.Params, r.p[i], given[i], r.tol[i]); err != nil {
+			if err := setParams(d.el, d.m, o.Params, r.p[i], r.given[i], r.tol[i]); err != nil {
 				return nil, err
 			}
-			if err := finishParams(d.el, d.m, r.p[i], given[i]); err != nil {
+			if err := finishParams(d.el, d.m, r.p[i], r.given[i]); err != nil {
 				return nil, err
 			}
 		}
@@ -95,6 +107,14 @@ func (n *Network) start(at *Environment, from State) (*run, error) {
 		}
 	}
 	return r, nil
+}
+
+// hold keeps every element with memory where it is.
+func (r *run) hold() {
+	for k := range r.stuck {
+		on := r.on[k]
+		r.stuck[k] = &on
+	}
 }
 
 // position is the position that concerns d.
@@ -130,6 +150,9 @@ func (r *run) assemble() (limited bool) {
 	for i, p := range n.self {
 		val[p] += g
 		r.f[i] += g * r.x[i]
+		if r.anchor != nil {
+			r.f[i] -= r.shunt * r.anchor[i]
+		}
 	}
 	for i, d := range n.devices {
 		k := len(d.at)
@@ -195,6 +218,7 @@ func (r *run) worst() (float64, int) {
 // newton iterates from x. damped limits the step of voltages.
 func (r *run) newton(steps int, damped bool) bool {
 	r.known = false
+	idle := 0
 	for s := range steps {
 		limited := r.assemble()
 		r.steps++
@@ -221,7 +245,12 @@ func (r *run) newton(steps int, damped bool) bool {
 		for i, dx := range r.f {
 			r.x[i] -= scale * dx
 		}
-		if !limited && settled && scale == 1 {
+		if limited || scale < 1 || w > goodResidual || biggest > idleStep {
+			idle = 0
+		} else {
+			idle++
+		}
+		if !limited && settled && scale == 1 || idle == idleTurns {
 			return r.polish()
 		}
 	}
@@ -255,5 +284,5 @@ func (r *run) polish() bool {
 	copy(r.x, best)
 	r.known = false
 	r.assemble()
-	return least <= MaxResidual/10
+	return least <= MaxResidual
 }

@@ -36,7 +36,7 @@ func (r *run) finish() (*Solution, error) {
 			}
 		}
 		if d.m.works != nil && r.faults[i] == nil {
-			if v := r.cell.across(0, 1); v > liveVolt && v < d.m.works(r.p[i])*(1-kneeSpan) {
+			if v := r.cell.across(0, 1); v > liveVolt && v < d.m.works(r.p[i]) {
 				s.Starved = append(s.Starved, d.el.ID)
 			}
 		}
