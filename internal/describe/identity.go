@@ -27,12 +27,8 @@ func (c *Circuit) NamedLegs() []NamedLeg {
 	var run func(legs []*Leg, before string)
 	run = func(legs []*Leg, before string) {
 		for i, leg := range legs {
-			n := NamedLeg{Leg: leg, Path: before + strconv.Itoa(i+1)}
-			n.Name = n.Path
-			if p := leg.Place.Val; p != "" && !used[p] && !likePath.MatchString(p) {
-				n.Name = p
-				used[p] = true
-			}
+			path := before + strconv.Itoa(i+1)
+			n := NamedLeg{Leg: leg, Path: path, Name: LegName(used, path, leg.Place.Val)}
 			out = append(out, n)
 			for j, b := range leg.Branches {
 				run(b, n.Path+branchLetters(j))
@@ -41,6 +37,16 @@ func (c *Circuit) NamedLegs() []NamedLeg {
 	}
 	run(c.Points, "")
 	return out
+}
+
+// LegName returns the identity of a leg within its circuit. used holds the places of
+// the legs before it and takes up this one's.
+func LegName(used map[string]bool, path, place string) string {
+	if place == "" || used[place] || likePath.MatchString(place) {
+		return path
+	}
+	used[place] = true
+	return place
 }
 
 // branchLetters counts a … z, aa, ab …

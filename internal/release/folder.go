@@ -27,7 +27,7 @@ func WriteFolder(dir string, files []File) (changed bool, err error) {
 	if same(dir, files) {
 		return false, nil
 	}
-	s, err := stage(dir, files)
+	s, err := prepare(dir, files)
 	if err != nil {
 		return false, err
 	}
@@ -47,7 +47,7 @@ func NewFolder(dir string, files []File) error {
 	if _, err := os.Lstat(dir); err == nil {
 		return fmt.Errorf("%s: %w", dir, fs.ErrExist)
 	}
-	s, err := stage(dir, files)
+	s, err := prepare(dir, files)
 	if err != nil {
 		return err
 	}
@@ -90,7 +90,7 @@ type staged struct {
 
 const stagedMark = ".new-"
 
-func stage(dir string, files []File) (*staged, error) {
+func prepare(dir string, files []File) (*staged, error) {
 	parent := filepath.Dir(dir)
 	if err := os.MkdirAll(parent, 0o777); err != nil {
 		return nil, fmt.Errorf("cannot make the folder %s: %w", parent, err)
