@@ -92,9 +92,12 @@ func (d *dimension) step(magnitude int, shifts ...int) *unit {
 	return best
 }
 
+// shortDuration is how many characters an exact number of hours or minutes may have.
+const shortDuration = 6
+
 // formatDuration prints hours from one hour up, minutes from two minutes up, else
 // seconds or milliseconds. With digits 0 it falls back to seconds where the larger
-// unit would not read back exactly.
+// unit would not read back exactly, or only with a long number.
 func formatDuration(x float64, digits int) string {
 	type choice struct {
 		from   float64
@@ -107,7 +110,7 @@ func formatDuration(x float64, digits int) string {
 		}
 		dec := decimalOf(x/c.per, digits)
 		text := dec.shifted(0)
-		if back, err := strconv.ParseFloat(text, 64); digits == 0 && (err != nil || back*c.per != x) {
+		if back, err := strconv.ParseFloat(text, 64); digits == 0 && (err != nil || back*c.per != x || len(text) > shortDuration) {
 			continue
 		}
 		return text + " " + c.symbol

@@ -160,8 +160,11 @@ func withoutComma(whole, comma, rest string) string {
 		tail = " " + sp.unit.symbol
 	}
 	fraction := comma[1:]
-	if strings.ContainsAny(fraction, ",.") {
-		return `"` + whole + strings.ReplaceAll(strings.ReplaceAll(comma, ",", ""), ".", "") + tail + `"`
+	switch {
+	case strings.ContainsAny(fraction, ",."): // 1,500.5 or 1,500,000
+		return `"` + whole + strings.ReplaceAll(comma, ",", "") + tail + `"`
+	case strings.Contains(whole, "."): // 1.500,5
+		return `"` + strings.ReplaceAll(whole, ".", "") + "." + fraction + tail + `"`
 	}
 	point := `"` + whole + "." + fraction + tail + `"`
 	if len(fraction) == 3 {

@@ -222,6 +222,9 @@ func wordEnds(u, rest string) bool {
 	if rest == "" || strings.ContainsAny(u[len(u)-1:], "'\"%") || u == "′" || u == "″" {
 		return true
 	}
+	if r < utf8.RuneSelf && isDigit(byte(r)) { // 1h30min
+		return true
+	}
 	return !unicode.IsLetter(r) && !unicode.IsNumber(r) && !strings.ContainsRune("/^°·Ω", r)
 }
 
