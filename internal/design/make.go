@@ -34,6 +34,13 @@ func Make(site *describe.Site, kept circuit.Labels) (*Design, error) {
 		return nil, err
 	}
 	m.relay()
+	m.standing()
+	if err := m.thresholds(); err != nil {
+		return nil, err
+	}
+	if err := m.faults(); err != nil {
+		return nil, err
+	}
 
 	return &Design{Facts: f, Findings: finding.Judge(f), Labels: labels}, nil
 }

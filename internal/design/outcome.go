@@ -199,6 +199,17 @@ func (m *maker) relay() {
 		if !sol.State[coil] || c.Battery == cutOff {
 			continue
 		}
-		r.LowestFeed = min(r.LowestFeed, quantity.Volt(sol.Across(r.Part.Pin("A1").Net, r.Part.Pin("A2").Net)))
+		v := quantity.Volt(sol.Across(r.Part.Pin("A1").Net, r.Part.Pin("A2").Net))
+		if c.MainsV > 0 {
+			r.LowestFeed = min(r.LowestFeed, v)
+		} else if r.LowestCold == 0 || v < r.LowestCold {
+			r.LowestCold = v
+		}
+	}
+	if r.LowestCold == 0 { // no battery holds it: nothing to compare
+		r.PickUpCold = 0
+	}
+	if math.IsInf(float64(r.LowestFeed), 1) {
+		r.LowestFeed = r.PickUp
 	}
 }

@@ -172,21 +172,30 @@ type Charger struct {
 
 // Relay is the outcome at the changeover relay.
 type Relay struct {
-	Part       *circuit.Part
-	Coil       quantity.Ohm
-	CoilA      quantity.Ampere
-	PickUp     quantity.Volt // with a hot coil
-	DropOut    quantity.Volt
-	LowestFeed quantity.Volt // lowest coil voltage when it must hold
-	Contact    quantity.Ampere
-	Rated      quantity.Ampere
+	Part    *circuit.Part
+	Coil    quantity.Ohm // at 20 °C
+	CoilA   quantity.Ampere
+	PickUp  quantity.Volt // with a hot coil
+	DropOut quantity.Volt
+	// LowestFeed is the lowest coil voltage with mains on, at low mains: the coil may
+	// be hot when it has to pick up.
+	LowestFeed quantity.Volt
+	// PickUpCold is the pick-up with the coil at ambient temperature, LowestCold the
+	// lowest coil voltage from the battery, by daylight at the end of discharge: the
+	// coil has been dead all night when it has to pick up.
+	PickUpCold, LowestCold quantity.Volt
+	Contact                quantity.Ampere
+	Rated                  quantity.Ampere
 }
 
 // CutOff is the outcome at the low-voltage cut-off.
 type CutOff struct {
 	Part            *circuit.Part
 	Opens, Recloses quantity.Volt
-	Current, Rated  quantity.Ampere
+	// AtBattery is the battery's voltage when it opens under the load of the lights;
+	// 0: not found.
+	AtBattery      quantity.Volt
+	Current, Rated quantity.Ampere
 }
 
 // Supply is the outcome at the presence supply.
@@ -253,17 +262,22 @@ type Threshold struct {
 
 // Fault is the circuit with one thing wrong.
 type Fault struct {
-	Key      string
-	Part     string // designation
-	What     string // "-F102 open"
-	Sign     string // what a person sees
-	LitDark  []string
-	Opens    string // fuse that opens
-	Within   quantity.Second
-	Moved    []Moved
-	NextBest string // the next reading that tells it from others with the same sign
-	Group    int
+	Key       string
+	Part      string // designation or wire number
+	What      string // "-F102 open"
+	Sign      string // what a person sees
+	Dark, Lit []Seen // circuits that are dark or lit though they should not be
+	Opens     string // fuse that the fault blows, empty for none
+	Within    quantity.Second
+	Moved     []Moved
+	Best      Moved    // the reading that tells it best from others with the same sign
+	NextBest  string   // the same in words; empty if no reading moves
+	Unsettled []string // conditions in which no operating point was found
+	Group     int      // faults with the same sign have the same number
 }
+
+// Seen is a circuit seen dark or lit in a condition.
+type Seen struct{ Circuit, Condition string }
 
 // Moved is a reading that leaves its band.
 type Moved struct {

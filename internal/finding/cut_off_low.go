@@ -18,18 +18,22 @@ var cutOffLow = &Check{
 		if class == nil || c == nil {
 			return
 		}
+		opens := c.Opens
+		if c.AtBattery > 0 {
+			opens = c.AtBattery
+		}
 		limit, severity := whole(f, class.EndVolt), Caution
-		if lowest := whole(f, class.LowestEnd); under(c.Opens, lowest) {
+		if lowest := whole(f, class.LowestEnd); under(opens, lowest) {
 			limit, severity = lowest, Stop
-		} else if !under(c.Opens, limit) {
+		} else if !under(opens, limit) {
 			return
 		}
-		v, bound := pair(c.Opens, limit)
+		v, bound := pair(opens, limit)
 		report(Finding{
 			Severity: severity, Subject: c.Part.Designation, At: c.Part.At,
-			Message: fmt.Sprintf("%s: opens at %s, least %s", title(c.Part.Designation, "cut-off"), v, bound),
+			Message: fmt.Sprintf("%s: opens with the battery at %s, least %s", title(c.Part.Designation, "cut-off"), v, bound),
 			Remedy:  fmt.Sprintf("Set %s.", sayUp(max(whole(f, class.Opens), whole(f, class.EndVolt)))),
-			Value:   float64(c.Opens), Limit: float64(limit), Unit: "V", Over: true,
+			Value:   float64(opens), Limit: float64(limit), Unit: "V", Over: true,
 			Source: class.Evidence.String(),
 		})
 	},

@@ -18,7 +18,7 @@ var fuseDiscrimination = &Check{
 			var worst *facts.Fuse
 			n := 0
 			for _, x := range f.Fuses {
-				if x.Before != up || !under(x.DiscriminatesTo, x.Prospective) {
+				if x.Before != up || spare(x) || !under(x.DiscriminatesTo, x.Prospective) {
 					continue
 				}
 				n++

@@ -9,6 +9,9 @@ import (
 // fuseTitle returns how messages about a fuse begin: "-F103, Boathouse".
 func fuseTitle(x *facts.Fuse) string { return title(x.Part.Designation, x.Feeds) }
 
+// spare reports whether the fuse stands in a way on which nothing hangs.
+func spare(x *facts.Fuse) bool { return x.Way != nil && x.Way.Spare() }
+
 // opensFrom returns the least current at which a fuse of the same class and of that
 // rating surely opens within a time; ok is false where its standard promises none.
 func opensFrom(x *facts.Fuse, rating quantity.Ampere, within quantity.Second) (a quantity.Ampere, ok bool) {

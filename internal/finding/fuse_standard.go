@@ -22,6 +22,9 @@ var fuseStandard = &Check{
 		}
 		slices.Sort(all)
 		for _, x := range f.Fuses {
+			if spare(x) {
+				continue
+			}
 			below, above := quantity.Ampere(0), quantity.Ampere(0)
 			made := false
 			for _, r := range all {

@@ -7,18 +7,28 @@ import (
 	"gloamwright/internal/quantity"
 )
 
+// litWithMains reports whether a circuit can be lit while mains is on.
+func litWithMains(f *facts.Facts, circuit string) bool {
+	for _, r := range f.Function {
+		if r.Circuit == circuit {
+			return r.Asked == "night" || r.Asked == "always"
+		}
+	}
+	return false
+}
+
 // lampBoost compares the lamps' range with the highest charging voltage.
 var lampBoost = &Check{
 	Name:  "lamp-boost",
 	Title: "boost voltage above a lamp's working range",
-	Doc: "A lamp that can be fed while the charger boosts, after the mains has just come back or in a test, gets the boost voltage " +
+	Doc: "A lamp that is lit while mains is on gets the boost voltage " +
 		"at the coldest battery room. Where its range ends below that, keep lamps off while boosting, or take other lamps.",
 	Source: "common practice, no source",
 	Run: func(f *facts.Facts, report func(Finding)) {
 		boost := boostAtColdest(f)
 		seen := map[string]bool{}
 		for _, l := range f.Luminaires {
-			if l.Works.High <= 0 || seen[l.Type] || !over(boost, l.Works.High) {
+			if !litWithMains(f, l.Circuit) || l.Works.High <= 0 || seen[l.Type] || !over(boost, l.Works.High) {
 				continue
 			}
 			seen[l.Type] = true

@@ -13,7 +13,15 @@ func TestLampBoost(t *testing.T) {
 				l.Works.High = 29.76
 			}
 		}, nil},
+		{"the range ends just below it, but the lamps are dark while mains is on", func(f *facts.Facts) {
+			for _, l := range f.Luminaires {
+				l.Works.High = 29.7
+			}
+		}, nil},
 		{"the range ends just below it: once for each type", func(f *facts.Facts) {
+			for _, r := range f.Function {
+				r.Asked = "always"
+			}
 			for _, l := range f.Luminaires {
 				l.Works.High = 29.7
 			}

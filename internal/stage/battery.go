@@ -194,6 +194,7 @@ func sizeMainFuse(p *Plan, s *describe.Stage) {
 	p.TrunkOhm += quantity.Ohm(fuseOhm(rating))
 
 	size, iz := p.leastFor(part.Designation, class, rating, catalogue.LeastFixed, 1)
+	size, iz = p.trunkFor(size, iz, p.cable(s, "cable"), quantity.Ohm(fuseOhm(rating))+isolatorOhm+cutOffOhm)
 	p.TrunkSize = size
 	cable := p.cable(s, "cable")
 	if v, ok := describe.Get[quantity.WireSize](s.Fields, "cable"); ok {
@@ -206,8 +207,35 @@ func sizeMainFuse(p *Plan, s *describe.Stage) {
 		p.isolator(q, p.nextRating(q, "rated current", catalogue.IsolatorCurrents, load), false)
 	}
 	p.TrunkOhm += 2 * quantity.Ohm(cable.Length) * sizing.PerMetre(c, p.running(size))
+	p.CutOffOhm = p.TrunkOhm
 	t, _ := catalogue.ConductorOf(p.TrunkSize)
 	p.TrunkOhm += quantity.Ohm(p.trunkLength()) * sizing.PerMetre(t, p.running(p.TrunkSize))
+}
+
+// trunkShare is the part of the permitted drop that the way from the battery to the
+// boards may take, so that enough is left for feeders and legs (common practice, no
+// source).
+const trunkShare = 0.25
+
+// trunkFor returns the thinnest size from size up with which the way from the
+// battery to the boards keeps within its share of the drop.
+func (p *Plan) trunkFor(size quantity.WireSize, iz quantity.Ampere, cable *circuit.Cable, fixed quantity.Ohm) (quantity.WireSize, quantity.Ampere) {
+	most := float64(p.permittedDrop()) * trunkShare
+	metres := quantity.Ohm(2*cable.Length + p.trunkLength())
+	for _, c := range p.sizes() {
+		if c.Size.Area < size.Area-areaSlack {
+			continue
+		}
+		z := p.ampacity(c.Size, 1)
+		if z == 0 {
+			continue
+		}
+		size, iz = c.Size, z
+		if float64(p.Light)*float64(fixed+metres*sizing.PerMetre(c, p.running(c.Size))) <= most {
+			break
+		}
+	}
+	return size, iz
 }
 
 // largestWay estimates the largest way fuse: that of the circuit or board with the

@@ -138,7 +138,7 @@ func expandChangeover(b *Build, s *describe.Stage) {
 func sizeRelay(p *Plan, s *describe.Stage) {
 	k := p.part(s, "relay")
 	nominal := p.Site.Duty.Nominal.Val
-	class := catalogue.RelayGeneral
+	class := relayClass(nominal)
 	ohm := class.CoilResistance(nominal)
 	given, pinned := describe.Get[quantity.Ohm](s.Fields, "coil_resistance")
 	if pinned {
@@ -146,7 +146,7 @@ func sizeRelay(p *Plan, s *describe.Stage) {
 	}
 	i := quantity.Ampere(float64(nominal) / float64(ohm))
 	hot := p.Site.Duty.CableAmbient.Val + quantity.Celsius(class.CoilRise)
-	pick := quantity.Volt(float64(nominal) * float64(class.PickUp) * (234.5 + float64(hot)) / (234.5 + 20))
+	pick := shimPick(nominal, class, hot)
 	set(k, "coil", nominal.String()+" "+quantity.Format(ohm, 3), float64(ohm), "Ω", true, pinned)
 	params(k, "coil",
 		circuit.Param{Name: "ohm", Value: float64(ohm), Tol: float64(class.CoilTol)},
@@ -168,7 +168,16 @@ func sizeRelay(p *Plan, s *describe.Stage) {
 	if r, ok := describe.Get[describe.Ref](s.Fields, "coil"); ok {
 		p.aux[r.Val.Stage] += i
 	}
-	p.F.Relay = &facts.Relay{Part: k, Coil: ohm, CoilA: i, PickUp: pick, DropOut: quantity.Volt(float64(nominal) * float64(class.DropOut))}
+	p.F.Relay = &facts.Relay{Part: k, Coil: ohm, CoilA: i, PickUp: pick, PickUpCold: shimPick(nominal, class, p.Site.Duty.CableAmbient.Val), DropOut: quantity.Volt(float64(nominal) * float64(class.DropOut))}
+}
+
+// relayClass is the class of relay for a nominal voltage: at 12 V the automotive
+// style, which picks up early; else the general-purpose one.
+func relayClass(nominal quantity.Volt) catalogue.RelayClass {
+	if nominal <= 12 {
+		return catalogue.RelayAutomotive
+	}
+	return catalogue.RelayGeneral
 }
 
 // diode records a small rectifier diode: 1N4004 class, 1 A.
@@ -191,7 +200,7 @@ func sizeContact(p *Plan, s *describe.Stage) {
 	load := p.Light
 	rated, given := describe.Get[quantity.Ampere](s.Fields, "rated")
 	if !given {
-		rated.Val = catalogue.RelayGeneral.ContactRows[0].Current
+		rated.Val = relayClass(p.Site.Duty.Nominal.Val).ContactRows[0].Current
 	}
 	set(k, "contact", rated.Val.String()+" DC", float64(rated.Val), "A", false, given)
 	p.F.Relay.Contact, p.F.Relay.Rated = load, rated.Val

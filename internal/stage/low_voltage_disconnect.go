@@ -62,12 +62,12 @@ func sizeCutOff(p *Plan, s *describe.Stage) {
 	if !givenOpens {
 		// It senses behind the battery's cable and fuse, and must not open before the
 		// battery is at its end, even if its own voltage is a little high.
-		drop := float64(p.Light+p.Standing) * float64(p.TrunkOhm)
+		drop := float64(p.Light+p.Standing) * float64(p.CutOffOhm)
 		v := math.Floor((float64(p.End)-drop)/(1+acc)*voltStep+stepSlack) / voltStep
 		opens.Val = quantity.Volt(v)
 		p.work(q.Designation, "opens", sizing.Working{
 			Formula:     "U_opens ≤ (U_end − I × R) ÷ (1 + accuracy), whole tenths of a volt",
-			Substituted: fmt.Sprintf("(%.3g V − %.4g A × %.4g Ω) ÷ (1 + %.3g) → %.1f V", float64(p.End), float64(p.Light+p.Standing), float64(p.TrunkOhm), acc, v),
+			Substituted: fmt.Sprintf("(%.3g V − %.4g A × %.4g Ω) ÷ (1 + %.3g) → %.1f V", float64(p.End), float64(p.Light+p.Standing), float64(p.CutOffOhm), acc, v),
 			Value:       v, Unit: "V", Source: p.classSource(),
 		})
 	}

@@ -50,7 +50,8 @@ type Plan struct {
 	// flows besides while they are lit, Held what flows while mains is off by day.
 	Light, Standing, Held quantity.Ampere
 	// TrunkOhm is the resistance from the battery's terminals to the boards' bars.
-	TrunkOhm quantity.Ohm
+	// CutOffOhm is the part of it up to the cabinet's terminals.
+	TrunkOhm, CutOffOhm quantity.Ohm
 	// Internal is the battery's resistance when full and new.
 	Internal quantity.Ohm
 
@@ -151,6 +152,13 @@ func (p *Plan) endOfDischarge() {
 		return
 	}
 	p.End = quantity.Volt(p.Cells) * p.Class.EndVolt
+	for _, o := range p.Site.Stages {
+		// A cut-off that is a little low must not open below the class's end, and one
+		// that is a little high not before the outage is over.
+		if acc, ok := describe.Get[quantity.Ratio](o.Fields, "accuracy"); ok && o.Kind.Val == "low-voltage-disconnect" {
+			p.End *= 1 + 2*quantity.Volt(acc.Val)
+		}
+	}
 	for _, t := range p.Site.Luminaires {
 		if p.usedType(t.Name.Val) {
 			p.End = max(p.End, p.loads[t.Name.Val].Works.Low+p.permittedDrop())

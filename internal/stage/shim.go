@@ -24,3 +24,7 @@ func shimBattery(p *Plan, amps quantity.Ampere, hours float64) (quantity.AmpereH
 	}
 	return quantity.AmpereHour(need), quantity.AmpereHour(c)
 }
+
+func shimPick(v quantity.Volt, c catalogue.RelayClass, t quantity.Celsius) quantity.Volt {
+	return quantity.Volt(float64(v) * float64(c.PickUp) * (234.5 + float64(t)) / (234.5 + 20))
+}

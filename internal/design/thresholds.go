@@ -1,0 +1,171 @@
+package design
+
+import (
+	"fmt"
+
+	"gloamwright/internal/circuit"
+	"gloamwright/internal/facts"
+	"gloamwright/internal/network"
+	"gloamwright/internal/quantity"
+)
+
+// thresholds finds where things change over, by sweeping the solved circuit up and
+// down with its memory.
+func (m *maker) thresholds() error {
+	if err := m.twilight(); err != nil {
+		return err
+	}
+	if err := m.cutOffVolts(); err != nil {
+		return err
+	}
+	return m.lowestMains()
+}
+
+func (m *maker) spec(key string) (operating, bool) {
+	for _, o := range conditionsOfAnyJob {
+		if o.key == key {
+			return o, m.solved[key] != nil
+		}
+	}
+	return operating{}, false
+}
+
+func (m *maker) threshold(key, name, unit string, at float64, text string) {
+	m.f.Thresholds = append(m.f.Thresholds, &facts.Threshold{Key: key, Name: name, Value: at, Unit: unit, Text: text})
+}
+
+// Ends of the sweeps.
+const (
+	sweepMost  = 10000. // lx
+	sweepLeast = 0.01   // lx
+)
+
+// twilight finds the illuminances at which the lights come on and go off in an outage.
+func (m *maker) twilight() error {
+	o, ok := m.spec("outage-day")
+	r := m.f.Relay
+	if !ok || r == nil || !m.hasSensor() {
+		return nil
+	}
+	coil := r.Part.Designation + ".coil"
+	sweep := func(from, to float64, state network.State) (network.Threshold, error) {
+		return m.net.Threshold(network.Sweep{
+			From: from, To: to, Geometric: true, Watch: []string{coil},
+			Set: func(x float64) network.Environment {
+				e := m.environment(o)
+				e.Lux = x
+				return e
+			},
+		}, state)
+	}
+	down, err := sweep(dayLux, sweepLeast, m.solved[o.key].State)
+	if err != nil {
+		return fmt.Errorf("sweep of the illuminance: %w", err)
+	}
+	if !down.Found {
+		m.threshold("dark", "lights come on in an outage", "lx", 0, "they do not come on, however dark it gets")
+		return nil
+	}
+	m.threshold("dark", "lights come on in an outage", "lx", down.At, "")
+	up, err := sweep(down.At, sweepMost, down.After.State)
+	if err != nil {
+		return fmt.Errorf("sweep of the illuminance: %w", err)
+	}
+	if !up.Found {
+		m.threshold("light", "lights go off again", "lx", 0, "they do not go off, however light it gets")
+		return nil
+	}
+	m.threshold("light", "lights go off again", "lx", up.At, "")
+	return nil
+}
+
+func (m *maker) hasSensor() bool {
+	for _, p := range m.f.Circuit.Parts {
+		if p.Kind == circuit.LDR || p.Kind == circuit.PhotoSwitch {
+			return true
+		}
+	}
+	return false
+}
+
+// cutOffVolts finds the battery's voltage at which the cut-off opens and recloses, at
+// the battery and where it senses.
+func (m *maker) cutOffVolts() error {
+	o, ok := m.spec("outage-night")
+	q, b := m.f.CutOff, m.f.Battery.Part
+	if !ok || q == nil || b == nil {
+		return nil
+	}
+	id := q.Part.Designation
+	set := func(x float64) network.Environment { return m.environment(o).Set(b.Designation, "emf", x) }
+	read := func(s *network.Solution) (battery, sense float64) {
+		return s.Across(b.Pin("+").Net, b.Pin("-").Net), s.Across(q.Part.Pin("in").Net, q.Part.Pin("-").Net)
+	}
+	down, err := m.net.Threshold(network.Sweep{From: float64(m.plan.Full), To: float64(q.Opens) * 0.8, Set: set, Watch: []string{id}}, m.solved[o.key].State)
+	if err != nil {
+		return fmt.Errorf("sweep of the battery: %w", err)
+	}
+	if !down.Found {
+		m.threshold("opens", "cut-off opens", "V", 0, "it does not open")
+		return nil
+	}
+	at, sense := read(down.Before)
+	q.AtBattery = quantity.Volt(at)
+	m.threshold("opens-battery", "cut-off opens, read at the battery", "V", at, "")
+	m.threshold("opens-sense", "cut-off opens, read at its input", "V", sense, "")
+	up, err := m.net.Threshold(network.Sweep{From: down.At, To: float64(m.plan.Highest) * 1.1, Set: set, Watch: []string{id}}, down.After.State)
+	if err != nil {
+		return fmt.Errorf("sweep of the battery: %w", err)
+	}
+	if up.Found {
+		at, sense = read(up.Before)
+		m.threshold("recloses-battery", "cut-off recloses, read at the battery", "V", at, "")
+		m.threshold("recloses-sense", "cut-off recloses, read at its input", "V", sense, "")
+	}
+	return nil
+}
+
+// lowestMains finds the mains voltage down to which the relay is held in at night.
+func (m *maker) lowestMains() error {
+	o, ok := m.spec("mains-night")
+	r := m.f.Relay
+	if !ok || r == nil {
+		return nil
+	}
+	coil := r.Part.Designation + ".coil"
+	if !m.solved[o.key].State[coil] {
+		return nil
+	}
+	down, err := m.net.Threshold(network.Sweep{
+		From: 1, To: 0, Watch: []string{coil},
+		Set: func(x float64) network.Environment {
+			e := m.environment(o)
+			e.Mains = x
+			return e
+		},
+	}, m.solved[o.key].State)
+	if err != nil {
+		return fmt.Errorf("sweep of the mains: %w", err)
+	}
+	if down.Found {
+		m.threshold("mains", "relay lets go when the mains falls to", "V", down.At*float64(m.mainsNominal()), "")
+	}
+	m.threshold("pick-up", "coil picks up when hot at", "V", float64(r.PickUp), "")
+	return nil
+}
+
+// standing records the drain by daylight with mains off, and how long a full battery
+// stands it.
+func (m *maker) standing() {
+	sol := m.solved["outage-day"]
+	b := m.f.Battery
+	if sol == nil || b.Part == nil {
+		return
+	}
+	drain := -sol.Current(b.Part.Designation)
+	m.f.Endurance.DrainA = quantity.Ampere(drain)
+	if drain > 0 {
+		aged := float64(b.Capacity) * float64(m.site.Practice.Ageing.Val)
+		m.f.Endurance.Standing = quantity.Hours(aged / drain)
+	}
+}
