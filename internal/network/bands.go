@@ -1,7 +1,6 @@
 package network
 
 import (
-	"cmp"
 	"fmt"
 	"math"
 	"slices"
@@ -29,7 +28,7 @@ type Band struct {
 	// Linear is the half-width of the worst case by sensitivities alone, the sum of
 	// all effects; RSS is their root of the sum of squares.
 	Linear, RSS float64
-	// Effects are the parameters that act on it, the strongest first.
+	// Effects are the parameters that act on it most, the strongest first.
 	Effects []Effect
 	// Corners is set when Low and High come from solutions at the worst corners.
 	Corners bool
@@ -58,6 +57,9 @@ const (
 	// there if they differ.
 	Corners
 )
+
+// effectsKept is the number of effects that a Band lists.
+const effectsKept = 24
 
 // cornerTurns bounds how often the signs are followed to another corner.
 const cornerTurns = 3
@@ -96,22 +98,32 @@ func (s *Solution) Bands(outputs []Output, method Method) ([]Band, error) {
 	for k, o := range outputs {
 		slopes[k] = r.slopes(o, inf)
 		b := Band{Output: o, Typical: r.value(o)}
-		for j, in := range inf {
-			change := math.Abs(slopes[k][j]) * in.half
-			if change == 0 {
+		var most []int // of inf, the strongest first
+		change := func(j int) float64 { return math.Abs(slopes[k][j]) * inf[j].half }
+		for j := range inf {
+			c := change(j)
+			b.Linear += c
+			b.RSS += c * c
+			if c == 0 || len(most) == effectsKept && c <= change(most[effectsKept-1]) {
 				continue
 			}
-			d := r.n.devices[in.device]
-			b.Effects = append(b.Effects, Effect{
-				Element: d.el.ID, Part: d.el.Part, Param: d.m.Params[in.param].Name,
-				Slope: slopes[k][j], Half: in.half, Change: change,
+			at, _ := slices.BinarySearchFunc(most, c, func(m int, c float64) int {
+				if change(m) >= c {
+					return -1
+				}
+				return 1
 			})
-			b.Linear += change
-			b.RSS += change * change
+			most = slices.Insert(most, at, j)[:min(len(most)+1, effectsKept)]
 		}
 		b.RSS = math.Sqrt(b.RSS)
 		b.Low, b.High = b.Typical-b.Linear, b.Typical+b.Linear
-		slices.SortStableFunc(b.Effects, func(a, c Effect) int { return cmp.Compare(c.Change, a.Change) })
+		for _, j := range most {
+			d := r.n.devices[inf[j].device]
+			b.Effects = append(b.Effects, Effect{
+				Element: d.el.ID, Part: d.el.Part, Param: d.m.Params[inf[j].param].Name,
+				Slope: slopes[k][j], Half: inf[j].half, Change: change(j),
+			})
+		}
 		bands[k] = b
 	}
 	if method == Corners {

@@ -51,7 +51,7 @@ type Override struct {
 // ShortOhm is the resistance of a bolted short (assumed: two clamped joints).
 const ShortOhm = 1e-3
 
-// Set returns e with one parameter of one element replaced.
+// Set returns e with one parameter of one element replaced by an exact value.
 func (e Environment) Set(element, param string, value float64) Environment {
 	return e.With(Override{Element: element, Params: []circuit.Param{{Name: param, Value: value}}})
 }

@@ -57,15 +57,6 @@ func Models() []*Model {
 	}
 }
 
-func modelOf(name string) *Model {
-	for _, m := range Models() {
-		if m.Name == name {
-			return m
-		}
-	}
-	return nil
-}
-
 // pins makes required pins.
 func pins(names ...string) []ModelPin {
 	out := make([]ModelPin, len(names))

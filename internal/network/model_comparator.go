@@ -10,6 +10,9 @@ const (
 	comparatorBias
 )
 
+// saturationRound rounds the corner at which the output begins to conduct, in amperes.
+const saturationRound = 1e-4
+
 // inputHeadroom is the voltage below V+ within which an input's bias current fades
 // out (assumed, after the input stage of two junctions).
 const inputHeadroom = 1.5
@@ -28,8 +31,8 @@ var comparatorModel = &Model{
 		param("own_ampere", "A", 0.8e-3, "supply current, from V+ to V−"),
 		param("bias_ampere", "A", 25e-9, "current out of each input"),
 	},
-	Law: "output conducting when v(+) − v(−) < vos: i(OUT→V−) = max((v(OUT) − v(V−) − sat_volt)/sat_ohm, 0); else (v(OUT) − v(V−))/leak_ohm; " +
-		"own_ampere from V+ to V−, fading out below 3 V of supply; bias_ampere from V+ out of each input, fading out within 1.5 V of V+",
+	Law: "output conducting when v(+) − v(−) < vos: i(OUT→V−) = round((v(OUT) − v(V−) − sat_volt)/sat_ohm, 0.1 mA); always (v(OUT) − v(V−))/leak_ohm beside it; " +
+		"i(V+→V−) = own_ampere·fade(v(V+) − v(V−), 3 V); from V+ out of each input bias_ampere·fade(v(V+) − v(input), 1.5 V)",
 	Source: "dual comparator of the open-collector kind, datasheet values from memory: 0.25 V at 4 mA, 25 nA bias, 0.8 mA supply",
 	Memory: "conducting/blocking",
 	joined: [][2]int{{2, 4}, {3, 4}, {3, 0}, {3, 1}},
@@ -39,7 +42,7 @@ var comparatorModel = &Model{
 		c.flow(out, vm, c.across(out, vm)*g, g)
 		if c.on {
 			u := (c.across(out, vm) - c.p[comparatorSat]) / c.p[comparatorOhm]
-			i, s := rounded(u, 1e-4)
+			i, s := rounded(u, saturationRound)
 			c.flow(out, vm, i, s/c.p[comparatorOhm])
 		}
 		drain(c, vp, vm, c.p[comparatorOwn], ownVolt)

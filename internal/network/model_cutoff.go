@@ -21,7 +21,7 @@ var cutOffModel = &Model{
 		param("own_ampere", "A", 0, "current it takes itself, from in to −"),
 		ohms("resistance when closed", contactOhm),
 	},
-	Law: "closed: i(in→out) = (v(in) − v(out))/ohm; open: i = 0; own_ampere from in to −, fading out below 3 V; " +
+	Law: "closed: i(in→out) = (v(in) − v(out))/ohm; open: i = 0; i(in→−) = own_ampere·fade(v(in) − v(−), 3 V); " +
 		"opens at v(in) − v(−) < opens_volt, closes at v(in) − v(−) ≥ recloses_volt",
 	Source: "definition",
 	Memory: "closed/open", rest: true,

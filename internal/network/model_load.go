@@ -73,8 +73,8 @@ var powerModel = &Model{
 		limits(param("cut_fraction", "", cutFraction, "part of low_volt at which the current has fallen to zero"), 0.1, 0.97),
 		limits(param("leak_ohm", "Ω", driverLeak, "input resistance beside the driver"), 1, maxOhm),
 	},
-	Law: "low_volt ≤ v ≤ high_volt: i = watt/v; below, i falls in a straight line to zero at cut_fraction·low_volt; above, it falls to zero " +
-		"within 5 % of high_volt; corners rounded over 2 % of low_volt, outside the range; beside it v/leak_ohm",
+	Law: "low_volt ≤ v ≤ high_volt: i = watt/v; below, i = (watt/low_volt)·(v − cut)/(low_volt − cut), cut = cut_fraction·low_volt, zero below cut; " +
+		"joint between 0.98·low_volt and low_volt, between cut ∓ 0.01·low_volt, and from high_volt down to zero at 1.05·high_volt; beside it v/leak_ohm",
 	Source: "constant power: definition; what it does outside its range is assumed",
 	joined: [][2]int{{0, 1}},
 	works:  func(p []float64) float64 { return p[powerLow] },
@@ -110,7 +110,7 @@ var currentModel = &Model{
 		needed(param("ampere", "A", 0, "current")),
 		positive(param("min_volt", "V", 1, "voltage from which it takes its full current")),
 	},
-	Law:    "v ≥ min_volt: i = ampere; below, i = ampere·(3t² − 2t³), t = v/min_volt; none backwards",
+	Law:    "i = ampere·fade(v, min_volt)",
 	Source: "definition",
 	joined: [][2]int{{0, 1}},
 	eval:   func(c *cell) { drain(c, 0, 1, c.p[0], c.p[1]) },

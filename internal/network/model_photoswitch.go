@@ -22,7 +22,7 @@ var photoswitchModel = &Model{
 		param("min_volt", "V", 0, "supply below which its contact falls open"),
 		{Name: "lux", Unit: "lx", Doc: "illuminance on its eye; below zero that of the condition", Default: -1},
 	},
-	Law: "light: i(13→14) = (v13 − v14)/ohm; dark: i = 0; own_ampere from + to −, fading out below 3 V; " +
+	Law: "light: i(13→14) = (v13 − v14)/ohm; dark: i = 0; i(+→−) = own_ampere·fade(v(+) − v(−), 3 V); " +
 		"light from light_above_lx on, dark below dark_below_lx, and dark without min_volt of supply",
 	Source: "definition",
 	Memory: "light/dark",

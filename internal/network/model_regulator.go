@@ -11,6 +11,14 @@ const (
 	regulatorOhm
 )
 
+// Roundings of the regulator's corners, in amperes, and the input voltage above ADJ
+// from which its adjustment current is there in full (assumed).
+const (
+	minimumRound  = 1e-6 // beside half of min_ampere
+	headroomRound = 1e-3
+	adjustVolt    = 0.5
+)
+
 // regulatorModel is the adjustable three-terminal regulator with a 1.25 V reference.
 var regulatorModel = &Model{
 	Name: "regulator", Doc: "Adjustable three-terminal positive regulator.", Pins: pins("IN", "OUT", "ADJ"),
@@ -23,8 +31,8 @@ var regulatorModel = &Model{
 		param("min_ampere", "A", 3.5e-3, "least current out of OUT while there is headroom"),
 		limits(param("ohm", "Ω", 1e-3, "output resistance of the reference loop"), 1e-5, 1e3),
 	},
-	Law: "i(IN→OUT) = min(clamp((vref − v(OUT) + v(ADJ))/ohm, min_ampere, limit_ampere), max((v(IN) − v(OUT) − dropout)/dropout_ohm, 0)); " +
-		"i(IN→ADJ) = iadj, fading out with the headroom; corners rounded over 1 % of the limit",
+	Law: "i(IN→OUT) = min(a, h, w), a = clamp((vref − v(OUT) + v(ADJ))/ohm, min_ampere, limit_ampere, the smaller of w and min_ampere/2 + 1 µA), " +
+		"h = round((v(IN) − v(OUT) − dropout)/dropout_ohm, the smaller of w and 1 mA), w = limit_ampere/100; i(IN→ADJ) = iadj·fade(v(IN) − v(ADJ), 0.5 V)",
 	Source: "three-terminal regulator datasheet values (seen): vref 1.2 to 1.3 V, iadj 50 µA typical, minimum load 3.5 mA typical, peak 2.2 A; dropout 1.7 V at 0.5 A, 2.0 to 2.3 V at 1.5 A (from memory)",
 	joined: [][2]int{{0, 1}, {0, 2}},
 	check: func(p []float64) string {
@@ -37,8 +45,8 @@ var regulatorModel = &Model{
 		const in, out, adj = 0, 1, 2
 		p := c.p
 		w := cornerPortion * p[regulatorLimit]
-		a, da := clamped((p[regulatorVref]-c.across(out, adj))/p[regulatorOhm], p[regulatorMinimum], p[regulatorLimit], min(w, p[regulatorMinimum]/2+1e-6))
-		h, dh := rounded((c.across(in, out)-p[regulatorDropout])/p[regulatorDropoutOhm], min(w, 1e-3))
+		a, da := clamped((p[regulatorVref]-c.across(out, adj))/p[regulatorOhm], p[regulatorMinimum], p[regulatorLimit], min(w, p[regulatorMinimum]/2+minimumRound))
+		h, dh := rounded((c.across(in, out)-p[regulatorDropout])/p[regulatorDropoutOhm], min(w, headroomRound))
 		i, di, dj := lesser(a, h, w)
 		da *= di / p[regulatorOhm]
 		dh *= dj / p[regulatorDropoutOhm]
@@ -47,12 +55,7 @@ var regulatorModel = &Model{
 		c.flowBy(in, out, out, -da-dh)
 		c.flowBy(in, out, adj, da)
 		c.flowBy(in, out, in, dh)
-		// The adjustment current fades out over the first half volt of input.
-		s, ds := fade(c.across(in, adj), 0.5)
-		c.f[in] += p[regulatorAdj] * s
-		c.f[adj] -= p[regulatorAdj] * s
-		c.flowBy(in, adj, in, p[regulatorAdj]*ds)
-		c.flowBy(in, adj, adj, -p[regulatorAdj]*ds)
+		drain(c, in, adj, p[regulatorAdj], adjustVolt)
 	},
 	limit: func(c *cell, old []float64) bool {
 		const in, out, adj = 0, 1, 2

@@ -76,8 +76,8 @@ var chargerModel = &Model{
 		param("standby_ampere", "A", 0, "current taken from the battery while it is off"),
 		limits(param("mains_holds", "", mainsHolds, "fraction of nominal mains down to which it holds its setting"), 0, 1),
 	},
-	Law: "mains on: i(out of +) = clamp((set − v)/ohm, 0, limit_ampere), corners rounded over 1 % of the limit; " +
-		"mains off: i(into +) = standby_ampere, falling to zero below 1 V; probe pins θ+ and θ− are 1 MΩ from −",
+	Law: "mains on and charging: i(out of +) = clamp((set − v)/ohm, 0, limit_ampere, limit_ampere/100), set = float_volt or boost_volt, " +
+		"times mains/mains_holds when that is below 1; else i(into +) = standby_ampere·fade(v, 1 V); probe pins θ+ and θ− are 1 MΩ from −",
 	Source: "characteristic of a current-limited voltage source (charging characteristic IU, DIN 41773-1)",
 	joined: [][2]int{{0, 1}, {1, 2}, {1, 3}}, drives: []int{chargerFloat, chargerBoost},
 	derive: func(p []float64, given []bool) {
@@ -114,8 +114,8 @@ var supplyModel = &Model{
 		limits(param("leak_ohm", "Ω", bleedOhm, "bleed across the output"), 1, maxOhm),
 		limits(param("mains_holds", "", mainsHolds, "fraction of nominal mains down to which it holds its output"), 0, 1),
 	},
-	Law: "i(out of +) = clamp((volt − v)/ohm, 0, limit_ampere) − v/leak_ohm, corners rounded over 1 % of the limit; " +
-		"mains off: −v/leak_ohm; below mains_holds the output falls with the mains",
+	Law: "mains on: i(out of +) = clamp((set − v)/ohm, 0, limit_ampere, limit_ampere/100) − v/leak_ohm, set = volt, " +
+		"times mains/mains_holds when that is below 1; mains off: −v/leak_ohm",
 	Source: "characteristic of a current-limited voltage source",
 	joined: [][2]int{{0, 1}}, drives: []int{supplyVolt},
 	eval: func(c *cell) {
@@ -152,8 +152,8 @@ var transformerModel = &Model{
 		needed(positive(param("open_volt", "V", 0, "DC voltage without load at nominal mains"))),
 		limits(param("leak_ohm", "Ω", bleedOhm, "bleed across the reservoir"), 1, maxOhm),
 	},
-	Law: "i(out of +) = max((mains·open_volt − v)/R, 0) − v/leak_ohm, R = (open_volt − rated_volt)/rated_ampere; " +
-		"mains as a fraction of nominal; the corner is rounded over 1 % of the rated current",
+	Law: "mains on: i(out of +) = round((mains·open_volt − v)/R, rated_ampere/100) − v/leak_ohm, R = (open_volt − rated_volt)/rated_ampere, " +
+		"mains as a fraction of nominal; mains off: −v/leak_ohm",
 	Source: "Thévenin's theorem on the straight line between the open-circuit and the rated point",
 	joined: [][2]int{{0, 1}}, drives: []int{transformerOpen, transformerRated},
 	check: func(p []float64) string {

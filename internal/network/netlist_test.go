@@ -60,6 +60,15 @@ func read(t testing.TB, text string) *circuit.Netlist {
 	return nl
 }
 
+func modelOf(name string) *Model {
+	for _, m := range Models() {
+		if m.Name == name {
+			return m
+		}
+	}
+	return nil
+}
+
 func number64(t testing.TB, s string) float64 {
 	t.Helper()
 	v, err := strconv.ParseFloat(s, 64)

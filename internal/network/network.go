@@ -241,3 +241,18 @@ func (n *Network) Positions(element string) (on, off string) {
 	}
 	return n.devices[k].m.positions()
 }
+
+// Values returns all parameters of an element as they are used, defaults and derived
+// ones included, or nil if there is no such element.
+func (n *Network) Values(element string) []circuit.Param {
+	i, ok := n.byID[element]
+	if !ok {
+		return nil
+	}
+	d := n.devices[i]
+	out := make([]circuit.Param, len(d.p))
+	for k, s := range d.m.Params {
+		out[k] = circuit.Param{Name: s.Name, Value: d.p[k], Tol: d.tol[k]}
+	}
+	return out
+}

@@ -43,15 +43,24 @@ func (n *Network) Threshold(s Sweep, from State) (Threshold, error) {
 		}
 		return s.From + (s.To-s.From)*t
 	}
-	solve := func(t float64, from State) (*Solution, error) { return n.Solve(s.Set(place(t)), from) }
-	before, err := solve(0, from)
+	// Every solution starts from the voltages of the one before it on the sweep.
+	solve := func(t float64, before *Solution) (*Solution, error) {
+		at := s.Set(place(t))
+		r, err := n.start(&at, before.State)
+		if err != nil {
+			return nil, err
+		}
+		copy(r.x, before.run.x)
+		return r.settle(true)
+	}
+	before, err := n.Solve(s.Set(place(0)), from)
 	if err != nil {
 		return Threshold{}, err
 	}
 	low := 0.0
 	for k := 1; k <= steps; k++ {
 		high := float64(k) / float64(steps)
-		after, err := solve(high, before.State)
+		after, err := solve(high, before)
 		if err != nil {
 			return Threshold{}, err
 		}
@@ -62,7 +71,7 @@ func (n *Network) Threshold(s Sweep, from State) (Threshold, error) {
 		}
 		for high-low > sweepFine {
 			mid := (low + high) / 2
-			at, err := solve(mid, before.State)
+			at, err := solve(mid, before)
 			if err != nil {
 				return Threshold{}, err
 			}
