@@ -33,6 +33,9 @@ func Make(site *describe.Site, kept circuit.Labels) (*Design, error) {
 	if err := m.readings(); err != nil {
 		return nil, err
 	}
+	if err := m.expect(); err != nil {
+		return nil, err
+	}
 	m.relay()
 	m.standing()
 	if err := m.thresholds(); err != nil {

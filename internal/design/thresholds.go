@@ -38,6 +38,7 @@ func (m *maker) threshold(key, name, unit string, at float64, text string) {
 const (
 	sweepMost  = 10000. // lx
 	sweepLeast = 0.01   // lx
+	sweepSteps = 10     // before the place is closed in on
 )
 
 // twilight finds the illuminances at which the lights come on and go off in an outage.
@@ -50,7 +51,7 @@ func (m *maker) twilight() error {
 	coil := r.Part.Designation + ".coil"
 	sweep := func(from, to float64, state network.State) (network.Threshold, error) {
 		return m.net.Threshold(network.Sweep{
-			From: from, To: to, Geometric: true, Watch: []string{coil},
+			From: from, To: to, Geometric: true, Steps: sweepSteps, Watch: []string{coil},
 			Set: func(x float64) network.Environment {
 				e := m.environment(o)
 				e.Lux = x
@@ -101,7 +102,7 @@ func (m *maker) cutOffVolts() error {
 	read := func(s *network.Solution) (battery, sense float64) {
 		return s.Across(b.Pin("+").Net, b.Pin("-").Net), s.Across(q.Part.Pin("in").Net, q.Part.Pin("-").Net)
 	}
-	down, err := m.net.Threshold(network.Sweep{From: float64(m.plan.Full), To: float64(q.Opens) * 0.8, Set: set, Watch: []string{id}}, m.solved[o.key].State)
+	down, err := m.net.Threshold(network.Sweep{From: float64(m.plan.Full), To: float64(q.Opens) * 0.8, Steps: sweepSteps, Set: set, Watch: []string{id}}, m.solved[o.key].State)
 	if err != nil {
 		return fmt.Errorf("sweep of the battery: %w", err)
 	}
@@ -113,7 +114,7 @@ func (m *maker) cutOffVolts() error {
 	q.AtBattery = quantity.Volt(at)
 	m.threshold("opens-battery", "cut-off opens, read at the battery", "V", at, "")
 	m.threshold("opens-sense", "cut-off opens, read at its input", "V", sense, "")
-	up, err := m.net.Threshold(network.Sweep{From: down.At, To: float64(m.plan.Highest) * 1.1, Set: set, Watch: []string{id}}, down.After.State)
+	up, err := m.net.Threshold(network.Sweep{From: down.At, To: float64(m.plan.Highest) * 1.1, Steps: sweepSteps, Set: set, Watch: []string{id}}, down.After.State)
 	if err != nil {
 		return fmt.Errorf("sweep of the battery: %w", err)
 	}
@@ -137,7 +138,7 @@ func (m *maker) lowestMains() error {
 		return nil
 	}
 	down, err := m.net.Threshold(network.Sweep{
-		From: 1, To: 0, Watch: []string{coil},
+		From: 1, To: 0, Steps: sweepSteps, Watch: []string{coil},
 		Set: func(x float64) network.Environment {
 			e := m.environment(o)
 			e.Mains = x

@@ -55,7 +55,7 @@ func init() {
 		regulatedSupply(), transformerSupply(), charger(), linearCharger(), battery(), isolator(), meter(), lowVoltageDisconnect(),
 		shuntRegulator(), testSwitch(), photocell(), changeoverRelay(), indicator(), suppressor(), distributionBoard(),
 	}
-	luminaireTable = []*LuminaireKind{ledDriver(), ledString()}
+	luminaireTable = []*LuminaireKind{ledDriver(), ledString(), filament(), ballast(), resistive()}
 }
 
 // Kinds returns the stage kinds by reference order.
