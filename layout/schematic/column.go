@@ -1,0 +1,333 @@
+package schematic
+
+import (
+	"fmt"
+
+	"gloamwright/internal/circuit"
+)
+
+// The kinds of a board's columns.
+type columnKind uint8
+
+const (
+	lightingColumn columnKind = iota
+	feederColumn
+	spareColumn
+	restColumn // a circuit that goes on from another sheet
+)
+
+// Widths of columns and places in them, from the L+ core, in modules.
+const (
+	laneWidth    = 18
+	foldWidth    = 22 // a further ladder of a folded run
+	feederWidth  = 14
+	spareWidth   = 10
+	minusCore    = 6 // the L− core of a ladder stands right of its L+ core
+	spareMinus   = 3
+	legText      = 7.1 // texts right of a ladder
+	lampText     = 6.7
+	lampRoom     = 9.9
+	branchLength = 12.0 // where the length of a branch's first leg stands
+	branchOval   = 8.5
+)
+
+// Rows of a board sheet.
+const (
+	rowBarPlus   = 11
+	rowBarMinus  = 13
+	rowFuse      = 17
+	rowTerminal  = 22
+	rowCable     = 26
+	rowLamp      = 31
+	rowPitch     = 5
+	rowFoldMinus = 27 // folded cores run level up there
+	rowFoldPlus  = 29
+	rowRest      = 24 // cores that come from another sheet begin here
+	rowsA3       = 12
+	rowsTabloid  = 10
+)
+
+func lampRow(r int) int { return rowLamp + rowPitch*r }
+
+// column is one way of a board, or the rest of one, with everything that hangs on
+// it. Places are relative to its L+ core.
+type column struct {
+	kind   columnKind
+	way    *circuit.Way
+	before *column // for a rest: where it comes from
+	width  int
+	minus  int // place of the L− core
+
+	rungs   []rung
+	cores   []corePiece
+	ovals   []columnOval
+	lengths []columnLength
+	cuts    []cut
+	rests   []rest
+	far     *rung // the luminaire that the far-end test point is at
+}
+
+// rung is a luminaire between its cores.
+type rung struct {
+	point *circuit.Point
+	x, y  int
+	end   bool // last of its run
+}
+
+// corePiece is one core of a leg.
+type corePiece struct {
+	c   *circuit.Conductor
+	pts []node
+}
+
+// columnOval is a cable's mark on both cores.
+type columnOval struct {
+	cable   *circuit.Cable
+	x       int // of the L+ core
+	y       float64
+	upright bool
+}
+
+// columnLength is the length of a leg, written between its cores.
+type columnLength struct {
+	cable *circuit.Cable
+	at    point
+}
+
+// cut is a place where both cores of a leg go on to another sheet.
+type cut struct {
+	cable       *circuit.Cable
+	plus, minus node
+	turn        byte
+}
+
+// rest is what hangs behind a cut.
+type rest struct{ points []*circuit.Point }
+
+// cores returns the plus and the minus core of a two-core cable.
+func cores(c *circuit.Cable) (plus, minus *circuit.Conductor) {
+	for _, k := range c.Cores {
+		if k.Positive {
+			plus = k
+		} else {
+			minus = k
+		}
+	}
+	return plus, minus
+}
+
+// runner lays the runs of one circuit into rows and lanes.
+type runner struct {
+	c     *column
+	rows  int
+	lanes int   // lanes that a column may have at most
+	free  []int // last used row by lane, -1 for none
+	wide  int   // lanes in use
+	far   *circuit.Part
+	err   error
+}
+
+// lightingWay lays out the points of a circuit, or of the rest of one, below a
+// column's head. The cores begin at row top.
+func lightingWay(c *column, points []*circuit.Point, l *circuit.Lighting, rows, room, top int) error {
+	r := &runner{c: c, rows: rows, lanes: room / laneWidth, wide: 1}
+	if l.TestPoint != nil {
+		r.far = l.TestPoint.Red.Part
+	}
+	for range r.lanes + 1 {
+		r.free = append(r.free, -1)
+	}
+	c.minus = minusCore
+	plus, minus := []node{{0, top}}, []node{{minusCore, top}}
+	c.ovals = append(c.ovals, columnOval{points[0].Leg, 0, rowCable, false})
+	if !branches(points) && rungRows(points) > rows {
+		r.fold(points, plus, minus, (room-laneWidth)/foldWidth+1)
+		return r.err
+	}
+	r.run(points, 0, 0, plus, minus, false)
+	c.width = laneWidth * r.wide
+	return r.err
+}
+
+func branches(points []*circuit.Point) bool {
+	for _, p := range points {
+		if len(p.Branches) > 0 {
+			return true
+		}
+	}
+	return false
+}
+
+// rungRows counts the rows of a run without branches.
+func rungRows(points []*circuit.Point) int {
+	n := len(points)
+	for i := 1; i < len(points); i++ {
+		if points[i].Leg.Size != points[i-1].Leg.Size {
+			n++
+		}
+	}
+	return n
+}
+
+// run lays a run into lane from row r on; plus and minus are the ways of the first
+// leg's cores so far. For a side run the length of the first leg is already written.
+// It returns the last row used.
+func (r *runner) run(points []*circuit.Point, row, lane int, plus, minus []node, side bool) int {
+	x := lane * laneWidth
+	r.wide = max(r.wide, lane+1)
+	last := r.rows - 1
+	used := row - 1
+	for i, p := range points {
+		next := 0
+		if i+1 < len(points) {
+			next = 1
+		}
+		at := row
+		newSize := i > 0 && p.Leg.Size != points[i-1].Leg.Size
+		if newSize {
+			at++
+		}
+		after := len(p.Branches) + next
+		if len(p.Branches) > 0 && lane+1 < r.lanes {
+			if wait := max(at, r.free[lane+1]); wait+after <= last {
+				at = wait
+			}
+		}
+		if at+after > last {
+			if i == 0 && row == 0 && lane == 0 && r.err == nil {
+				r.err = fmt.Errorf("luminaire %s has %d side runs; a sheet has rows for %d", p.Luminaire.Designation, len(p.Branches), last-1)
+				return row
+			}
+			r.cutDown(points[i:], row, x, plus, minus)
+			return row
+		}
+		y := lampRow(at)
+		if newSize {
+			r.c.ovals = append(r.c.ovals, columnOval{p.Leg, x, float64(lampRow(at-1)) - 0.5, false})
+		}
+		r.rung(p, x, y, plus, minus, i == len(points)-1)
+		if !side || i > 0 {
+			r.length(p.Leg, float64(x)+minusCore/2, float64(y)-2)
+		}
+		used = at
+		if r.c.far != nil && r.c.far.point == p {
+			used++
+		}
+		row = at + 1
+		for k, b := range p.Branches {
+			row = r.branch(p, b, row, lane, y, len(p.Branches)-k-1+next, k == len(p.Branches)-1 && next == 0)
+			used = row - 1
+		}
+		plus, minus = []node{{x, y}}, []node{{x + minusCore, y}}
+	}
+	if lane < len(r.free) {
+		r.free[lane] = used
+	}
+	return used
+}
+
+// branch lays a side run of p, whose rung is at y, at row or below, and returns the
+// next row of the parent's run. The cores of the last branch of a last luminaire
+// begin at its rung, the others on the passing cores.
+func (r *runner) branch(p *circuit.Point, b []*circuit.Point, row, lane, y, after int, ends bool) int {
+	x := lane * laneWidth
+	side := false
+	if lane+1 < r.lanes {
+		at := max(row, r.free[lane+1]+1)
+		if side = at+1 <= r.rows-1 && at+after <= r.rows-1; side {
+			row = at
+		}
+	}
+	yb := lampRow(row)
+	plus, minus := []node{{x, yb + 1}}, []node{{x + minusCore, yb - 1}}
+	if ends {
+		plus, minus = []node{{x, y}, {x, yb + 1}}, []node{{x + minusCore, y}, {x + minusCore, yb - 1}}
+	}
+	leg := b[0].Leg
+	if !side {
+		to := x + minusCore + 3
+		plus, minus = append(plus, node{to, yb + 1}), append(minus, node{to, yb - 1})
+		r.cut(b, plus, minus, 'E')
+		return row + 1
+	}
+	to := x + laneWidth
+	plus, minus = append(plus, node{to, yb + 1}), append(minus, node{to + minusCore, yb - 1})
+	if leg.Size != p.Leg.Size {
+		r.c.ovals = append(r.c.ovals, columnOval{leg, x, float64(yb), true})
+	}
+	r.length(leg, float64(x)+branchLength, float64(yb)+textHeight/2)
+	r.run(b, row+1, lane+1, plus, minus, true)
+	return row + 1
+}
+
+// rung draws a luminaire and the leg that feeds it.
+func (r *runner) rung(p *circuit.Point, x, y int, plus, minus []node, end bool) {
+	cp, cm := cores(p.Leg)
+	r.c.cores = append(r.c.cores,
+		corePiece{cp, append(plus, node{x, y}, node{x + 1, y})},
+		corePiece{cm, append(minus, node{x + minusCore, y}, node{x + minusCore - 1, y})})
+	r.c.rungs = append(r.c.rungs, rung{p, x, y, end})
+	if p.Luminaire == r.far {
+		r.c.far = &rung{p, x, y, end && len(p.Branches) == 0}
+	}
+}
+
+func (r *runner) length(c *circuit.Cable, x, y float64) {
+	r.c.lengths = append(r.c.lengths, columnLength{c, point{x, y}})
+}
+
+// cutDown ends the cores at a row; what is left goes on elsewhere.
+func (r *runner) cutDown(points []*circuit.Point, row, x int, plus, minus []node) {
+	y := lampRow(row)
+	r.cut(points, append(plus, node{x, y}), append(minus, node{x + minusCore, y}), 'S')
+}
+
+func (r *runner) cut(points []*circuit.Point, plus, minus []node, turn byte) {
+	cp, cm := cores(points[0].Leg)
+	r.c.cores = append(r.c.cores, corePiece{cp, plus}, corePiece{cm, minus})
+	r.c.cuts = append(r.c.cuts, cut{points[0].Leg, plus[len(plus)-1], minus[len(minus)-1], turn})
+	r.c.rests = append(r.c.rests, rest{points})
+}
+
+// fold lays a long run without branches into ladders side by side. The cores go
+// round under the first and over the next, so that order reads downward in each.
+func (r *runner) fold(points []*circuit.Point, plus, minus []node, ladders int) {
+	ladder, row, x := 1, 0, 0
+	last := r.rows - 1
+	left := rungRows(points)
+	for i, p := range points {
+		need := 1
+		newSize := i > 0 && p.Leg.Size != points[i-1].Leg.Size
+		if newSize {
+			need = 2
+		}
+		limit := last - 1
+		if left <= r.rows-row {
+			limit = last // all of the rest fits
+		}
+		if row+need-1 > limit {
+			if ladder == ladders {
+				r.cutDown(points[i:], row, x, plus, minus)
+				break
+			}
+			y := plus[len(plus)-1].Y
+			to := x + foldWidth
+			minus = append(minus, node{x + minusCore, y + 3}, node{to - 4, y + 3}, node{to - 4, rowFoldMinus},
+				node{to + minusCore, rowFoldMinus})
+			plus = append(plus, node{x, y + 5}, node{to - 2, y + 5}, node{to - 2, rowFoldPlus}, node{to, rowFoldPlus})
+			r.length(p.Leg, float64(x)+branchLength, float64(y)+4+textHeight/2)
+			ladder, row, x = ladder+1, 0, to
+		} else {
+			r.length(p.Leg, float64(x)+minusCore/2, float64(lampRow(row+need-1))-2)
+		}
+		if newSize {
+			r.c.ovals = append(r.c.ovals, columnOval{p.Leg, x, float64(lampRow(row)) - 0.5, false})
+		}
+		row += need
+		left -= need
+		y := lampRow(row - 1)
+		r.rung(p, x, y, plus, minus, i == len(points)-1)
+		plus, minus = []node{{x, y}}, []node{{x + minusCore, y}}
+	}
+	r.c.width = laneWidth + foldWidth*(ladder-1)
+}

@@ -1,0 +1,4 @@
+package schematic
+
+// drawFrame draws frame, zones and title block.
+func (s *Sheet) drawFrame(p *painter, o Options) {}
