@@ -49,6 +49,7 @@ const (
 	codeBranch     = "D045"
 	codePoint      = "D046"
 	codeUnused     = "D047"
+	codeBareBoard  = "D048"
 
 	codeShared  = "D050"
 	codeColours = "D051"
@@ -96,6 +97,7 @@ var Codes = []Code{
 	{codeBranch, "branch without a point before it"},
 	{codePoint, "point that cannot be read"},
 	{codeUnused, "luminaire type that no point uses"},
+	{codeBareBoard, "board that nothing hangs on"},
 	{codeShared, "shared file that cannot be read"},
 	{codeColours, "conductor colour that cannot be used"},
 }

@@ -57,6 +57,11 @@ func (d *decoder) report(code, summary string, at Span, detail string, related .
 	d.add(Diagnostic{Severity: Error, Code: code, Summary: summary, Detail: detail, At: at, Related: related})
 }
 
+// warn adds a warning at a place.
+func (d *decoder) warn(code, summary string, at Span, detail string) {
+	d.add(Diagnostic{Severity: Warning, Code: code, Summary: summary, Detail: detail, At: at})
+}
+
 func (d *decoder) add(g Diagnostic) {
 	switch n := len(*d.list); {
 	case n < maxReports:

@@ -101,6 +101,11 @@ x.yaml:1:1: error: missing key [D013]
     | ^
   A description needs the key stages.
 `},
+		{"a board that nothing hangs on", strings.Replace(least, "luminaires:\n", "  annex: {kind: distribution-board, from: board}\n  spare: {kind: distribution-board, from: annex}\nluminaires:\n", 1), `x.yaml:8:3: warning: board that nothing hangs on [D048]
+  8 |   spare: {kind: distribution-board, from: annex}
+    |   ^^^^^
+  No circuit and no board hangs on spare.
+`},
 		{"no circuits", strings.Replace(least, "circuits:\n  - {name: Shed, board: board, points: [12 ft lamp]}\n", "circuits: []\n", 1), `x.yaml:9:1: error: no circuits [D040]
   9 | circuits: []
     | ^^^^^^^^

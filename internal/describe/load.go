@@ -95,7 +95,7 @@ func (d *decoder) syntax(err error) {
 		line, _ := strconv.Atoi(text[m[2]:m[3]])
 		text = text[:m[0]] + text[m[1]:]
 		at, where = d.src.wholeLine(line), " in this line or the next"
-		if open, ok := d.src.unclosed(line + 1); ok && strings.Contains(text, "did not find expected ','") {
+		if open, ok := d.src.unclosed(line + 1); ok && bracketTrouble(text) {
 			at, where = open, " after this bracket"
 		}
 	}
@@ -112,6 +112,12 @@ func (s *source) wholeLine(line int) Span {
 	t := strings.TrimSpace(l)
 	indent := len([]rune(l)) - len([]rune(strings.TrimLeft(l, " \t")))
 	return s.span(line, indent+1, len([]rune(t)))
+}
+
+// bracketTrouble reports whether a message of the YAML library is about something
+// inside brackets or braces.
+func bracketTrouble(text string) bool {
+	return strings.Contains(text, "did not find expected ','") || strings.Contains(text, "did not find expected node content")
 }
 
 // unclosed returns the innermost bracket that is still open at the end of a line.
@@ -147,6 +153,7 @@ func explainYAML(text string) string {
 		{"did not find expected key", `lines that belong together start in the same column`},
 		{"did not find expected ',' or ']'", `a list in brackets needs a comma between entries and a closing ]`},
 		{"did not find expected ',' or '}'", `a mapping in braces needs a comma between entries and a closing }`},
+		{"did not find expected node content", `a bracket or brace is not closed, or a value is missing`},
 		{"did not find expected '-' indicator", `entries of one list start in the same column`},
 		{"unexpected end of stream", `a quotation mark is not closed`},
 		{"unknown anchor", `a name after * must be given with & before`},

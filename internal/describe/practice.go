@@ -19,7 +19,7 @@ func (d *decoder) defaults() {
 	s.Practice = Practice{
 		Conductors:  At[string]{Val: "metric"},
 		Paper:       At[string]{Val: "iso"},
-		LampDrop:    At[quantity.Ratio]{Val: 0.05}, // IEC 60364-5-52, annex G: 5 % for uses other than lighting, from a public network 3 % for lighting; a firm's own limit here
+		LampDrop:    At[quantity.Ratio]{Val: 0.05}, // common practice for extra-low voltage, no source; IEC 60364-5-52, annex G, asks 3 % for lighting on a public network
 		ClearWithin: At[quantity.Second]{Val: 5},   // IEC 60364-4-41, clause 411.3.2.3: 5 s for distribution circuits (from memory)
 		LoadFactor:  At[quantity.Ratio]{Val: 0.75}, // common practice, no source
 		Grouping:    At[int]{Val: 1},               // no other loaded circuit beside it

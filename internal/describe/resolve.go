@@ -21,6 +21,7 @@ func (d *decoder) resolve() {
 	r.formerNames()
 	r.nets()
 	r.lamps()
+	r.bareBoards()
 }
 
 // resolver holds what the checks across the description share. Its maps are only

@@ -69,6 +69,8 @@ func (f Field) validate() error {
 		return fmt.Errorf("choices belong to the type Choice, and only to it")
 	case f.Type != StageRef && (f.Port != "" || f.Feeds):
 		return fmt.Errorf("a port belongs to the type StageRef")
+	case f.Stands && f.Type != Voltage && f.Type != VoltageRange:
+		return fmt.Errorf("only a voltage is one that a part stands")
 	case f.Default != "" && (f.Type == StageRef || f.Type == Curve):
 		return fmt.Errorf("%v has no default", f.Type)
 	}
@@ -106,7 +108,7 @@ func (f Field) parse(s string) (any, error) {
 		return parseChoice(s, f.Choices)
 	}
 	v, err := types[f.Type].parse(s)
-	if err == nil {
+	if err == nil && !f.Stands {
 		err = checkELV(f.Type, v)
 	}
 	if err == nil {

@@ -209,6 +209,9 @@ type Field struct {
 	Min, Max string // written as a user would; empty: no bound
 	Choices  []string
 	Port     string // for a StageRef: the default port of the named stage that this field means
+	// Stands marks a voltage that a part can stand, such as that of a capacitor. It may
+	// be above extra-low voltage; others are voltages that the system holds.
+	Stands bool
 	// Feeds, for a StageRef: this stage feeds the named one; otherwise it is fed by
 	// it, through its own sink port if one bears the field's name.
 	Feeds bool

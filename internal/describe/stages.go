@@ -52,7 +52,7 @@ func (d *decoder) kind(n *yaml.Node, owner Span, what, group string, kinds []Kin
 		d.entries(n, what)
 		return
 	}
-	k, known := d.kindOf(n, owner, what, group, kinds, dst)
+	k := d.kindOf(n, owner, what, group, kinds, dst)
 	fields := append([]field{{"kind", false, func(entry) {}}}, own...)
 	if k == nil {
 		// The keys cannot be judged, but those of own and repetitions can.
@@ -68,9 +68,6 @@ func (d *decoder) kind(n *yaml.Node, owner Span, what, group string, kinds []Kin
 	for i := range k.Fields {
 		f := &k.Fields[i]
 		fields = append(fields, field{f.Name, f.Required, func(e entry) { d.readField(e, f, vals, st) }})
-	}
-	if !known {
-		return
 	}
 	d.mapping(n, owner, fmt.Sprintf("%s (%s)", what, k.Name), fields)
 	for _, f := range k.Fields {
@@ -90,8 +87,8 @@ func exampleKind(kinds []Kind) string {
 	return kinds[0].Name
 }
 
-// kindOf reads the key kind.
-func (d *decoder) kindOf(n *yaml.Node, owner Span, what, group string, kinds []Kind, dst *At[string]) (*Kind, bool) {
+// kindOf reads the key kind. It returns nil when it has reported why there is none.
+func (d *decoder) kindOf(n *yaml.Node, owner Span, what, group string, kinds []Kind, dst *At[string]) *Kind {
 	for i := 0; i+1 < len(n.Content); i += 2 {
 		key, val := follow(n.Content[i]), follow(n.Content[i+1])
 		if key.Kind != yaml.ScalarNode || key.Value != "kind" {
@@ -99,18 +96,18 @@ func (d *decoder) kindOf(n *yaml.Node, owner Span, what, group string, kinds []K
 		}
 		if val.Kind != yaml.ScalarNode || isNull(val) {
 			d.report(codeNoValue, "missing kind", d.src.of(n.Content[i]), fmt.Sprintf("%s needs the name of its kind. Kinds: %s.", what, listed(kindNames(kinds))))
-			return nil, false
+			return nil
 		}
 		at := d.src.of(val)
 		*dst = At[string]{Val: val.Value, Pos: at, Given: true}
 		if k := kindNamed(kinds, val.Value); k != nil {
-			return k, true
+			return k
 		}
 		d.unknown(codeUnknownKind, "unknown kind", at, fmt.Sprintf("There is no %s kind %q.", group, clip(val.Value)), val.Value, "Kinds", kindNames(kinds))
-		return nil, false
+		return nil
 	}
 	d.report(codeMissingKey, "missing key", owner, fmt.Sprintf("%s needs the key kind. Kinds: %s.", what, listed(kindNames(kinds))))
-	return nil, false
+	return nil
 }
 
 // readField reads one field of a kind.

@@ -71,7 +71,7 @@ func distance(a, b []rune, limit int) int {
 		}
 		before, last, row = last, row, before
 	}
-	return last[len(b)]
+	return min(last[len(b)], limit+1)
 }
 
 // didYouMean returns a sentence with the nearest candidate, else one that lists

@@ -186,8 +186,9 @@ func parseRatePoint(s string) (RatePoint, error) {
 	return RatePoint{Time: t, Capacity: c}, nil
 }
 
-// MaxELV is the upper limit of extra-low voltage: 60 V ripple-free DC for dry
-// locations (IEC 61140, clause 5.2.6 with IEC 60364-4-41, clause 414; from memory).
+// MaxELV is the highest DC voltage that this program designs for: 60 V ripple-free,
+// the bound up to which extra-low voltage needs no basic protection in dry places
+// (IEC 61140 with IEC 60364-4-41, clause 414.4.5; from memory).
 const MaxELV quantity.Volt = 60
 
 // checkELV refuses a voltage that the system would hold above extra-low voltage.

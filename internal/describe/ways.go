@@ -168,8 +168,22 @@ func (r *resolver) lamps() {
 	}
 	for _, l := range r.site.Luminaires {
 		if !used[l.Name.Val] {
-			r.add(Diagnostic{Severity: Warning, Code: codeUnused, Summary: "unused luminaire", At: l.Name.Pos,
-				Detail: fmt.Sprintf("No point uses the luminaire %s.", l.Name.Val)})
+			r.warn(codeUnused, "unused luminaire", l.Name.Pos, fmt.Sprintf("No point uses the luminaire %s.", l.Name.Val))
+		}
+	}
+}
+
+// bareBoards finds boards that nothing hangs on.
+func (r *resolver) bareBoards() {
+	if r.list.HasErrors() {
+		return
+	}
+	for _, s := range r.site.Stages {
+		if !r.stageKind(s).board() {
+			continue
+		}
+		if users, _ := r.usersOf(s); len(users) == 0 {
+			r.warn(codeBareBoard, "board that nothing hangs on", s.Name.Pos, fmt.Sprintf("No circuit and no board hangs on %s.", s.Name.Val))
 		}
 	}
 }
