@@ -124,7 +124,7 @@ x.yaml:1:1: error: missing key [D013]
 	} {
 		t.Run(c.why, func(t *testing.T) {
 			s, list := Parse("x.yaml", []byte(c.src), testSchema())
-			if diff := cmp.Diff(c.want, rendered(t, list, s.Sources)); diff != "" {
+			if diff := cmp.Diff(c.want, list.Render(s.Sources)); diff != "" {
 				t.Errorf("(-want +got):\n%s", diff)
 			}
 		})
@@ -153,10 +153,10 @@ func TestOnePass(t *testing.T) {
 	if diff := cmp.Diff(want, got); diff != "" {
 		t.Errorf("(-want +got):\n%s", diff)
 	}
-	first := rendered(t, list, s.Sources)
+	first := list.Render(s.Sources)
 	for range 20 {
 		s, list := Parse("site.yaml", []byte(src), testSchema())
-		if rendered(t, list, s.Sources) != first {
+		if list.Render(s.Sources) != first {
 			t.Fatal("the same file gives different text")
 		}
 	}
@@ -170,7 +170,7 @@ func TestAliases(t *testing.T) {
 	src = strings.Replace(src, "[12 ft lamp]", "[12 ft lamp, 3 ft other, 3 ft third]", 1)
 	s, list := Parse("x.yaml", []byte(src), testSchema())
 	if len(list) > 0 {
-		t.Errorf("diagnostics:\n%s", rendered(t, list, s.Sources))
+		t.Errorf("diagnostics:\n%s", list.Render(s.Sources))
 	}
 	if got := fmt.Sprint(s.Luminaires[1].Fields.vals["power"].Val, s.Luminaires[2].Fields.vals["power"].Val); got != "3 W 3 W" {
 		t.Errorf("powers %s", got)
@@ -183,7 +183,7 @@ func TestAliases(t *testing.T) {
   "3 A" is a current; a power belongs here, such as 6 W.
 `
 	want = strings.Replace(want, "8:41", "8:44", 1)
-	if diff := cmp.Diff(want, rendered(t, list, s.Sources)); diff != "" {
+	if diff := cmp.Diff(want, list.Render(s.Sources)); diff != "" {
 		t.Errorf("(-want +got):\n%s", diff)
 	}
 }

@@ -297,7 +297,7 @@ func TestMistakes(t *testing.T) {
 			src := strings.Replace(right, m.old, m.new, 1)
 			_, list := Parse("site.yaml", []byte(src), testSchema())
 			if len(list) != 1 {
-				t.Fatalf("got %d diagnostics, want 1:\n%s", len(list), rendered(t, list, Sources{"site.yaml": []byte(src)}))
+				t.Fatalf("got %d diagnostics, want 1:\n%s", len(list), list.Render(Sources{"site.yaml": []byte(src)}))
 			}
 			d := list[0]
 			if got := d.Code + " " + d.Summary + ": " + d.Detail; got != m.want {
@@ -315,13 +315,4 @@ func TestMistakes(t *testing.T) {
 			}
 		})
 	}
-}
-
-func rendered(t testing.TB, l List, s Sources) string {
-	t.Helper()
-	var b strings.Builder
-	if err := l.Write(&b, s); err != nil {
-		t.Fatal(err)
-	}
-	return b.String()
 }

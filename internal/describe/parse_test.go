@@ -15,7 +15,7 @@ func TestSample(t *testing.T) {
 	src := sample(t)
 	s, list := Parse("site.yaml", []byte(src), testSchema())
 	if len(list) > 0 {
-		t.Fatalf("the sample has mistakes:\n%s", rendered(t, list, s.Sources))
+		t.Fatalf("the sample has mistakes:\n%s", list.Render(s.Sources))
 	}
 	if got := s.Job.Number.Val + "|" + s.Job.Title.Val + "|" + s.Job.Revision.Val + "|" + s.Job.Date.Val; got != "BR-2041|Standby lighting|A|2026-12-01" {
 		t.Errorf("job: %s", got)
@@ -106,7 +106,7 @@ func TestPointForms(t *testing.T) {
 	} {
 		s, list := Parse("site.yaml", []byte(strings.Replace(right, old, c.points, 1)), testSchema())
 		if len(list) > 0 {
-			t.Errorf("%s:\n%s", c.why, rendered(t, list, s.Sources))
+			t.Errorf("%s:\n%s", c.why, list.Render(s.Sources))
 			continue
 		}
 		p := s.Circuits[2].Points
@@ -133,7 +133,7 @@ circuits:
 func TestDefaults(t *testing.T) {
 	s, list := Parse("shed.yaml", []byte(least), testSchema())
 	if len(list) > 0 {
-		t.Fatalf("diagnostics:\n%s", rendered(t, list, s.Sources))
+		t.Fatalf("diagnostics:\n%s", list.Render(s.Sources))
 	}
 	p := s.Practice
 	p.Prices, p.Sizes, p.Fuses, p.Blocks = nil, At[[]quantity.WireSize]{}, At[[]quantity.Ampere]{}, At[[]quantity.AmpereHour]{}
@@ -170,7 +170,7 @@ func TestPracticeLists(t *testing.T) {
 duty:`, 1)
 	s, list := Parse("shed.yaml", []byte(src), testSchema())
 	if len(list) > 0 {
-		t.Fatalf("diagnostics:\n%s", rendered(t, list, s.Sources))
+		t.Fatalf("diagnostics:\n%s", list.Render(s.Sources))
 	}
 	p := s.Practice
 	if len(p.Sizes.Val) != 3 || p.Sizes.Val[2].Gauge != "4/0" || p.Fuses.Val[2] != 0.5 || p.Blocks.Val[1] != 12 ||
@@ -191,7 +191,7 @@ func TestSharedPractice(t *testing.T) {
 	}
 	s, list := read("# the firm\nlamp_drop: 3 %\ncolours: {positive: BN, negative: BU}\n", nil).Parse("jobs/shed.yaml", []byte(src), testSchema())
 	if len(list) > 0 {
-		t.Fatalf("diagnostics:\n%s", rendered(t, list, s.Sources))
+		t.Fatalf("diagnostics:\n%s", list.Render(s.Sources))
 	}
 	if s.Practice.LampDrop.Val != 0.03 || s.Practice.Positive.Val != "BN" || s.Practice.LampDrop.Pos.File != "jobs/firm/house.yaml" || s.Practice.LampDrop.Pos.Line != 2 {
 		t.Errorf("practice: %+v", s.Practice)
@@ -208,7 +208,7 @@ jobs/firm/house.yaml:2:1: error: unknown key [D011]
     | ^^^^^^^^^
   A shared practice file has no key "lamp_drip". Did you mean lamp_drop?
 `
-	if diff := cmp.Diff(want, rendered(t, list, s.Sources)); diff != "" {
+	if diff := cmp.Diff(want, list.Render(s.Sources)); diff != "" {
 		t.Errorf("mistakes in the shared file (-want +got):\n%s", diff)
 	}
 

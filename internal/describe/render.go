@@ -25,6 +25,13 @@ func (l List) Write(w io.Writer, sources Sources) error {
 	return p.w.Flush()
 }
 
+// Render returns what Write prints.
+func (l List) Render(sources Sources) string {
+	var b strings.Builder
+	l.Write(&b, sources) // a strings.Builder takes everything
+	return b.String()
+}
+
 // printer writes diagnostics; bufio keeps its first error for Flush.
 type printer struct {
 	w       *bufio.Writer

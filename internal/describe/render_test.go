@@ -35,7 +35,7 @@ func TestWrite(t *testing.T) {
 			"b.yaml:1:1: error: missing value [D014]\n"},
 		{"no place", Diagnostic{Severity: Error, Code: "D014", Summary: "missing value"}, "error: missing value [D014]\n"},
 	} {
-		if diff := cmp.Diff(c.want, rendered(t, List{c.d}, sources)); diff != "" {
+		if diff := cmp.Diff(c.want, List{c.d}.Render(sources)); diff != "" {
 			t.Errorf("%s (-want +got):\n%s", c.why, diff)
 		}
 	}
