@@ -10,7 +10,7 @@ const (
 	joint       = 0.2 // radius of the dot on the wire
 	tagGap      = 0.6 // middle of the ring to the tag
 	tagHeight   = 1.72
-	tagPad      = 0.5 // beside the letters
+	tagPad      = 0.55 // beside the letters
 	tagCorner   = 0.25
 )
 

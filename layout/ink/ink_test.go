@@ -2,9 +2,11 @@ package ink
 
 import (
 	"math"
+	"strings"
 	"testing"
 
 	"golang.org/x/image/font/sfnt"
+	"pgregory.net/rapid"
 )
 
 // testSheet draws some of everything on c.
@@ -215,5 +217,66 @@ func TestReplayRepeats(t *testing.T) {
 	a.Replay(b)
 	if a.String() != b.String() {
 		t.Errorf("replayed:\n%s\nwant:\n%s", b, a)
+	}
+}
+
+func TestBoundsAndLength(t *testing.T) {
+	c := new(Path).Circle(Point{10, 20}, 3)
+	b := c.Bounds()
+	for _, v := range []struct{ got, want float64 }{{b.X, 7}, {b.Y, 17}, {b.W, 6}, {b.H, 6}} {
+		near(t, "circle's box", v.got, v.want, 1e-9)
+	}
+	near(t, "circumference", c.Length(), 6*math.Pi, 0.02)
+	// An arch of 240 degrees: its top is inside a curve, its ends are below.
+	arch := new(Path).Move(-math.Sqrt(3)/2, 0.5).Arc(Point{math.Sqrt(3) / 2, 0.5}, 1, true, true)
+	b = arch.Bounds()
+	near(t, "arch top", b.Y, -1, 0.0005)
+	near(t, "arch bottom", b.Y+b.H, 0.5, 1e-9)
+	near(t, "arch width", b.W, 2, 0.001)
+	near(t, "rectangle", new(Path).Rect(Rect{0, 0, 3, 4}).Length(), 14, 1e-9)
+	near(t, "quadratic", new(Path).Move(0, 0).Quad(Point{1, 1}, Point{2, 0}).Bounds().H, 0.5, 1e-9)
+}
+
+// TestFitDash: a line of 60 mm takes whole dashes at both ends.
+func TestFitDash(t *testing.T) {
+	p := new(Path).Move(0, 0).Line(60, 0)
+	d := p.FitDash(6, 0.75, 0.125, 0.75)
+	period := d[0] + d[1] + d[2] + d[3]
+	n := (60 - d[0]) / period
+	near(t, "periods before the last dash", n, math.Round(n), 1e-9)
+	near(t, "dash", d[0], 6, 0.1)
+	near(t, "proportion", d[1]/d[0], 0.125, 1e-12)
+	r := new(Path).Circle(Point{}, 3)
+	d = r.FitDash(1.5, 0.75)
+	n = r.Length() / (d[0] + d[1])
+	near(t, "periods round a circle", n, math.Round(n), 1e-9)
+	if new(Path).FitDash(1, 1) != nil {
+		t.Error("dashes on nothing")
+	}
+}
+
+func TestWrapAndCut(t *testing.T) {
+	f := Font{Regular, 3.5}
+	rapid.Check(t, func(t *rapid.T) {
+		text := rapid.StringMatching(`[a-z ]{0,80}`).Draw(t, "text")
+		width := rapid.Float64Range(5, 60).Draw(t, "width")
+		lines := Wrap(text, f, width)
+		for _, l := range lines {
+			if Width(l, f) > width || l == "" {
+				t.Fatalf("line %q is %v wide, %v given", l, Width(l, f), width)
+			}
+		}
+		if strings.ReplaceAll(strings.Join(lines, ""), " ", "") != strings.ReplaceAll(text, " ", "") {
+			t.Fatalf("%q became %q", text, lines)
+		}
+		if c := Cut(text, f, width); Width(c, f) > width {
+			t.Fatalf("%q cut to %q, %v wide", text, c, Width(c, f))
+		}
+	})
+	if got := Wrap("one two\u00a0three", f, Width("one two", f)); len(got) < 2 || got[0] != "one" {
+		t.Errorf("no-break space broken: %q", got)
+	}
+	if got := Cut("Bunkroom corridor", f, Width("Bunkroom…", f)); got != "Bunkroom…" {
+		t.Errorf("cut to %q", got)
 	}
 }

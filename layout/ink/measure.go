@@ -240,3 +240,48 @@ func readMetrics(file []byte) *faceMetrics {
 	}
 	return m
 }
+
+// Wrap breaks text into lines of at most width mm, at spaces; no-break spaces
+// hold. A word wider than a line is broken between letters. Empty text is no
+// line at all.
+func Wrap(text string, f Font, width float64) []string {
+	var lines []string
+	line := ""
+	for _, word := range strings.FieldsFunc(Clean(text), func(r rune) bool { return r == ' ' }) {
+		if line != "" && Width(line+" "+word, f) <= width {
+			line += " " + word
+			continue
+		}
+		if line != "" {
+			lines = append(lines, line)
+		}
+		line = ""
+		for _, r := range word {
+			if line != "" && Width(line+string(r), f) > width {
+				lines = append(lines, line)
+				line = ""
+			}
+			line += string(r)
+		}
+	}
+	if line != "" {
+		lines = append(lines, line)
+	}
+	return lines
+}
+
+// Cut is text, or as much of its beginning as stands within width mm with an
+// ellipsis behind it.
+func Cut(text string, f Font, width float64) string {
+	text = Clean(text)
+	if Width(text, f) <= width {
+		return text
+	}
+	runes := []rune(text)
+	for n := len(runes) - 1; n > 0; n-- {
+		if s := strings.TrimRight(string(runes[:n]), " \u00A0") + "…"; Width(s, f) <= width {
+			return s
+		}
+	}
+	return "…"
+}

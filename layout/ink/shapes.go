@@ -139,16 +139,124 @@ func (p *Path) Map(f func(Point) Point) *Path {
 	return q
 }
 
-// Bounds is the upright box around the path's points. Handles of curves count,
-// so the box may be a little larger than the ink.
+// Bounds is the upright box around the path itself, without the width of a pen.
 func (p *Path) Bounds() Rect {
 	if len(p.Points) == 0 {
 		return Rect{}
 	}
 	lo, hi := p.Points[0], p.Points[0]
-	for _, q := range p.Points[1:] {
+	grow := func(q Point) {
 		lo.X, lo.Y = min(lo.X, q.X), min(lo.Y, q.Y)
 		hi.X, hi.Y = max(hi.X, q.X), max(hi.Y, q.Y)
 	}
+	p.Segments(func(from Point, v Verb, q []Point) {
+		grow(q[len(q)-1])
+		if v != CubicTo {
+			return
+		}
+		for _, t := range extremes(from.X, q[0].X, q[1].X, q[2].X) {
+			grow(onCubic(from, q, t))
+		}
+		for _, t := range extremes(from.Y, q[0].Y, q[1].Y, q[2].Y) {
+			grow(onCubic(from, q, t))
+		}
+	})
 	return Rect{lo.X, lo.Y, hi.X - lo.X, hi.Y - lo.Y}
+}
+
+// Segments calls f for every segment with the point it starts from and its own
+// points. A Close comes as LineTo the start of its piece, left out when the piece
+// is there already.
+func (p *Path) Segments(f func(from Point, v Verb, points []Point)) {
+	var from, start Point
+	i := 0
+	for _, v := range p.Verbs {
+		n := 1
+		switch v {
+		case CubicTo:
+			n = 3
+		case Close:
+			if from != start {
+				f(from, LineTo, []Point{start})
+			}
+			from = start
+			continue
+		}
+		q := p.Points[i : i+n]
+		if v == MoveTo {
+			start = q[0]
+		}
+		f(from, v, q)
+		from = q[n-1]
+		i += n
+	}
+}
+
+func onCubic(from Point, q []Point, t float64) Point {
+	m := 1 - t
+	a, b, c, d := m*m*m, 3*m*m*t, 3*m*t*t, t*t*t
+	return Point{a*from.X + b*q[0].X + c*q[1].X + d*q[2].X, a*from.Y + b*q[0].Y + c*q[1].Y + d*q[2].Y}
+}
+
+// extremes are the parameters inside (0, 1) where a cubic of the given ordinates
+// stands still: the roots of its derivative.
+func extremes(p0, p1, p2, p3 float64) (out []float64) {
+	a, b, c := p3-3*p2+3*p1-p0, 2*(p2-2*p1+p0), p1-p0
+	roots := []float64{-c / b}
+	if a != 0 {
+		d := math.Sqrt(b*b - 4*a*c) // NaN without roots, dropped below
+		roots = []float64{(-b + d) / (2 * a), (-b - d) / (2 * a)}
+	}
+	for _, t := range roots {
+		if t > 0 && t < 1 {
+			out = append(out, t)
+		}
+	}
+	return out
+}
+
+// Length is the length of the path in mm; curves are measured in short chords,
+// within 0.1 % for quarter circles.
+func (p *Path) Length() float64 {
+	const chords = 16
+	sum := 0.0
+	p.Segments(func(from Point, v Verb, q []Point) {
+		switch v {
+		case LineTo:
+			sum += math.Hypot(q[0].X-from.X, q[0].Y-from.Y)
+		case CubicTo:
+			last := from
+			for k := 1; k <= chords; k++ {
+				next := onCubic(from, q, float64(k)/chords)
+				sum += math.Hypot(next.X-last.X, next.Y-last.Y)
+				last = next
+			}
+		}
+	})
+	return sum
+}
+
+// FitDash scales a dash pattern, in mm on, off, …, so that it suits the path: an
+// open one begins and ends with a whole first dash, a closed one meets itself
+// without a break. The scale is as near 1 as can be.
+func (p *Path) FitDash(dash ...float64) []float64 {
+	period := 0.0
+	for _, d := range dash {
+		period += d
+	}
+	length := p.Length()
+	if len(dash) == 0 || period <= 0 || length <= 0 {
+		return nil
+	}
+	first := dash[0]
+	if p.Verbs[len(p.Verbs)-1] == Close {
+		first = 0
+	}
+	n := max(1, math.Round((length-first)/period))
+	scale := length / (n*period + first)
+	out := make([]float64, len(dash))
+	for i, d := range dash {
+		out[i] = d * scale
+	}
+	return out
 }
