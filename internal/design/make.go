@@ -36,6 +36,7 @@ func Make(site *describe.Site, kept circuit.Labels) (*Design, error) {
 	if err := m.expect(); err != nil {
 		return nil, err
 	}
+	m.dropWorkings()
 	m.relay()
 	m.standing()
 	if err := m.thresholds(); err != nil {

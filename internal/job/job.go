@@ -16,12 +16,12 @@ import (
 
 // Mistakes is returned when a description is wrong: every mistake, with its place.
 type Mistakes struct {
-	List   describe.List
-	Source []byte
+	List    describe.List
+	Sources describe.Sources
 }
 
 // Error returns the mistakes as they are shown to the user.
-func (m *Mistakes) Error() string { return m.List.Render(m.Source) }
+func (m *Mistakes) Error() string { return m.List.Render(m.Sources) }
 
 // Unreadable is returned when a description cannot be read.
 type Unreadable struct{ Err error }
@@ -61,7 +61,7 @@ func Design(path string, src []byte, set []string) (*design.Design, error) {
 	read := describe.Options{ReadFile: describe.FolderReader(filepath.Dir(path))}
 	site, list := read.Parse(filepath.Base(path), src, stage.Schema())
 	if list.HasErrors() {
-		return nil, &Mistakes{list, src}
+		return nil, &Mistakes{list, site.Sources}
 	}
 	return design.Make(site, nil)
 }

@@ -67,3 +67,7 @@ func bracketed(v float64, unit string) string {
 
 // join puts parts together with an operator.
 func join(op string, parts ...string) string { return strings.Join(parts, " "+op+" ") }
+
+// Digits prints the value of a Working with as many digits as a pocket calculator
+// needs to agree with it.
+func Digits(v float64) string { return plain(v) }

@@ -1,6 +1,9 @@
 package stage
 
 import (
+	"fmt"
+	"strings"
+
 	"gloamwright/internal/catalogue"
 	"gloamwright/internal/circuit"
 	"gloamwright/internal/describe"
@@ -140,6 +143,7 @@ func (t *tree) lighting(w *circuit.Way, at int) {
 	var ib quantity.Ampere
 	w.Lighting.Walk(func(pt, _ *circuit.Point) { ib += p.LampDesign(p.loads[pt.Type]) })
 	d := p.circuitOf(w.Lighting.Name)
+	p.loadWorking(w.Lighting, ib)
 	f := p.wayFuse(w, w.Lighting.Name, ib, d.Fuse, 0)
 	legs := map[*circuit.Point]int{}
 	w.Lighting.Walk(func(pt, before *circuit.Point) {
@@ -209,6 +213,26 @@ func (p *Plan) wayFuse(w *circuit.Way, feeds string, load quantity.Ampere, given
 	f.Design = load
 	f.Board, f.Way = w.Board, w
 	return f
+}
+
+// loadWorking records the design current of a circuit, lamp type by lamp type.
+func (p *Plan) loadWorking(l *circuit.Lighting, ib quantity.Ampere) {
+	count := map[string]int{}
+	var order []string
+	l.Walk(func(pt, _ *circuit.Point) {
+		if count[pt.Type] == 0 {
+			order = append(order, pt.Type)
+		}
+		count[pt.Type]++
+	})
+	var terms []string
+	for _, t := range order {
+		terms = append(terms, fmt.Sprintf("%d × %.4f A %s", count[t], float64(p.LampDesign(p.loads[t])), t))
+	}
+	p.work(l.Name, "design current", sizing.Working{
+		Formula:     "I_B = Σ n × I_lamp, the greater of end of discharge less permitted drop and float",
+		Substituted: strings.Join(terms, " + "), Value: float64(ib), Unit: "A", Source: "Ohm's law; P = U × I",
+	})
 }
 
 // below calls fn for every luminaire behind a board.

@@ -280,9 +280,10 @@ func (p *Plan) Ampacity(w *circuit.Conductor) quantity.Ampere {
 	return p.ampacity(w.Size, grouped)
 }
 
-// work records a working.
-func (p *Plan) work(subject, name string, w sizing.Working) {
+// work records a working; uses names the workings, as "subject: name", that feed it.
+func (p *Plan) work(subject, name string, w sizing.Working, uses ...string) {
 	w.For = subject
+	w.Uses = append(w.Uses, uses...)
 	if name != "" {
 		w.Name = name
 	}
@@ -352,7 +353,7 @@ func (p *Plan) systemFuse(part *circuit.Part, feeds string, load quantity.Ampere
 			p.block(part.Designation, part.At, w.Source, err)
 			r = class.Ratings[len(class.Ratings)-1]
 		}
-		p.work(part.Designation, "fuse rating", w)
+		p.work(part.Designation, "fuse rating", w, feeds+": design current")
 		rating = r
 	}
 	return p.fit(part, class, rating, feeds, load, given.Given)
