@@ -194,7 +194,7 @@ func (p *plan) relaxed() *TreeResult {
 	}
 	q, err := loose.plan()
 	if err == nil {
-		s := &search{plan: q, budget: searchBudget(&loose)}
+		s := &search{plan: q}
 		if s.run(); s.best != nil {
 			return p.result(s.best.Sizes)
 		}

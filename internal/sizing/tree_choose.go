@@ -1,7 +1,6 @@
 package sizing
 
 import (
-	"fmt"
 	"math"
 	"slices"
 )
@@ -23,7 +22,7 @@ func (t *Tree) Choose() (*TreeResult, error) {
 	if err != nil {
 		return nil, err
 	}
-	s := &search{plan: p, budget: searchBudget(t)}
+	s := &search{plan: p}
 	s.run()
 	if s.best != nil {
 		return s.best, nil
@@ -42,159 +41,9 @@ func (t *Tree) Check(sizes []*Option) (*TreeResult, error) {
 	return r, p.verdict(sizes, r)
 }
 
-// searchWork bounds the branch and bound: legs × options × nodes.
-const (
-	searchWork     = 2_000_000
-	searchNodesMin = 12
-	searchNodesMax = 20_000
-)
-
-func searchBudget(t *Tree) int {
-	n := searchWork / max(1, len(t.Legs)*len(t.Options))
-	return min(max(n, searchNodesMin), searchNodesMax)
-}
-
-// plan checks the tree's form and lists what each group of legs may take.
-func (t *Tree) plan() (*plan, error) {
-	n := len(t.Legs)
-	p := &plan{t: t, kids: make([][]int, n+1), group: make([]int, n), shared: make([]bool, n), inactive: make([]bool, n), priced: t.priced()}
-	heads := map[string]int{}
-	groups := map[string]int{}
-	for i := range t.Legs {
-		l := &t.Legs[i]
-		if l.Parent >= i || l.Parent < -1 {
-			return nil, fmt.Errorf("sizing: leg %d hangs on leg %d, which must come before it", i, l.Parent)
-		}
-		at := l.Parent
-		if at < 0 {
-			at = n
-		}
-		p.kids[at] = append(p.kids[at], i)
-		if l.Circuit != "" && (l.Parent < 0 || t.Legs[l.Parent].Circuit != l.Circuit) {
-			if heads[l.Circuit]++; heads[l.Circuit] > 1 {
-				return nil, fmt.Errorf("sizing: circuit %q starts at two legs", l.Circuit)
-			}
-		}
-		if l.Load.Power > 0 && l.MinVolt <= 0 {
-			return nil, fmt.Errorf("sizing: leg %q feeds a constant power and states no least voltage", l.Name)
-		}
-		if l.Load.Power < 0 || l.MinVolt > 0 && l.Load.Draws(l.MinVolt) < 0 {
-			return nil, fmt.Errorf("sizing: the load of leg %q would feed current back", l.Name)
-		}
-		p.shared[i] = l.Circuit != "" && !t.Taper
-		p.group[i] = free
-		if l.Pinned != nil {
-			continue
-		}
-		g, known := len(p.members), false
-		if p.shared[i] {
-			g, known = groupOf(groups, l.Circuit, g)
-		}
-		if !known {
-			p.members = append(p.members, nil)
-		}
-		p.members[g] = append(p.members[g], i)
-		p.group[i] = g
-	}
-	for _, m := range p.members {
-		a, err := p.allowedFor(m)
-		if err != nil {
-			return nil, err
-		}
-		p.allowed = append(p.allowed, a)
-	}
-	p.markInactive()
-	return p, nil
-}
-
-func groupOf(groups map[string]int, circuit string, next int) (g int, known bool) {
-	if g, known = groups[circuit]; known {
-		return g, true
-	}
-	groups[circuit] = next
-	return next, false
-}
-
-// allowedFor lists the options that every leg of a group can take.
-func (p *plan) allowedFor(legs []int) ([]int, error) {
-	var out []int
-	for k := range p.t.Options {
-		if !slices.ContainsFunc(legs, func(i int) bool { return !p.fits(i, &p.t.Options[k]) }) {
-			out = append(out, k)
-		}
-	}
-	if len(out) > 0 {
-		return out, nil
-	}
-	if len(p.t.Options) == 0 {
-		return nil, &BlockedError{Limit: LimitStock, Subject: "the number of sizes to choose from", Bound: 1, Frees: "list at least one conductor size"}
-	}
-	top := &p.t.Options[len(p.t.Options)-1]
-	for _, i := range legs {
-		l := &p.t.Legs[i]
-		if l.Carry > top.Ampacity*(1+slack) {
-			return nil, &BlockedError{
-				Limit: LimitAmpacity, Subject: fmt.Sprintf("what the cable of %s must carry", l.Name),
-				Value: float64(l.Carry), Bound: float64(top.Ampacity), Unit: "A",
-				Frees: fmt.Sprintf("fuse it at %v or less, share the load over two ways, or stock a size above %v", top.Ampacity, top.Size),
-			}
-		}
-	}
-	l := &p.t.Legs[legs[0]]
-	return nil, &BlockedError{
-		Limit: LimitLeastSize, Subject: "the least area for " + l.Name, Value: float64(l.Least), Bound: float64(top.Size.Area), Unit: "mm²",
-		Frees: fmt.Sprintf("stock a size of at least %v", l.Least),
-	}
-}
-
-// fits reports whether an option keeps the limits that concern leg i alone.
-func (p *plan) fits(i int, o *Option) bool {
-	l := &p.t.Legs[i]
-	return o.Ampacity >= l.Carry*(1-slack) && o.Size.Area >= l.Least*(1-slack)
-}
-
-// markInactive finds the loop limits that hold whatever is chosen.
-func (p *plan) markInactive() {
-	loops := p.t.loops(p.extreme(func(a []int) int { return a[0] }))
-	for i := range loops {
-		most := float64(p.t.Legs[i].Loop)
-		p.inactive[i] = most <= 0 || loops[i] <= most
-	}
-}
-
-// extreme picks one allowed option for each group.
-func (p *plan) extreme(pick func(allowed []int) int) []*Option {
-	picks := make([]int, len(p.allowed))
-	for g, a := range p.allowed {
-		picks[g] = pick(a)
-	}
-	return p.sizes(picks)
-}
-
-func largest(a []int) int { return a[len(a)-1] }
-
-// sizes turns picks by group into options by leg.
-func (p *plan) sizes(picks []int) []*Option {
-	out := make([]*Option, len(p.t.Legs))
-	for i := range out {
-		if g := p.group[i]; g == free {
-			out[i] = p.t.Legs[i].Pinned
-		} else {
-			out[i] = &p.t.Options[picks[g]]
-		}
-	}
-	return out
-}
-
-// result solves a choice; the voltages are zero if there is no operating point.
-func (p *plan) result(sizes []*Option) *TreeResult {
-	r := &TreeResult{Sizes: sizes}
-	r.Volts, r.Amps, _ = p.t.Solve(sizes)
-	for i, o := range sizes {
-		r.Cost += p.cost(i, o)
-	}
-	return r
-}
+// searchWork bounds branch and bound by the labels that it makes: some tenths of a
+// second. A tree of a few dozen legs is proven far within it.
+const searchWork = 2_000_000
 
 // leastAmps returns currents of all legs that no choice within limits undercuts.
 // Constant power draws least at the highest voltage, a resistor at the lowest; the
@@ -203,15 +52,11 @@ func (p *plan) leastAmps(fix []int) []float64 {
 	n := len(p.t.Legs)
 	r, v, a := make([]float64, n), make([]float64, n), make([]float64, n)
 	for i := range r {
-		o := p.t.Legs[i].Pinned
-		if g := p.group[i]; g != free {
-			k := fix[g]
-			if k == free {
-				k = largest(p.allowed[g])
-			}
-			o = &p.t.Options[k]
+		k := free
+		if c := p.choices(i, fix); c != nil {
+			k = largest(c)
 		}
-		r[i] = p.t.ohms(i, o)
+		r[i] = p.t.ohms(i, p.option(i, k))
 		v[i] = float64(p.t.Volts)
 	}
 	const rounds = 6
@@ -264,20 +109,10 @@ func (p *plan) mostAmps() []float64 {
 	return a
 }
 
-// noFix leaves every group open.
-func (p *plan) noFix() []int {
-	f := make([]int, len(p.allowed))
-	for i := range f {
-		f[i] = free
-	}
-	return f
-}
-
 // search is the state of one Choose.
 type search struct {
 	*plan
-	best   *TreeResult
-	budget int
+	best *TreeResult
 }
 
 // tieSlack is how far two costs may differ by rounding and still be equal.
@@ -401,7 +236,7 @@ func (s *search) picksOf(r *TreeResult) []int {
 func (p *plan) tapers(picks []int) bool {
 	for i := range p.t.Legs {
 		q := p.t.Legs[i].Parent
-		if q < 0 || p.group[i] == free || p.group[q] == free || !p.sameCircuit(q, i) {
+		if q < 0 || p.group[i] == free || p.group[q] == free || p.t.Legs[i].Circuit == "" || p.t.Legs[q].Circuit != p.t.Legs[i].Circuit {
 			continue
 		}
 		if picks[p.group[i]] > picks[p.group[q]] {
@@ -414,7 +249,7 @@ func (p *plan) tapers(picks []int) bool {
 // branch is branch and bound (Land and Doig, 1960) on the groups in order. It
 // reports whether it could look at everything.
 func (s *search) branch(fix []int, from int) bool {
-	if s.budget--; s.budget < 0 {
+	if s.work > searchWork {
 		return false
 	}
 	bound, picks, ok := s.search(s.leastAmps(fix), fix, true)
@@ -436,7 +271,7 @@ func (s *search) branch(fix []int, from int) bool {
 		next[from] = k
 		if !s.branch(next, from+1) {
 			done = false
-			if s.budget < 0 {
+			if s.work > searchWork {
 				break
 			}
 		}
