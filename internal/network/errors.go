@@ -75,12 +75,12 @@ func named(element, part string) string {
 	return element + " (" + part + ")"
 }
 
-// listed is the number of names that a message prints.
-const listed = 8
+// namesShown is the number of names that a message prints.
+const namesShown = 8
 
 func several(names []string) string {
-	if len(names) > listed {
-		return strings.Join(names[:listed], ", ") + fmt.Sprintf(" and %d more", len(names)-listed)
+	if len(names) > namesShown {
+		return strings.Join(names[:namesShown], ", ") + fmt.Sprintf(" and %d more", len(names)-namesShown)
 	}
 	return strings.Join(names, ", ")
 }

@@ -3,8 +3,8 @@ package network
 import "math"
 
 // VT25 is the thermal voltage kT/q at 25 °C in volts
-// (k/q = 8.617333e-5 V/K, CODATA 2018; T = 298.15 K).
-const VT25 = 8.617333e-5 * 298.15
+// (k/q = 8.617333262e-5 V/K, CODATA 2018; T = 298.15 K).
+const VT25 = 8.617333262e-5 * 298.15
 
 // maxExponent bounds the argument of the exponential; beyond it the law goes on
 // along its tangent. A converged junction never gets there.

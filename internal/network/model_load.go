@@ -91,13 +91,11 @@ var powerModel = &Model{
 		c.flow(0, 1, i.y+v*g, i.slope+g)
 	},
 	limit: func(c *cell, old []float64) bool {
-		low := c.p[powerLow]
-		v, cut := betweenKnees(old[0]-old[1], c.across(0, 1), c.p[powerCut]*low, low)
-		if cut && v < low { // a rising step may pass: the load starts only when it is up
-			if c.across(0, 1) > old[0]-old[1] {
-				return false
-			}
+		from, to := old[0]-old[1], c.across(0, 1)
+		if to >= from { // a load starts only when its voltage is up
+			return false
 		}
+		v, cut := betweenKnees(from, to, c.p[powerCut]*c.p[powerLow], c.p[powerLow])
 		c.v[0] = c.v[1] + v
 		return cut
 	},

@@ -250,9 +250,13 @@ func (n *Network) Values(element string) []circuit.Param {
 		return nil
 	}
 	d := n.devices[i]
-	out := make([]circuit.Param, len(d.p))
-	for k, s := range d.m.Params {
-		out[k] = circuit.Param{Name: s.Name, Value: d.p[k], Tol: d.tol[k]}
+	return listed(d.m, d.p, d.tol)
+}
+
+func listed(m *Model, p, tol []float64) []circuit.Param {
+	out := make([]circuit.Param, len(p))
+	for k, s := range m.Params {
+		out[k] = circuit.Param{Name: s.Name, Value: p[k], Tol: tol[k]}
 	}
 	return out
 }

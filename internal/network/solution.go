@@ -1,6 +1,10 @@
 package network
 
-import "math"
+import (
+	"math"
+
+	"gloamwright/internal/circuit"
+)
 
 // Solution is an operating point.
 type Solution struct {
@@ -94,6 +98,16 @@ func (s *Solution) Power(element string) float64 {
 		p += s.run.cell.v[k] * s.run.cell.f[k]
 	}
 	return p
+}
+
+// Values returns all parameters of an element as they were in this condition, or nil
+// if there is no such element.
+func (s *Solution) Values(element string) []circuit.Param {
+	i, ok := s.run.n.byID[element]
+	if !ok {
+		return nil
+	}
+	return listed(s.run.n.devices[i].m, s.run.p[i], s.run.tol[i])
 }
 
 // Across returns the voltage of one net against another.

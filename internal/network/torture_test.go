@@ -84,6 +84,23 @@ G1 battery p 0 emf=12.6 ohm=0.01`, Environment{Mains: 1, Charge: Float}, func(t 
 			want := 25.6 / (0.02 + 2*0.11 + 2*0.05 + 2*fuseOhm + 2*contactOhm + ShortOhm)
 			near(t, "short-circuit current", s.Current("F3"), want, 0.1)
 		}},
+		{"input bias into reversed LEDs", `
+G0 battery n1 0 emf=25.6 ohm=0.0351
+R7 resistor n7 0 ohm=180
+X4 led-string n1 n2 forward_volt=3.1 series=3 strings=2 ohm=68 ampere=0.02
+X7 comparator n2 n1 n5 n1 n7
+R5 resistor n5 0 ohm=1800`, Environment{Mains: 1}, nil},
+		{"loop of current that only a regulator ties to minus", `
+G0 battery n1 0 emf=18.8 ohm=0.977
+R2 resistor n2 n3 ohm=0.753
+R3 resistor n3 n4 ohm=9340
+R4 resistor n4 n2 ohm=38.5
+R5 resistor n5 n2 ohm=67.3
+X0 coil n5 n2 ohm=300 pickup_volt=9 dropout_volt=1.2
+X1 suppressor n4 n3 vz=33
+X2 charger n5 n4 - - float_volt=13.7 limit_ampere=2
+X3 regulator 0 n3 n5`, Environment{Mains: 1, Charge: Float}, nil},
+		{"lamp loads above their range on a stiff source", benchTree(2000), Environment{LoadFactor: 40}.Set("G1", "emf", 33), nil},
 		{"battery the wrong way round", site, Environment{Mains: 1, Charge: Float}.Set("G1", "emf", -25.6), nil},
 		{"mains far too low", site, Environment{Mains: 0.3, Charge: Boost}, nil},
 		{"no mains, no light, no battery", site, Environment{}.With(Override{Element: "G1", Open: true}), nil},
