@@ -18,7 +18,7 @@ var (
 
 	// CoilAttached is for relays whose contact stands close by.
 	CoilAttached = Symbol{
-		ID: "coil_link", Name: "relay with its contact", Letter: "K", Turns: Turnable,
+		ID: "coil_link", Name: "relay with its contact", Letter: "K", Turns: Contact,
 		Pins: []Pin{{"A1", 0, -2, Up}, {"A2", 0, 2, Down}, {"13", 5, -2, Up}, {"14", 5, 2, Down}},
 		shapes: with(coilBox,
 			line(2, 0, 4.42, 0).dashed(),
@@ -50,7 +50,7 @@ var (
 
 	// MakeContactOnDelay closes late: the arc catches the wind on the closing way, like a parachute.
 	MakeContactOnDelay = Symbol{
-		ID: "make_on_delay", Name: "make contact, delayed closing", Letter: "K", Turns: Turnable,
+		ID: "make_on_delay", Name: "make contact, delayed closing", Letter: "K", Turns: Contact,
 		Pins: through("1", "2"),
 		shapes: with(bladeOpen,
 			line(-0.58, -0.12, -1.3, -0.12),

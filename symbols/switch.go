@@ -28,7 +28,7 @@ var (
 
 	// FuseSwitchDisconnector bears its fuse link on the blade.
 	FuseSwitchDisconnector = Symbol{
-		ID: "fuse_switch_disc", Name: "fuse switch-disconnector", Letter: "Q", Turns: Turnable,
+		ID: "fuse_switch_disc", Name: "fuse switch-disconnector", Letter: "Q", Turns: Contact,
 		Pins: through("1", "2"),
 		shapes: with(bladeOpen,
 			line(-0.5, -1, 0.5, -1),
@@ -39,7 +39,7 @@ var (
 
 	// CircuitBreaker has a cross on the fixed contact. A small one that protects a cable bears F.
 	CircuitBreaker = Symbol{
-		ID: "breaker", Name: "circuit breaker", Letter: "Q", IEC: "S00287", Turns: Turnable,
+		ID: "breaker", Name: "circuit breaker", Letter: "Q", IEC: "S00287", Turns: Contact,
 		Pins: through("1", "2"),
 		shapes: with(bladeOpen,
 			line(-0.35, -1.35, 0.35, -0.65),
@@ -49,7 +49,7 @@ var (
 
 	// Disconnector has a bar on the fixed contact.
 	Disconnector = Symbol{
-		ID: "disconnector", Name: "disconnector", Letter: "Q", IEC: "S00288", Turns: Turnable,
+		ID: "disconnector", Name: "disconnector", Letter: "Q", IEC: "S00288", Turns: Contact,
 		Pins: through("1", "2"),
 		shapes: with(bladeOpen,
 			line(-0.5, -1, 0.5, -1),
@@ -58,7 +58,7 @@ var (
 
 	// SwitchDisconnector has a bar and a ring: it breaks load current and isolates.
 	SwitchDisconnector = Symbol{
-		ID: "switch_disc", Name: "switch-disconnector", Letter: "Q", IEC: "S00290", Turns: Turnable,
+		ID: "switch_disc", Name: "switch-disconnector", Letter: "Q", IEC: "S00290", Turns: Contact,
 		Pins: through("1", "2"),
 		shapes: with(bladeOpen,
 			line(-0.5, -1, 0.5, -1),
@@ -68,21 +68,21 @@ var (
 
 	// MakeContact closes when actuated; the hinge is below.
 	MakeContact = Symbol{
-		ID: "make", Name: "make contact", IEC: "S00227", Turns: Turnable,
+		ID: "make", Name: "make contact", IEC: "S00227", Turns: Contact,
 		Pins:   through("1", "2"),
 		shapes: bladeOpen,
 	}
 
 	// BreakContact opens when actuated; the blade leans over the end of the fixed stroke.
 	BreakContact = Symbol{
-		ID: "break", Name: "break contact", IEC: "S00229", Turns: Turnable,
+		ID: "break", Name: "break contact", IEC: "S00229", Turns: Contact,
 		Pins:   through("1", "2"),
 		shapes: bladeClosed,
 	}
 
 	// ChangeoverContact rests on NC and opens before it closes on NO.
 	ChangeoverContact = Symbol{
-		ID: "changeover", Name: "change-over contact", Turns: Turnable,
+		ID: "changeover", Name: "change-over contact", Turns: Contact,
 		Pins: []Pin{{"COM", 0, 2, Down}, {"NC", -1, -2, Up}, {"NO", 1, -2, Up}},
 		shapes: []shape{
 			line(0, 2, 0, 1),
@@ -94,7 +94,7 @@ var (
 
 	// PushButtonMake springs back; the dashed link joins button and blade.
 	PushButtonMake = Symbol{
-		ID: "push_make", Name: "push-button, make", Letter: "S", IEC: "S00254", Turns: Turnable,
+		ID: "push_make", Name: "push-button, make", Letter: "S", IEC: "S00254", Turns: Contact,
 		Pins: through("1", "2"),
 		shapes: with(bladeOpen,
 			line(-0.58, 0, -1.9, 0).dashed(),
@@ -104,7 +104,7 @@ var (
 
 	// PushButtonBreak springs back; its link passes the gap without a dot.
 	PushButtonBreak = Symbol{
-		ID: "push_break", Name: "push-button, break", Letter: "S", Turns: Turnable,
+		ID: "push_break", Name: "push-button, break", Letter: "S", Turns: Contact,
 		Pins: through("1", "2"),
 		shapes: with(bladeClosed,
 			line(0.45, 0, -1.9, 0).dashed(),
@@ -114,7 +114,7 @@ var (
 
 	// ManualSwitch stays where it is put.
 	ManualSwitch = Symbol{
-		ID: "switch_manual", Name: "manual switch", Letter: "S", IEC: "S00253", Turns: Turnable,
+		ID: "switch_manual", Name: "manual switch", Letter: "S", IEC: "S00253", Turns: Contact,
 		Pins: through("1", "2"),
 		shapes: with(bladeOpen,
 			line(-0.58, 0, -1.9, 0).dashed(),
@@ -124,7 +124,7 @@ var (
 
 	// LatchingSwitch is held by a detent on the link.
 	LatchingSwitch = Symbol{
-		ID: "switch_latch", Name: "latching switch", Letter: "S", Turns: Turnable,
+		ID: "switch_latch", Name: "latching switch", Letter: "S", Turns: Contact,
 		Pins: through("1", "2"),
 		shapes: with(bladeOpen,
 			line(-0.58, 0, -2.5, 0).dashed(),

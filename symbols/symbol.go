@@ -75,7 +75,19 @@ const (
 	Turnable Turns = iota // parts in a current path: all four turns
 	Fixed                 // blocks: V only
 	Node                  // joints, terminals, earths: all four turns
+	Contact               // V and H only, so that contacts move to the right or up when actuated
 )
+
+// Allows reports whether a symbol may stand in turn t.
+func (k Turns) Allows(t Turn) bool {
+	switch k {
+	case Fixed:
+		return t == V
+	case Contact:
+		return t == V || t == H
+	}
+	return true
+}
 
 // Pin is a place where a wire meets the symbol, in modules.
 type Pin struct {

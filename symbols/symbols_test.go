@@ -12,11 +12,13 @@ import (
 var black = ink.Pen{Width: 0.25, Color: ink.Black}
 
 // allowed is the turns a symbol may stand in.
-func allowed(s *Symbol) []Turn {
-	if s.Turns == Fixed {
-		return []Turn{V}
+func allowed(s *Symbol) (list []Turn) {
+	for t := V; t <= HU; t++ {
+		if s.Turns.Allows(t) {
+			list = append(list, t)
+		}
 	}
-	return []Turn{V, H, U, HU}
+	return list
 }
 
 // drawn records s at the origin, with its coordinates in modules.
@@ -151,7 +153,7 @@ func TestBounds(t *testing.T) {
 	}
 	// Parts in a current path stand four modules apart without touching leads.
 	for _, s := range All() {
-		if s.Turns == Turnable && len(s.Pins) == 2 {
+		if (s.Turns == Turnable || s.Turns == Contact) && len(s.Pins) == 2 {
 			if b := s.Bounds(V); b.X < -3 || b.X+b.W > 3 {
 				t.Errorf("%s reaches its neighbour's lead: %v", s.ID, b)
 			}
@@ -261,6 +263,9 @@ func TestContactsMoveRight(t *testing.T) {
 	makes := []*Symbol{&MakeContact, &CircuitBreaker, &Disconnector, &SwitchDisconnector, &FuseSwitchDisconnector,
 		&PushButtonMake, &ManualSwitch, &LatchingSwitch, &MakeContactOnDelay}
 	for _, s := range makes {
+		if s.Turns.Allows(U) || s.Turns.Allows(HU) || !s.Turns.Allows(H) {
+			t.Errorf("%s may stand upside down", s.ID)
+		}
 		if _, tip := blade(t, s, V); tip.X >= 0 {
 			t.Errorf("%s: tip at %v", s.ID, tip)
 		}

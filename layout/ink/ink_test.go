@@ -9,28 +9,6 @@ import (
 	"pgregory.net/rapid"
 )
 
-// testSheet draws some of everything on c.
-func testSheet(c Canvas) {
-	c.Group(Object{ID: "frame", Class: "frame", Title: "Frame <1> & more"}, func() {
-		c.Stroke(new(Path).Rect(Rect{20, 10, 390, 277}), Pen{Width: 0.7, Color: Black})
-	})
-	c.Group(Object{ID: "F12", Class: "part", Title: `-F12 "fuse"`, Data: []Attr{{"net", "L+ & <x>"}, {"value", "2 A"}}}, func() {
-		c.Stroke(new(Path).Rect(Rect{100, 50, 2.5, 7.5}), Pen{Width: 0.25, Color: Black})
-		c.Stroke(new(Path).Move(101.25, 47.5).Line(101.25, 60), Pen{Width: 0.25, Color: Dusk, Dash: []float64{1.5, 0.75}})
-		c.Group(Object{Class: "text"}, func() {
-			c.Text(Point{98, 53}, "−F12  2 A <&>", Lettering(Medium, 2.5), End, Black, false)
-		})
-		c.Mark("F12-place", Point{100, 50})
-	})
-	c.Fill(new(Path).Circle(Point{101.25, 60}, 0.5), Black)
-	c.Fill(new(Path).RoundRect(Rect{120, 60, 9, 4}, 0.6), Black)
-	c.Text(Point{124.5, 63.2}, "TP1", Lettering(Bold, 2.5), Middle, White, false)
-	c.Text(Point{15, 148.5}, "upward Ω µ ² °", Lettering(Regular, 3.5), Middle, Mid, true)
-	c.Text(Point{200, 100}, "W3+ 31", Lettering(Mono, 2.5), Start, Black, false)
-	c.Stroke(new(Path).Move(150, 100).Arc(Point{160, 100}, 5, true, false), Pen{Width: 0.35, Color: Rule})
-	c.Stroke(new(Path).Ellipse(Point{200, 150}, 9.25, 1.125), Pen{Width: 0.25, Color: Black})
-}
-
 func near(t *testing.T, what string, got, want, tolerance float64) {
 	t.Helper()
 	if math.IsNaN(got) || math.Abs(got-want) > tolerance {
@@ -181,42 +159,6 @@ func TestArcs(t *testing.T) {
 	onCircle(t, half, Point{0, 1}, 1) // radius raised to half the distance
 	if half.Bounds().X+half.Bounds().W < 0.9 {
 		t.Errorf("downward clockwise half circle must bulge right: %v", half.Bounds())
-	}
-}
-
-func TestRecorderFaults(t *testing.T) {
-	r := NewRecorder(100, 100, "A")
-	r.Stroke(new(Path).Move(math.NaN(), 0).Line(1, 1), Pen{Width: 1})
-	r.Stroke(new(Path).Move(0, 0).Line(1, 1), Pen{})
-	r.Stroke(new(Path).Line(1, 1), Pen{Width: 1})
-	r.Stroke(new(Path).Move(0, 0).Line(1, 1), Pen{Width: 1, Dash: []float64{0, 0}})
-	r.Text(Point{1, 1}, "done ✓", Font{Regular, 3}, Start, Black, false)
-	r.Text(Point{math.Inf(1), 1}, "far", Font{Regular, 3}, Start, Black, false)
-	r.Group(Object{ID: "x"}, func() {})
-	r.Group(Object{ID: "x"}, func() {})
-	r.Mark("m", Point{})
-	r.Mark("m", Point{})
-	r.Link(Rect{0, 0, -1, 1}, Target{Sheet: 1})
-	if got := len(r.faults); got != 9 {
-		t.Errorf("%d faults, want 9: %v", got, r.Err())
-	}
-	ok := NewRecorder(420, 297, "B")
-	testSheet(ok)
-	ok.Stroke(nil, Pen{})
-	ok.Stroke(new(Path), Pen{})
-	ok.Text(Point{}, "", Font{}, Start, Black, false)
-	if err := ok.Err(); err != nil {
-		t.Error(err)
-	}
-}
-
-func TestReplayRepeats(t *testing.T) {
-	a := NewRecorder(420, 297, "B")
-	testSheet(a)
-	b := NewRecorder(420, 297, "B")
-	a.Replay(b)
-	if a.String() != b.String() {
-		t.Errorf("replayed:\n%s\nwant:\n%s", b, a)
 	}
 }
 

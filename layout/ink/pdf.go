@@ -19,14 +19,13 @@ type Info struct {
 	Author   string
 	Subject  string
 	Keywords string
-	Date     time.Time // date of issue; the only time that gets into the file
+	Date     time.Time // of issue, the only time in the file; the Unix epoch stands for none
 }
 
 // PDF is a Book that becomes one PDF document. The same sheets and Info give the
 // same bytes, whatever else was made in the process.
 type PDF struct {
 	info   Info
-	plain  bool // streams left uncompressed, for tests that read them
 	sheets []*Recorder
 }
 
@@ -55,12 +54,15 @@ func (p *PDF) Output() ([]byte, error) {
 	}
 	d := &pdfDoc{marks: findMarks(p.sheets)}
 	d.f = gofpdf.NewCustom(&gofpdf.InitType{UnitStr: "mm", Size: gofpdf.SizeType{Wd: p.sheets[0].W, Ht: p.sheets[0].H}})
-	d.f.SetCompression(!p.plain)
 	d.f.SetCatalogSort(true)
 	d.f.SetMargins(0, 0, 0)
 	d.f.SetAutoPageBreak(false, 0)
-	d.f.SetCreationDate(p.info.Date.UTC())
-	d.f.SetModificationDate(p.info.Date.UTC())
+	date := p.info.Date.UTC()
+	if date.IsZero() { // for which gofpdf would read the clock
+		date = time.Unix(0, 0).UTC()
+	}
+	d.f.SetCreationDate(date)
+	d.f.SetModificationDate(date)
 	d.f.SetProducer("Gloamwright", false)
 	d.f.SetTitle(Clean(p.info.Title), true)
 	d.f.SetAuthor(Clean(p.info.Author), true)

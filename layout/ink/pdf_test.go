@@ -1,31 +1,34 @@
-package ink
+package ink_test
 
 import (
 	"bytes"
+	"compress/zlib"
 	"fmt"
+	"io"
 	"strings"
 	"sync"
 	"testing"
 	"time"
+
+	"gloamwright/layout/ink"
 )
 
-var testInfo = Info{Title: "Standby lighting – Größe", Author: "A. Marlowe", Date: time.Date(2026, 12, 1, 0, 0, 0, 0, time.UTC)}
+var testInfo = ink.Info{Title: "Standby lighting – Größe", Author: "A. Marlowe", Date: time.Date(2026, 12, 1, 0, 0, 0, 0, time.UTC)}
 
-func testBook(t *testing.T, plain bool, name string) []byte {
+func testBook(t *testing.T, name string) []byte {
 	t.Helper()
-	p := NewPDF(testInfo)
-	p.plain = plain
+	p := ink.NewPDF(testInfo)
 	first := p.Sheet(210, 297, "Cover")
 	second := p.Sheet(420, 297, "Circuit "+name)
 	third := p.Sheet(297, 210, "Readings")
 	testSheet(second)
-	for face := range Face(len(faceNames)) {
-		first.Text(Point{30, 30 + 8*float64(face)}, name+" "+face.String(), Font{face, 5}, Start, Black, false)
+	for _, face := range faces {
+		first.Text(ink.Point{30, 30 + 8*float64(face)}, name+" "+face.String(), ink.Font{face, 5}, ink.Start, ink.Black, false)
 	}
-	first.Link(Rect{30, 20, 50, 10}, Target{Sheet: 2, Anchor: "F12-place"})
-	first.Link(Rect{30, 30, 50, 10}, Target{Anchor: "TP1", File: "other.svg"})
-	first.Link(Rect{30, 40, 50, 10}, Target{Sheet: 3})
-	third.Mark("TP1", Point{20, 60})
+	first.Link(ink.Rect{30, 20, 50, 10}, ink.Target{Sheet: 2, Anchor: "F12-place"})
+	first.Link(ink.Rect{30, 30, 50, 10}, ink.Target{Anchor: "TP1", File: "other.svg"})
+	first.Link(ink.Rect{30, 40, 50, 10}, ink.Target{Sheet: 3})
+	third.Mark("TP1", ink.Point{20, 60})
 	out, err := p.Output()
 	if err != nil {
 		t.Fatal(err)
@@ -33,13 +36,35 @@ func testBook(t *testing.T, plain bool, name string) []byte {
 	return out
 }
 
+// faces are all the type faces.
+var faces = []ink.Face{ink.Regular, ink.Medium, ink.Bold, ink.Italic, ink.Mono, ink.MonoBold}
+
+// inflated is a document with its streams unpacked, to be read only: its offsets
+// no longer hold.
+func inflated(t *testing.T, file []byte) []byte {
+	t.Helper()
+	parts := bytes.Split(file, []byte("\nstream\n"))
+	out := parts[0]
+	for _, part := range parts[1:] {
+		data, rest, _ := bytes.Cut(part, []byte("\nendstream"))
+		if z, err := zlib.NewReader(bytes.NewReader(data)); err == nil {
+			if data, err = io.ReadAll(z); err != nil {
+				t.Fatal(err)
+			}
+		}
+		out = append(out, "\nstream\n"...)
+		out = append(append(append(out, data...), "\nendstream"...), rest...)
+	}
+	return out
+}
+
 // TestSameBytesAfterOtherDocuments fails when the font bytes are shared between
 // documents: gofpdf overwrites part of them.
 func TestSameBytesAfterOtherDocuments(t *testing.T) {
-	want := testBook(t, false, "x")
+	want := testBook(t, "x")
 	for i := range 50 {
-		testBook(t, false, fmt.Sprintf("other %d αβγ", i))
-		if !bytes.Equal(testBook(t, false, "x"), want) {
+		testBook(t, fmt.Sprintf("other %d αβγ", i))
+		if !bytes.Equal(testBook(t, "x"), want) {
 			t.Fatalf("document %d differs", i)
 		}
 	}
@@ -49,7 +74,7 @@ func TestSameBytesAfterOtherDocuments(t *testing.T) {
 		wait.Add(1)
 		go func() {
 			defer wait.Done()
-			differs[i] = !bytes.Equal(testBook(t, false, "x"), want)
+			differs[i] = !bytes.Equal(testBook(t, "x"), want)
 		}()
 	}
 	wait.Wait()
@@ -61,8 +86,8 @@ func TestSameBytesAfterOtherDocuments(t *testing.T) {
 }
 
 func TestPDFContents(t *testing.T) {
-	out := string(testBook(t, true, "x"))
-	const k = pointsPerMM
+	out := string(inflated(t, testBook(t, "x")))
+	const k = 72 / 25.4
 	for what, want := range map[string]string{
 		"A4 page":                "/MediaBox [0 0 595.28 841.89]",
 		"A3 page":                "/MediaBox [0 0 1190.55 841.89]",
@@ -84,16 +109,18 @@ func TestPDFContents(t *testing.T) {
 }
 
 func TestPDFRefuses(t *testing.T) {
-	if _, err := NewPDF(testInfo).Output(); err == nil {
+	if _, err := ink.NewPDF(testInfo).Output(); err == nil {
 		t.Error("document without sheets accepted")
 	}
-	for name, draw := range map[string]func(Canvas){
-		"leads nowhere":   func(c Canvas) { c.Link(Rect{0, 0, 1, 1}, Target{Anchor: "gone"}) },
-		"sheet 2":         func(c Canvas) { c.Link(Rect{0, 0, 1, 1}, Target{Sheet: 2}) },
-		"no sign":         func(c Canvas) { c.Text(Point{1, 1}, "✓", Font{Regular, 3}, Start, Black, false) },
-		"cannot be drawn": func(c Canvas) { c.Fill(new(Path).Line(1, 1), Black) },
+	for name, draw := range map[string]func(ink.Canvas){
+		"leads nowhere": func(c ink.Canvas) { c.Link(ink.Rect{0, 0, 1, 1}, ink.Target{Anchor: "gone"}) },
+		"sheet 2":       func(c ink.Canvas) { c.Link(ink.Rect{0, 0, 1, 1}, ink.Target{Sheet: 2}) },
+		"no sign": func(c ink.Canvas) {
+			c.Text(ink.Point{1, 1}, "✓", ink.Font{ink.Regular, 3}, ink.Start, ink.Black, false)
+		},
+		"cannot be drawn": func(c ink.Canvas) { c.Fill(new(ink.Path).Line(1, 1), ink.Black) },
 	} {
-		p := NewPDF(testInfo)
+		p := ink.NewPDF(testInfo)
 		draw(p.Sheet(100, 100, "S"))
 		if _, err := p.Output(); err == nil || !strings.Contains(err.Error(), name) {
 			t.Errorf("error %v, want one with %q", err, name)
@@ -102,7 +129,7 @@ func TestPDFRefuses(t *testing.T) {
 }
 
 func TestOutputTwice(t *testing.T) {
-	p := NewPDF(testInfo)
+	p := ink.NewPDF(testInfo)
 	testSheet(p.Sheet(420, 297, "A"))
 	a, err := p.Output()
 	if err != nil || len(a) == 0 {
@@ -111,5 +138,14 @@ func TestOutputTwice(t *testing.T) {
 	b, err := p.Output()
 	if err != nil || !bytes.Equal(a, b) {
 		t.Errorf("second output: %d bytes, %v", len(b), err)
+	}
+}
+
+func TestNoClock(t *testing.T) {
+	p := ink.NewPDF(ink.Info{})
+	p.Sheet(100, 100, "A")
+	out, err := p.Output()
+	if err != nil || bytes.Count(out, []byte("D:19700101000000")) != 2 {
+		t.Errorf("dates of an undated document: %v", err)
 	}
 }

@@ -1,4 +1,4 @@
-package ink
+package ink_test
 
 import (
 	"bytes"
@@ -10,6 +10,10 @@ import (
 	"strings"
 	"testing"
 	"unicode/utf16"
+
+	"gloamwright/layout/ink"
+	"gloamwright/layout/sheet"
+	"gloamwright/symbols"
 )
 
 // mark is one stroke, fill or text as read back from a finished file, in
@@ -20,7 +24,7 @@ type mark struct {
 	color  string // rrggbb
 	dash   []float64
 	verbs  string
-	points []Point
+	points []ink.Point
 	text   string
 	size   float64
 	turned bool
@@ -62,7 +66,7 @@ func svgMarks(t *testing.T, file []byte) (list []mark) {
 				xy = append(xy, num(f))
 			}
 			for i := 0; i+1 < len(xy); i += 2 {
-				m.points = append(m.points, Point{xy[i], xy[i+1]})
+				m.points = append(m.points, ink.Point{xy[i], xy[i+1]})
 			}
 			list = append(list, m)
 		case e.name == "text":
@@ -72,16 +76,16 @@ func svgMarks(t *testing.T, file []byte) (list []mark) {
 			if name == nil {
 				t.Fatalf("text %q in %q", e.text, e.attr["font-family"])
 			}
-			face := Face(slices.Index(faceNames[:], name[1]))
-			w := Width(e.text, Font{face, m.size})
+			face := faces[slices.IndexFunc(faces, func(f ink.Face) bool { return f.String() == name[1] })]
+			w := ink.Width(e.text, ink.Font{face, m.size})
 			shift := map[string]float64{"": 0, "middle": w / 2, "end": w}[e.attr["text-anchor"]]
-			at := Point{num(e.attr["x"]), num(e.attr["y"])}
+			at := ink.Point{num(e.attr["x"]), num(e.attr["y"])}
 			if m.turned {
 				at.Y += shift
 			} else {
 				at.X -= shift
 			}
-			m.points = []Point{at}
+			m.points = []ink.Point{at}
 			list = append(list, m)
 		}
 	}
@@ -107,7 +111,7 @@ func pdfMarks(t *testing.T, file []byte, n int, height float64) (list []mark) {
 		}
 		return fmt.Sprintf("%02x%02x%02x", c(v[0]), c(v[1]), c(v[2]))
 	}
-	toMM := func(x, y float64) Point { return Point{x / k, height - y/k} }
+	toMM := func(x, y float64) ink.Point { return ink.Point{x / k, height - y/k} }
 	push := func(letter string) {
 		cur.verbs += letter
 		for i := 0; i+1 < len(stack); i += 2 {
@@ -199,7 +203,7 @@ func pdfMarks(t *testing.T, file []byte, n int, height float64) (list []mark) {
 				x, y = matrix[0]*x+matrix[2]*y+matrix[4], matrix[1]*x+matrix[3]*y+matrix[5]
 				matrix = nil
 			}
-			m.points = []Point{toMM(x, y)}
+			m.points = []ink.Point{toMM(x, y)}
 			cur = m
 		case "Tj":
 			cur.text = text
@@ -213,24 +217,56 @@ func pdfMarks(t *testing.T, file []byte, n int, height float64) (list []mark) {
 	return list
 }
 
+// busySheet is a full sheet: frame, notes, every symbol, some of everything.
+func busySheet(c ink.Canvas) {
+	testSheet(c)
+	sheet.A3.Draw(c, sheet.TitleBlock{Owner: "Bracken Reach Trust", Title: "Größe & <more>", Sheet: 2, Of: 5, Warning: "NOT FOR CONSTRUCTION"})
+	if _, err := sheet.A3.DrawNotes(c, []sheet.Caution{{Word: "DANGER", Text: "230 V inside."}}, []string{"A note."}); err != nil {
+		panic(err)
+	}
+	turns := []symbols.Turn{symbols.V, symbols.H, symbols.U, symbols.HU}
+	for i, s := range symbols.All() {
+		t := turns[i%4]
+		if !s.Turns.Allows(t) {
+			t = symbols.V
+		}
+		s.Draw(c, symbols.On(20+i%10*12, 25+i/10*8, t), ink.Pen{Width: 0.25, Color: ink.Black}, "GN")
+	}
+	symbols.Probe(c, ink.Point{X: 200, Y: 250}, symbols.Left, ink.Pen{Width: 0.25, Color: ink.Black}, "TP9")
+}
+
 // TestBothInksAlike reads both files back and compares every mark, in order.
 func TestBothInksAlike(t *testing.T) {
-	s := NewSVG(420, 297, "S", "")
-	testSheet(s)
+	count := 0
+	counter := ink.NewRecorder(420, 297, "S")
+	busySheet(counter)
+	var walk func(calls []ink.Call)
+	walk = func(calls []ink.Call) {
+		for _, c := range calls {
+			switch c := c.(type) {
+			case ink.Grouped:
+				walk(c.Calls)
+			case ink.Stroked, ink.Filled, ink.Written:
+				count++
+			}
+		}
+	}
+	walk(counter.Calls)
+	s := ink.NewSVG(420, 297, "S", "")
+	busySheet(s)
 	picture, err := s.Output()
 	if err != nil {
 		t.Fatal(err)
 	}
-	p := NewPDF(testInfo)
-	p.plain = true
-	testSheet(p.Sheet(420, 297, "S"))
+	p := ink.NewPDF(testInfo)
+	busySheet(p.Sheet(420, 297, "S"))
 	document, err := p.Output()
 	if err != nil {
 		t.Fatal(err)
 	}
-	a, b := svgMarks(t, picture), pdfMarks(t, document, 1, 297)
-	if len(a) != len(b) || len(a) != 11 {
-		t.Fatalf("%d marks in SVG, %d in PDF, want 11", len(a), len(b))
+	a, b := svgMarks(t, picture), pdfMarks(t, inflated(t, document), 1, 297)
+	if len(a) != len(b) || len(a) != count || count < 300 {
+		t.Fatalf("%d marks in SVG, %d in PDF, %d drawn", len(a), len(b), count)
 	}
 	for i := range a {
 		if err := alike(a[i], b[i]); err != nil {

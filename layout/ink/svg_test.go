@@ -1,4 +1,4 @@
-package ink
+package ink_test
 
 import (
 	"bytes"
@@ -7,15 +7,17 @@ import (
 	"math"
 	"strings"
 	"testing"
+
+	"gloamwright/layout/ink"
 )
 
 func testSVG(t *testing.T) []byte {
 	t.Helper()
-	s := NewSVG(420, 297, "Supply <&> battery", "A sheet with some of everything & \"more\"")
+	s := ink.NewSVG(420, 297, "Supply <&> battery", "A sheet with some of everything & \"more\"")
 	testSheet(s)
-	s.Link(Rect{10, 10, 20, 5}, Target{File: "schematic-2.svg", Anchor: "F 1"})
-	s.Link(Rect{10, 20, 20, 5}, Target{Anchor: "F12"})
-	s.Link(Rect{10, 30, 20, 5}, Target{Sheet: 12, Anchor: "row-9"})
+	s.Link(ink.Rect{10, 10, 20, 5}, ink.Target{File: "schematic-2.svg", Anchor: "F 1"})
+	s.Link(ink.Rect{10, 20, 20, 5}, ink.Target{Anchor: "F12"})
+	s.Link(ink.Rect{10, 30, 20, 5}, ink.Target{Sheet: 12, Anchor: "row-9"})
 	out, err := s.Output()
 	if err != nil {
 		t.Fatal(err)
@@ -122,13 +124,13 @@ func TestSVGStructure(t *testing.T) {
 }
 
 func TestSVGRefuses(t *testing.T) {
-	for want, draw := range map[string]func(Canvas){
-		"leads nowhere":  func(c Canvas) { c.Link(Rect{0, 0, 1, 1}, Target{Anchor: "gone"}) },
-		"has a space":    func(c Canvas) { c.Group(Object{ID: "a b"}, func() {}) },
-		"data attribute": func(c Canvas) { c.Group(Object{Data: []Attr{{"a=b", ""}}}, func() {}) },
-		"no sign":        func(c Canvas) { c.Text(Point{1, 1}, "☐", Font{Mono, 3}, Start, Black, false) },
+	for want, draw := range map[string]func(ink.Canvas){
+		"leads nowhere":  func(c ink.Canvas) { c.Link(ink.Rect{0, 0, 1, 1}, ink.Target{Anchor: "gone"}) },
+		"has a space":    func(c ink.Canvas) { c.Group(ink.Object{ID: "a b"}, func() {}) },
+		"data attribute": func(c ink.Canvas) { c.Group(ink.Object{Data: []ink.Attr{{"a=b", ""}}}, func() {}) },
+		"no sign":        func(c ink.Canvas) { c.Text(ink.Point{1, 1}, "☐", ink.Font{ink.Mono, 3}, ink.Start, ink.Black, false) },
 	} {
-		s := NewSVG(10, 10, "S", "")
+		s := ink.NewSVG(10, 10, "S", "")
 		draw(s)
 		if _, err := s.Output(); err == nil || !strings.Contains(err.Error(), want) {
 			t.Errorf("error %v, want one with %q", err, want)
@@ -139,8 +141,8 @@ func TestSVGRefuses(t *testing.T) {
 // TestDarkContrast: what can be read on paper can be read on a dark screen. The
 // ratio is that of WCAG 2.2, which asks for 4.5 in text.
 func TestDarkContrast(t *testing.T) {
-	luminance := func(c Color) float64 {
-		part := func(v Color) float64 {
+	luminance := func(c ink.Color) float64 {
+		part := func(v ink.Color) float64 {
 			s := float64(v&0xFF) / 255
 			if s <= 0.04045 {
 				return s / 12.92
@@ -149,20 +151,22 @@ func TestDarkContrast(t *testing.T) {
 		}
 		return 0.2126*part(c>>16) + 0.7152*part(c>>8) + 0.0722*part(c)
 	}
-	ratio := func(a, b Color) float64 {
+	ratio := func(a, b ink.Color) float64 {
 		x, y := luminance(a)+0.05, luminance(b)+0.05
 		return max(x, y) / min(x, y)
 	}
-	near(t, "black on white", ratio(Black, White), 21, 1e-9)
-	for _, c := range []Color{Black, Dusk, Mid} {
-		if r := ratio(Dark(c), Dark(White)); r < 4.5 {
-			t.Errorf("%06X becomes %06X: contrast %.1f", uint32(c), uint32(Dark(c)), r)
+	if r := ratio(ink.Black, ink.White); math.Abs(r-21) > 1e-9 {
+		t.Errorf("black on white %v, the standard says 21", r)
+	}
+	for _, c := range []ink.Color{ink.Black, ink.Dusk, ink.Mid} {
+		if r := ratio(ink.Dark(c), ink.Dark(ink.White)); r < 4.5 {
+			t.Errorf("%06X becomes %06X: contrast %.1f", uint32(c), uint32(ink.Dark(c)), r)
 		}
-		if r := ratio(Dark(c), Dark(Tint)); r < 4.5 {
+		if r := ratio(ink.Dark(c), ink.Dark(ink.Tint)); r < 4.5 {
 			t.Errorf("%06X on tint: contrast %.1f", uint32(c), r)
 		}
 	}
-	if d := Dark(Black); d>>16 != d>>8&0xFF || d>>16 != d&0xFF {
+	if d := ink.Dark(ink.Black); d>>16 != d>>8&0xFF || d>>16 != d&0xFF {
 		t.Errorf("black becomes %06X, not a grey", uint32(d))
 	}
 }
