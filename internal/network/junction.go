@@ -66,8 +66,8 @@ func (d junction) current(v float64) (i, slope float64) {
 
 // limited returns the voltage at which to take the tangent after a step from old to
 // v: an exponential without series resistance is entered logarithmically.
-// L. W. Nagel, "SPICE2: a computer program to simulate semiconductor circuits",
-// ERL-M520, Berkeley 1975, appendix 2.
+// L. W. Nagel, memorandum ERL-M520, University of California, Berkeley 1975,
+// appendix 2.
 func (d junction) limited(v, old float64) (float64, bool) {
 	if d.rs > 0 {
 		return v, false

@@ -18,8 +18,8 @@ const (
 // The first factorisation chooses the pivots by J. R. Gilbert and T. Peierls,
 // "Sparse partial pivoting in time proportional to arithmetic operations", SIAM J.
 // Sci. Stat. Comput. 9, 1988. Later ones reuse its pivots and its pattern, as in
-// T. A. Davis and E. Palamadai Natarajan, "Algorithm 907: KLU", ACM Trans. Math.
-// Softw. 37, 2010, and choose anew only when a pivot has become too small.
+// T. A. Davis and E. Palamadai Natarajan, "Algorithm 907", ACM Trans. Math. Softw.
+// 37, 2010, and choose anew only when a pivot has become too small.
 type lu struct {
 	n     int
 	order []int32 // order[k] is the column of the k-th pivot

@@ -231,9 +231,6 @@ W5 conductor d q ohm=0.05`,
 	{"Gayakwad, Op-Amps and Linear Integrated Circuits, ex. 9.11: 5 V (companion)",
 		adjustable(240, 706.436, 100e-6),
 		[]printed{{"Vo", volts("out", "0"), 5, 0.005}}},
-	{"Electronics course page: 220 ohm, 655 ohm, 50 uA",
-		adjustable(220, 655, 50e-6),
-		[]printed{{"Vo", volts("out", "0"), 5, 0.01}}},
 
 	// Filament and coil.
 	{"College Physics 2e, Resistance and Resistivity: filament 4.8 ohm hot, 0.350 ohm cold",
