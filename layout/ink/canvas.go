@@ -78,7 +78,7 @@ type Attr struct{ Name, Value string }
 type Target struct {
 	File   string // another file of the output folder (SVG), empty within a PDF
 	Sheet  int    // packet sheet number (PDF), counted from 1; 0 if unknown
-	Anchor string // object ID there (SVG) or a place named by Canvas.Anchor (PDF)
+	Anchor string // object ID there (SVG) or a place named by Canvas.Mark (either)
 }
 
 // Canvas is one sheet to draw on.
