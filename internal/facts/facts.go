@@ -154,6 +154,8 @@ type Battery struct {
 	Ventilation       float64 // m³/h of air, IEC 62485-2; 0 if none is needed
 	OpeningCM2        float64 // free opening of each of two vents
 	Gas               bool
+	Removed           quantity.AmpereHour   // taken out by the asked outage
+	Rates             []catalogue.RatePoint // capacity table given in the description; empty: the class's
 }
 
 // Charger is the outcome of sizing the charger.

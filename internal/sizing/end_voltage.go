@@ -46,12 +46,11 @@ type CutOffInput struct {
 // a resting empty battery does not reach by itself (common practice).
 func CutOff(in CutOffInput) (opens, recloses quantity.Volt, w []Working, err error) {
 	n := quantity.Volt(in.Cells)
-	end := min(in.End, in.Class.Opens*n)
-	o := (end - in.Drop) / quantity.Volt(1+in.Accuracy)
+	o := (in.End - in.Drop) / quantity.Volt(1+in.Accuracy)
 	r := in.Class.Recloses * n
 	w = []Working{{
-		Name: "cut-off opens", Formula: "U_open = (min(U_end ; n × u_open) − ΔU) ÷ (1 + accuracy)",
-		Substituted: fmt.Sprintf("(min(%s ; %d × %s) − %s) ÷ (1 + %s)", num(float64(in.End), "V"), in.Cells, num(float64(in.Class.Opens), "V"),
+		Name: "cut-off opens", Formula: "U_open = (U_end − ΔU) ÷ (1 + accuracy)",
+		Substituted: fmt.Sprintf("(%s − %s) ÷ (1 + %s)", num(float64(in.End), "V"),
 			num(float64(in.Drop), "V"), num(float64(in.Accuracy), "")),
 		Value: float64(o), Unit: "V", Source: "common practice; " + in.Class.Evidence.String(),
 	}, {

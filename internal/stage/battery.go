@@ -1,6 +1,9 @@
 package stage
 
 import (
+	"cmp"
+	"fmt"
+	"slices"
 	"strings"
 
 	"gloamwright/internal/catalogue"
@@ -11,7 +14,7 @@ import (
 	"gloamwright/internal/sizing"
 )
 
-// battery returns the kind: the store: blocks in series and parallel, the main fuse at its plus
+// battery returns the kind: blocks in series and parallel, the main fuse at the plus
 // terminal, an isolator if asked.
 func battery() *Kind {
 	return &Kind{
@@ -180,14 +183,7 @@ func sizeMainFuse(p *Plan, s *describe.Stage) {
 	}
 	rating := given.Val
 	if !given.Given {
-		k := p.Site.Practice.LoadFactor.Val
-		r, w, err := sizing.ChooseFuse(sizing.FuseInput{Class: class, Load: need * quantity.Ampere(k), LoadFactor: k})
-		if err != nil {
-			p.block(part.Designation, part.At, w.Source, err)
-			r = class.Ratings[len(class.Ratings)-1]
-		}
-		p.work(part.Designation, "fuse rating", w)
-		rating = r
+		rating = p.chooseFuse(part, class, "everything", load, p.largestWay())
 	}
 	f := p.fit(part, class, rating, "everything", load, given.Given)
 	part.Description = class.Title + " and holder, at the plus pole"
@@ -290,24 +286,95 @@ func (p *Plan) cable(s *describe.Stage, local string) *circuit.Cable {
 	return nil
 }
 
-// sizeBattery sizes the battery over the load cycle of an outage.
+// sizeBattery sizes the battery over the load cycle of an outage: lights and what
+// the stages draw, for the whole of it, at the coldest room and the end of life.
 func sizeBattery(p *Plan, s *describe.Stage) {
 	g := p.part(s, "battery")
-	amps := p.Light + p.Standing
-	hours := p.Site.Duty.Outage.Val.Hours()
-	need, cap := shimBattery(p, amps, hours)
-	given, pinned := describe.Get[quantity.AmpereHour](s.Fields, "capacity")
-	if pinned {
-		cap = given.Val
+	b := &p.F.Battery
+	amps, outage := p.Light+p.Standing, p.Site.Duty.Outage.Val
+	practice := p.Site.Practice
+	table, _ := describe.Get[[]describe.RatePoint](s.Fields, "table")
+	rates := p.rates(table.Val)
+	need, ws, err := sizing.Sectional(sizing.SectionalInput{
+		Class: p.Class, Rates: rates, EndVolt: p.End / quantity.Volt(p.Cells), Coldest: p.Site.Duty.BatteryRoom.Val.Low,
+		Periods: []sizing.Period{{Name: "outage at night", Current: amps, Time: outage}},
+		Ageing:  practice.Ageing.Val, Margin: practice.Margin.Val,
+	})
+	if err != nil {
+		p.block(g.Designation, g.At, "", err)
 	}
-	p.Internal = quantity.Ohm(float64(p.Cells) * p.Class.OhmAh.Typical / float64(cap))
-	blocks := p.Cells / 6
-	set(g, "capacity", p.Site.Duty.Nominal.Val.String()+" "+cap.String(), float64(cap), "Ah", true, pinned)
+	for _, w := range ws {
+		p.work(g.Designation, "", w, "battery: end of discharge")
+	}
+	given, pinned := describe.Get[quantity.AmpereHour](s.Fields, "capacity")
+	parallel, _ := describe.Get[int](s.Fields, "parallel")
+	bank, w, err := sizing.NextCapacity(sizing.BankInput{Class: p.Class, Required: need, Cells: p.Cells, Stock: practice.Blocks.Val, Parallel: parallel.Val})
+	if pinned {
+		bank.Capacity = given.Val
+		bank.Parallel = max(1, parallel.Val)
+		bank.Block = p.blockOf(given.Val / quantity.AmpereHour(bank.Parallel))
+		bank.Series = p.Cells / bank.Block.Cells
+	} else {
+		if err != nil {
+			p.block(g.Designation, g.At, "", err)
+			bank = sizing.Bank{Block: p.Class.Blocks[len(p.Class.Blocks)-1], Series: 1, Parallel: 1, Capacity: max(need, 1)}
+		}
+		p.work(g.Designation, "", w, g.Designation+": required capacity")
+	}
+	p.Internal, w = sizing.Internal(p.Class.OhmAh.Typical, p.Cells, bank.Capacity)
+	p.work(g.Designation, "", w, g.Designation+": capacity fitted")
+	set(g, "capacity", p.Site.Duty.Nominal.Val.String()+" "+bank.Capacity.String(), float64(bank.Capacity), "Ah", true, pinned)
 	set(g, "class", strings.ToUpper(p.Class.Name), 0, "", true, true)
+	g.Description = fmt.Sprintf("Battery, %s, %d × %v %s", strings.ToLower(p.Class.Title[:1])+p.Class.Title[1:], bank.Series*bank.Parallel,
+		quantity.Volt(bank.Block.Cells)*p.Class.Cell, bank.Block.Capacity)
 	params(g, "", circuit.Param{Name: "emf", Value: float64(p.Full)}, circuit.Param{Name: "ohm", Value: float64(p.Internal)})
-	p.F.Battery = facts.Battery{
-		Part: g, Class: p.Class.Name, ClassName: p.Class.Title, Series: p.Cells, Blocks: blocks, Parallel: 1,
-		BlockVolt: quantity.Volt(6) * p.Class.Cell, Capacity: cap, Required: need, Pinned: pinned, RatedHours: p.Class.RatedTime.Hours(),
-		EndVolt: p.End, FullVolt: p.Full, FloatVolt: p.Float, Resistance: p.Internal, Fuse: p.part(s, "fuse"),
+	*b = facts.Battery{
+		Part: g, Class: p.Class.Name, ClassName: p.Class.Title, Series: p.Cells, Blocks: bank.Series, Parallel: bank.Parallel,
+		BlockVolt: quantity.Volt(bank.Block.Cells) * p.Class.Cell, Capacity: bank.Capacity, Required: need, Pinned: pinned,
+		RatedHours: p.Class.RatedTime.Hours(), Rates: rates, EndVolt: p.End, FullVolt: p.Full, FloatVolt: p.Float, Resistance: p.Internal,
+		Fuse: p.part(s, "fuse"), Removed: quantity.AmpereHour(float64(amps) * outage.Hours()),
+	}
+	if f, listed := p.Class.SizeFactor(p.Site.Duty.BatteryRoom.Val.Low); listed {
+		b.TemperatureFactor = max(float64(f), 1)
+	}
+	p.air(g, b)
+}
+
+// rates turns a table given in the description into parts of its largest capacity.
+func (p *Plan) rates(table []describe.RatePoint) []catalogue.RatePoint {
+	var most quantity.AmpereHour
+	for _, x := range table {
+		most = max(most, x.Capacity)
+	}
+	var out []catalogue.RatePoint
+	for _, x := range table {
+		out = append(out, catalogue.RatePoint{Time: x.Time, Fraction: quantity.Ratio(x.Capacity / most), End: p.Class.EndVolt})
+	}
+	slices.SortFunc(out, func(a, b catalogue.RatePoint) int { return cmp.Compare(a.Time, b.Time) })
+	return out
+}
+
+// blockOf returns the standard block nearest to a capacity, for words in the papers.
+func (p *Plan) blockOf(c quantity.AmpereHour) catalogue.Block {
+	best := catalogue.Block{Cells: 1, Capacity: c}
+	for _, b := range p.Class.Blocks {
+		if p.Cells%b.Cells == 0 {
+			best.Cells = b.Cells
+			if b.Capacity >= c {
+				break
+			}
+		}
+	}
+	return best
+}
+
+// air finds the ventilation that the battery needs while it is boosted.
+func (p *Plan) air(g *circuit.Part, b *facts.Battery) {
+	air, ws := sizing.Ventilation(sizing.VentilationInput{Class: p.Class, Cells: p.Cells, Capacity: b.Capacity, Boost: true})
+	b.Ventilation, b.OpeningCM2, b.Gas = air.Flow, air.Opening, air.Flow > 0
+	if b.Gas {
+		for _, w := range ws {
+			p.work(g.Designation, "", w, g.Designation+": capacity fitted")
+		}
 	}
 }

@@ -209,8 +209,7 @@ func (t *tree) protected(f *facts.Fuse, l sizing.Leg) sizing.Leg {
 // wayFuse chooses or checks the fuse of a way. Behind stands the largest fuse behind
 // it, 0 if there is none.
 func (p *Plan) wayFuse(w *circuit.Way, feeds string, load quantity.Ampere, given describe.At[quantity.Ampere], behind quantity.Ampere) *facts.Fuse {
-	f := p.systemFuse(w.Fuse, feeds, max(load, behind*discriminationRatio*quantity.Ampere(p.Site.Practice.LoadFactor.Val)), given)
-	f.Design = load
+	f := p.systemFuse(w.Fuse, feeds, load, behind, given)
 	f.Board, f.Way = w.Board, w
 	return f
 }

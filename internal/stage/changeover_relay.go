@@ -4,6 +4,7 @@ import (
 	"gloamwright/internal/catalogue"
 	"gloamwright/internal/facts"
 	"gloamwright/internal/quantity"
+	"gloamwright/internal/sizing"
 	"strconv"
 
 	"gloamwright/internal/circuit"
@@ -95,11 +96,11 @@ func expandChangeover(b *Build, s *describe.Stage) {
 		n := strconv.Itoa(i + 1)
 		end := k.Pin("A1")
 		if len(feeds) > 1 {
-			r := b.Part("feed"+n, circuit.Diode, "Diode in the coil feed", "A", "K")
-			b.Element(r, "", "diode", "A", "A", "K", "K")
+			r := b.Part("feed"+n, circuit.Schottky, "Schottky diode in the coil feed", "A", "K")
+			b.Element(r, "", "schottky", "A", "A", "K", "K")
 			b.Join(r.Pin("K"), k.Pin("A1"))
 			end = r.Pin("A")
-			b.symbol("diode", r, 8, float64(y), "H", "A")
+			b.symbol("schottky", r, 8, float64(y), "H", "A")
 			if i == 0 {
 				b.line(nil, 10, y, 15, y, 15, 38)
 			} else {
@@ -145,8 +146,21 @@ func sizeRelay(p *Plan, s *describe.Stage) {
 		ohm = given.Val
 	}
 	i := quantity.Ampere(float64(nominal) / float64(ohm))
-	hot := p.Site.Duty.CableAmbient.Val + quantity.Celsius(class.CoilRise)
-	pick := shimPick(nominal, class, hot)
+	// Low and High at the coil are judged on the solved circuit; here the class's own
+	// limits say what the coil needs.
+	in := sizing.CoilInput{Class: class, Rated: nominal, Low: p.Highest, High: nominal * quantity.Volt(class.CoilMost), Ambient: p.Site.Duty.CableAmbient.Val}
+	pick, ws, err := sizing.CoilPickUp(in)
+	if err != nil {
+		p.block(k.Designation, k.At, "", err)
+	}
+	for _, w := range ws {
+		p.work(k.Designation, "", w)
+	}
+	in.Class.CoilRise = 0 // dead all night: at ambient temperature
+	dawn, _, err := sizing.CoilPickUp(in)
+	if err != nil {
+		p.block(k.Designation, k.At, "", err)
+	}
 	set(k, "coil", nominal.String()+" "+quantity.Format(ohm, 3), float64(ohm), "Ω", true, pinned)
 	params(k, "coil",
 		circuit.Param{Name: "ohm", Value: float64(ohm), Tol: float64(class.CoilTol)},
@@ -159,8 +173,12 @@ func sizeRelay(p *Plan, s *describe.Stage) {
 		}
 	}
 	for _, d := range p.C.Parts {
-		if d.Stage == s.Name.Val && d.Kind == circuit.Diode {
+		switch {
+		case d.Stage != s.Name.Val:
+		case d.Kind == circuit.Diode:
 			p.diode(d)
+		case d.Kind == circuit.Schottky:
+			p.schottky(d)
 		}
 	}
 	p.TrunkOhm += class.ContactTyp
@@ -168,7 +186,7 @@ func sizeRelay(p *Plan, s *describe.Stage) {
 	if r, ok := describe.Get[describe.Ref](s.Fields, "coil"); ok {
 		p.aux[r.Val.Stage] += i
 	}
-	p.F.Relay = &facts.Relay{Part: k, Coil: ohm, CoilA: i, PickUp: pick, PickUpCold: shimPick(nominal, class, p.Site.Duty.CableAmbient.Val), DropOut: quantity.Volt(float64(nominal) * float64(class.DropOut))}
+	p.F.Relay = &facts.Relay{Part: k, Coil: ohm, CoilA: i, PickUp: pick.Needs, PickUpCold: dawn.Needs, DropOut: quantity.Volt(float64(nominal) * float64(class.DropOut))}
 }
 
 // relayClass is the class of relay for a nominal voltage: at 12 V the automotive
@@ -187,6 +205,12 @@ func (p *Plan) diode(d *circuit.Part) {
 	params(d, "", circuit.Param{Name: "is", Value: diodeIS}, circuit.Param{Name: "n", Value: diodeN})
 }
 
+// schottky records a small Schottky diode, 60 V 1 A. Its law is the model's own.
+func (p *Plan) schottky(d *circuit.Part) {
+	set(d, "type", "60 V 1 A", 1, "A", true, false)
+	d.Note = "Schottky diode, 1 A, at least 60 V; drops 0.3 V or less at the coil's current"
+}
+
 // The 1N4004's law as the open textbook on semiconductors prints it: 18.8 nA with an
 // emission coefficient of 2.
 const (
@@ -200,8 +224,24 @@ func sizeContact(p *Plan, s *describe.Stage) {
 	load := p.Light
 	rated, given := describe.Get[quantity.Ampere](s.Fields, "rated")
 	if !given {
-		rated.Val = relayClass(p.Site.Duty.Nominal.Val).ContactRows[0].Current
+		r, w, err := sizing.ContactLoad(sizing.ContactInput{Class: relayClass(p.Site.Duty.Nominal.Val), Volt: p.Highest, Current: load, Lamps: p.filaments()})
+		if err != nil {
+			p.block(k.Designation, k.At, w.Source, err)
+		}
+		p.work(k.Designation, "", w)
+		rated.Val = r
 	}
 	set(k, "contact", rated.Val.String()+" DC", float64(rated.Val), "A", false, given)
 	p.F.Relay.Contact, p.F.Relay.Rated = load, rated.Val
+}
+
+// filaments reports whether any lamp is of the incandescent kind, whose inrush
+// contacts must make.
+func (p *Plan) filaments() bool {
+	for _, t := range p.Site.Luminaires {
+		if t.Kind.Val == "filament" && p.usedType(t.Name.Val) {
+			return true
+		}
+	}
+	return false
 }

@@ -81,16 +81,21 @@ func sizeCharger(p *Plan, s *describe.Stage) {
 	t, fuse := p.part(s, "charger"), p.part(s, "fuse")
 	b := &p.F.Battery
 	given, pinned := describe.Get[quantity.Ampere](s.Fields, "current")
-	need := quantity.Ampere(float64(b.Capacity)*float64(p.Class.ChargeFactor)/p.Site.Duty.Recharge.Val.Hours()) + p.Standing + p.Held
+	in := sizing.ChargerInput{
+		Class: p.Class, Capacity: b.Capacity, Removed: b.Removed, In: p.Site.Duty.Recharge.Val, Standing: p.Standing + p.Held,
+	}
+	c, ws, err := sizing.ChargerCurrent(in)
+	if err != nil && !pinned {
+		p.block(t.Designation, t.At, "", err)
+	}
+	for _, w := range ws {
+		p.work(t.Designation, "", w, b.Part.Designation+": capacity fitted")
+	}
 	rated := given.Val
 	if !pinned {
-		r, ok := catalogue.NextRating(catalogue.ChargerCurrents, need)
-		if !ok {
-			r = catalogue.ChargerCurrents[len(catalogue.ChargerCurrents)-1]
-			p.block(t.Designation, t.At, "", &sizing.BlockedError{Limit: sizing.LimitCharge, Value: float64(need), Bound: float64(r), Unit: "A", Frees: "allow more hours for the recharge"})
-		}
-		rated = r
+		rated = max(c.Rated, catalogue.ChargerCurrents[0])
 	}
+	need := c.Needed
 	limit := quantity.Ampere(float64(p.Class.MaxCharge) * float64(b.Capacity))
 	mains := must[quantity.Toleranced[quantity.Volt]](s, "mains")
 	_, pinnedFloat := describe.Get[quantity.Volt](s.Fields, "float")
@@ -110,8 +115,12 @@ func sizeCharger(p *Plan, s *describe.Stage) {
 		Part: t, Current: rated, Required: need, Limit: limit, Float: p.Float, Boost: p.Boost,
 		PerKelvin: quantity.Volt(p.Cells) * p.Class.Slope, Compensated: compensated(s), Pinned: pinned, Mains: mains,
 	}
+	for _, boost := range []bool{false, true} {
+		_, w := sizing.ChargeVoltage(sizing.ChargeInput{Class: p.Class, Cells: p.Cells, Boost: boost, At: p.Class.ChargeAt})
+		p.work(t.Designation, "", w)
+	}
 	fuseGiven, _ := describe.Get[quantity.Ampere](s.Fields, "fuse")
-	f := p.systemFuse(fuse, "charger", rated, fuseGiven)
+	f := p.systemFuse(fuse, "charger", rated, 0, fuseGiven)
 	p.ChargeSize, f.CableAmpacity = p.leastFor(fuse.Designation, f.Class, f.Rating, catalogue.LeastFixed, 1)
 	f.CableSize = p.ChargeSize
 }

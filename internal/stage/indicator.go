@@ -4,6 +4,7 @@ import (
 	"gloamwright/internal/circuit"
 	"gloamwright/internal/describe"
 	"gloamwright/internal/quantity"
+	"gloamwright/internal/sizing"
 )
 
 // indicator returns the kind: a signal lamp between a plus rail and L−.
@@ -45,9 +46,15 @@ const ledForward quantity.Volt = 2
 func sizeIndicator(p *Plan, s *describe.Stage) {
 	r, lamp := p.part(s, "resistor"), p.part(s, "lamp")
 	i := must[quantity.Ampere](s, "current")
-	v, w := shimString(p.Site.Duty.Nominal.Val, ledForward, 1, i)
-	p.work(r.Designation, "series resistor", w)
-	p.resistor(r, "", v, resistorTol)
+	nominal := p.Site.Duty.Nominal.Val
+	v, ws, err := sizing.StringResistor(sizing.StringInput{High: nominal, Low: nominal, Forward: ledForward, Series: 1, Current: i})
+	if err != nil {
+		p.block(r.Designation, r.At, "", err)
+	}
+	for _, w := range ws[:min(2, len(ws))] {
+		p.work(r.Designation, "", w)
+	}
+	p.resistor(r, "", v.Resistor, resistorTol)
 	colour := must[string](s, "colour")
 	set(lamp, "colour", colour, 0, "", true, false)
 	params(lamp, "", circuit.Param{Name: "forward_volt", Value: float64(ledForward), Tol: forwardTol}, circuit.Param{Name: "ampere", Value: float64(i)})

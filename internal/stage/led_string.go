@@ -40,9 +40,16 @@ func ledStringLoad(p *Plan, t *describe.Luminaire) Load {
 	dimmest := lampField[quantity.Ratio](t, "dimmest")
 	r, given := describe.Get[quantity.Ohm](t.Fields, "resistor")
 	if !given {
-		v, w := shimString(p.Float, vf, n, most)
-		p.work("luminaire "+t.Name.Val, "series resistor", w)
-		r.Val = v
+		// Whether enough light is left at the end of discharge is settled by raising
+		// that end, and judged on the solved circuit.
+		v, ws, err := sizing.StringResistor(sizing.StringInput{High: p.Float, Low: p.Float, Forward: vf, Series: n, Current: most, Least: dimmest})
+		if err != nil {
+			p.block("luminaire "+t.Name.Val, t.Name.Pos, "", err)
+		}
+		for _, w := range ws[:min(2, len(ws))] {
+			p.work("luminaire "+t.Name.Val, "", w)
+		}
+		r.Val = max(v.Resistor, stringLeastOhm)
 	}
 	drop := quantity.Volt(n) * vf
 	at := func(v quantity.Volt) quantity.Ampere {
@@ -80,4 +87,6 @@ func ledStringLoad(p *Plan, t *describe.Luminaire) Load {
 const (
 	forwardTol = 0.03
 	stringMost = 1.1
+	// stringLeastOhm stands in for a resistor that cannot be chosen; the job is blocked.
+	stringLeastOhm quantity.Ohm = 1
 )

@@ -59,25 +59,23 @@ func sizeCutOff(p *Plan, s *describe.Stage) {
 	q := p.part(s, "cut-off")
 	acc := float64(must[quantity.Ratio](s, "accuracy"))
 	opens, givenOpens := describe.Get[quantity.Volt](s.Fields, "opens")
-	if !givenOpens {
-		// It senses behind the battery's cable and fuse, and must not open before the
-		// battery is at its end, even if its own voltage is a little high.
-		drop := float64(p.Light+p.Standing) * float64(p.CutOffOhm)
-		v := math.Floor((float64(p.End)-drop)/(1+acc)*voltStep+stepSlack) / voltStep
-		opens.Val = quantity.Volt(v)
-		p.work(q.Designation, "opens", sizing.Working{
-			Formula:     "U_opens ≤ (U_end − I × R) ÷ (1 + accuracy), whole tenths of a volt",
-			Substituted: fmt.Sprintf("(%.3g V − %.4g A × %.4g Ω) ÷ (1 + %.3g) → %.1f V", float64(p.End), float64(p.Light+p.Standing), float64(p.CutOffOhm), acc, v),
-			Value:       v, Unit: "V", Source: p.classSource(),
-		})
-	}
 	closes, givenCloses := describe.Get[quantity.Volt](s.Fields, "recloses")
-	if !givenCloses {
-		closes.Val = quantity.Volt(p.Cells) * p.recloses()
-		p.work(q.Designation, "recloses", sizing.Working{
-			Formula: "U_recloses = n_cells × U_cell", Substituted: fmt.Sprintf("%d × %v", p.Cells, p.recloses()),
-			Value: float64(closes.Val), Unit: "V", Source: p.classSource(),
-		})
+	if p.Class != nil {
+		// It senses behind the battery's cable and fuse.
+		drop := quantity.Volt(float64(p.Light+p.Standing) * float64(p.CutOffOhm))
+		o, r, ws, err := sizing.CutOff(sizing.CutOffInput{Class: p.Class, Cells: p.Cells, End: p.End, Drop: drop, Accuracy: quantity.Ratio(acc)})
+		if err != nil && !givenOpens {
+			p.block(q.Designation, q.At, "", err)
+		}
+		for _, w := range ws {
+			p.work(q.Designation, "", w, "battery: end of discharge")
+		}
+		if !givenOpens {
+			opens.Val = quantity.Volt(math.Floor(float64(o)*voltStep+stepSlack) / voltStep)
+		}
+		if !givenCloses {
+			closes.Val = r
+		}
 	}
 	load := p.Light + p.Standing
 	rated, given := describe.Get[quantity.Ampere](s.Fields, "rated")
@@ -103,22 +101,6 @@ const (
 	cutOffOhm = 0.01
 	ownTol    = 0.2
 )
-
-// recloses is the voltage of a cell at which a cut-off closes again.
-func (p *Plan) recloses() quantity.Volt {
-	if p.Class == nil {
-		return p.Site.Duty.Nominal.Val
-	}
-	return p.Class.Recloses
-}
-
-// classSource is the source of the battery class's voltages.
-func (p *Plan) classSource() string {
-	if p.Class == nil {
-		return ""
-	}
-	return p.Class.Title + ": " + p.Class.Evidence.String()
-}
 
 // nextRating chooses the next standard rating for a load, used at most to the
 // practice's load factor.

@@ -4,6 +4,7 @@ import (
 	"errors"
 	"fmt"
 	"math"
+	"slices"
 
 	"gloamwright/internal/catalogue"
 	"gloamwright/internal/circuit"
@@ -151,17 +152,20 @@ func (p *Plan) endOfDischarge() {
 	if s == nil {
 		return
 	}
-	p.End = quantity.Volt(p.Cells) * p.Class.EndVolt
+	var lamp quantity.Volt
+	for _, t := range p.Site.Luminaires {
+		if p.usedType(t.Name.Val) {
+			lamp = max(lamp, p.loads[t.Name.Val].Works.Low)
+		}
+	}
+	end, w := sizing.EndOfDischarge(sizing.EndInput{Class: p.Class, Cells: p.Cells, Lamp: lamp, Drop: p.permittedDrop()})
+	p.work("battery", "end of discharge", w)
+	p.End = end
 	for _, o := range p.Site.Stages {
 		// A cut-off that is a little low must not open below the class's end, and one
 		// that is a little high not before the outage is over.
 		if acc, ok := describe.Get[quantity.Ratio](o.Fields, "accuracy"); ok && o.Kind.Val == "low-voltage-disconnect" {
-			p.End *= 1 + 2*quantity.Volt(acc.Val)
-		}
-	}
-	for _, t := range p.Site.Luminaires {
-		if p.usedType(t.Name.Val) {
-			p.End = max(p.End, p.loads[t.Name.Val].Works.Low+p.permittedDrop())
+			p.End = max(end, quantity.Volt(p.Cells)*p.Class.EndVolt*(1+2*quantity.Volt(acc.Val)))
 		}
 	}
 	if v, ok := describe.Get[quantity.Volt](s.Fields, "end"); ok {
@@ -343,20 +347,49 @@ const (
 // about 0.1 V at its rating, the holder adds 2 mΩ (common practice, no source).
 func fuseOhm(rating quantity.Ampere) float64 { return 0.1/float64(rating) + 0.002 }
 
-// systemFuse sizes a fuse of the system for a load and the smallest wire behind it.
-func (p *Plan) systemFuse(part *circuit.Part, feeds string, load quantity.Ampere, given describe.At[quantity.Ampere]) *facts.Fuse {
+// systemFuse sizes a fuse for a load; behind is the largest fuse behind it, 0 if
+// there is none.
+func (p *Plan) systemFuse(part *circuit.Part, feeds string, load, behind quantity.Ampere, given describe.At[quantity.Ampere]) *facts.Fuse {
 	class := p.fuseClass()
 	rating := given.Val
 	if !given.Given {
-		r, w, err := sizing.ChooseFuse(sizing.FuseInput{Class: class, Stock: p.Site.Practice.Fuses.Val, Load: load, LoadFactor: p.Site.Practice.LoadFactor.Val})
-		if err != nil {
-			p.block(part.Designation, part.At, w.Source, err)
-			r = class.Ratings[len(class.Ratings)-1]
-		}
-		p.work(part.Designation, "fuse rating", w, feeds+": design current")
-		rating = r
+		rating = p.chooseFuse(part, class, feeds, load, behind)
 	}
 	return p.fit(part, class, rating, feeds, load, given.Given)
+}
+
+// chooseFuse chooses a rating for the load, or above the largest fuse behind.
+func (p *Plan) chooseFuse(part *circuit.Part, class *catalogue.FuseClass, feeds string, load, behind quantity.Ampere) quantity.Ampere {
+	k := p.Site.Practice.LoadFactor.Val
+	in := sizing.FuseInput{Class: class, Stock: p.stocked(class), Load: load, LoadFactor: k}
+	least := behind * discriminationRatio
+	if least > load/quantity.Ampere(k) {
+		in.Load, in.LoadFactor = least, 1
+	}
+	r, w, err := sizing.ChooseFuse(in)
+	if err != nil {
+		p.block(part.Designation, part.At, w.Source, err)
+		r = class.Ratings[len(class.Ratings)-1]
+	}
+	if in.LoadFactor == 1 && least > 0 {
+		w.Formula = "I_n ≥ 1.6 × largest fuse behind it, next standard rating"
+		w.Substituted = fmt.Sprintf("1.6 × %v = %v → %v", behind, least, r)
+		w.Source = "discrimination ratio of IEC 60269-1 (from memory)"
+	}
+	p.work(part.Designation, "fuse rating", w, feeds+": design current")
+	return r
+}
+
+// stocked returns the ratings that the firm stocks of a class; empty: all.
+func (p *Plan) stocked(class *catalogue.FuseClass) []quantity.Ampere {
+	var out []quantity.Ampere
+	for _, r := range p.Site.Practice.Fuses.Val {
+		if slices.Contains(class.Ratings, r) {
+			out = append(out, r)
+		}
+	}
+	slices.Sort(out)
+	return out
 }
 
 // fit records a chosen fuse.

@@ -6,6 +6,7 @@ import (
 	"gloamwright/internal/describe"
 	"gloamwright/internal/facts"
 	"gloamwright/internal/quantity"
+	"gloamwright/internal/sizing"
 )
 
 // regulatedSupply returns the kind: a packaged mains supply with a regulated DC output and a
@@ -61,7 +62,13 @@ func sizeSupply(p *Plan, s *describe.Stage) {
 	load := p.aux[s.Name.Val]
 	if !given {
 		rated.Val.Volt = p.Site.Duty.Nominal.Val
-		rated.Val.Ampere = p.nextRating(t, "rated current", catalogue.SupplyCurrents, load)
+		c, w, err := sizing.SupplyCurrent(sizing.SupplyInput{Load: load})
+		if err != nil {
+			p.block(t.Designation, t.At, w.Source, err)
+			c = catalogue.SupplyCurrents[len(catalogue.SupplyCurrents)-1]
+		}
+		p.work(t.Designation, "", w)
+		rated.Val.Ampere = c
 	}
 	acc := must[quantity.Ratio](s, "accuracy")
 	mains := must[quantity.Toleranced[quantity.Volt]](s, "mains")
