@@ -24,11 +24,9 @@ const (
 // the way the circuit itself would take with a capacitor at every net.
 func (r *run) converge(warm bool) error {
 	if warm {
-		keep := append([]float64(nil), r.x...)
-		if r.newton(plainSteps, false) {
+		if r.newton(warmSteps, false) {
 			return nil
 		}
-		copy(r.x, keep)
 	}
 	clear(r.x)
 	if r.newton(plainSteps, false) {

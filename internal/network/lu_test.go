@@ -256,3 +256,19 @@ func BenchmarkSolveTree(b *testing.B) {
 		})
 	}
 }
+
+// The work on a site grows with its size and no faster: entries of L and U for each
+// net stay the same from ten nets to ten thousand.
+func TestWorkGrowsLinearly(t *testing.T) {
+	perNet := func(n int) float64 {
+		c := compile(t, benchTree(n))
+		c.solve(Environment{}, nil)
+		return float64(len(c.lu.li)+len(c.lu.ui)) / float64(len(c.nets))
+	}
+	small := perNet(10)
+	for _, n := range []int{100, 1000, 10000} {
+		if p := perNet(n); p > 1.5*small {
+			t.Errorf("%d nets: %.2f entries a net, %.2f with ten", n, p, small)
+		}
+	}
+}

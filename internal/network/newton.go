@@ -18,6 +18,7 @@ const (
 	// accepted when idleTurns steps in a row have left all laws fulfilled.
 	idleStep    = 1e-2
 	idleTurns   = 4
+	warmSteps   = 16 // from a solution nearby; a cold start is better than many more
 	plainSteps  = 60
 	dampedSteps = 200
 	polishSteps = 4
