@@ -6,12 +6,9 @@ import (
 	"errors"
 	"fmt"
 	"io/fs"
-	"os"
-	"path/filepath"
 
 	"gloamwright/internal/describe"
 	"gloamwright/internal/design"
-	"gloamwright/internal/stage"
 )
 
 // Mistakes is returned when a description is wrong: every mistake, with its place.
@@ -41,27 +38,9 @@ func (u *Unreadable) Error() string {
 // Load reads the description at path and designs it. set holds changes of single
 // values, as "duty.outage=6h", that are made to the text in memory only.
 func Load(path string, set []string) (*design.Design, error) {
-	src, err := os.ReadFile(path)
+	j, err := Open(path, set)
 	if err != nil {
-		return nil, &Unreadable{err}
+		return nil, err
 	}
-	return Design(path, src, set)
-}
-
-// Design designs a description whose text is src; path names it in messages and
-// is where its shared files and register are looked for.
-func Design(path string, src []byte, set []string) (*design.Design, error) {
-	for _, s := range set {
-		changed, err := override(src, s)
-		if err != nil {
-			return nil, err
-		}
-		src = changed
-	}
-	read := describe.Options{ReadFile: describe.FolderReader(filepath.Dir(path))}
-	site, list := read.Parse(filepath.Base(path), src, stage.Schema())
-	if list.HasErrors() {
-		return nil, &Mistakes{list, site.Sources}
-	}
-	return design.Make(site, nil)
+	return j.Design, nil
 }

@@ -1,0 +1,190 @@
+package release
+
+import (
+	"slices"
+
+	"gloamwright/internal/design"
+)
+
+// comparison finds what a technician has to redo between two records. Each kind of
+// work is found by one file: compare_cables.go, compare_fuses.go …
+type comparison struct {
+	old, now *record
+	scopes   []scope // of the changed values
+	titles   map[string]string
+	strips   map[string]string // of boards
+	homes    map[string]home
+	types    map[string][]string // lamp types by circuit, in either record
+	work     map[string][]design.WorkItem
+	out      *design.Changes
+}
+
+// home is where in the plant a labelled thing belongs.
+type home struct {
+	circuits, stages []string
+	lamp             string
+}
+
+// compareRecords compares two records. values and scopes are what changed in the
+// description; titles and strips name the boards of the new record.
+func compareRecords(old, now *record, values []design.ValueChange, scopes []scope, titles, strips map[string]string) *design.Changes {
+	c := &comparison{
+		old: old, now: now, scopes: scopes, titles: titles, strips: strips, homes: map[string]home{}, types: map[string][]string{},
+		work: map[string][]design.WorkItem{},
+		out:  &design.Changes{From: old.Job.Revision, To: now.Job.Revision, Values: values, Touched: map[string]bool{}, Rows: map[string]bool{}},
+	}
+	c.place(old)
+	c.place(now)
+	c.cables()
+	c.wires()
+	c.parts()
+	c.fuses()
+	c.settings()
+	c.labels()
+	c.readings()
+	c.tests()
+	c.findings()
+	for _, tool := range design.Tools {
+		c.out.Work = append(c.out.Work, grouped(c.work[tool])...)
+	}
+	c.stays()
+	return c.out
+}
+
+// place notes where everything of a record belongs.
+func (c *comparison) place(r *record) {
+	stage, circuit := map[string]string{}, map[string]string{}
+	for _, p := range r.Parts {
+		stage[p.Designation], circuit[p.Designation] = p.Stage, p.Circuit
+		c.at(p.Designation, p.Circuit, p.Stage)
+	}
+	for _, l := range r.Luminaires {
+		h := c.homes[l.Designation]
+		h.lamp = l.Type
+		c.homes[l.Designation] = h
+		if !slices.Contains(c.types[l.Circuit], l.Type) {
+			c.types[l.Circuit] = append(c.types[l.Circuit], l.Type)
+		}
+	}
+	ends := func(label string, ends ...string) {
+		for _, e := range ends {
+			if _, ok := stage[e]; !ok {
+				e = partOf(e)
+			}
+			c.at(label, circuit[e], stage[e])
+		}
+	}
+	for _, w := range r.Conductors {
+		for _, label := range []string{w.Run, w.Number} {
+			if label != "" {
+				c.at(label, w.Circuit, "")
+				ends(label, w.From, w.To)
+			}
+		}
+	}
+	for _, t := range r.TestPoints {
+		ends(t.Label, t.Terminal)
+	}
+}
+
+func (c *comparison) at(label, circuit, stage string) {
+	h := c.homes[label]
+	if circuit != "" && !slices.Contains(h.circuits, circuit) {
+		h.circuits = append(h.circuits, circuit)
+	}
+	if stage != "" && !slices.Contains(h.stages, stage) {
+		h.stages = append(h.stages, stage)
+	}
+	c.homes[label] = h
+}
+
+// do notes one thing to do at one label, or at the plant as a whole if label is "".
+func (c *comparison) do(item design.WorkItem, label string) {
+	if label != "" {
+		item.Labels = []string{label}
+		if item.Tool == design.TestAgain {
+			c.out.Rows[label] = true
+		} else {
+			c.out.Touched[label] = true
+		}
+	}
+	item.Causes = c.causes(label)
+	if len(item.Causes) == 1 {
+		item.From = item.Causes[0]
+	}
+	c.work[item.Tool] = append(c.work[item.Tool], item)
+}
+
+// causes returns the numbers of the changed values that can force work at a label:
+// those that act on its circuit, stage or lamp type, and those that act everywhere;
+// if there are none of these, all that act on more than paper.
+func (c *comparison) causes(label string) []int {
+	h := c.homes[label]
+	var near, all, paper []int
+	for i, s := range c.scopes {
+		switch {
+		case s.paper:
+			paper = append(paper, i+1)
+			continue
+		case s.circuit == "" && s.stage == "" && s.lamp == "",
+			s.circuit != "" && slices.Contains(h.circuits, s.circuit),
+			s.stage != "" && slices.Contains(h.stages, s.stage),
+			s.lamp != "" && (s.lamp == h.lamp || h.lamp == "" && c.uses(h.circuits, s.lamp)):
+			near = append(near, i+1)
+		}
+		all = append(all, i+1)
+	}
+	switch {
+	case len(near) > 0:
+		return near
+	case len(all) > 0:
+		return all
+	}
+	return paper
+}
+
+func (c *comparison) uses(circuits []string, lamp string) bool {
+	return slices.ContainsFunc(circuits, func(name string) bool { return slices.Contains(c.types[name], lamp) })
+}
+
+// grouped puts items together that differ in nothing but their labels.
+func grouped(items []design.WorkItem) []design.WorkItem {
+	var out []design.WorkItem
+	for _, i := range items {
+		j := slices.IndexFunc(out, func(o design.WorkItem) bool {
+			return o.Do == i.Do && o.Was == i.Was && o.Is == i.Is && o.Test == i.Test && o.What == i.What && slices.Equal(o.Causes, i.Causes)
+		})
+		if j < 0 {
+			out = append(out, i)
+		} else {
+			out[j].Labels = append(out[j].Labels, i.Labels...)
+		}
+	}
+	for k := range out {
+		slices.SortFunc(out[k].Labels, compareLabels)
+		if out[k].What == "" {
+			out[k].What = together(out[k].Labels)
+		}
+	}
+	return out
+}
+
+// pairs walks two lists by label: what both have in the order of now, with what only
+// now has between; then what only old has.
+func pairs[T any](old, now []T, label func(*T) string, f func(o, n *T)) {
+	before := map[string]*T{}
+	for i := range old {
+		before[label(&old[i])] = &old[i]
+	}
+	seen := map[string]bool{}
+	for i := range now {
+		l := label(&now[i])
+		seen[l] = true
+		f(before[l], &now[i])
+	}
+	for i := range old {
+		if !seen[label(&old[i])] {
+			f(&old[i], nil)
+		}
+	}
+}
