@@ -108,7 +108,6 @@ func handmade() *design.Design {
 					CableSize: quantity.WireSize{Area: 1.5}, Prospective: 300, FarEnd: 45, Opens: true, OpensWithin: 0.1, DiscriminatesTo: 120, Before: upper,
 					Breaking: 1000, BreakingVolt: 32, Slowest: []catalogue.GatePoint{{Multiple: 2, Time: 5}, {Multiple: 1.35, Time: catalogue.Never}},
 				},
-				{Part: spare.Fuse, Board: board, Way: spare, Before: upper},
 			},
 			Battery:   facts.Battery{Part: g, Class: "vrla-agm", Series: 12, Blocks: 2, Parallel: 1, BlockVolt: 12, Capacity: 33, Required: 29.123456789, EndVolt: 21},
 			CutOff:    &facts.CutOff{Part: part("-Q1", circuit.CutOff, box), Opens: 21, Recloses: 25.2, Rated: 5},

@@ -3,42 +3,56 @@ package results
 import (
 	"strconv"
 
+	"gloamwright/internal/circuit"
 	"gloamwright/internal/design"
+	"gloamwright/internal/facts"
 )
 
-// fuseMap is one row for each fuse place, spare ones too, in the order of the fuse map.
+// fuseMap is one row for each fuse place: the fuses outside the boards, then board by
+// board every way, spare ones too.
 func fuseMap(d *design.Design) *Table {
 	t := &Table{Name: "fuse-map.csv", Headings: []string{
 		"designation", "board", "way", "rating A", "kind", "colour", "feeds", "load from A", "load to A", "design current A",
 		"cable", "cable ampacity A", "short-circuit current A", "breaking capacity A", "far-end short A", "opens within s",
 		"fuse before", "discriminates to A", "given",
 	}}
+	inWay := map[*circuit.Way]*facts.Fuse{}
 	for _, f := range d.Fuses {
-		board, way, feeds, rating := "", "", f.Feeds, cell(positive(f.Rating))
-		if f.Board != nil {
-			board = f.Board.Title
-		}
 		if f.Way != nil {
-			way = strconv.Itoa(f.Way.Number)
-			if f.Way.Spare() {
-				feeds = "spare"
+			inWay[f.Way] = f
+			continue
+		}
+		t.Rows = append(t.Rows, fuseRow(f, "", ""))
+	}
+	for _, b := range d.Circuit.Boards {
+		for _, w := range b.Ways {
+			way := strconv.Itoa(w.Number)
+			if f := inWay[w]; f != nil && !w.Spare() {
+				t.Rows = append(t.Rows, fuseRow(f, b.Title, way))
+				continue
 			}
+			row := make([]string, len(t.Headings))
+			row[0], row[1], row[2], row[6] = w.Fuse.Designation, b.Title, way, "spare"
+			t.Rows = append(t.Rows, row)
 		}
-		opens, before, selective, cable := "", "", "", ""
-		if f.Opens {
-			opens = cell(figure(f.OpensWithin))
-		}
-		if f.Before != nil {
-			before, selective = f.Before.Part.Designation, cell(figure(f.DiscriminatesTo))
-		}
-		if f.CableSize.Area > 0 {
-			cable = f.CableSize.String()
-		}
-		t.Rows = append(t.Rows, []string{
-			f.Part.Designation, board, way, rating, f.Style, f.Colour, feeds, cell(positive(f.LoadLow)), cell(positive(f.LoadHigh)), cell(positive(f.Design)),
-			cable, cell(positive(f.CableAmpacity)), cell(positive(f.Prospective)), cell(positive(f.Breaking)), cell(positive(f.FarEnd)), opens,
-			before, selective, given(f.Pinned),
-		})
 	}
 	return t
+}
+
+func fuseRow(f *facts.Fuse, board, way string) []string {
+	opens, before, selective, cable := "", "", "", ""
+	if f.Opens {
+		opens = cell(figure(f.OpensWithin))
+	}
+	if f.Before != nil {
+		before, selective = f.Before.Part.Designation, cell(figure(f.DiscriminatesTo))
+	}
+	if f.CableSize.Area > 0 {
+		cable = f.CableSize.String()
+	}
+	return []string{
+		f.Part.Designation, board, way, cell(positive(f.Rating)), f.Style, f.Colour, f.Feeds, cell(positive(f.LoadLow)), cell(positive(f.LoadHigh)),
+		cell(positive(f.Design)), cable, cell(positive(f.CableAmpacity)), cell(positive(f.Prospective)), cell(positive(f.Breaking)),
+		cell(positive(f.FarEnd)), opens, before, selective, given(f.Pinned),
+	}
 }

@@ -5,12 +5,12 @@ import (
 	"strconv"
 )
 
-// Significant digits of numbers. Network figures keep all that a float64 holds for
-// certain, so that currents computed again from voltages and resistances still add up
-// to zero within a nanoampere; readings keep enough for any meter, other figures enough
-// for any purpose.
+// Significant digits of numbers. Network figures keep all digits of a float64, so that
+// currents computed again from voltages and resistances still add up to zero within a
+// nanoampere at leads of a milliohm; readings keep enough for any meter, other figures
+// enough for any purpose.
 const (
-	networkDigits = 15
+	networkDigits = 17
 	readingDigits = 9
 	figureDigits  = 6
 )
