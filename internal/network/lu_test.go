@@ -4,6 +4,7 @@ import (
 	"fmt"
 	"math"
 	"math/rand/v2"
+	"strings"
 	"testing"
 
 	"gonum.org/v1/gonum/mat"
@@ -224,7 +225,8 @@ func TestFillOrderOnGrid(t *testing.T) {
 
 // benchTree is a board that feeds lamps along branching runs, n nets or so.
 func benchTree(n int) string {
-	s := "G1 battery p0 0 emf=25.6 ohm=0.005\n"
+	var s strings.Builder
+	s.WriteString("G1 battery p0 0 emf=25.6 ohm=0.005\n")
 	rng := rand.New(rand.NewPCG(9, 10))
 	for i := 1; 2*i < n; i++ {
 		up := i - 1
@@ -235,10 +237,10 @@ func benchTree(n int) string {
 		if up == 0 {
 			minus = "0"
 		}
-		s += fmt.Sprintf("W%da conductor p%d p%d ohm=%g\nW%db conductor %s m%d ohm=%g\n", i, up, i, 0.4/float64(n), i, minus, i, 0.4/float64(n))
-		s += fmt.Sprintf("E%d constant-power p%d m%d watt=%g low_volt=18 high_volt=32\n", i, i, i, 100/float64(n))
+		fmt.Fprintf(&s, "W%da conductor p%d p%d ohm=%g\nW%db conductor %s m%d ohm=%g\n", i, up, i, 0.4/float64(n), i, minus, i, 0.4/float64(n))
+		fmt.Fprintf(&s, "E%d constant-power p%d m%d watt=%g low_volt=18 high_volt=32\n", i, i, i, 100/float64(n))
 	}
-	return s
+	return s.String()
 }
 
 func BenchmarkSolveTree(b *testing.B) {
