@@ -35,11 +35,11 @@ type operating struct {
 // behind the one that it is reached from in the order of solving, not of printing.
 var conditionsOfAnyJob = []operating{
 	{key: "end", name: "End of discharge", from: "outage-night", dark: true, battery: endOfDis, shown: true,
-		set: "Main fuse out. Adjustable source at the battery side of the main fuse, set to %s. Mains off. Sensor covered."},
+		set: "Battery link out, adjustable source in its place: first %s, then down to %s. Mains off. Sensor covered."},
 	{key: "cut-off", name: "Cut off", from: "end", dark: true, battery: cutOff, shown: true,
 		set: "As before; turn the source down until the cut-off opens, then to %s."},
 	{key: "outage-night", name: "Mains off, dark", from: "mains-night", dark: true, battery: restedFull, shown: true,
-		set: "Main fuse in, battery charged and rested 2 h. Mains off. Sensor covered. Wait 10 min."},
+		set: "Battery link in, charged and rested 2 h. Mains off. Sensor covered. Wait 10 min."},
 	{key: "outage-day", name: "Mains off, daylight", from: "mains-day", battery: restedFull, shown: true,
 		set: "Battery charged and rested 2 h. Mains off. Sensor uncovered, in daylight. Wait 1 min."},
 	{key: "recharging", name: "Recharging", from: "cut-off", mains: 1, battery: recharging, shown: true,

@@ -38,8 +38,10 @@ func Make(site *describe.Site, kept circuit.Labels) (*Design, error) {
 	}
 	m.dropWorkings()
 	m.relay()
-	m.standing()
 	if err := m.thresholds(); err != nil {
+		return nil, err
+	}
+	if err := m.endurance(); err != nil {
 		return nil, err
 	}
 	if err := m.faults(); err != nil {

@@ -156,7 +156,7 @@ func (m *maker) condition(o operating, number int) *facts.Condition {
 	}
 	switch {
 	case strings.Contains(o.set, "%s") && o.battery == endOfDis:
-		c.Set = fmt.Sprintf(o.set, quantity.Format(m.plan.End, 3))
+		c.Set = fmt.Sprintf(o.set, quantity.Format(m.plan.Full, 3), quantity.Format(m.plan.End, 3))
 	case strings.Contains(o.set, "%s"):
 		c.Set = fmt.Sprintf(o.set, quantity.Format(m.cutOffSource(), 3))
 	default:

@@ -154,19 +154,3 @@ func (m *maker) lowestMains() error {
 	m.threshold("pick-up", "coil picks up when hot at", "V", float64(r.PickUp), "")
 	return nil
 }
-
-// standing records the drain by daylight with mains off, and how long a full battery
-// stands it.
-func (m *maker) standing() {
-	sol := m.solved["outage-day"]
-	b := m.f.Battery
-	if sol == nil || b.Part == nil {
-		return
-	}
-	drain := -sol.Current(b.Part.Designation)
-	m.f.Endurance.DrainA = quantity.Ampere(drain)
-	if drain > 0 {
-		aged := float64(b.Capacity) * float64(m.site.Practice.Ageing.Val)
-		m.f.Endurance.Standing = quantity.Hours(aged / drain)
-	}
-}

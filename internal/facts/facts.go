@@ -219,6 +219,14 @@ type Endurance struct {
 	Recharge quantity.Second // until full again after the asked outage
 	Standing quantity.Second // mains off by daylight, from full
 	DrainA   quantity.Ampere // current then
+	Week     *Run            // one asked outage a day for a week; nil without a charger
+	Days     []Day
+}
+
+// Day is one day of that week.
+type Day struct {
+	Started, Lowest quantity.Ratio // state of charge when mains failed and when it came back
+	Held            bool
 }
 
 // LitFor is how long a circuit stays lit.
