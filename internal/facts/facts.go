@@ -164,7 +164,7 @@ type Charger struct {
 	Current     quantity.Ampere
 	Required    quantity.Ampere
 	Limit       quantity.Ampere // what the battery stands
-	Float       quantity.Volt   // whole battery, at 20 °C
+	Float       quantity.Volt   // whole battery, at the class's reference temperature, as Boost
 	Boost       quantity.Volt
 	PerKelvin   quantity.Volt // whole battery, negative
 	Compensated bool

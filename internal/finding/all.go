@@ -30,6 +30,8 @@ func All() []*Check {
 		cutOffRecloses,
 		cutOffRecovery,
 		dateMissing,
+		dusk,
+		duskHysteresis,
 		escapeRoute,
 		extraLowVoltage,
 		feederDrop,
@@ -64,6 +66,7 @@ func All() []*Check {
 		relayContact,
 		relayContactNear,
 		relayPickUp,
+		relayPickUpCold,
 		settled,
 		solved,
 		standingDays,
@@ -71,5 +74,6 @@ func All() []*Check {
 		supplyIdle,
 		ventilation,
 		waysSpare,
+		weekHeld,
 	}
 }

@@ -25,7 +25,7 @@ var batteryLithium = &Check{
 			Severity: Caution, Subject: b.Part.Designation, At: b.Part.At,
 			Message: fmt.Sprintf("%s: needs a protection circuit of its own", title(b.Part.Designation, b.ClassName)),
 			Remedy: fmt.Sprintf("One that carries %s and opens below %s and above %s for the battery.",
-				say(load), say(whole(f, c.LowestEnd)), say(max(f.Charger.Boost, f.Charger.Float))),
+				sayUp(load), say(whole(f, c.LowestEnd)), sayUp(max(f.Charger.Boost, f.Charger.Float))),
 			Value: float64(load), Unit: "A",
 		})
 	},

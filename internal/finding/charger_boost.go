@@ -11,7 +11,7 @@ import (
 // packaged charger and of the figure itself (common practice, no source).
 const boostSlack quantity.Ratio = 0.02
 
-// chargerBoost compares the boost setting with the class's figure at 20 °C.
+// chargerBoost compares the boost setting with the class's figure.
 var chargerBoost = &Check{
 	Name:  "charger-boost",
 	Title: "boost voltage above the class's figure",
@@ -23,7 +23,7 @@ var chargerBoost = &Check{
 		if class == nil || c.Part == nil {
 			return
 		}
-		right := whole(f, class.ChargeVolt(class.Boost, chargeReference))
+		right := whole(f, class.Boost)
 		limit := right * quantity.Volt(1+boostSlack)
 		if !over(c.Boost, limit) {
 			return
@@ -31,7 +31,7 @@ var chargerBoost = &Check{
 		v, bound := pair(c.Boost, limit)
 		report(Finding{
 			Severity: Stop, Subject: c.Part.Designation, At: c.Part.At,
-			Message: fmt.Sprintf("%s: boost %s at %s, limit %s", title(c.Part.Designation, "charger"), v, say(chargeReference), bound),
+			Message: fmt.Sprintf("%s: boost %s at %s, limit %s", title(c.Part.Designation, "charger"), v, say(class.ChargeAt), bound),
 			Remedy:  fmt.Sprintf("Set %s.", quantity.Fixed(right, 2)),
 			Value:   float64(c.Boost), Limit: float64(limit), Unit: "V",
 			Source: class.ChargeEvi.String(),

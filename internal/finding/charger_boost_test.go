@@ -8,9 +8,9 @@ import (
 
 func TestChargerBoost(t *testing.T) {
 	run(t, chargerBoost, []limitCase{
-		{"within two in a hundred", func(f *facts.Facts) { f.Charger.Boost = 29.8 }, nil},
-		{"just beyond", func(f *facts.Facts) { f.Charger.Boost = 29.81 }, []string{
-			"stop -T1: -T1, charger: boost 29.81 V at 20 °C, limit 29.8 V | Set 29.22 V.",
+		{"within two in a hundred of 12 × 2.42 V", func(f *facts.Facts) { f.Charger.Boost = 29.62 }, nil},
+		{"just beyond", func(f *facts.Facts) { f.Charger.Boost = 29.63 }, []string{
+			"stop -T1: -T1, charger: boost 29.63 V at 25 °C, limit 29.62 V | Set 29.04 V.",
 		}},
 	})
 }

@@ -16,15 +16,19 @@ var cutOffEarly = &Check{
 	Source: "end of discharge of the sized battery",
 	Run: func(f *facts.Facts, report func(Finding)) {
 		c, b := f.CutOff, f.Battery
-		if c == nil || b.Part == nil || b.EndVolt <= 0 || !over(c.Opens, b.EndVolt) {
+		if c == nil || b.Part == nil || b.EndVolt <= 0 {
 			return
 		}
-		v, bound := pair(c.Opens, b.EndVolt)
+		opens := max(c.Opens, c.AtBattery)
+		if !over(opens, b.EndVolt) {
+			return
+		}
+		v, bound := pair(opens, b.EndVolt)
 		report(Finding{
 			Severity: Caution, Subject: c.Part.Designation, At: c.Part.At,
-			Message: fmt.Sprintf("%s: opens at %s, the battery is sized down to %s", title(c.Part.Designation, "cut-off"), v, bound),
-			Remedy:  fmt.Sprintf("Set %s, or give the battery an end voltage of %s.", bound, v),
-			Value:   float64(c.Opens), Limit: float64(b.EndVolt), Unit: "V",
+			Message: fmt.Sprintf("%s: opens when the battery is at %s, it is sized down to %s", title(c.Part.Designation, "cut-off"), v, bound),
+			Remedy:  fmt.Sprintf("Set it %s lower, or give the battery an end voltage of %s.", sayUp(opens-b.EndVolt), sayUp(opens)),
+			Value:   float64(opens), Limit: float64(b.EndVolt), Unit: "V",
 		})
 	},
 }

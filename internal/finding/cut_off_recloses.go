@@ -4,7 +4,6 @@ import (
 	"fmt"
 
 	"gloamwright/internal/facts"
-	"gloamwright/internal/quantity"
 )
 
 // cutOffRecloses finds a cut-off that the charger can never close again.
@@ -19,10 +18,8 @@ var cutOffRecloses = &Check{
 		if c == nil || g.Part == nil || g.Float <= 0 {
 			return
 		}
-		room, least := f.Site.Duty.BatteryRoom.Val.High, g.Float
-		if g.Compensated {
-			least += quantity.Volt(float64(g.PerKelvin) * float64(room-chargeReference))
-		}
+		room := f.Site.Duty.BatteryRoom.Val.High
+		least := settingAt(f, g.Float, room)
 		if under(c.Recloses, least) {
 			return
 		}

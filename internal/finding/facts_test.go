@@ -92,12 +92,12 @@ func sound() *facts.Facts {
 	core("1+", g.Pin("+"), f1.Pin("2"), 0.3, 10, 3, "")
 	f.Battery = facts.Battery{
 		Part: g, Class: "vrla-agm", ClassName: "VRLA-AGM", Series: 12, Blocks: 2, Parallel: 1, BlockVolt: 12,
-		Capacity: 33, Required: 29.6, EndVolt: 21, FullVolt: 25.6, FloatVolt: 27.66, Prospective: 1200, Resistance: 0.02,
+		Capacity: 33, Required: 29.6, EndVolt: 21, FullVolt: 25.6, FloatVolt: 27.48, Prospective: 1200, Resistance: 0.02,
 		Ventilation: 0, Gas: false, Fuse: f1,
 	}
 	f.Charger = facts.Charger{
 		Part: part("-T1", circuit.ChargerUnit, 32, "+", "-"), Current: 3, Required: 2.4, Limit: 8.25,
-		Float: 27.66, Boost: 29.22, PerKelvin: -0.036, Compensated: true,
+		Float: 27.48, Boost: 29.04, PerKelvin: -0.036, Compensated: true,
 	}
 	f.Supply = &facts.Supply{Part: part("-T2", circuit.Supply, 33, "+", "-"), Volt: 24, Rated: 0.5, Current: 0.04}
 	f.CutOff = &facts.CutOff{Part: part("-Q1", circuit.CutOff, 34, "in", "out", "-"), Opens: 21, Recloses: 25.2, Current: 1.5, Rated: 5}

@@ -15,19 +15,7 @@ var relayPickUp = &Check{
 	Source: "IEC 61810-1 clause 5 (operative range); copper's temperature law of IEC 60028",
 	Run: func(f *facts.Facts, report func(Finding)) {
 		r := f.Relay
-		if r == nil {
-			return
-		}
-		if r.PickUpCold > 0 && under(r.LowestCold, r.PickUpCold) {
-			v, bound := pair(r.LowestCold, r.PickUpCold)
-			report(Finding{
-				Severity: Stop, Subject: r.Part.Designation, At: r.Part.At,
-				Message: fmt.Sprintf("%s: coil gets %s at dawn from an empty battery, picks up at %s", title(r.Part.Designation, "changeover"), v, bound),
-				Remedy:  fmt.Sprintf("A coil that picks up at %s, else the lights stay on all day.", sayDown(r.LowestCold)),
-				Value:   float64(r.LowestCold), Limit: float64(r.PickUpCold), Unit: "V", Over: true,
-			})
-		}
-		if !under(r.LowestFeed, r.PickUp) {
+		if r == nil || !under(r.LowestFeed, r.PickUp) {
 			return
 		}
 		v, bound := pair(r.LowestFeed, r.PickUp)

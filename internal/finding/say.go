@@ -139,8 +139,26 @@ func highest(f *facts.Facts) (v quantity.Volt, when string) {
 	return v, when
 }
 
-// chargeReference is the temperature for which charge voltages are set.
-const chargeReference quantity.Celsius = 20
+// usualReference is the temperature that charge voltages are stated for where the
+// class is unknown: IEC 62485-2.
+const usualReference quantity.Celsius = 20
+
+// reference returns the temperature that float and boost are stated for: that of the
+// battery's class.
+func reference(f *facts.Facts) quantity.Celsius {
+	if c := classOf(f); c != nil {
+		return c.ChargeAt
+	}
+	return usualReference
+}
+
+// settingAt returns a charge setting at a temperature, as the charger gives it.
+func settingAt(f *facts.Facts, setting quantity.Volt, t quantity.Celsius) quantity.Volt {
+	if !f.Charger.Compensated {
+		return setting
+	}
+	return setting + f.Charger.PerKelvin*quantity.Volt(t-reference(f))
+}
 
 // boostAtColdest returns the boost voltage at the coldest battery room; 0 without a
 // charger.
@@ -149,11 +167,7 @@ func boostAtColdest(f *facts.Facts) quantity.Volt {
 	if c.Part == nil {
 		return 0
 	}
-	v := max(c.Boost, c.Float)
-	if c.Compensated {
-		v += quantity.Volt(float64(c.PerKelvin) * float64(f.Site.Duty.BatteryRoom.Val.Low-chargeReference))
-	}
-	return v
+	return settingAt(f, max(c.Boost, c.Float), f.Site.Duty.BatteryRoom.Val.Low)
 }
 
 // number prints a figure without a type, as findings about any unit need it.

@@ -111,7 +111,7 @@ func handmade() *design.Design {
 			},
 			Battery:   facts.Battery{Part: g, Class: "vrla-agm", Series: 12, Blocks: 2, Parallel: 1, BlockVolt: 12, Capacity: 33, Required: 29.123456789, EndVolt: 21},
 			CutOff:    &facts.CutOff{Part: part("-Q1", circuit.CutOff, box), Opens: 21, Recloses: 25.2, Rated: 5},
-			Endurance: facts.Endurance{Runs: []*facts.Run{{Name: "warm", Temperature: 30, Aged: true, Curve: []facts.Sample{{Hours: 9}}}, {Name: "cold", Temperature: 5, Aged: true, Curve: []facts.Sample{{Hours: 0.5, Volt: 24, SoC: 0.9, Current: -2}}}}, Lit: []facts.LitFor{{Circuit: "Porch", For: 5400}}, Held: 5400},
+			Endurance: facts.Endurance{Runs: []*facts.Run{{Name: "warm", Temperature: 30, Aged: true, Curve: []facts.Sample{{Hours: 9}}}, {Name: "cold", Temperature: 5, Aged: true, Curve: []facts.Sample{{Hours: 0.5, Volt: 24, SoC: 0.9, Current: -2}}}}, Lit: []facts.LitFor{{Circuit: "Porch", For: 5400}}, Held: 5400, Week: &facts.Run{Curve: []facts.Sample{{Hours: 168}}}, Days: []facts.Day{{Started: 1, Lowest: 0.4, Held: true}}},
 			Function:  []*facts.FunctionRow{{Circuit: "Porch", Asked: "outage", Wanted: []bool{true}, Known: []bool{false}, Found: []bool{true}}},
 			Thresholds: []*facts.Threshold{
 				{Key: "lights-on", Name: "Lights come on", Value: 9.5, Low: 8, High: math.Inf(1), Unit: "lx", Text: "9.5 lx"},

@@ -14,6 +14,8 @@ type enduranceEntry struct {
 	DrainA    *float64            `json:"drain_a"`
 	Curve     []sampleEntry       `json:"curve"`
 	Runs      []runEntry          `json:"runs"`
+	Week      []sampleEntry       `json:"week"`
+	Days      []dayEntry          `json:"days"`
 }
 
 type runEntry struct {
@@ -22,6 +24,13 @@ type runEntry struct {
 	Aged         bool          `json:"aged"`
 	Recharge     bool          `json:"recharge"`
 	Curve        []sampleEntry `json:"curve"`
+}
+
+// dayEntry is one day of a week with an outage each day.
+type dayEntry struct {
+	Started *float64 `json:"started"`
+	Lowest  *float64 `json:"lowest"`
+	Held    bool     `json:"held"`
 }
 
 type sampleEntry struct {
@@ -38,7 +47,7 @@ func endurance(d *design.Design) enduranceEntry {
 	out := enduranceEntry{
 		LitH: map[string]*float64{}, CutOffH: positive(e.CutOff.Hours()), RechargeH: positive(e.Recharge.Hours()),
 		HeldH: positive(e.Held.Hours()), StandingH: positive(e.Standing.Hours()), DrainA: figure(e.DrainA),
-		Curve: []sampleEntry{}, Runs: []runEntry{},
+		Curve: []sampleEntry{}, Runs: []runEntry{}, Week: []sampleEntry{}, Days: []dayEntry{},
 	}
 	for _, l := range e.Lit {
 		out.LitH[l.Circuit] = figure(l.For.Hours())
@@ -51,6 +60,12 @@ func endurance(d *design.Design) enduranceEntry {
 		if r.Aged && !r.Recharge && (worst == nil || r.Temperature < worst.Temperature) {
 			worst = r
 		}
+	}
+	if e.Week != nil {
+		out.Week = curve(e.Week.Curve)
+	}
+	for _, x := range e.Days {
+		out.Days = append(out.Days, dayEntry{Started: figure(x.Started), Lowest: figure(x.Lowest), Held: x.Held})
 	}
 	if worst != nil {
 		out.Curve = curve(worst.Curve)

@@ -1,6 +1,7 @@
 package results
 
 import (
+	"gloamwright/internal/catalogue"
 	"gloamwright/internal/design"
 )
 
@@ -45,6 +46,7 @@ type chargerEntry struct {
 	LimitA      *float64 `json:"limit_a"`
 	FloatV      *float64 `json:"float_v"`
 	BoostV      *float64 `json:"boost_v"`
+	StatedAtC   *float64 `json:"stated_at_c"`
 	PerKelvinV  *float64 `json:"per_kelvin_v"`
 	Compensated bool     `json:"compensated"`
 	Pinned      bool     `json:"pinned"`
@@ -55,15 +57,20 @@ func charger(d *design.Design) *chargerEntry {
 	if c.Part == nil {
 		return nil
 	}
-	return &chargerEntry{
+	e := &chargerEntry{
 		Designation: c.Part.Designation, CurrentA: figure(c.Current), RequiredA: figure(c.Required), LimitA: positive(c.Limit),
 		FloatV: figure(c.Float), BoostV: positive(c.Boost), PerKelvinV: figure(c.PerKelvin), Compensated: c.Compensated, Pinned: c.Pinned,
 	}
+	if class := catalogue.BatteryClassOf(d.Battery.Class); class != nil {
+		e.StatedAtC = figure(class.ChargeAt)
+	}
+	return e
 }
 
 type cutOffEntry struct {
 	Designation string   `json:"designation"`
 	OpensV      *float64 `json:"opens_v"`
+	AtBatteryV  *float64 `json:"at_battery_v"`
 	ReclosesV   *float64 `json:"recloses_v"`
 	CurrentA    *float64 `json:"current_a"`
 	RatedA      *float64 `json:"rated_a"`
@@ -74,7 +81,10 @@ func cutOff(d *design.Design) *cutOffEntry {
 	if c == nil {
 		return nil
 	}
-	return &cutOffEntry{Designation: c.Part.Designation, OpensV: figure(c.Opens), ReclosesV: figure(c.Recloses), CurrentA: figure(c.Current), RatedA: figure(c.Rated)}
+	return &cutOffEntry{
+		Designation: c.Part.Designation, OpensV: figure(c.Opens), AtBatteryV: positive(c.AtBattery), ReclosesV: figure(c.Recloses),
+		CurrentA: figure(c.Current), RatedA: figure(c.Rated),
+	}
 }
 
 type relayEntry struct {
@@ -84,6 +94,8 @@ type relayEntry struct {
 	PickUpV     *float64 `json:"pick_up_v"`
 	DropOutV    *float64 `json:"drop_out_v"`
 	LowestFeedV *float64 `json:"lowest_feed_v"`
+	PickUpColdV *float64 `json:"pick_up_cold_v"`
+	LowestColdV *float64 `json:"lowest_cold_v"`
 	ContactA    *float64 `json:"contact_a"`
 	RatedA      *float64 `json:"rated_a"`
 }
@@ -95,7 +107,7 @@ func relay(d *design.Design) *relayEntry {
 	}
 	return &relayEntry{
 		Designation: r.Part.Designation, CoilOhm: figure(r.Coil), CoilA: figure(r.CoilA), PickUpV: figure(r.PickUp), DropOutV: figure(r.DropOut),
-		LowestFeedV: figure(r.LowestFeed), ContactA: figure(r.Contact), RatedA: figure(r.Rated),
+		LowestFeedV: figure(r.LowestFeed), PickUpColdV: positive(r.PickUpCold), LowestColdV: positive(r.LowestCold), ContactA: figure(r.Contact), RatedA: figure(r.Rated),
 	}
 }
 

@@ -199,6 +199,8 @@ func TestFigures(t *testing.T) {
 		{"thresholds.0.high", nil, "not finite"},
 		{"endurance.lit_h.Porch", 1.5, "5400 s"},
 		{"endurance.curve.0.t_h", 0.5, "the coldest run"},
+		{"endurance.week.0.t_h", 168.0, ""},
+		{"endurance.days.0.lowest", 0.4, ""},
 		{"endurance.cut_off_h", nil, "does not open"},
 		{"faults.0.dark.0.condition", "outage-night", ""},
 		{"faults.0.best", nil, "none named"},
