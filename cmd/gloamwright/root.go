@@ -11,7 +11,7 @@ import (
 // Exit codes.
 const (
 	exitOK     = 0
-	exitStop   = 1 // documents written, but a stop finding stands
+	exitStop   = 1 // a stop finding stands: built, but not issued
 	exitInput  = 2 // the description or the command line is wrong, nothing written
 	exitFailed = 3 // something failed, nothing written
 )
@@ -28,9 +28,9 @@ const longHelp = `Gloamwright sizes extra-low-voltage DC standby lighting from o
 proves it by solving the circuit in every operating condition, and writes the
 schematic and the build packet.
 
-Exit codes: 0 good; 1 documents written, but a stop finding stands; 2 the
-description or the command line is wrong, nothing written; 3 something failed,
-nothing written.`
+Exit codes: 0 good; 1 a stop finding stands: build writes its documents, issue writes
+nothing; 2 the description, the register or the command line is wrong, nothing written;
+3 something failed, nothing written. Of several descriptions, the worst.`
 
 // run is the program without its process. It returns the exit code.
 func run(args []string, stdin io.Reader, stdout, stderr io.Writer) int {
@@ -47,7 +47,7 @@ func run(args []string, stdin io.Reader, stdout, stderr io.Writer) int {
 	root.SetOut(stdout)
 	root.SetErr(stderr)
 	root.CompletionOptions.HiddenDefaultCmd = true
-	root.AddCommand(buildCommand(), sizeCommand(), explainCommand(), newCommand())
+	root.AddCommand(buildCommand(), sizeCommand(), explainCommand(), changesCommand(), issueCommand(), watchCommand(), newCommand())
 	err := root.Execute()
 	if err == nil {
 		return exitOK

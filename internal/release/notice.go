@@ -9,7 +9,6 @@ import (
 	"gloamwright/internal/circuit"
 	"gloamwright/internal/describe"
 	"gloamwright/internal/design"
-	"gloamwright/internal/results"
 )
 
 // Notice compares an issued revision with a design made with the register's labels.
@@ -26,21 +25,11 @@ func (p *Project) Notice(base *Issued, d *design.Design, schema *describe.Schema
 	if err != nil {
 		return nil, err
 	}
-	js, err := results.JSON(d)
+	now, err := recordOf(d)
 	if err != nil {
 		return nil, err
 	}
-	now, err := readRecord(resultsFile, js)
-	if err != nil {
-		return nil, err
-	}
-	values, scopes := changedValues(was, d.Site, schema)
-	nameLamps(values, scopes, now)
-	titles, strips := map[string]string{}, map[string]string{}
-	for _, b := range d.Circuit.Boards {
-		titles[b.Name], strips[b.Name] = b.Title, b.Strip
-	}
-	c := compareRecords(old, now, values, scopes, titles, strips)
+	c := compareDesign(old, was, now, d, schema)
 	c.Revisions, err = p.revisions(c, d)
 	return c, err
 }
