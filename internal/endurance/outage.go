@@ -107,6 +107,12 @@ func (m *model) discharge(st state, o Outage) (Result, state) {
 		if next.used >= 1+m.deltaAt(math.Min(then.hours, longest))/2 && !r.CutOff.Happens {
 			r.Flat = Moment{seconds(t + dt), true}
 		}
+		if r.CutOff.Happens { // the run ends when it opens, not with the step
+			f := (r.CutOff.At.Hours() - t) / dt
+			next = state{out: st.out + f*(next.out-st.out), used: st.used + f*(next.used-st.used)}
+			then.volt, then.amp = now.volt+f*(then.volt-now.volt), now.amp+f*(then.amp-now.amp)
+			dt *= f
+		}
 		t, now, st = t+dt, then, next
 		r.sample(m, t, now, st)
 	}
