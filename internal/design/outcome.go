@@ -27,7 +27,7 @@ func (m *maker) luminaires() {
 				load := m.plan.Load(pt.Type)
 				l := &facts.Luminaire{
 					Part: pt.Luminaire, Point: pt, Circuit: w.Lighting.Name, Type: pt.Type, Kind: load.Kind,
-					Works: load.Works, Watt: load.Rated, WorstV: quantity.Volt(math.Inf(1)),
+					Works: load.Works, Watt: load.Rated, Rated: load.Full, Dimmest: load.Dimmest, WorstV: quantity.Volt(math.Inf(1)),
 				}
 				for i, c := range m.f.Conditions {
 					sol := m.solved[c.Key]

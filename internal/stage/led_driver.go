@@ -12,6 +12,10 @@ type Load struct {
 	Works quantity.Range[quantity.Volt] // range that it works in
 	Rated quantity.Watt                 // at nominal voltage
 	Kind  string                        // kind name
+	// Full is the current that a lamp may take, Dimmest the share of it below which it
+	// counts as too dim; both 0 where the kind states none.
+	Full    quantity.Ampere
+	Dimmest quantity.Ratio
 	// Lit reports whether the lamp counts as lit at a voltage.
 	Lit func(v quantity.Volt) bool
 	// Tree is the same law as the tree of cables takes it, exact between LampEnd and

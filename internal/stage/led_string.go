@@ -60,7 +60,7 @@ func ledStringLoad(p *Plan, t *describe.Luminaire) Load {
 	rated := quantity.Watt(float64(nominal) * float64(at(nominal)))
 	return Load{
 		Works: quantity.Range[quantity.Volt]{Low: low, High: drop + quantity.Volt(float64(most)*float64(r.Val))*stringMost},
-		Rated: rated, Kind: "led-string",
+		Rated: rated, Kind: "led-string", Full: most * quantity.Ampere(strings), Dimmest: dimmest,
 		Lit: func(v quantity.Volt) bool { return v >= low },
 		Tree: sizing.Load{
 			Current: quantity.Ampere(-float64(drop) / float64(r.Val) * float64(strings)),
