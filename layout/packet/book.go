@@ -1,0 +1,106 @@
+package packet
+
+import (
+	"slices"
+
+	"gloamwright/internal/design"
+	"gloamwright/layout/ink"
+	"gloamwright/layout/schematic"
+)
+
+// Keys of the sections.
+const (
+	keyCover      = "cover"
+	keyChange     = "change-notice"
+	keyCautions   = "cautions"
+	keyBasis      = "design-basis"
+	keyLegend     = "legend"
+	keySchematic  = "schematic"
+	keyParts      = "parts"
+	keyLabels     = "labels"
+	keyWires      = "wire-runs"
+	keyCables     = "cables"
+	keyTerminals  = "terminals"
+	keyFuses      = "fuse-map"
+	keyChecklist  = "commissioning"
+	keyTestPoints = "test-points"
+	keyMatrix     = "test-points-matrix"
+	keyFaults     = "fault-finding"
+	keyCurves     = "curves"
+	keyWorkings   = "workings"
+	keyRedLine    = "red-line"
+)
+
+// book is a packet in the making.
+type book struct {
+	d          *design.Design
+	drawings   []*schematic.Sheet
+	pg, sidePg page
+	refs       *refs
+	cuts       []string
+	symbols    map[string]ink.Target // of designations on the schematic
+}
+
+func newBook(d *design.Design, drawings []*schematic.Sheet) *book {
+	b := &book{d: d, drawings: drawings, refs: newRefs()}
+	b.pg, b.sidePg = pages(d.Site.Practice.Paper.Val)
+	return b
+}
+
+// start forgets what a round of layout noted.
+func (b *book) start() {
+	b.cuts = nil
+	b.refs.asked = map[string]bool{}
+}
+
+// noteCut remembers a text that had to be shortened.
+func (b *book) noteCut(text string) {
+	if !slices.Contains(b.cuts, text) {
+		b.cuts = append(b.cuts, text)
+	}
+}
+
+// revision is the revision letter; a draft says so.
+func (b *book) revision() string {
+	r := b.d.Site.Job.Revision.Val
+	if !b.d.Issued {
+		return r + ", draft"
+	}
+	return r
+}
+
+// sections lists the packet in the order of work.
+func (b *book) sections() []*section {
+	var out []*section
+	add := func(list ...*section) {
+		for _, s := range list {
+			if s != nil {
+				out = append(out, s)
+			}
+		}
+	}
+	add(b.basis())
+	add(b.schematicSections()...)
+	add(b.parts(), b.wires())
+	return out
+}
+
+// size is the trimmed size of a section's sheets.
+func (b *book) size(s *section) (w, h float64) {
+	switch {
+	case s.drawing != nil:
+		return s.drawing.Paper.W, s.drawing.Paper.H
+	case s.side:
+		return b.sidePg.w, b.sidePg.h
+	}
+	return b.pg.w, b.pg.h
+}
+
+func sortedKeys(m map[string]bool) []string {
+	var out []string
+	for k := range m {
+		out = append(out, k)
+	}
+	slices.Sort(out)
+	return out
+}
