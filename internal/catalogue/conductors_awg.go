@@ -62,7 +62,7 @@ var ConductorsAWG = func() []Conductor {
 		a := GaugeArea(n)
 		out = append(out, Conductor{
 			Size:  quantity.WireSize{Area: a, Gauge: g},
-			PerKM: quantity.Ohm(1000 * CopperResistivity / float64(a) * strandingAllowance),
+			PerKM: WireOhm(CopperResistivity, 1000, a) * strandingAllowance,
 			Evidence: Evidence{Source: "ASTM B258 area, IEC 60028 copper, stranding allowance 2.5 %", Seen: true,
 				Note: "the formula agrees with a printed table of diameters within 0.1 %"},
 		})

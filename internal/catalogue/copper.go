@@ -21,6 +21,12 @@ var CopperEvidence = Evidence{Source: "IEC 60028"}
 // ReferenceTemperature is the temperature of conductor tables (IEC 60228, ASTM B258).
 const ReferenceTemperature quantity.Celsius = 20
 
+// WireOhm returns the resistance of a wire of length l and area a of a metal with
+// resistivity rho in Ω·mm²/m (definition of resistivity).
+func WireOhm(rho float64, l quantity.Metre, a quantity.SquareMM) quantity.Ohm {
+	return quantity.Ohm(rho * float64(l) / float64(a))
+}
+
 // Adiabatic factors k of IEC 60364-4-43 table 43A for copper, in A·s^½/mm².
 const (
 	AdiabaticPVC  = 115 // insulation PVC 70 °C, cores up to 300 mm²

@@ -48,12 +48,6 @@ func Loop(in RunInput) (quantity.Ohm, Working) {
 	}
 }
 
-// WireResistance returns the resistance of a wire of length l and area a of a metal
-// with resistivity rho in Ω·mm²/m (definition of resistivity).
-func WireResistance(rho float64, l quantity.Metre, a quantity.SquareMM) quantity.Ohm {
-	return quantity.Ohm(rho * float64(l) / float64(a))
-}
-
 // LeastAreaInput states a loop and the drop that it may have.
 type LeastAreaInput struct {
 	Resistivity float64       // Ω·mm²/m at working temperature

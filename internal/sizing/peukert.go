@@ -1,8 +1,10 @@
 package sizing
 
 import (
+	"fmt"
 	"math"
 
+	"gloamwright/internal/catalogue"
 	"gloamwright/internal/quantity"
 )
 
@@ -18,4 +20,37 @@ func PeukertExponent(capacity quantity.AmpereHour, rated quantity.Second, curren
 // with the capacity C at the rated time H. The one-ampere form has H = C in hours.
 func PeukertTime(capacity quantity.AmpereHour, rated quantity.Second, current quantity.Ampere, n float64) quantity.Second {
 	return rated * quantity.Second(math.Pow(float64(capacity)/(float64(current)*rated.Hours()), n))
+}
+
+// Peukert exponents that cells can have: ranges by type from a note on Peukert's law
+// run from 1.05 (glass mat) to 1.6 (flooded); lithium cells reach down to 1.00.
+const (
+	peukertLow  = 1.0
+	peukertHigh = 1.6
+)
+
+// PlausibleRates checks a capacity table that a user gives: times must rise, and each
+// step from one line to the next must follow Peukert's law with an exponent that
+// cells can have. It returns a *BlockedError that names the step.
+func PlausibleRates(rates []catalogue.RatePoint) error {
+	for i := 1; i < len(rates); i++ {
+		a, b := rates[i-1], rates[i]
+		if b.Time <= a.Time {
+			return fmt.Errorf("the capacity table must list rising times: %v does not come after %v", b.Time, a.Time)
+		}
+		capacity := quantity.AmpereHour(b.Fraction)
+		current := quantity.Ampere(float64(a.Fraction) / a.Time.Hours())
+		n := PeukertExponent(capacity, b.Time, current, a.Time)
+		bound := peukertHigh
+		if n < 1 {
+			bound = peukertLow
+		}
+		if n < peukertLow-slack || n > peukertHigh || math.IsNaN(n) {
+			return &BlockedError{
+				Limit: LimitCapacity, Subject: fmt.Sprintf("the Peukert exponent between %v and %v of the capacity table", a.Time, b.Time),
+				Value: n, Bound: bound, Frees: "check the two lines against the maker's sheet",
+			}
+		}
+	}
+	return nil
 }

@@ -37,12 +37,6 @@ func Peak(b Bridge, secondary, diode quantity.Volt) (quantity.Volt, Working) {
 	}
 }
 
-// Average returns the mean of a rectified sine with a peak, without capacitor:
-// U_p ÷ π for each pulse of a period (electronics textbooks).
-func Average(b Bridge, peak quantity.Volt) quantity.Volt {
-	return peak * quantity.Volt(b.Pulses) / math.Pi
-}
-
 // RippleInput states a reservoir capacitor and its load.
 type RippleInput struct {
 	Rectifier Bridge
@@ -62,12 +56,6 @@ func Ripple(in RippleInput) (quantity.Volt, Working) {
 		Substituted: fmt.Sprintf("%s ÷ (%d × %s × %s)", num(float64(in.Current), "A"), in.Rectifier.Pulses, num(in.Frequency, "Hz"), num(float64(in.Capacitor), "F")),
 		Value:       v, Unit: "V", Source: "reservoir capacitor (electronics textbooks)",
 	}
-}
-
-// RippleRMS turns a peak-to-peak triangular ripple into its effective value:
-// U_r ÷ (2√3).
-func RippleRMS(peakToPeak quantity.Volt) quantity.Volt {
-	return peakToPeak / quantity.Volt(2*math.Sqrt(3))
 }
 
 // TransformerInput states what a transformer feeds through a bridge and reservoir.

@@ -42,6 +42,9 @@ func Sectional(in SectionalInput) (quantity.AmpereHour, []Working, error) {
 	if len(in.Periods) == 0 {
 		return 0, nil, fmt.Errorf("sizing: a load cycle needs at least one period")
 	}
+	if err := PlausibleRates(in.Rates); err != nil {
+		return 0, nil, err
+	}
 	end := in.EndVolt
 	if end == 0 {
 		end = in.Class.EndVolt

@@ -136,29 +136,3 @@ func (t *Thresholds) workings(cell quantity.Ohm) []Working {
 		Substituted: fmt.Sprintf("(1 ÷ %s + 1 ÷ %s) ÷ %s", num(float64(t.Top), "Ω"), num(float64(t.Feedback), "Ω"), g), Value: high, Source: source,
 	}}
 }
-
-// FollowerInput states a transistor that a light resistor drives into a coil: base
-// fed through Base from plus, the cell from base to minus; dark cells let it conduct.
-type FollowerInput struct {
-	Transistor catalogue.Transistor
-	Supply     quantity.Volt // lowest
-	Coil       quantity.Ohm
-	Dark       quantity.Ohm // of the cell at the dark threshold
-}
-
-// FollowerBase returns the greatest base resistor at which the transistor saturates
-// in the dark: the coil's current over the forced gain plus what the cell takes,
-// (U − U_BE) ÷ (I_C ÷ β_forced + U_BE ÷ R_cell) (transistor switch, electronics
-// textbooks), and the E24 value not above it.
-func FollowerBase(in FollowerInput) (quantity.Ohm, Working) {
-	ic := float64(in.Supply) / float64(in.Coil)
-	ube := float64(in.Transistor.Base)
-	r := (float64(in.Supply) - ube) / (ic/in.Transistor.Forced + ube/float64(in.Dark))
-	fit := catalogue.E24.AtMost(r)
-	return quantity.Ohm(fit), Working{
-		Name: "base resistor", Formula: "R ≤ (U − U_BE) ÷ (U ÷ R_coil ÷ β + U_BE ÷ R_cell), E24 value not above",
-		Substituted: fmt.Sprintf("(%s − %s) ÷ (%s ÷ %s ÷ %s + %s ÷ %s) = %s → %s", num(float64(in.Supply), "V"), num(ube, "V"), num(float64(in.Supply), "V"),
-			num(float64(in.Coil), "Ω"), num(in.Transistor.Forced, ""), num(ube, "V"), num(float64(in.Dark), "Ω"), num(r, "Ω"), num(fit, "Ω")),
-		Value: fit, Unit: "Ω", Source: "transistor switch (electronics textbooks); " + in.Transistor.Evidence.String(),
-	}
-}

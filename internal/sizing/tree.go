@@ -95,17 +95,19 @@ func (t *Tree) priced() bool {
 	return false
 }
 
-// sweepRounds and sweepEnd bound the backward and forward sweep: drops of a few per
-// cent converge in about ten rounds; a tree near voltage collapse does not.
+// solveRounds and solveEnd bound Newton's method: it takes three to five rounds; a
+// tree beyond voltage collapse never settles.
 const (
-	sweepRounds = 300
-	sweepEnd    = 1e-13 // of the source voltage
+	solveRounds = 60
+	solveEnd    = 1e-13 // of the source voltage
 	collapsed   = 0.05  // of the source voltage: below it no operating point is sought
 )
 
 // Solve returns the voltage at the end of each leg and the current in each, exactly:
-// the backward and forward sweep for radial networks (distribution textbooks),
-// repeated until the voltages stand. ok is false if there is no operating point.
+// the backward and forward sweep for radial networks (distribution textbooks) on
+// loads made straight at the last voltages, which is Newton's method with a direct
+// solution of each step, repeated until the voltages stand. ok is false if there is no
+// operating point.
 func (t *Tree) Solve(sizes []*Option) (volts []quantity.Volt, amps []quantity.Ampere, ok bool) {
 	r := make([]float64, len(t.Legs))
 	for i := range t.Legs {
@@ -130,17 +132,34 @@ func (t *Tree) faultOhms(i int, o *Option) float64 {
 	return 2*float64(t.Legs[i].Length)*o.fault() + float64(t.Legs[i].Extra)
 }
 
+// sweep solves for the leg resistances r. Backwards it folds what hangs on each leg
+// into a current a + g·V at its start; forwards it lays out the voltages.
 func (t *Tree) sweep(r, v, a []float64) bool {
+	n := len(r)
+	own, slope := make([]float64, n), make([]float64, n) // at a leg's end: own + slope × V
 	for i := range v {
 		v[i] = float64(t.Volts)
 	}
-	for range sweepRounds {
-		for i := range a {
-			a[i] = float64(t.Legs[i].Load.Draws(quantity.Volt(v[i])))
+	for range solveRounds {
+		for i := range own {
+			l := &t.Legs[i].Load
+			own[i], slope[i] = float64(l.Current), 0
+			if l.Power != 0 {
+				own[i] += 2 * float64(l.Power) / v[i]
+				slope[i] -= float64(l.Power) / (v[i] * v[i])
+			}
+			if l.Ohm != 0 {
+				slope[i] += 1 / float64(l.Ohm)
+			}
 		}
-		for i := len(a) - 1; i >= 0; i-- {
+		for i := n - 1; i >= 0; i-- {
+			d := 1 + r[i]*slope[i]
+			if d <= 0 {
+				return false
+			}
 			if p := t.Legs[i].Parent; p >= 0 {
-				a[p] += a[i]
+				own[p] += own[i] / d
+				slope[p] += slope[i] / d
 			}
 		}
 		change := 0.0
@@ -149,14 +168,15 @@ func (t *Tree) sweep(r, v, a []float64) bool {
 			if p := t.Legs[i].Parent; p >= 0 {
 				up = v[p]
 			}
-			next := up - a[i]*r[i]
+			next := (up - r[i]*own[i]) / (1 + r[i]*slope[i])
 			if next < collapsed*float64(t.Volts) {
 				return false
 			}
+			a[i] = own[i] + slope[i]*next
 			change = max(change, abs(next-v[i]))
 			v[i] = next
 		}
-		if change <= sweepEnd*float64(t.Volts) {
+		if change <= solveEnd*float64(t.Volts) {
 			return true
 		}
 	}

@@ -13,6 +13,7 @@ type VentilationInput struct {
 	Cells    int
 	Capacity quantity.AmpereHour // of the whole battery
 	Boost    bool                // charged at boost voltage
+	Charger  quantity.Ampere     // rated current; 0: leaves out what a failed charger sets free
 }
 
 // Air is what a battery needs against its hydrogen.
@@ -42,7 +43,7 @@ func Ventilation(in VentilationInput) (Air, []Working) {
 	}
 	q := airFactor * float64(in.Cells) * gas * float64(in.Capacity) / 1000
 	a := Air{Flow: q, Opening: openingFactor * q}
-	return a, []Working{{
+	ws := []Working{{
 		Name: "air flow, " + state + " charge", Formula: "Q = 0.05 × n × I_gas × C ÷ 1000",
 		Substituted: fmt.Sprintf("0.05 × %d × %s × %s ÷ 1000", in.Cells, num(gas, "mA/Ah"), num(float64(in.Capacity), "Ah")),
 		Value:       q, Unit: "m³/h", Source: airSource + "; I_gas: " + gasSource(in.Class),
@@ -50,6 +51,12 @@ func Ventilation(in VentilationInput) (Air, []Working) {
 		Name: "free opening", Formula: "A = 28 × Q", Substituted: "28 × " + num(q, "m³/h"),
 		Value: a.Opening, Unit: "cm²", Source: airSource, Uses: []string{"air flow, " + state + " charge"},
 	}}
+	if in.Charger > 0 && in.Class.GasEvi.Source != "" {
+		_, w := Hydrogen(in.Cells, in.Charger)
+		w.Name = "hydrogen if the whole charger current gasses"
+		ws = append(ws, w)
+	}
+	return a, ws
 }
 
 func gasSource(c *catalogue.BatteryClass) string {
@@ -68,7 +75,7 @@ const hydrogenAh = 1.27e-7 * quantity.SecondsPerHour
 func Hydrogen(n int, i quantity.Ampere) (float64, Working) {
 	v := hydrogenAh * float64(n) * float64(i)
 	return v, Working{
-		Name: "hydrogen", Formula: "q = 1.27·10⁻⁷ m³/s × 3600 s/h × n × I",
+		Name: "hydrogen", Formula: "q = q_Ah × n × I",
 		Substituted: fmt.Sprintf("%s × %d × %s", num(hydrogenAh, "m³/Ah"), n, num(float64(i), "A")),
 		Value:       v, Unit: "m³/h", Source: "UFC 3-520-01",
 	}

@@ -2,7 +2,6 @@ package sizing
 
 import (
 	"fmt"
-	"math"
 
 	"gloamwright/internal/catalogue"
 	"gloamwright/internal/quantity"
@@ -58,18 +57,6 @@ func ShuntState(supply, zener quantity.Volt, dropper, load quantity.Ohm) Shunt {
 	s.Dropper = quantity.Watt((float64(supply) - out) * float64(s.Supply))
 	s.Heat = quantity.Watt(out * float64(s.Zener))
 	return s
-}
-
-// ShuntLoads returns the least and greatest load resistance between which a Zener
-// regulates: it is starved below the least, and above the greatest carries more than
-// most (electronics textbooks). High is +Inf when the Zener bears the whole current.
-func ShuntLoads(supply, zener quantity.Volt, dropper quantity.Ohm, most quantity.Ampere) (low, high quantity.Ohm) {
-	i := float64(supply-zener) / float64(dropper)
-	low = quantity.Ohm(float64(zener) / i)
-	if left := i - float64(most); left > 0 {
-		return low, quantity.Ohm(float64(zener) / left)
-	}
-	return low, quantity.Ohm(math.Inf(1))
 }
 
 // CoilFeedInput states a Zener-stabilised feed of a relay coil.
