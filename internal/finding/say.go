@@ -7,7 +7,6 @@ import (
 	"strings"
 
 	"gloamwright/internal/circuit"
-	"gloamwright/internal/describe"
 	"gloamwright/internal/facts"
 	"gloamwright/internal/quantity"
 )
@@ -88,14 +87,6 @@ func designation(p *circuit.Part, otherwise string) string {
 		return otherwise
 	}
 	return p.Designation
-}
-
-// placeOf returns where a part was described; the zero Span for a missing part.
-func placeOf(p *circuit.Part) describe.Span {
-	if p == nil {
-		return describe.Span{}
-	}
-	return p.At
 }
 
 // wanted reports, by condition, whether a circuit must be lit.

@@ -41,10 +41,6 @@ func amps(element string) func(circuitUnderTest, *Solution) float64 {
 	return func(_ circuitUnderTest, s *Solution) float64 { return s.Current(element) }
 }
 
-func pinAmps(element, pin string) func(circuitUnderTest, *Solution) float64 {
-	return func(_ circuitUnderTest, s *Solution) float64 { return s.PinCurrent(element, pin) }
-}
-
 func watts(element string) func(circuitUnderTest, *Solution) float64 {
 	return func(_ circuitUnderTest, s *Solution) float64 { return s.Power(element) }
 }

@@ -32,7 +32,6 @@ type Build struct {
 	rails  map[string]*circuit.Rail
 	outs   map[string]*circuit.Pin // signal outputs by "stage.port"
 	places map[string]*circuit.Place
-	ends   map[*circuit.Lighting]*circuit.TestPoint
 	boards map[string]*circuit.Board
 }
 
