@@ -47,7 +47,7 @@ func run(args []string, stdin io.Reader, stdout, stderr io.Writer) int {
 	root.SetOut(stdout)
 	root.SetErr(stderr)
 	root.CompletionOptions.HiddenDefaultCmd = true
-	root.AddCommand(buildCommand(), sizeCommand(), explainCommand(), changesCommand(), issueCommand(), watchCommand(), newCommand())
+	root.AddCommand(buildCommand(), sizeCommand(), explainCommand(), changesCommand(), issueCommand(), watchCommand(), newCommand(), readingsCommand(), acceptCommand())
 	err := root.Execute()
 	if err == nil {
 		return exitOK
