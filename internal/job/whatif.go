@@ -5,6 +5,7 @@ import (
 	"io"
 
 	"gloamwright/internal/design"
+	"gloamwright/internal/finding"
 	"gloamwright/internal/quantity"
 )
 
@@ -42,6 +43,36 @@ func figures(d *design.Design) []figure {
 	return out
 }
 
+// findingDifferences writes the findings that are new, gone or have another figure,
+// and returns their number.
+func findingDifferences(w io.Writer, was, is *design.Design) int {
+	key := func(f finding.Finding) string { return f.Check + "\x00" + f.Subject }
+	before := map[string]finding.Finding{}
+	for _, f := range was.Findings {
+		before[key(f)] = f
+	}
+	n := 0
+	after := map[string]bool{}
+	for _, f := range is.Findings {
+		after[key(f)] = true
+		switch old, ok := before[key(f)]; {
+		case !ok:
+			fmt.Fprintf(w, "  + %s: %s\n", f.Severity, f.Message)
+			n++
+		case old.Message != f.Message:
+			fmt.Fprintf(w, "    %s: %s\n      was: %s\n", f.Severity, f.Message, old.Message)
+			n++
+		}
+	}
+	for _, f := range was.Findings {
+		if !after[key(f)] {
+			fmt.Fprintf(w, "  - %s: %s\n", f.Severity, f.Message)
+			n++
+		}
+	}
+	return n
+}
+
 // Differences writes what would differ between a design of the file as it stands and
 // one with changed values.
 func Differences(w io.Writer, was, is *design.Design) {
@@ -71,24 +102,7 @@ func Differences(w io.Writer, was, is *design.Design) {
 			n++
 		}
 	}
-	before := map[string]bool{}
-	for _, f := range was.Findings {
-		before[f.Message] = true
-	}
-	after := map[string]bool{}
-	for _, f := range is.Findings {
-		after[f.Message] = true
-		if !before[f.Message] {
-			fmt.Fprintf(w, "  + %s: %s\n", f.Severity, f.Message)
-			n++
-		}
-	}
-	for _, f := range was.Findings {
-		if !after[f.Message] {
-			fmt.Fprintf(w, "  - %s: %s\n", f.Severity, f.Message)
-			n++
-		}
-	}
+	n += findingDifferences(w, was, is)
 	if n == 0 {
 		fmt.Fprintln(w, "    nothing")
 	}
