@@ -22,6 +22,9 @@ func Make(site *describe.Site, kept circuit.Labels) (*Design, error) {
 	if err != nil {
 		return nil, err
 	}
+	for _, e := range f.Netlist.Elements {
+		f.Elements = append(f.Elements, facts.ElementValues{Element: e.ID, Params: n.Values(e.ID)})
+	}
 	m := &maker{site: site, plan: plan, f: f, net: n, solved: map[string]*network.Solution{}}
 	if err := m.conditions(); err != nil {
 		return nil, err

@@ -149,7 +149,11 @@ func (m *maker) condition(o operating, number int) *facts.Condition {
 	c := &facts.Condition{
 		Key: o.key, Name: o.name, From: o.from, Dark: o.dark, Battery: o.battery, Shown: o.shown,
 		Lux: quantity.Lux(env.Lux), Settled: true, Residual: sol.Residual,
-		MainsV: quantity.Volt(env.Mains * float64(m.mainsNominal())),
+		MainsV: quantity.Volt(env.Mains * float64(m.mainsNominal())), Mains: env.Mains,
+		Charge: map[network.ChargeStage]string{network.NoCharge: facts.Off, network.Float: facts.Float, network.Boost: facts.Boost}[env.Charge],
+	}
+	for _, v := range env.Overrides {
+		c.Values = append(c.Values, facts.ElementValues{Element: v.Element, Params: v.Params})
 	}
 	if o.shown {
 		c.Number = number

@@ -16,6 +16,7 @@ type Facts struct {
 	Site       *describe.Site
 	Circuit    *circuit.Circuit
 	Netlist    *circuit.Netlist
+	Elements   []ElementValues // all parameters as they are used, in the order of Netlist.Elements
 	Conditions []*Condition
 	Readings   []*Reading   // one a test point, in the order of Circuit.TestPoints
 	Luminaires []*Luminaire // in label order
@@ -44,6 +45,8 @@ type Condition struct {
 	Expect     string // what is then to be seen
 	From       string // key of the condition that it is reached from, empty: at rest
 	MainsV     quantity.Volt
+	Mains      float64 // share of the nominal mains voltage
+	Charge     string  // what a charger does: Off, Float or Boost
 	Lux        quantity.Lux
 	Dark       bool
 	Battery    string // "floating", "rested full", "end of discharge", "cut off", "recharging"
@@ -53,9 +56,23 @@ type Condition struct {
 	Lit        []string        // circuit names
 	Settled    bool
 	State      []State
+	Values     []ElementValues // parameters that stand in place of the netlist's here
 	Volts      []quantity.Volt // by net
 	Residual   float64         // largest current imbalance at a node, A
 	Shown      bool            // printed in the packet's six conditions
+}
+
+// What a charger does in a condition.
+const (
+	Off   = "off"
+	Float = "float"
+	Boost = "boost"
+)
+
+// ElementValues is parameters of one element of the netlist.
+type ElementValues struct {
+	Element string
+	Params  []circuit.Param
 }
 
 // State is the position of one relay, switch or cut-off.

@@ -5,34 +5,44 @@ import (
 )
 
 type condEntry struct {
-	Name       string              `json:"name"`
-	Title      string              `json:"title"`
-	Number     int                 `json:"number"`
-	From       string              `json:"from"`
-	MainsV     *float64            `json:"mains_v"`
-	DaylightLx *float64            `json:"daylight_lx"`
-	Battery    string              `json:"battery"`
-	BatteryV   *float64            `json:"battery_v"`
-	BatterySoC *float64            `json:"battery_soc"`
-	BatteryA   *float64            `json:"battery_a"`
-	Lit        []string            `json:"lit"`
-	Settled    bool                `json:"settled"`
-	ResidualA  *float64            `json:"residual_a"`
-	State      map[string]string   `json:"state"`
-	Volts      map[string]*float64 `json:"volts"`
+	Name       string            `json:"name"`
+	Title      string            `json:"title"`
+	Number     int               `json:"number"`
+	From       string            `json:"from"`
+	MainsV     *float64          `json:"mains_v"`
+	Mains      *float64          `json:"mains"`
+	DaylightLx *float64          `json:"daylight_lx"`
+	Charge     string            `json:"charge"`
+	Battery    string            `json:"battery"`
+	BatteryV   *float64          `json:"battery_v"`
+	BatterySoC *float64          `json:"battery_soc"`
+	BatteryA   *float64          `json:"battery_a"`
+	Lit        []string          `json:"lit"`
+	Settled    bool              `json:"settled"`
+	ResidualA  *float64          `json:"residual_a"`
+	State      map[string]string `json:"state"`
+	// Values holds the parameters that stand in place of those under network.
+	Values map[string]map[string]*float64 `json:"values"`
+	Volts  map[string]*float64            `json:"volts"`
 }
 
 func conditions(d *design.Design, nets []string) []condEntry {
 	out := []condEntry{}
 	for _, c := range d.Conditions {
 		e := condEntry{
-			Name: c.Key, Title: c.Name, Number: c.Number, From: c.From, MainsV: figure(c.MainsV), DaylightLx: figure(c.Lux),
+			Name: c.Key, Title: c.Name, Number: c.Number, From: c.From, MainsV: figure(c.MainsV), Mains: to(c.Mains, networkDigits), DaylightLx: to(c.Lux, networkDigits), Charge: c.Charge,
 			Battery: c.Battery, BatteryV: to(c.BatteryV, networkDigits), BatterySoC: figure(c.BatterySoC), BatteryA: to(c.BatteryA, readingDigits),
 			Lit: list(c.Lit), Settled: c.Settled, ResidualA: figure(c.Residual),
-			State: map[string]string{}, Volts: make(map[string]*float64, len(c.Volts)),
+			State: map[string]string{}, Values: map[string]map[string]*float64{}, Volts: make(map[string]*float64, len(c.Volts)),
 		}
 		for _, s := range c.State {
 			e.State[s.Element] = s.Position
+		}
+		for _, v := range c.Values {
+			e.Values[v.Element] = map[string]*float64{}
+			for _, p := range v.Params {
+				e.Values[v.Element][p.Name] = to(p.Value, networkDigits)
+			}
 		}
 		for i, v := range c.Volts {
 			e.Volts[nets[i]] = to(v, networkDigits)

@@ -75,6 +75,10 @@ func handmade() *design.Design {
 		element("-E11", e1.Key, "resistor", 2, 3, ohm(12)),
 		element("11−", "leg/minus", "conductor", 3, 0, ohm(0.24)),
 	}}
+	var values []facts.ElementValues
+	for _, e := range netlist.Elements {
+		values = append(values, facts.ElementValues{Element: e.ID, Params: e.Params})
+	}
 	const amps = 24.5 / 12.5
 	volts := []quantity.Volt{0, 24.5 - 0.02*amps, 24.5 - 0.26*amps, 0.24 * amps}
 
@@ -91,9 +95,9 @@ func handmade() *design.Design {
 				Places: []*circuit.Place{box}, Parts: []*circuit.Part{g, f1, e1, e2, tm}, Conductors: []*circuit.Conductor{lead, plus, minus},
 				Cables: []*circuit.Cable{cable}, Boards: []*circuit.Board{board}, TestPoints: []*circuit.TestPoint{point},
 			},
-			Netlist: netlist,
+			Netlist: netlist, Elements: values,
 			Conditions: []*facts.Condition{{
-				Key: "outage-night", Number: 1, Name: "Mains off, dark", Battery: "rested full", BatteryV: volts[1], BatterySoC: 1, BatteryA: -amps,
+				Key: "outage-night", Number: 1, Charge: facts.Off, Name: "Mains off, dark", Battery: "rested full", BatteryV: volts[1], BatterySoC: 1, BatteryA: -amps,
 				Lit: []string{"Porch"}, Settled: true, Volts: volts, State: []facts.State{{Element: "-K1", Position: "released"}}, Residual: 1e-13,
 			}},
 			Readings:   []*facts.Reading{{Point: point, Bands: []facts.Band{{Low: 24.1, Typical: volts[1], High: 24.8, Root: 0.2}}}},

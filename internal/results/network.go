@@ -26,7 +26,7 @@ func network(d *design.Design, nets []string) []elementEntry {
 	for _, c := range d.Circuit.Conductors {
 		label[c.Key] = c.Number
 	}
-	for _, x := range d.Netlist.Elements {
+	for i, x := range d.Netlist.Elements {
 		e := elementEntry{
 			Element: x.ID, Part: label[x.Part], Model: x.Model, Pins: map[string]string{},
 			Values: map[string]*float64{}, Tolerance: map[string]*float64{}, Control: x.Control,
@@ -34,7 +34,7 @@ func network(d *design.Design, nets []string) []elementEntry {
 		for _, p := range x.Pins {
 			e.Pins[p.Name] = nets[p.Net]
 		}
-		for _, p := range x.Params {
+		for _, p := range d.Elements[i].Params {
 			e.Values[p.Name] = to(p.Value, networkDigits)
 			if p.Tol != 0 {
 				e.Tolerance[p.Name] = figure(p.Tol)

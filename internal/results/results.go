@@ -28,6 +28,7 @@ type document struct {
 	Conductors  []wireEntry    `json:"conductors"`
 	Fuses       []fuseEntry    `json:"fuses"`
 	Network     []elementEntry `json:"network"`
+	Reference   string         `json:"reference"`
 	Conditions  []condEntry    `json:"conditions"`
 	TestPoints  []pointEntry   `json:"test_points"`
 	Luminaires  []lampEntry    `json:"luminaires"`
@@ -86,6 +87,9 @@ func JSON(d *design.Design) ([]byte, error) {
 		Battery: battery(d), Charger: charger(d), CutOff: cutOff(d), Relay: relay(d), Supply: supply(d),
 		Endurance: endurance(d), Function: function(d, conds), Thresholds: thresholds(d), Faults: faults(d),
 		Totals: totals(d), Workings: workings(d),
+	}
+	if len(nets) > 0 {
+		out.Reference = nets[0]
 	}
 	if d.ForConstruction() {
 		out.Status = forConstruction

@@ -143,6 +143,11 @@ func law(el *circuit.Element, c *Condition, v map[string]dual.Number) (map[strin
 	case "battery":
 		from("+", "-", over(plus(d("+", "-"), -p["emf"]), max(p["ohm"], 1e-6)))
 	case "charger":
+		for _, probe := range []string{"θ+", "θ-"} {
+			if _, there := v[probe]; there {
+				through(probe, "-", 1e6)
+			}
+		}
 		set := map[string]float64{"float": p["float_volt"], "boost": p["boost_volt"]}[c.Charge]
 		if c.Mains <= 0 || set == 0 {
 			from("+", "-", dual.Scale(p["standby_ampere"], fade(d("+", "-"), 1)))
