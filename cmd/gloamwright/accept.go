@@ -24,7 +24,7 @@ func acceptCommand() *cobra.Command {
 			"outside, name the likely faults and the next reading to take. Write the commissioning record beside READINGS as PDF and JSON.\n" +
 			"Exit code 0 when every reading passed, 1 when points are open.",
 		Example: "  gloamwright accept site.yaml site.readings.yaml",
-		Args:    cobra.ExactArgs(2),
+		Args:    takes(2, "a description and a filled readings sheet"),
 		RunE: func(cmd *cobra.Command, args []string) error {
 			d, err := job.Load(args[0], nil)
 			if err != nil {

@@ -19,7 +19,7 @@ func buildCommand() *cobra.Command {
 results into OUT/<job number>/<revision>/. Files appear whole or not at all. Several
 files, or every description in a folder, are built side by side.`,
 		Example: "  gloamwright build examples/bracken-reach.yaml\n  gloamwright build examples",
-		Args:    cobra.MinimumNArgs(1),
+		Args:    takesSome("one or more descriptions, or a folder of them"),
 		RunE: func(cmd *cobra.Command, args []string) error {
 			paths, err := job.Find(args)
 			if err != nil {

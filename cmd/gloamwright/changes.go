@@ -19,7 +19,7 @@ func changesCommand() *cobra.Command {
 which values changed, and what follows from them, in the order in which a technician
 works. Nothing is written.`,
 		Example: "  gloamwright changes site.yaml\n  gloamwright changes site.yaml --from A\n  gloamwright changes site.yaml --json > changes.json",
-		Args:    cobra.ExactArgs(1),
+		Args:    takes(1, "one description"),
 		RunE: func(cmd *cobra.Command, args []string) error {
 			j, err := job.Open(args[0], nil)
 			if err != nil {

@@ -15,7 +15,7 @@ func explainCommand() *cobra.Command {
 		Long: "Print every working of WHAT (a designation, a circuit or a stage), what it depends on and what depends on it.\n" +
 			"A designation begins with a minus sign: put -- before it.",
 		Example: "  gloamwright explain examples/bracken-reach.yaml Boathouse\n  gloamwright explain examples/bracken-reach.yaml store\n  gloamwright explain examples/bracken-reach.yaml -- -F103",
-		Args:    cobra.ExactArgs(2),
+		Args:    takes(2, "a description and what to explain"),
 		RunE: func(cmd *cobra.Command, args []string) error {
 			d, err := job.Load(args[0], nil)
 			if err != nil {

@@ -20,7 +20,7 @@ Refused with a stop finding, for a revision that is issued already or out of ord
 when nothing has changed. Interrupted at any moment, it leaves what was before or the
 whole revision.`,
 		Example: "  gloamwright issue site.yaml",
-		Args:    cobra.ExactArgs(1),
+		Args:    takes(1, "one description"),
 		RunE: func(cmd *cobra.Command, args []string) error {
 			made, err := job.Issue(args[0])
 			if err != nil {

@@ -25,7 +25,7 @@ func newCommand() *cobra.Command {
 		Short:   "Write a commented description to start from",
 		Long:    "Write NAME.yaml, a commented description to start from.\n\nStarters:\n" + list.String(),
 		Example: "  gloamwright new clinic --from two-boards-24v",
-		Args:    cobra.ExactArgs(1),
+		Args:    takes(1, "a name for the description"),
 		RunE: func(cmd *cobra.Command, args []string) error {
 			text, err := templates.Starter(from)
 			if err != nil {

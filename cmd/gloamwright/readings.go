@@ -23,7 +23,7 @@ func readingsCommand() *cobra.Command {
 		Long: "Write one line for every measurement of the packet, with its band, beside FILE: FILE.readings.yaml, or .csv for a spreadsheet.\n" +
 			"A sheet that is there already is never overwritten: it may be filled.",
 		Example: "  gloamwright readings site.yaml\n  gloamwright readings site.yaml --csv",
-		Args:    cobra.ExactArgs(1),
+		Args:    takes(1, "one description"),
 		RunE: func(cmd *cobra.Command, args []string) error {
 			d, err := job.Load(args[0], nil)
 			if err != nil {

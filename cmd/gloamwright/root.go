@@ -32,6 +32,26 @@ Exit codes: 0 good; 1 a stop finding stands: build writes its documents, issue w
 nothing; 2 the description, the register or the command line is wrong, nothing written;
 3 something failed, nothing written. Of several descriptions, the worst.`
 
+// takes refuses a command line that has not exactly n arguments, in words.
+func takes(n int, what string) cobra.PositionalArgs {
+	return func(cmd *cobra.Command, args []string) error {
+		if len(args) != n {
+			return fmt.Errorf("%s needs %s, such as:\n%s", cmd.CommandPath(), what, cmd.Example)
+		}
+		return nil
+	}
+}
+
+// takesSome refuses a command line without arguments.
+func takesSome(what string) cobra.PositionalArgs {
+	return func(cmd *cobra.Command, args []string) error {
+		if len(args) == 0 {
+			return fmt.Errorf("%s needs %s, such as:\n%s", cmd.CommandPath(), what, cmd.Example)
+		}
+		return nil
+	}
+}
+
 // run is the program without its process. It returns the exit code.
 func run(args []string, stdin io.Reader, stdout, stderr io.Writer) int {
 	root := &cobra.Command{

@@ -20,7 +20,7 @@ func sizeCommand() *cobra.Command {
 		Short:   "Print the sizing and the findings, write nothing",
 		Long:    "Size the site that FILE describes and print what came out, without writing documents.",
 		Example: "  gloamwright size site.yaml\n  gloamwright size site.yaml --set duty.outage=6h\n  gloamwright size site.yaml --sweep duty.outage=2h..12h/1h\n  gloamwright size site.yaml --json > results.json",
-		Args:    cobra.ExactArgs(1),
+		Args:    takes(1, "one description"),
 		RunE: func(cmd *cobra.Command, args []string) error {
 			w := cmd.OutOrStdout()
 			if sweep != "" {

@@ -18,7 +18,7 @@ func watchCommand() *cobra.Command {
 		Long: `Build FILE, then again whenever it, or a file that it reads, is saved, and print what
 changed. While the description has a mistake, the last good documents stay. Ctrl-C ends.`,
 		Example: "  gloamwright watch site.yaml",
-		Args:    cobra.ExactArgs(1),
+		Args:    takes(1, "one description"),
 		RunE: func(cmd *cobra.Command, args []string) error {
 			if _, err := os.Stat(args[0]); err != nil {
 				return explainError(&job.Unreadable{Err: err})

@@ -4,6 +4,7 @@ package design
 
 import (
 	"gloamwright/internal/circuit"
+	"gloamwright/internal/describe"
 	"gloamwright/internal/facts"
 	"gloamwright/internal/finding"
 )
@@ -12,6 +13,8 @@ import (
 type Design struct {
 	*facts.Facts
 	Findings []finding.Finding
+	// Warnings are what the decoder found odd in the description without refusing it.
+	Warnings describe.List
 	// Labels is every label by its stable key.
 	Labels circuit.Labels
 	// Issued is set on documents that `issue` froze; otherwise they carry DRAFT.

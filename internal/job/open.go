@@ -36,6 +36,7 @@ func Open(path string, set []string) (*Job, error) {
 	if list.HasErrors() {
 		return nil, &Mistakes{list, site.Sources}
 	}
+	warnings := list
 	released, err := release.Open(path)
 	if err != nil {
 		return nil, err
@@ -48,6 +49,7 @@ func Open(path string, set []string) (*Job, error) {
 	if err != nil {
 		return nil, err
 	}
+	d.Warnings = warnings
 	return &Job{Path: path, Design: d, Released: released}, nil
 }
 

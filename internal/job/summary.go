@@ -35,6 +35,9 @@ func Summary(w io.Writer, d *design.Design) {
 	row("Cables", "%d runs, %s; worst drop %.2f %% at %s, limit %v", len(d.Circuit.Cables), d.Totals.CableM, 100*float64(d.Totals.WorstDrop), d.Totals.WorstLamp, d.Site.Practice.LampDrop.Val)
 	row("Fuses", "%s", fuseLine(d))
 	fmt.Fprintln(w)
+	for _, x := range d.Warnings {
+		fmt.Fprintf(w, "  look at %s: %s. %s\n", x.At, x.Summary, x.Detail)
+	}
 	Findings(w, d)
 }
 
