@@ -78,10 +78,15 @@ func (w *recordWire) text() string {
 
 // ends finds conductors that stay as they are but end elsewhere.
 func (c *comparison) ends(o, n *recordWire) {
-	if o.From != n.From {
-		c.do(design.WorkItem{Tool: design.ReTerminate, Do: "Move one end", Was: o.From, Is: n.From}, n.Number)
-	}
-	if o.To != n.To {
-		c.do(design.WorkItem{Tool: design.ReTerminate, Do: "Move one end", Was: o.To, Is: n.To}, n.Number)
+	for _, e := range [][2]string{{o.From, n.From}, {o.To, n.To}} {
+		was, is := e[0], e[1]
+		if was == is {
+			continue
+		}
+		do := "Move one end"
+		if a, b := partOf(was), partOf(is); a != b && was[len(a):] == is[len(b):] {
+			do, was, is = "Move one end, to the same mark", a, b
+		}
+		c.do(design.WorkItem{Tool: design.ReTerminate, Do: do, Was: was, Is: is}, n.Number)
 	}
 }

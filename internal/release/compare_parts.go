@@ -67,11 +67,8 @@ func (p *recordPart) name() string {
 	case string(circuit.Terminal):
 		return "terminal"
 	}
-	first, rest, more := strings.Cut(p.Description, ",")
-	if more && p.Kind != string(circuit.Resistor) {
-		return lower(first) + "," + rest
-	}
-	return lower(p.Description)
+	short, _, _ := strings.Cut(p.Description, ",")
+	return lower(short)
 }
 
 func lower(s string) string {

@@ -205,11 +205,6 @@ func (f *flat) thing(group string, name, kind describe.At[string], fields descri
 
 func (f *flat) circuit(c *describe.Circuit) {
 	path, name, s := "circuits."+c.Name.Val, c.Name.Val, scope{circuit: c.Name.Val}
-	lights, length := 0, quantity.Metre(0)
-	for _, n := range c.NamedLegs() {
-		lights++
-		length += n.Leg.Length.Val
-	}
 	in := func(l leaf) {
 		l.thing = path
 		if l.scope == (scope{}) {
@@ -217,7 +212,7 @@ func (f *flat) circuit(c *describe.Circuit) {
 		}
 		f.add(l)
 	}
-	in(leaf{path: path, what: "Circuit " + name, text: fmt.Sprintf("%d lights, %v, on %s", lights, length, c.Board.Val), at: c.Pos, head: true})
+	in(leaf{path: path, what: "Circuit " + name, text: fmt.Sprintf("%d lights on %s", len(c.NamedLegs()), c.Board.Val), at: c.Pos, head: true})
 	in(leaf{path: path + ".name", what: "Name of a circuit", text: name, at: c.Name.Pos, scope: scope{paper: true}})
 	in(leaf{path: path + ".board", what: name + ", board", text: c.Board.Val, at: c.Board.Pos})
 	in(leaf{path: path + ".lit", what: name + ", lit", text: c.Lit.Val, at: c.Lit.Pos})
@@ -243,7 +238,7 @@ func (f *flat) circuit(c *describe.Circuit) {
 			f.add(l)
 		}
 		leg := n.Leg
-		point(leaf{path: p, what: name + ", " + light, text: fmt.Sprintf("%v %s", leg.Length.Val, leg.Luminaire.Val), at: leg.Pos, head: true})
+		point(leaf{path: p, what: name + ", " + light, text: spelt(f.site, leg.Length.Pos, leg.Length.Val.String()) + " " + leg.Luminaire.Val, at: leg.Pos, head: true})
 		point(leaf{path: p + ".leg", what: name + ", cable to " + light, text: leg.Length.Val.String(), at: leg.Length.Pos})
 		point(leaf{path: p + ".luminaire", what: name + ", light at " + light, text: leg.Luminaire.Val, at: leg.Luminaire.Pos})
 		point(leaf{path: p + ".place", what: name + ", place of light " + n.Path, text: leg.Place.Val, at: leg.Place.Pos, scope: scope{paper: true}})

@@ -3,6 +3,7 @@ package release
 import (
 	"encoding/json"
 	"fmt"
+	"math"
 	"strconv"
 )
 
@@ -155,8 +156,10 @@ func (c cable) text() string {
 	return fmt.Sprintf("%d × %s, %s", len(c.Cores), c.Cores[0].Size, metres(c.Cores[0].Length))
 }
 
-// metres prints a length without padding zeros.
-func metres(m float64) string { return strconv.FormatFloat(m, 'f', -1, 64) + " m" }
+// metres prints a length to the centimetre without padding zeros.
+func metres(m float64) string {
+	return strconv.FormatFloat(math.Round(m*100)/100, 'f', -1, 64) + " m"
+}
 
 // amperes prints a rating.
 func amperes(a float64) string {

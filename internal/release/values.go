@@ -78,13 +78,13 @@ func changedValues(old, now *describe.Site, schema *describe.Schema) ([]design.V
 			add(l, "", l.text, remark(now, l.at))
 		case l.head || fresh:
 		case !was:
-			add(l, l.absent, l.text, remark(now, l.at))
+			add(l, l.absent, written(now, l), remark(now, l.at))
 		case o.text != l.text:
 			why := remark(now, l.at)
 			if why == remark(old, o.at) {
 				why = ""
 			}
-			add(l, o.text, l.text, why)
+			add(l, written(old, o), written(now, l), why)
 		}
 	}
 	for _, path := range order {
@@ -96,7 +96,7 @@ func changedValues(old, now *describe.Site, schema *describe.Schema) ([]design.V
 			add(l, l.text, "", "")
 		case l.head || gone:
 		default:
-			add(l, l.text, l.absent, "")
+			add(l, written(old, l), l.absent, "")
 		}
 	}
 	return values, scopes
@@ -112,18 +112,46 @@ func worthALine(thing string, there map[string]bool) bool {
 	return !point || there[circuit]
 }
 
+// lineOf returns the line of a place; ok is false if there is none.
+func lineOf(site *describe.Site, at describe.Span) (line string, ok bool) {
+	lines := strings.Split(string(site.Sources[at.File]), "\n")
+	if at.Line == 0 || at.Line > len(lines) {
+		return "", false
+	}
+	return strings.TrimRight(strings.TrimPrefix(lines[at.Line-1], "\ufeff"), "\r"), true
+}
+
+// written returns a value as spelt returns it, unless it stands for a whole thing.
+func written(site *describe.Site, l leaf) string {
+	if l.head {
+		return l.text
+	}
+	return spelt(site, l.at, l.text)
+}
+
+// spelt returns a value in the user's own spelling, "30 ft", where it stands in the
+// description by itself, else text.
+func spelt(site *describe.Site, at describe.Span, text string) string {
+	line, ok := lineOf(site, at)
+	r := []rune(line)
+	if !ok || at.Col-1+at.Len > len(r) {
+		return text
+	}
+	own := strings.TrimSpace(string(r[at.Col-1 : at.Col-1+at.Len]))
+	if n := len(own); n > 1 && strings.ContainsRune(`"'[`, rune(own[0])) {
+		own = strings.TrimSpace(own[1 : n-1])
+	}
+	if own == "" || strings.ContainsAny(own, "*&|>") { // an alias, or a text over several lines
+		return text
+	}
+	return own
+}
+
 // remark returns the remark at the end of the line of a value.
 func remark(site *describe.Site, at describe.Span) string {
-	if at.Line == 0 {
-		return ""
-	}
-	lines := strings.Split(string(site.Sources[at.File]), "\n")
-	if at.Line > len(lines) {
-		return ""
-	}
+	line, _ := lineOf(site, at)
 	quote := rune(0)
-	var last rune = ' '
-	line := strings.TrimRight(lines[at.Line-1], "\r")
+	last := ' '
 	for i, c := range line {
 		switch {
 		case quote != 0:
