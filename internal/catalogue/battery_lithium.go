@@ -21,7 +21,7 @@ var LiFePO4 = &BatteryClass{
 	FloatBand: quantity.Range[quantity.Volt]{Low: 3.35, High: 3.40},
 	MaxCharge: 0.50, ChargeFactor: 1.02, ChargeLowest: 0, ChargeHighest: 45,
 	ChargeEvi: Evidence{Source: "common practice, 3.35 V to 3.40 V float, 3.60 V charge"},
-	Rest:      []RestPoint{{0, 2.80}, {0.1, 3.18}, {0.25, 3.25}, {0.5, 3.29}, {0.75, 3.32}, {0.95, 3.34}, {1, 3.40}},
+	Rest:      []RestPoint{{0, 2.80}, {0.1, 3.18}, {0.25, 3.25}, {0.5, 3.29}, {0.75, 3.31}, {0.95, 3.33}, {1, 3.36}},
 	RestEvi:   Evidence{Source: "typical of the class; rest voltage tells little of the charge"},
 	OhmAh:     Spread{0.03, 0.05, 0.10}, ResistanceEvi: Evidence{Source: "typical datasheets, 100 Ah cell; the protection circuit is in the high figure"},
 	SelfDischarge: 0.03, Opens: 2.90, Recloses: 3.25,

@@ -1,6 +1,10 @@
 package catalogue
 
-import "gloamwright/internal/quantity"
+import (
+	"math"
+
+	"gloamwright/internal/quantity"
+)
 
 // Diode is a junction or Schottky rectifier by its model
 // I = Saturation × (exp((V − I·Series) ÷ (Ideality·V_T)) − 1).
@@ -17,6 +21,12 @@ type Diode struct {
 
 // ThermalVolt is kT/q at 25 °C.
 const ThermalVolt quantity.Volt = 0.025693
+
+// Drop returns the forward voltage of the typical diode at a current: the model of
+// Diode turned round.
+func (d Diode) Drop(i quantity.Ampere) quantity.Volt {
+	return quantity.Volt(d.Ideality)*ThermalVolt*quantity.Volt(math.Log1p(float64(i/d.Saturation))) + quantity.Volt(float64(i)*float64(d.Series))
+}
 
 // Rectifiers. 1N4004: saturation current and series resistance fitted in an open
 // textbook to points of a datasheet graph with N = 2 and 26 mV (0.925 V at 1 A). The
@@ -65,9 +75,31 @@ func zener1W(name string, v quantity.Volt, test quantity.Ampere, z quantity.Ohm)
 		Evidence: Evidence{Source: "JEDEC registration " + name}}
 }
 
+// Zeners5W are the 5 W series 1N5338B to 1N5361B in part: JEDEC registration, from
+// memory; 5 % tolerance.
+var Zeners5W = []Zener{
+	zener5W("1N5338B", 5.1, 0.240, 1.5), zener5W("1N5341B", 6.2, 0.200, 1), zener5W("1N5347B", 10, 0.125, 2),
+	zener5W("1N5349B", 12, 0.100, 2.5), zener5W("1N5352B", 15, 0.075, 2.5), zener5W("1N5359B", 24, 0.050, 3.5),
+	zener5W("1N5361B", 27, 0.050, 5),
+}
+
+func zener5W(name string, v quantity.Volt, test quantity.Ampere, z quantity.Ohm) Zener {
+	x := zener1W(name, v, test, z)
+	x.Knee, x.Power = zenerKnee5W, 5
+	return x
+}
+
+// zenerKnee5W is the test current of the knee impedance of the 5 W series.
+const zenerKnee5W quantity.Ampere = 0.001
+
 // ZenerOf returns the 1 W type of a voltage.
-func ZenerOf(v quantity.Volt) (Zener, bool) {
-	for _, z := range Zeners1W {
+func ZenerOf(v quantity.Volt) (Zener, bool) { return zenerIn(Zeners1W, v) }
+
+// Zener5WOf returns the 5 W type of a voltage.
+func Zener5WOf(v quantity.Volt) (Zener, bool) { return zenerIn(Zeners5W, v) }
+
+func zenerIn(list []Zener, v quantity.Volt) (Zener, bool) {
+	for _, z := range list {
 		if z.Volt == v {
 			return z, true
 		}
