@@ -23,7 +23,7 @@ const (
 )
 
 // drawBoard draws one sheet of a board.
-func (b *book) drawBoard(sh *Sheet, s *boardSheet) {
+func (b *book) drawBoard(sh *Sheet, s *boardSheet) error {
 	x := s.start
 	var xs []int
 	for _, c := range s.columns {
@@ -45,11 +45,11 @@ func (b *book) drawBoard(sh *Sheet, s *boardSheet) {
 			add(textAt(float64(s.start)-6.2, rowTerminal+textHeight/2, s.board.Strip, nameStyle, ink.Start))
 	}
 	b.foot(sh, s, xs, end)
-	b.boardNotes(sh, s)
 	if s.first {
 		pl := b.place("board " + s.board.Name)
 		pl.sheet, pl.at = sh, point{float64(s.start), rowBarPlus}
 	}
+	return b.boardNotes(sh, s)
 }
 
 // guides draws the dotted lines between the ways.

@@ -76,7 +76,7 @@ func (b *book) fuseLoad(w *circuit.Way, watt quantity.Watt) string {
 	if watt == 0 {
 		return ""
 	}
-	s := watt.String()
+	s := watts(watt)
 	for _, f := range b.d.Fuses {
 		if f.Way == w && f.Design > 0 {
 			s += fmt.Sprintf(", %.1f A", float64(f.Design))
@@ -84,6 +84,9 @@ func (b *book) fuseLoad(w *circuit.Way, watt quantity.Watt) string {
 	}
 	return s
 }
+
+// watts is a power as drawings print it: three figures.
+func watts(w quantity.Watt) string { return quantity.Format(w, 3) }
 
 func (b *book) lightingWatt(name string) quantity.Watt {
 	var sum quantity.Watt

@@ -2,24 +2,18 @@ package schematic
 
 import (
 	"fmt"
-	"strconv"
+	"slices"
 	"strings"
 
 	"gloamwright/internal/circuit"
 	"gloamwright/internal/describe"
 	"gloamwright/internal/quantity"
 	"gloamwright/layout/ink"
+	"gloamwright/layout/sheet"
 )
 
-// The block of notes left of the title block, in modules.
-const (
-	notePitch  = 1.7
-	noteIndent = 2.2
-	signalText = 8.6 // text after a signal word
-	noteRoom   = 78.0
-	noteLines  = 6
-	shortBy    = 7 // a Tabloid sheet is lower by this much
-)
+// shortBy is how much lower a Tabloid sheet is, in modules.
+const shortBy = 7
 
 // short reports whether the sheets have the American height.
 func (b *book) short() bool { return b.paper.H < 290 }
@@ -35,63 +29,24 @@ func (b *book) down(y float64) float64 {
 func (b *book) notesTop() float64 { return b.down(103) }
 func (b *book) footTop() float64  { return b.down(91) }
 
-// caution is a note with a signal word.
-type caution struct {
-	word  string
-	lines []string
-}
-
-// cautions prints warnings in the place of the notes and returns the next baseline.
-func (b *book) cautions(sh *Sheet, list []caution, y float64) float64 {
-	if len(list) == 0 {
-		return y
-	}
-	o := sh.scene.object(classNote, "cautions", "Cautions")
-	for _, c := range list {
-		o.add(textAt(colText, y, c.word, signalStyle, ink.Start))
-		for _, l := range c.lines {
-			o.add(textAt(colText+signalText, y, l, valueStyle, ink.Start))
-			y += notePitch
+// note gives a sheet its cautions and notes. Where they need more room than there
+// is, notes are left out from the last on.
+func (b *book) note(sh *Sheet, cautions []sheet.Caution, notes []string) error {
+	for ; ; notes = notes[:len(notes)-1] {
+		_, err := sh.Paper.DrawNotes(ink.NewRecorder(sh.Paper.W, sh.Paper.H, ""), cautions, notes)
+		if err == nil {
+			sh.cautions, sh.notes = cautions, notes
+			return nil
 		}
-		y += 0.4
-	}
-	return y
-}
-
-// notes prints numbered notes from a baseline on.
-func (b *book) notes(sh *Sheet, list []string, y float64) {
-	if len(list) == 0 {
-		return
-	}
-	o := sh.scene.object(classNote, "notes", "Notes")
-	o.add(textAt(colText, y, "Notes", nameStyle, ink.Start))
-	for i, s := range list {
-		for j, l := range wrapText(s, noteRoom) {
-			y += notePitch
-			if j == 0 {
-				o.add(textAt(colText, y, strconv.Itoa(i+1), valueStyle, ink.Start))
-			}
-			o.add(textAt(colText+noteIndent, y, l, valueStyle, ink.Start))
+		if len(notes) == 0 {
+			return err
 		}
 	}
-}
-
-// wrapText breaks a text at its spaces into lines of at most room modules.
-func wrapText(s string, room float64) []string {
-	var out []string
-	for _, w := range strings.Fields(s) {
-		if n := len(out); n > 0 && width(out[n-1]+" "+w, valueStyle) <= room {
-			out[n-1] += " " + w
-			continue
-		}
-		out = append(out, w)
-	}
-	return out
 }
 
 // stageNotes prints the cautions and notes of a sheet of stages.
-func (b *book) stageNotes(sh *Sheet, p *plan) {
-	var list []caution
+func (b *book) stageNotes(sh *Sheet, p *plan) error {
+	var list []sheet.Caution
 	mains, battery, relay, card := "", (*circuit.Part)(nil), false, false
 	for _, x := range p.boxes {
 		if t := b.mainsText(x.st.Name); x.mains {
@@ -109,16 +64,16 @@ func (b *book) stageNotes(sh *Sheet, p *plan) {
 		}
 	}
 	if mains != "" {
-		list = append(list, caution{"DANGER", []string{mains + " inside the frames marked Mains.", "Licensed persons only: off, locked, tested dead."}})
+		list = append(list, sheet.Caution{Word: "DANGER", Text: mains + " inside the frames marked Mains. Licensed persons only: off, locked, tested dead."})
 	}
 	if battery != nil {
 		first := "A battery cannot be switched off."
 		if a := b.d.Battery.Prospective; a > 0 {
 			first = "A battery cannot be switched off: prospective " + a.String() + "."
 		}
-		c := caution{"WARNING", []string{first}}
+		c := sheet.Caution{Word: "WARNING", Text: first}
 		if f := b.d.Battery.Fuse; f != nil {
-			c.lines = append(c.lines, fmt.Sprintf("Keep %s out while wiring; connect %s last.", f.Designation, battery.Designation))
+			c.Text += fmt.Sprintf(" Keep %s out while wiring; connect %s last.", f.Designation, battery.Designation)
 		}
 		list = append(list, c)
 	}
@@ -129,15 +84,11 @@ func (b *book) stageNotes(sh *Sheet, p *plan) {
 	if card {
 		notes = append(notes, "Wires on the photocell card have no number; those between terminals have.")
 	}
-	y := b.cautions(sh, list, b.notesTop())
-	if len(list) > 0 && len(notes) > 0 {
-		y += 0.4
-	}
-	b.notes(sh, notes, y)
+	return b.note(sh, list, notes)
 }
 
 // boardNotes prints the notes of a board's sheet.
-func (b *book) boardNotes(sh *Sheet, s *boardSheet) {
+func (b *book) boardNotes(sh *Sheet, s *boardSheet) error {
 	lamps, branch := map[string]bool{}, false
 	var types []string
 	for _, c := range s.columns {
@@ -158,7 +109,7 @@ func (b *book) boardNotes(sh *Sheet, s *boardSheet) {
 	}
 	if len(types) > 0 {
 		var words []string
-		for _, t := range b.typeOrder(types) {
+		for _, t := range slices.Sorted(slices.Values(types)) {
 			words = append(words, t+", "+b.typeWords(t))
 		}
 		notes = append(notes, "Luminaires: "+strings.Join(words, "; ")+".")
@@ -169,41 +120,7 @@ func (b *book) boardNotes(sh *Sheet, s *boardSheet) {
 			notes = append(notes, t)
 		}
 	}
-	b.notes(sh, fitNotes(notes), b.notesTop())
-}
-
-// fitNotes keeps the notes that there is room for; the last line says where the
-// rest stands.
-func fitNotes(notes []string) []string {
-	var out []string
-	lines := 0
-	for _, n := range notes {
-		k := len(wrapText(n, noteRoom))
-		if lines+k > noteLines-1 {
-			n = wrapText(n, noteRoom)[0]
-			if i := strings.LastIndex(n, ";"); i > 0 {
-				n = n[:i+1] + " others in the parts list."
-			}
-			k = 1
-		}
-		if lines+k <= noteLines-1 {
-			out, lines = append(out, n), lines+k
-		}
-	}
-	return out
-}
-
-// typeOrder puts luminaire types in the order of the alphabet.
-func (b *book) typeOrder(types []string) []string {
-	out := append([]string{}, types...)
-	for i := range out {
-		for j := i + 1; j < len(out); j++ {
-			if out[j] < out[i] {
-				out[i], out[j] = out[j], out[i]
-			}
-		}
-	}
-	return out
+	return b.note(sh, nil, notes)
 }
 
 // kindWords name the luminaire kinds on paper.
@@ -226,9 +143,9 @@ func (b *book) typeWords(name string) string {
 			s = t.Kind.Val
 		}
 		if v, ok := describe.Get[quantity.Watt](t.Fields, "power"); ok {
-			s += ", " + v.Val.String()
+			s += ", " + watts(v.Val)
 		} else if w := b.typeWatt(name); w > 0 {
-			s += ", " + quantity.Format(w, 2)
+			s += ", " + watts(w)
 		}
 		if v, ok := describe.Get[quantity.Range[quantity.Volt]](t.Fields, "works"); ok {
 			s += fmt.Sprintf(", %v to %v", v.Val.Low, v.Val.High)

@@ -11,6 +11,7 @@ import (
 	"gloamwright/internal/design"
 	"gloamwright/internal/facts"
 	"gloamwright/layout/ink"
+	"gloamwright/layout/sheet"
 )
 
 // Sheet is one drawn sheet.
@@ -19,17 +20,19 @@ type Sheet struct {
 	Kind       string // "Overview diagram" or "Circuit diagram"
 	Title      string // of the job
 	Supplement string // "Supply and battery"
-	Paper      Paper
+	Paper      sheet.Format
 
-	scene *scene
-	book  *book
+	scene    *scene
+	book     *book
+	cautions []sheet.Caution
+	notes    []string
 }
 
 // book is the set of sheets while it is drawn.
 type book struct {
 	d       *design.Design
 	c       *circuit.Circuit
-	paper   Paper
+	paper   sheet.Format
 	sheets  []*Sheet
 	places  map[string]*place
 	railOf  map[*circuit.Pin]*circuit.Rail
@@ -53,13 +56,13 @@ func Sheets(d *design.Design) ([]*Sheet, error) {
 
 func newBook(d *design.Design) *book {
 	b := &book{
-		d: d, c: d.Circuit, paper: paperA3,
+		d: d, c: d.Circuit, paper: sheet.A3,
 		places: map[string]*place{}, railOf: map[*circuit.Pin]*circuit.Rail{}, railKey: map[*circuit.Rail]string{},
 		on: map[*circuit.Rail][]int{}, reading: map[*circuit.TestPoint]*facts.Reading{},
 		current: map[*circuit.Conductor]*facts.Conductor{},
 	}
 	if d.Site != nil && d.Site.Practice.Paper.Val == "ansi" {
-		b.paper = paperTabloid
+		b.paper = sheet.Tabloid
 	}
 	for i, r := range b.c.Rails {
 		b.railKey[r] = fmt.Sprintf("rail%d", i+1)
@@ -116,13 +119,19 @@ func (b *book) make() error {
 	}
 	b.boardSheets = boards
 	for _, s := range stages {
-		b.drawStages(b.sheet("Circuit diagram", s.title), s)
+		if err := b.drawStages(b.sheet("Circuit diagram", s.title), s); err != nil {
+			return err
+		}
 	}
 	for _, s := range boards {
-		b.drawBoard(b.sheet("Circuit diagram", s.title), s)
+		if err := b.drawBoard(b.sheet("Circuit diagram", s.title), s); err != nil {
+			return err
+		}
 	}
 	for i := range overviews {
-		b.drawOverview(b.sheets[i], i)
+		if err := b.drawOverview(b.sheets[i], i); err != nil {
+			return err
+		}
 	}
 	for _, s := range b.sheets {
 		s.scene.finish(b)
@@ -194,7 +203,7 @@ func (s *Sheet) Draw(c ink.Canvas, o Options) {
 		}
 		return target(pl.sheet.Number, pl.anchor), true
 	}}
-	s.drawFrame(p, o)
+	s.drawFrame(c, o)
 	for _, obj := range s.scene.objects {
 		c.Group(obj.Object, func() {
 			for _, d := range obj.items {

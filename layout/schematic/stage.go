@@ -171,15 +171,7 @@ func wrap(lines []string, room float64) []string {
 	if fits {
 		return lines
 	}
-	var out []string
-	for _, w := range strings.Fields(strings.Join(lines, " ")) {
-		if n := len(out); n > 0 && width(out[n-1]+" "+w, valueStyle) <= room {
-			out[n-1] += " " + w
-			continue
-		}
-		out = append(out, w)
-	}
-	return out
+	return ink.Wrap(strings.Join(lines, " "), valueStyle.font(), room*module)
 }
 
 // core writes the name, size and length of a core that runs apart.

@@ -87,7 +87,7 @@ func stageTitle(p *plan) string {
 }
 
 // drawStages draws one sheet of stages between their rails.
-func (b *book) drawStages(sh *Sheet, p *plan) {
+func (b *book) drawStages(sh *Sheet, p *plan) error {
 	sh.scene.plan = p
 	for i, x := range p.boxes {
 		b.drawStage(sh, p, x, p.xs[i])
@@ -98,5 +98,5 @@ func (b *book) drawStages(sh *Sheet, p *plan) {
 	b.blackProbe(sh, p)
 	b.readingsTable(sh, p)
 	b.contactTables(sh, p)
-	b.stageNotes(sh, p)
+	return b.stageNotes(sh, p)
 }

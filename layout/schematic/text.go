@@ -43,20 +43,9 @@ func (s style) font() ink.Font {
 // width is how long s is in that style, in modules.
 func width(s string, st style) float64 { return ink.Width(s, st.font()) / module }
 
-// fit shortens s to a width by cutting it at the last sign that leaves room for
-// an ellipsis; the full text is in the object's title and in the packet's tables.
-func fit(s string, st style, room float64) string {
-	if width(s, st) <= room {
-		return s
-	}
-	r := []rune(s)
-	for n := len(r) - 1; n > 0; n-- {
-		if t := strings.TrimRight(string(r[:n]), " ,;-") + "…"; width(t, st) <= room {
-			return t
-		}
-	}
-	return "…"
-}
+// fit shortens s to a width; the full text is in the object's title and in the
+// packet's tables.
+func fit(s string, st style, room float64) string { return ink.Cut(s, st.font(), room*module) }
 
 // run is a piece of a line in one style: fixed text, or the place of something
 // that is known only when all sheets are drawn.
