@@ -22,11 +22,12 @@ func PeukertTime(capacity quantity.AmpereHour, rated quantity.Second, current qu
 	return rated * quantity.Second(math.Pow(float64(capacity)/(float64(current)*rated.Hours()), n))
 }
 
-// Peukert exponents that cells can have: ranges by type from a note on Peukert's law
-// run from 1.05 (glass mat) to 1.6 (flooded); lithium cells reach down to 1.00.
+// Peukert exponents that cells can have: a note on Peukert's law gives 1.05 (glass
+// mat) to 1.6 (flooded) for discharges of hours; lithium cells reach down to 1.00, and
+// below one hour the classes' own tables rise to 2.4.
 const (
 	peukertLow  = 1.0
-	peukertHigh = 1.6
+	peukertHigh = 2.5
 )
 
 // PlausibleRates checks a capacity table that a user gives: times must rise, and each

@@ -24,10 +24,10 @@ func (t *Tree) Choose() (*TreeResult, error) {
 	}
 	s := &search{plan: p}
 	s.run()
-	if s.best != nil {
-		return s.best, nil
+	if s.best == nil {
+		return p.relaxed(), p.blocked()
 	}
-	return p.relaxed(), p.blocked()
+	return s.best, p.verdict(s.best.Sizes, s.best) // a pinned size may break its own limits
 }
 
 // Check returns the state of the tree with the given sizes, and a *BlockedError if

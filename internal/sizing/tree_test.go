@@ -92,9 +92,11 @@ func exhaustive(t *Tree) (best float64, found bool) {
 			return
 		}
 		l := &t.Legs[i]
-		if l.Pinned != nil {
-			sizes[i] = l.Pinned
-			try(i + 1)
+		if o := l.Pinned; o != nil {
+			if o.Ampacity >= l.Carry && o.Size.Area >= l.Least {
+				sizes[i] = o
+				try(i + 1)
+			}
 			return
 		}
 		for k := range t.Options {
