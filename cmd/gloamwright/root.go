@@ -32,6 +32,17 @@ Exit codes: 0 good; 1 a stop finding stands: build writes its documents, issue w
 nothing; 2 the description, the register or the command line is wrong, nothing written;
 3 something failed, nothing written. Of several descriptions, the worst.`
 
+// execute runs the command. A fault of the program itself becomes an error with a
+// sentence for the user instead of a crash.
+func execute(root *cobra.Command) (err error) {
+	defer func() {
+		if r := recover(); r != nil {
+			err = exitError{exitFailed, fmt.Sprintf("a fault in gloamwright itself: %v\nNothing was written. Please report it with the description that shows it.", r)}
+		}
+	}()
+	return root.Execute()
+}
+
 // takes refuses a command line that has not exactly n arguments, in words.
 func takes(n int, what string) cobra.PositionalArgs {
 	return func(cmd *cobra.Command, args []string) error {
@@ -68,7 +79,7 @@ func run(args []string, stdin io.Reader, stdout, stderr io.Writer) int {
 	root.SetErr(stderr)
 	root.CompletionOptions.HiddenDefaultCmd = true
 	root.AddCommand(buildCommand(), sizeCommand(), explainCommand(), changesCommand(), issueCommand(), watchCommand(), newCommand(), readingsCommand(), acceptCommand())
-	err := root.Execute()
+	err := execute(root)
 	if err == nil {
 		return exitOK
 	}

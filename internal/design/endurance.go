@@ -3,6 +3,7 @@ package design
 import (
 	"fmt"
 	"math"
+	"slices"
 	"sort"
 
 	"gloamwright/internal/catalogue"
@@ -177,9 +178,22 @@ func (m *maker) outage(t *lit) endurance.Outage {
 		o.CutOff = c.AtBattery
 	}
 	for _, c := range m.site.Circuits {
+		if !slices.Contains(m.litAtNight(), c.Name.Val) {
+			continue // the function table says whether it should be
+		}
 		o.Watches = append(o.Watches, endurance.Watch{Name: c.Name.Val, Below: t.goesOut(c.Name.Val)})
 	}
 	return o
+}
+
+// litAtNight returns the circuits that an outage at night finds lit.
+func (m *maker) litAtNight() []string {
+	for _, c := range m.f.Conditions {
+		if c.Key == "outage-night" {
+			return c.Lit
+		}
+	}
+	return nil
 }
 
 // held records how long each circuit stays lit in the coldest room at the end of the

@@ -31,22 +31,26 @@ func (m *maker) luminaires() {
 				}
 				for i, c := range m.f.Conditions {
 					sol := m.solved[c.Key]
-					v := sol.Across(pt.Luminaire.Pin("+").Net, pt.Luminaire.Pin("-").Net)
+					v := live(sol.Across(pt.Luminaire.Pin("+").Net, pt.Luminaire.Pin("-").Net))
 					a := sol.Current(pt.Luminaire.Designation)
 					l.Volts = append(l.Volts, quantity.Volt(v))
 					l.Amps = append(l.Amps, quantity.Ampere(a))
 					if !load.Lit(quantity.Volt(v)) {
 						lit[i][w.Lighting.Name] = false
 					}
-					if on, known := wanted(w.Lighting.Lit, c); on && known {
+					// A dark circuit is the function table's business, not the cables'.
+					if on, known := wanted(w.Lighting.Lit, c); on && known && v > 0 {
 						l.WorstV = min(l.WorstV, quantity.Volt(v))
 						l.Drop = max(l.Drop, quantity.Ratio((float64(c.BatteryV)-v)/nominal))
 					}
 				}
+				if math.IsInf(float64(l.WorstV), 1) {
+					l.WorstV = 0
+				}
 				if l.Drop > m.f.Totals.WorstDrop {
 					m.f.Totals.WorstDrop, m.f.Totals.WorstLamp = l.Drop, pt.Luminaire.Designation
 				}
-				if m.f.Totals.LowestV == 0 || l.WorstV < m.f.Totals.LowestV {
+				if m.f.Totals.LowestV == 0 || l.WorstV > 0 && l.WorstV < m.f.Totals.LowestV {
 					m.f.Totals.LowestV = l.WorstV
 				}
 				m.f.Luminaires = append(m.f.Luminaires, l)
@@ -66,6 +70,14 @@ func (m *maker) luminaires() {
 	for _, w := range m.f.Circuit.Conductors {
 		m.f.Totals.CopperKg += float64(w.Length) * float64(w.Size.Area) * copperDensity
 	}
+}
+
+// live returns v, or 0 if it is only the insulation's leakage past open contacts.
+func live(v float64) float64 {
+	if math.Abs(v) < float64(deadVolt) {
+		return 0
+	}
+	return v
 }
 
 // copperDensity is 8.89 g/cm³ (IEC 60028), in kg per metre and mm².

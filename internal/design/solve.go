@@ -42,11 +42,17 @@ func (m *maker) conditions() error {
 		}
 		var from network.State
 		if o.from != "" {
+			// A condition that the job cannot be in is passed over.
 			before := specs[o.from]
-			if err := solve(before); err != nil {
-				return err
+			for !m.applies(before) && before.from != "" {
+				before = specs[before.from]
 			}
-			from = m.solved[o.from].State
+			if m.applies(before) {
+				if err := solve(before); err != nil {
+					return err
+				}
+				from = m.solved[before.key].State
+			}
 		}
 		sol, err := m.net.Solve(m.environment(o), from)
 		if err != nil {
@@ -75,7 +81,7 @@ func (m *maker) applies(o operating) bool {
 	case cutOff:
 		return m.f.CutOff != nil
 	case recharging, floating:
-		return true
+		return m.f.Charger.Part != nil
 	}
 	return true
 }

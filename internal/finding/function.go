@@ -2,7 +2,7 @@ package finding
 
 import (
 	"fmt"
-	"strconv"
+	"strings"
 
 	"gloamwright/internal/facts"
 )
@@ -21,7 +21,7 @@ var function = &Check{
 				if !r.Known[i] || r.Wanted[i] == r.Found[i] {
 					continue
 				}
-				n := strconv.Itoa(f.Conditions[i].Number)
+				n := strings.ToLower(f.Conditions[i].Name)
 				if r.Wanted[i] {
 					dark = append(dark, n)
 				} else {
@@ -53,9 +53,14 @@ var function = &Check{
 	},
 }
 
-func inConditions(numbers []string) string {
-	if len(numbers) == 1 {
-		return "condition " + numbers[0]
+// inConditions names conditions: the first two, and how many more.
+func inConditions(list []string) string {
+	quoted := func(s string) string { return "“" + s + "”" }
+	switch len(list) {
+	case 1:
+		return quoted(list[0])
+	case 2:
+		return quoted(list[0]) + " and " + quoted(list[1])
 	}
-	return "conditions " + names(numbers)
+	return fmt.Sprintf("%s, %s and %d more conditions", quoted(list[0]), quoted(list[1]), len(list)-2)
 }

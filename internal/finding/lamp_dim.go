@@ -2,6 +2,7 @@ package finding
 
 import (
 	"fmt"
+	"strings"
 
 	"gloamwright/internal/facts"
 	"gloamwright/internal/quantity"
@@ -36,8 +37,8 @@ var lampDim = &Check{
 			v, bound := pair(share, l.Dimmest)
 			report(Finding{
 				Severity: Stop, Subject: l.Part.Designation, At: l.Part.At,
-				Message: fmt.Sprintf("%s: %s of its greatest current in condition %d, %s; least %s",
-					title(l.Part.Designation, l.Circuit), v, f.Conditions[worst].Number, f.Conditions[worst].Name, bound),
+				Message: fmt.Sprintf("%s: %s of its greatest current in “%s”; least %s",
+					title(l.Part.Designation, l.Circuit), v, strings.ToLower(f.Conditions[worst].Name), bound),
 				Remedy: fmt.Sprintf("It takes %s at %s and must take %s: fewer LEDs in series, or a lamp with a driver.",
 					say(l.Amps[worst]), say(l.Volts[worst]), sayUp(quantity.Ampere(float64(l.Rated)*float64(l.Dimmest)))),
 				Value: percent(share), Limit: percent(l.Dimmest), Unit: "%", Over: true,

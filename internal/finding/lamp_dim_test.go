@@ -14,7 +14,7 @@ func TestLampDim(t *testing.T) {
 		{"just below it", func(f *facts.Facts) {
 			f.Luminaires[0].Rated, f.Luminaires[0].Dimmest, f.Luminaires[0].Amps[outageNight] = 0.08, 0.25, 0.019
 		}, []string{
-			"stop -E11: -E11, Workshop: 23.7 % of its greatest current in condition 2, Mains off, dark; least 25 % | It takes 19 mA at 22.6 V and must take 20 mA: fewer LEDs in series, or a lamp with a driver.",
+			"stop -E11: -E11, Workshop: 23.7 % of its greatest current in “mains off, dark”; least 25 % | It takes 19 mA at 22.6 V and must take 20 mA: fewer LEDs in series, or a lamp with a driver.",
 		}},
 		{"dark when it may be", func(f *facts.Facts) { f.Luminaires[0].Rated, f.Luminaires[0].Dimmest = 0.08, 0.25 }, nil},
 		{"a lamp that states no share", func(f *facts.Facts) { f.Luminaires[0].Rated, f.Luminaires[0].Amps[outageNight] = 0.08, 0.001 }, nil},

@@ -2,6 +2,7 @@ package finding
 
 import (
 	"fmt"
+	"strings"
 
 	"gloamwright/internal/facts"
 )
@@ -28,8 +29,8 @@ var lampHigh = &Check{
 			v, bound := pair(l.Volts[worst], high)
 			report(Finding{
 				Severity: Stop, Subject: l.Part.Designation, At: l.Part.At,
-				Message: fmt.Sprintf("%s: %s at the lamp in condition %d, %s; it works to %s",
-					title(l.Part.Designation, l.Circuit), v, f.Conditions[worst].Number, f.Conditions[worst].Name, bound),
+				Message: fmt.Sprintf("%s: %s at the lamp in “%s”; it works to %s",
+					title(l.Part.Designation, l.Circuit), v, strings.ToLower(f.Conditions[worst].Name), bound),
 				Remedy: fmt.Sprintf("A lamp that works to %s, or a charging voltage lower by %s.",
 					sayUp(l.Volts[worst]), sayUp(l.Volts[worst]-high)),
 				Value: float64(l.Volts[worst]), Limit: float64(high), Unit: "V",

@@ -2,6 +2,7 @@ package finding
 
 import (
 	"fmt"
+	"strings"
 
 	"gloamwright/internal/facts"
 )
@@ -19,7 +20,7 @@ var lampLow = &Check{
 			need := wanted(f, l.Circuit)
 			worst := -1
 			for i, v := range l.Volts {
-				if need[i] && under(v, low) && (worst < 0 || v < l.Volts[worst]) {
+				if need[i] && v > 0 && under(v, low) && (worst < 0 || v < l.Volts[worst]) {
 					worst = i
 				}
 			}
@@ -29,8 +30,8 @@ var lampLow = &Check{
 			v, bound := pair(l.Volts[worst], low)
 			report(Finding{
 				Severity: Stop, Subject: l.Part.Designation, At: l.Part.At,
-				Message: fmt.Sprintf("%s: %s at the lamp in condition %d, %s; it works from %s",
-					title(l.Part.Designation, l.Circuit), v, f.Conditions[worst].Number, f.Conditions[worst].Name, bound),
+				Message: fmt.Sprintf("%s: %s at the lamp in “%s”; it works from %s",
+					title(l.Part.Designation, l.Circuit), v, strings.ToLower(f.Conditions[worst].Name), bound),
 				Remedy: fmt.Sprintf("The way from the battery must lose %s less, or the lamp must work from %s.",
 					sayUp(low-l.Volts[worst]), sayDown(l.Volts[worst])),
 				Value: float64(l.Volts[worst]), Limit: float64(low), Unit: "V", Over: true,

@@ -2,6 +2,7 @@ package finding
 
 import (
 	"fmt"
+	"strings"
 
 	"gloamwright/internal/facts"
 )
@@ -30,8 +31,8 @@ var lampOverdriven = &Check{
 			v, bound := pair(l.Amps[worst], l.Rated)
 			report(Finding{
 				Severity: Stop, Subject: l.Part.Designation, At: l.Part.At,
-				Message: fmt.Sprintf("%s: takes %s in condition %d, %s; limit %s",
-					title(l.Part.Designation, l.Circuit), v, f.Conditions[worst].Number, f.Conditions[worst].Name, bound),
+				Message: fmt.Sprintf("%s: takes %s in “%s”; limit %s",
+					title(l.Part.Designation, l.Circuit), v, strings.ToLower(f.Conditions[worst].Name), bound),
 				Remedy: fmt.Sprintf("A series resistor that takes up %s less current at %s.",
 					sayUp(l.Amps[worst]-l.Rated), say(l.Volts[worst])),
 				Value: float64(l.Amps[worst]), Limit: float64(l.Rated), Unit: "A",
