@@ -47,8 +47,8 @@ func (c Check) Decimals() int {
 	return len(frac)
 }
 
-// Agrees reports whether ours equals the printed answer to its last digit, a whole
-// unit of it for answers that end in a rounded half.
+// Agrees reports whether ours rounds to the printed answer: at most half a unit of its
+// last digit away.
 func (c Check) Agrees() bool {
 	half := 0.5 * math.Pow(10, -float64(c.Decimals()))
 	const roundOff = 1e-9
@@ -59,7 +59,7 @@ func (c Check) Agrees() bool {
 func All() []Check {
 	var out []Check
 	for _, topic := range [][]Check{
-		conductors(), temperatures(), faults(), ampacities(), gauges(), sources(), batteries(), peukert(),
+		conductors(), resistances(), gauges(), temperatures(), ampacities(), faults(), gates(), sources(), batteries(), cells(), peukert(),
 		regulators(), zeners(), diodes(), rectifiers(), heat(), relays(), preferred(),
 	} {
 		out = append(out, topic...)
