@@ -8,7 +8,6 @@ import (
 	"testing"
 
 	"gloamwright/internal/circuit"
-	"gloamwright/internal/describe"
 	"gloamwright/internal/design"
 	"gloamwright/internal/facts"
 	"gloamwright/internal/network"
@@ -17,10 +16,10 @@ import (
 // The draws of one condition: every toleranced parameter at once, evenly over its
 // tolerance, in a fixed sequence.
 const (
-	draws      = 10_000
-	shortDraws = 2_000
-	held       = 0.999 // share of the draws that a band must hold
-	workers    = 2     // parts of the sequence, each with its own seed
+	draws   = 10_000
+	fewer   = 10    // of them, where less acts on the readings, or in a short run
+	held    = 0.999 // share of the draws that a band must hold
+	workers = 2     // parts of the sequence, each with its own seed
 )
 
 // drawn is what the draws of one condition gave at each test point.
@@ -159,12 +158,10 @@ func draw(t *testing.T, d *design.Design, index, n int) drawn {
 }
 
 // The worst-case band of every test point, without the meter's error, holds at least
-// 99.9 % of the draws of all tolerances together.
+// 99.9 % of the draws of all tolerances together. It is not wider than twice their
+// extremes unless so many parts act on the reading that their errors never come
+// together in the draws.
 func TestBandsHoldTheDraws(t *testing.T) {
-	n := draws
-	if testing.Short() {
-		n = shortDraws
-	}
 	for _, name := range []string{"bracken-reach", "juniper-flat"} {
 		t.Run(name, func(t *testing.T) {
 			d, err := design.Make(load(t, name), nil)
@@ -175,36 +172,65 @@ func TestBandsHoldTheDraws(t *testing.T) {
 				if !c.Shown {
 					continue
 				}
+				n := draws
+				// The lights are on in these two; the loads add their tolerances.
+				if c.Key != "end" && c.Key != "outage-night" {
+					n /= fewer
+				}
+				if testing.Short() {
+					n /= fewer
+				}
 				r := draw(t, d, k, n)
 				if r.low == nil {
 					return
 				}
-				if r.failed > 0 {
-					t.Errorf("%s: %d of %d draws have no operating point", c.Key, r.failed, n)
-				}
-				least, worst, widest := 1.0, "", ""
-				most := 0.0
-				for i, reading := range d.Readings {
-					share := 1 - float64(r.outside[i])/float64(n-r.failed)
-					if share < least {
-						least, worst = share, reading.Point.Label
-					}
-					if share < held {
-						t.Errorf("%s, %s (%s): the band holds %.2f %% of the draws; band %v, draws %.4f to %.4f V",
-							c.Key, reading.Point.Label, reading.Point.Shows, 100*share, reading.Bands[k], r.low[i], r.high[i])
-					}
-					if dead(reading.Bands[k]) {
-						continue
-					}
-					low, high := unmetered(reading.Bands[k])
-					if ratio := (high - low) / (r.high[i] - r.low[i]); ratio > most {
-						most, widest = ratio, fmt.Sprintf("%s, band %.3f to %.3f V, draws %.3f to %.3f V", reading.Point.Label, low, high, r.low[i], r.high[i])
-					}
-				}
-				t.Logf("%s: %d draws, relays elsewhere in %d; least share held %.3f %% %s; widest band %.2f times the draws' extremes (%s)", c.Key, n, r.moved, 100*least, worst, most, widest)
+				judge(t, d, k, n, r)
 			}
 		})
 	}
 }
 
-var _ = describe.Site{}
+// judge compares the bands of one condition with its draws.
+func judge(t *testing.T, d *design.Design, k, n int, r drawn) {
+	t.Helper()
+	c := d.Conditions[k]
+	if r.failed > 0 {
+		t.Errorf("%s: %d of %d draws have no operating point", c.Key, r.failed, n)
+	}
+	least, most, widest := 1.0, 0.0, ""
+	for i, reading := range d.Readings {
+		b := reading.Bands[k]
+		share := 1 - float64(r.outside[i])/float64(n)
+		least = math.Min(least, share)
+		if share < held {
+			t.Errorf("%s, %s (%s): the band holds %.2f %% of the draws; band %v, draws %.4f to %.4f V",
+				c.Key, reading.Point.Label, reading.Point.Shows, 100*share, b, r.low[i], r.high[i])
+		}
+		if dead(b) {
+			continue
+		}
+		low, high := unmetered(b)
+		ratio := (high - low) / (r.high[i] - r.low[i])
+		if ratio > most {
+			most, widest = ratio, fmt.Sprintf("%s, band %.3f to %.3f V, draws %.3f to %.3f V", reading.Point.Label, low, high, r.low[i], r.high[i])
+		}
+		// Draws of many small even errors spread like a normal law of their
+		// root-sum-square ÷ √3; beyond the extreme of n such draws lies only what all
+		// errors at their worst together add.
+		chance := float64(b.Root) / math.Sqrt(3) * extreme(n)
+		if ratio > twice && (high-low)/2/chance < ratio/explains {
+			t.Errorf("%s, %s: the band is %.1f times as wide as the draws' extremes, which chance does not explain; band %.3f to %.3f V, draws %.3f to %.3f V",
+				c.Key, reading.Point.Label, ratio, low, high, r.low[i], r.high[i])
+		}
+	}
+	t.Logf("%-12s %5d draws, relays elsewhere in %d; least share held %.3f %%; widest band %.2f times the draws' extremes (%s)", c.Key, n, r.moved, 100*least, most, widest)
+}
+
+const (
+	twice    = 2.0
+	explains = 1.3 // the law of many errors is met to 30 %
+)
+
+// extreme is the greatest of n draws of a normal law, in standard deviations: where the
+// chance of one draw beyond it is 1 in n, both sides together.
+func extreme(n int) float64 { return math.Sqrt2 * math.Erfinv(1-1/float64(n)) }

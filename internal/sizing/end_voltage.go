@@ -36,22 +36,23 @@ type CutOffInput struct {
 	Cells    int
 	End      quantity.Volt  // end of discharge of the sizing, at the battery
 	Drop     quantity.Volt  // between battery and sense point when it is loaded
+	Reserve  quantity.Volt  // how far Drop and the end of discharge may be off
 	Accuracy quantity.Ratio // of the module's settings, both ways
 }
 
 // CutOff returns the voltages at which a low-voltage disconnect opens and recloses,
 // as set at its sense point: it must never open before the end of discharge that the
-// battery was sized for, so it opens below that by its own accuracy, and never below
+// battery was sized for, so it opens below that by its own accuracy and the reserve, and never below
 // the class's lowest end voltage; it recloses at the class's reclosing voltage, which
 // a resting empty battery does not reach by itself (common practice).
 func CutOff(in CutOffInput) (opens, recloses quantity.Volt, w []Working, err error) {
 	n := quantity.Volt(in.Cells)
-	o := (in.End - in.Drop) / quantity.Volt(1+in.Accuracy)
+	o := (in.End - in.Drop - in.Reserve) / quantity.Volt(1+in.Accuracy)
 	r := in.Class.Recloses * n
 	w = []Working{{
-		Name: "cut-off opens", Formula: "U_open = (U_end − ΔU) ÷ (1 + accuracy)",
-		Substituted: fmt.Sprintf("(%s − %s) ÷ (1 + %s)", num(float64(in.End), "V"),
-			num(float64(in.Drop), "V"), num(float64(in.Accuracy), "")),
+		Name: "cut-off opens", Formula: "U_open = (U_end − ΔU − U_reserve) ÷ (1 + accuracy)",
+		Substituted: fmt.Sprintf("(%s − %s − %s) ÷ (1 + %s)", num(float64(in.End), "V"),
+			num(float64(in.Drop), "V"), num(float64(in.Reserve), "V"), num(float64(in.Accuracy), "")),
 		Value: float64(o), Unit: "V", Source: "common practice; " + in.Class.Evidence.String(),
 	}, {
 		Name: "cut-off recloses", Formula: "U_reclose = n × u_reclose",

@@ -63,7 +63,9 @@ func sizeCutOff(p *Plan, s *describe.Stage) {
 	if p.Class != nil {
 		// It senses behind the battery's cable and fuse.
 		drop := quantity.Volt(float64(p.Light+p.Standing) * float64(p.CutOffOhm))
-		o, r, ws, err := sizing.CutOff(sizing.CutOffInput{Class: p.Class, Cells: p.Cells, End: p.End, Drop: drop, Accuracy: quantity.Ratio(acc)})
+		o, r, ws, err := sizing.CutOff(sizing.CutOffInput{
+			Class: p.Class, Cells: p.Cells, End: p.End, Drop: drop, Reserve: p.End*endSpread + drop*dropSpread, Accuracy: quantity.Ratio(acc),
+		})
 		if err != nil && !givenOpens {
 			p.block(q.Designation, q.At, "", err)
 		}
@@ -94,6 +96,14 @@ func sizeCutOff(p *Plan, s *describe.Stage) {
 	p.TrunkOhm += cutOffOhm
 	p.F.CutOff = &facts.CutOff{Part: q, Opens: opens.Val, Recloses: closes.Val, Current: load, Rated: rated.Val}
 }
+
+// endSpread is how far the voltage that stands for the end of discharge may be off when
+// a technician sets a source to it, and dropSpread how far what the way drops: wires,
+// fuses and contacts may all be high at once (common practice, no source).
+const (
+	endSpread  = 0.002
+	dropSpread = 0.3
+)
 
 // cutOffOhm is the resistance of a closed cut-off, and ownTol the tolerance of what
 // modules draw themselves (common practice, no source).
