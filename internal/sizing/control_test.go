@@ -182,46 +182,6 @@ func TestCoilDropper(t *testing.T) {
 	blocked(t, err, LimitDissipation)
 }
 
-// TestLightThresholds: the chosen resistors switch where asked, in order, and the
-// trimmer reaches the point with any cell of the class.
-func TestLightThresholds(t *testing.T) {
-	for _, want := range []struct{ dark, bright quantity.Lux }{{10, 20}, {5, 15}, {30, 50}, {2, 10}} {
-		s, _, err := LightThresholds(ThresholdInput{Cell: catalogue.CadmiumSulphide5, Dark: want.dark, Bright: want.bright})
-		if err != nil {
-			t.Fatal(err)
-		}
-		if math.Abs(math.Log(float64(s.On/want.dark))) > 0.1 || math.Abs(math.Log(float64(s.Off/want.bright))) > 0.1 || s.Off <= s.On {
-			t.Errorf("%v and %v: on %v, off %v", want.dark, want.bright, s.On, s.Off)
-		}
-		low, _ := s.References()
-		least, most := catalogue.CadmiumSulphide5.Bounds(want.dark)
-		k := quantity.Ohm(low / (1 - low))
-		if s.Fixed > least*k*1.0001 || s.Fixed+s.Trimmer*0.8 < most*k*0.9999 {
-			t.Errorf("%v: %v and %v do not reach %v to %v", want.dark, s.Fixed, s.Trimmer, least*k, most*k)
-		}
-		node := DividerRatio(catalogue.CadmiumSulphide5.At(s.On), s.Load)
-		near(t, "node at the threshold", node, low, 1e-9)
-	}
-	_, _, err := LightThresholds(ThresholdInput{Cell: catalogue.CadmiumSulphide5, Dark: 10, Bright: 10})
-	blocked(t, err, LimitRange)
-}
-
-// TestFollower: in the dark the base gets its forced share; a heavy coil is refused.
-func TestFollower(t *testing.T) {
-	in := FollowerInput{Transistor: catalogue.NPNSmall, Low: 10.5, High: 14, Coil: 360, Dark: 20e3, Ambient: 40}
-	rb, _, err := FollowerBase(in)
-	if err != nil {
-		t.Fatal(err)
-	}
-	base := (10.5-0.7)/float64(rb) - 0.7/20e3
-	if forced := 10.5 / 360 / base; forced > 10 {
-		t.Errorf("forced gain %.1f with %v", forced, rb)
-	}
-	in.Coil = 140
-	_, _, err = FollowerBase(in)
-	blocked(t, err, LimitDissipation)
-}
-
 // TestHeatSinkNeed: with and without.
 func TestHeatSinkNeed(t *testing.T) {
 	in := HeatInput{Power: 1, Junction: 125, Ambient: 40, JunctionCase: 5, CaseSink: 0.5, Free: 65}

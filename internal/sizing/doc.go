@@ -6,10 +6,13 @@
 // The methods, in the order in which a system is sized:
 //
 //   - conductors: Loop, Ampacity, LeastArea, and Tree for all sizes of a board at once
-//   - protection: ChooseFuse, Coordinate, Adiabatic, Prospective, OpeningTime, Discriminate
-//   - battery: Sectional and NextCapacity, EndOfDischarge, CutOff, Peukert
-//   - charging: ChargerCurrent, ChargeVoltage, SetResistors, RegulatorHeat, HeatSink, Ventilation
-//   - control: CoilPickUp, CoilDropper, ContactLoad, ZenerDropper, Divider, Thresholds
+//   - protection: ChooseFuse, Coordinate, Adiabatic, Prospective, LeastFault, Breaking,
+//     OpeningTime, CurrentToOpen, Discriminate
+//   - battery: Sectional, NextCapacity, Internal, EndOfDischarge, CutOff, StandingTime
+//   - charging: ChargerCurrent, ChargeVoltage, SetResistors, LinearCharger, HeatSink,
+//     Peak, Ripple, TransformerRating, SupplyCurrent, Ventilation
+//   - control: CoilPickUp, CoilDropper, ContactLoad, Suppression, TwilightCard,
+//     CoilDriverResistors, FollowerPhotocell
 //   - lamps: StringResistor
 //
 // When nothing fits, a function returns a *BlockedError that names the limit in the

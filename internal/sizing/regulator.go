@@ -37,9 +37,9 @@ type SetInput struct {
 	Most     quantity.Volt    // that no position of the trimmer may exceed; 0: no limit
 	R1       quantity.Ohm     // 0: the largest usual value that draws the least load
 	Tol      quantity.Ratio   // of fixed resistors, both ways; 0 means 1 %
-	TrimTol  quantity.Ratio   // of the trimmer, both ways; 0 means 20 %
+	TrimTol  quantity.Ratio   // of the trimmer, both ways; 0 means catalogue.PresetTol
 	Series   catalogue.Series // of the fixed resistor; 0: E24
-	Trimmers []quantity.Ohm   // values to choose from; empty: 1, 2, 5 series
+	Trimmers []quantity.Ohm   // values to choose from; empty: catalogue.PresetValues
 }
 
 // Set is a chosen set of resistors.
@@ -49,14 +49,8 @@ type Set struct {
 	Extreme            quantity.Volt // highest output with the worst parts, trimmer at its end
 }
 
-// Figures of practice for set resistors.
-const (
-	setTolerance  = 0.01
-	trimTolerance = 0.20
-)
-
-// trimmerValues are common trimmer resistances. Common practice, no source.
-var trimmerValues = []quantity.Ohm{50, 100, 200, 500, 1000, 2000, 5000, 10000}
+// setTolerance is the tolerance of set resistors (common practice).
+const setTolerance = 0.01
 
 // SetResistors chooses R1, a fixed resistor and a trimmer in series with it from
 // preferred values so that the trimmer covers the whole range of settings at all
@@ -65,7 +59,7 @@ var trimmerValues = []quantity.Ohm{50, 100, 200, 500, 1000, 2000, 5000, 10000}
 // with it the fixed resistor that centres the range best.
 func SetResistors(in SetInput) (Set, []Working, error) {
 	d := in.Device
-	tol, trim := orElse(in.Tol, setTolerance), orElse(in.TrimTol, trimTolerance)
+	tol, trim := orElse(in.Tol, setTolerance), orElse(in.TrimTol, float64(catalogue.PresetTol))
 	series := in.Series
 	if series == 0 {
 		series = catalogue.E24
@@ -76,7 +70,7 @@ func SetResistors(in SetInput) (Set, []Working, error) {
 	}
 	trimmers := in.Trimmers
 	if len(trimmers) == 0 {
-		trimmers = trimmerValues
+		trimmers = catalogue.PresetValues
 	}
 	low := func(r2 quantity.Ohm) quantity.Volt { // highest output that low-set parts may give
 		v, _ := RegulatorOutput(d.ReferenceHigh, r1*quantity.Ohm(1-tol), r2*quantity.Ohm(1+tol), d.AdjustHigh)

@@ -46,6 +46,9 @@ const (
 	slowTime       = 0.1
 )
 
+// cellReference is the illuminance that cells are listed at, in lx.
+const cellReference = 10
+
 const twilightSource = "comparator with hysteresis (electronics textbooks)"
 
 // TwilightCard chooses the resistors of a comparator card and its preset's setting.

@@ -127,10 +127,17 @@ func everyWorking(t *testing.T) []Working {
 	_, ws, err = CoilDropper(CoilFeedInput{Low: 16, High: 20, Zener: z12, Coil: 720, CoilTol: 0.15, Ambient: 40})
 	ok(err)
 	keep(ws...)
-	_, ws, err = LightThresholds(ThresholdInput{Cell: catalogue.CadmiumSulphide5, Dark: 10, Bright: 25})
+	_, ws, err = TwilightCard(TwilightInput{Cell: catalogue.CadmiumSulphide5, Dark: 10, Bright: 25, Low: 0.03, PullUp: 10e3, Most: 29})
 	ok(err)
 	keep(ws...)
-	_, ws, err = FollowerBase(FollowerInput{Transistor: catalogue.NPNSmall, Low: 10.5, High: 14, Coil: 360, Dark: 12e3, Ambient: 40})
+	_, ws, err = CoilDriverResistors(CoilDriverInput{
+		Transistor: catalogue.PNPSmall, Comparator: catalogue.ComparatorDual, Low: 21, High: 28, Coil: 1000, CoilTol: 0.1, Feedback: 220e3,
+	})
+	ok(err)
+	keep(ws...)
+	_, ws, err = FollowerPhotocell(EmitterFollowerInput{
+		Cell: catalogue.CadmiumSulphide5, Transistor: catalogue.NPNSmall, Dark: 20, Supply: 13.7, High: 14.4, Coil: 360, PickUp: 8.4, DropOut: 3, Feed: catalogue.Diode1N4004, Ambient: 30,
+	})
 	ok(err)
 	keep(ws...)
 	_, w = StandingTime(StandingInput{Class: catalogue.VRLAAGM, Capacity: 55, Drains: []Drain{{"cut-off", 0.008}, {"photocell", 0.012}}})
