@@ -2,6 +2,7 @@ package stage
 
 import (
 	"fmt"
+	"slices"
 	"strings"
 	"unicode"
 	"unicode/utf8"
@@ -193,22 +194,20 @@ func (b *Build) TestPoint(local, shows string, red *circuit.Pin) *circuit.TestPo
 }
 
 // nameRails gives every source port of the energy's way its rail name: 1L+, 2L+ …
-// for those that carry the load, P+ for auxiliary supplies.
+// for those that carry the load, P+ for auxiliary supplies and for signals that
+// several things take.
 func (b *Build) nameRails(list []*describe.Stage) {
 	b.rails[Minus] = &circuit.Rail{Name: "L−"}
 	b.C.Rails = append(b.C.Rails, b.rails[Minus])
 	main, aux := 0, 0
 	for _, s := range list {
 		for _, p := range kindOf(s.Kind.Val).Ports {
-			if p.Sink || p.Signal {
-				continue
-			}
 			key := s.Name.Val + "." + p.Name
-			if !b.used(key, p.Name) && p.Name != "plus" {
+			if p.Sink || p.Signal && b.takers(s, key) < 2 || !p.Signal && !b.used(key) && p.Name != "plus" {
 				continue
 			}
 			var name string
-			if p.Auxiliary {
+			if p.Auxiliary || p.Signal {
 				aux++
 				name = "P+"
 				if aux > 1 {
@@ -225,19 +224,35 @@ func (b *Build) nameRails(list []*describe.Stage) {
 	}
 }
 
-// used reports whether any stage takes from the source port of that key.
-func (b *Build) used(key, port string) bool {
-	for _, s := range b.Site.Stages {
-		for _, f := range kindOf(s.Kind.Val).Fields {
-			if f.Type != describe.StageRef || f.Feeds {
+// used reports whether anything takes from the source port of that key.
+func (b *Build) used(key string) bool { return b.takers(nil, key) > 0 }
+
+// takers counts what takes from the source port of that key: stages, single parts and
+// test points that name it, and the stages that its own stage s feeds, if s is given.
+func (b *Build) takers(s *describe.Stage, key string) int {
+	n := 0
+	for _, o := range b.Site.Stages {
+		for _, f := range kindOf(o.Kind.Val).Fields {
+			if f.Type != describe.StageRef {
 				continue
 			}
-			if r, ok := describe.Get[describe.Ref](s.Fields, f.Name); ok && b.sourceKey(r.Val) == key {
-				return true
+			r, ok := describe.Get[describe.Ref](o.Fields, f.Name)
+			if ok && (f.Feeds && o == s || !f.Feeds && b.sourceKey(r.Val) == key) {
+				n++
 			}
 		}
 	}
-	return false
+	for _, p := range b.Site.Parts {
+		if slices.ContainsFunc(p.Pins, func(x describe.PinNet) bool { return x.Net.Val == key }) {
+			n++
+		}
+	}
+	for _, t := range b.Site.TestPoints {
+		if t.At_.Val == key {
+			n++
+		}
+	}
+	return n
 }
 
 // sourceKey returns "stage.port" of a reference, its first source port by default.

@@ -81,7 +81,7 @@ func expandChangeover(b *Build, s *describe.Stage) {
 	b.Element(d, "", "diode", "A", "A", "K", "K")
 	b.Join(k.Pin("A1"), d.Pin("K"))
 	b.Join(k.Pin("A2"), d.Pin("A"))
-	makeUsed := b.used(s.Name.Val+".make", "make")
+	makeUsed := b.used(s.Name.Val + ".make")
 	width := 40
 	if makeUsed {
 		width = 58

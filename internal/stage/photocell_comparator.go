@@ -1,17 +1,208 @@
 package stage
 
 import (
+	"gloamwright/internal/catalogue"
 	"gloamwright/internal/circuit"
 	"gloamwright/internal/describe"
 	"gloamwright/internal/quantity"
+	"gloamwright/internal/sizing"
 )
 
+// expandComparator builds the comparator card: light divider, reference with preset,
+// hysteresis, high-side driver of the coil.
+func expandComparator(b *Build, s *describe.Stage) {
+	from, _ := b.ref(s, "from")
+	f := b.photocellFuse()
+	x := b.sensor(s)
+	r1 := x.resistor("light", "Resistor of the light divider")
+	c1 := b.Part("slow", circuit.Capacitor, "Capacitor, slows the light signal", "1", "2")
+	b.Element(c1, "", "capacitor", "1", "1", "2", "2")
+	r2 := x.resistor("upper", "Resistor of the reference, upper")
+	r3 := b.Part("set", circuit.Potentiometer, "Preset, sets the twilight", "1", "2", "3")
+	b.Element(r3, "upper", "resistor", "1", "1", "2", "3")
+	b.Element(r3, "lower", "resistor", "1", "3", "2", "2")
+	r4 := x.resistor("lower", "Resistor of the reference, lower")
+	r5 := x.resistor("input", "Resistor to the input")
+	r6 := x.resistor("hysteresis", "Resistor of the hysteresis")
+	k := b.Part("comparator", circuit.Comparator, "Comparator, open collector", "+", "-", "OUT", "V+", "V-")
+	b.Element(k, "", "comparator", "+", "+", "-", "-", "OUT", "OUT", "V+", "V+", "V-", "V-")
+	r7 := x.resistor("base", "Resistor to the base")
+	r8 := x.resistor("off", "Resistor base to emitter")
+	q := b.Part("driver", circuit.PNP, "Transistor, drives the relay", "B", "C", "E")
+	b.Element(q, "", "pnp", "B", "B", "C", "C", "E", "E")
+	t3 := b.Terminal(x.strip, "3")
+
+	b.Join(f.Pin("2"), x.plus.Pin("in"), r2.Pin("1"), k.Pin("V+"), r8.Pin("1"), q.Pin("E"))
+	b.Join(x.signal.Pin("in"), r1.Pin("1"), c1.Pin("1"), k.Pin("-"))
+	b.Join(r1.Pin("2"), c1.Pin("2"), r4.Pin("2"), k.Pin("V-"))
+	b.Join(r2.Pin("2"), r3.Pin("1"))
+	b.Join(r3.Pin("2"), r4.Pin("1"))
+	b.Join(r3.Pin("3"), r5.Pin("1"))
+	b.Join(r5.Pin("2"), r6.Pin("1"), k.Pin("+"))
+	b.Join(k.Pin("OUT"), r6.Pin("2"), r7.Pin("1"))
+	b.Join(r7.Pin("2"), r8.Pin("2"), q.Pin("B"))
+	b.Join(q.Pin("C"), t3.Pin("in"))
+
+	b.sketch(94, "tells the relay", "that it is light")
+	up := b.lead(circuit.OpUp, "plus", f.Pin("1"), from, 20, 7, 20, upEnd)
+	b.symbol("fuse", f, 20, 9, "V", "L")
+	b.line(nil, 20, 11, 20, 22)
+	b.line(nil, 20, 13, 82, 13)
+	x.sketch(b, 35)
+	b.symbol("resistor", r1, 20, 37, "V", "L")
+	b.line(nil, 20, 39, 20, 45)
+	b.symbol("capacitor", c1, 26, 37, "V", "R")
+	b.line(nil, 26, 32, 26, 35)
+	b.line(nil, 26, 39, 26, 45)
+	b.line(nil, 20, 32, 53, 32, 53, 27, 55, 27)
+	b.line(nil, 20, 45, 59, 45)
+	b.symbol("resistor", r2, 38, 18, "V", "L")
+	b.line(nil, 38, 13, 38, 16)
+	b.line(nil, 38, 20, 38, 23)
+	b.symbol("potentiometer_preset", r3, 38, 25, "V", "L")
+	b.line(nil, 38, 27, 38, 36)
+	b.symbol("resistor", r4, 38, 38, "V", "L")
+	b.line(nil, 38, 40, 38, 45)
+	b.line(nil, 40, 25, 44, 25)
+	b.symbol("resistor", r5, 46, 25, "H", "A")
+	b.line(nil, 48, 25, 55, 25)
+	b.symbol("comparator", k, 59, 26, "B", "A")
+	b.line(nil, 59, 22, 59, 13)
+	b.line(nil, 59, 30, 59, 45)
+	b.line(nil, 63, 26, 69, 26)
+	b.line(nil, 65, 26, 65, 18, 56, 18)
+	b.symbol("resistor", r6, 54, 18, "H", "A")
+	b.line(nil, 52, 18, 50, 18, 50, 25)
+	b.symbol("resistor", r7, 71, 26, "H", "A")
+	b.line(nil, 73, 26, 79, 26)
+	b.line(nil, 75, 26, 75, 21)
+	b.symbol("resistor", r8, 75, 19, "V", "L")
+	b.line(nil, 75, 17, 75, 13)
+	b.symbol("pnp", q, 81, 26, "B", "R")
+	b.line(nil, 82, 24, 82, 13)
+	b.line(nil, 82, 28, 82, 34, 87, 34)
+	b.add(circuit.SketchItem{Op: circuit.OpTerminal, Part: t3, X: 88, Y: 34})
+	b.output(s, "out", t3.Pin("out"), coilLevel2, 89, 91)
+	down := b.lead(circuit.OpDown, "minus", k.Pin("V-"), Minus, 32, 45, 32, downEnd)
+	b.point(b.TestPoint("light", "Light signal", k.Pin("-")), 30, 32, "N")
+	b.point(b.TestPoint("reference", "Twilight setting", r3.Pin("3")), 42, 25, "S")
+	b.point(b.TestPoint("output", b.cur.Heading+" output", q.Pin("C")), 84, 34, "S")
+	b.number(up, 20, 5)
+	b.number(down, 32, 48.5)
+}
+
+// sizeComparator chooses the card's resistors, the preset's setting and the driver of
+// the coil.
 func sizeComparator(p *Plan, s *describe.Stage, dark, light quantity.Lux) {
-	for local, v := range map[string]quantity.Ohm{"light": 22e3, "upper": 10e3, "lower": 10e3, "input": 10e3, "hysteresis": 470e3, "base": 4.7e3, "off": 10e3} {
-		p.resistor(p.part(s, local), "", v, resistorTol)
+	k, q, pot := p.part(s, "comparator"), p.part(s, "driver"), p.part(s, "set")
+	cell, comp, pnp := catalogue.CadmiumSulphide5, catalogue.ComparatorDual, catalogue.PNPSmall
+	coil, class, _ := p.coilOf(s)
+	nominal := p.Site.Duty.Nominal.Val
+	in := sizing.TwilightInput{Cell: cell, Dark: dark, Bright: light, Most: p.Highest}
+	drive := sizing.CoilDriverInput{Transistor: pnp, Comparator: comp, Low: p.End, High: p.Highest, Coil: coil, CoilTol: class.CoilTol}
+	// Card and driver depend on each other a little: the driver's resistors hold the
+	// output up, and the current of the hysteresis flows through them.
+	var t sizing.Twilight
+	var d sizing.CoilDriver
+	var ws, wd []sizing.Working
+	var err, errD error
+	for range 3 {
+		in.PullUp = d.Base + d.Off
+		in.Low = (float64(comp.Saturation) + float64(comp.Series)*float64(d.Drive)) / float64(nominal)
+		if t, ws, err = sizing.TwilightCard(in); t.Hysteresis == 0 {
+			break
+		}
+		drive.Feedback = t.Source + t.Hysteresis
+		d, wd, errD = sizing.CoilDriverResistors(drive)
 	}
-	pot := p.part(s, "set")
-	set(pot, "resistance", "5 kΩ", 5e3, "Ω", true, false)
-	params(pot, "upper", circuit.Param{Name: "ohm", Value: 2500, Tol: resistorTol})
-	params(pot, "lower", circuit.Param{Name: "ohm", Value: 2500, Tol: resistorTol})
+	for _, e := range []error{err, errD} {
+		if e != nil {
+			p.block(k.Designation, k.At, "", e)
+		}
+	}
+	if t.Hysteresis == 0 { // no card for such thresholds; the findings say so
+		in.Bright = dark * twilightRatio
+		t, _, _ = sizing.TwilightCard(in)
+		d, _, _ = sizing.CoilDriverResistors(drive)
+	}
+	for _, w := range ws {
+		p.work(k.Designation, "", w)
+	}
+	for _, w := range wd {
+		p.work(q.Designation, "", w)
+	}
+	p.sizeCell(p.part(s, "sensor"), cell)
+	for _, r := range []struct {
+		local string
+		ohm   quantity.Ohm
+	}{
+		{"light", t.Load}, {"upper", t.Upper}, {"lower", t.Lower}, {"input", t.Input}, {"hysteresis", t.Hysteresis}, {"off", d.Off},
+	} {
+		p.cardResistor(p.part(s, r.local), r.ohm, quantity.Watt(float64(p.Highest)*float64(p.Highest)/float64(r.ohm)))
+	}
+	p.cardResistor(p.part(s, "base"), d.Base, d.Heat)
+	c := p.part(s, "slow")
+	set(c, "capacitance", t.Slow.String(), float64(t.Slow), "F", true, false)
+	c.Note = p.capacitorFor(p.Highest)
+	set(pot, "resistance", t.Preset.String(), float64(t.Preset), "Ω", true, false)
+	set(pot, "setting", "set to "+quantity.Format(t.Wiper, 2), float64(t.Wiper), "", false, false)
+	pot.Note = "set to " + quantity.Format(t.Wiper, 2) + " of its track from the lower end, then at dusk until the lights come on"
+	params(pot, "upper", circuit.Param{Name: "ohm", Value: float64(t.Preset) * float64(1-t.Wiper), Tol: float64(catalogue.PresetTol)})
+	params(pot, "lower", circuit.Param{Name: "ohm", Value: float64(t.Preset) * float64(t.Wiper), Tol: float64(catalogue.PresetTol)})
+	set(k, "type", comp.Name, 0, "", false, false)
+	k.Note = "comparator with open collector, " + comp.Volt.String() + ", sinks " + comp.Sink.String()
+	params(k, "",
+		circuit.Param{Name: "vos", Value: 0}, circuit.Param{Name: "sat_volt", Value: float64(comp.Saturation)},
+		circuit.Param{Name: "sat_ohm", Value: float64(comp.Series)}, circuit.Param{Name: "own_ampere", Value: float64(comp.Own), Tol: ownTol},
+		circuit.Param{Name: "bias_ampere", Value: float64(comp.Bias)},
+	)
+	p.transistor(q, pnp)
+	// What the card takes: its divider and comparator always, base and light divider by day.
+	p.Standing += comp.Own + quantity.Ampere(float64(nominal)/float64(t.Upper+t.Preset+t.Lower))
+	p.Held += d.Drive + quantity.Ampere(float64(nominal)/float64(t.Load))
+}
+
+// transistor records a small transistor of a registration.
+func (p *Plan) transistor(q *circuit.Part, t catalogue.Transistor) {
+	set(q, "type", t.Type, 0, "", true, false)
+	q.Note = t.Type + " or like it: " + t.Volt.String() + ", " + t.Current.String()
+	params(q, "", circuit.Param{Name: "bf", Value: t.Gain, Tol: (t.GainHigh - t.GainLow) / 2 / t.Gain})
+}
+
+// cardResistor records a resistor of a card with the power rating for its greatest
+// heat.
+func (p *Plan) cardResistor(r *circuit.Part, v quantity.Ohm, heat quantity.Watt) {
+	p.resistor(r, "", v, resistorTol)
+	p.watts(r, heat)
+}
+
+// watts records the power rating of a resistor: the next standard one from twice its
+// greatest heat up (common practice, no source).
+func (p *Plan) watts(r *circuit.Part, heat quantity.Watt) {
+	rating, ok := catalogue.NextRating(catalogue.ResistorWatts, heat*resistorReserve)
+	if !ok {
+		most := catalogue.ResistorWatts[len(catalogue.ResistorWatts)-1]
+		p.block(r.Designation, r.At, catalogue.CommonPractice.String(), &sizing.BlockedError{
+			Limit: sizing.LimitDissipation, Subject: "the heat of the resistor", Value: float64(heat), Bound: float64(most) / resistorReserve, Unit: "W",
+			Frees: "take a higher resistance, or share the heat over several resistors",
+		})
+		rating = most
+	}
+	set(r, "power", rating.String(), float64(rating), "W", rating > smallResistor, false)
+}
+
+// resistorReserve is how many times its heat a resistor is rated for, smallResistor
+// the rating that needs no word on the drawing (common practice, no source).
+const (
+	resistorReserve               = 2
+	smallResistor   quantity.Watt = 0.25
+)
+
+// capacitorFor says what a capacitor must stand.
+func (p *Plan) capacitorFor(v quantity.Volt) string {
+	r, ok := catalogue.NextRating(catalogue.CapacitorVolts, v)
+	if !ok {
+		r = v
+	}
+	return "rated " + r.String() + " or more"
 }

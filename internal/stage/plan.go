@@ -58,10 +58,11 @@ type Plan struct {
 
 	TrunkSize, ChargeSize quantity.WireSize
 
-	aux    map[string]quantity.Ampere // what auxiliary supplies feed, by stage name
-	cabled bool
-	loads  map[string]Load
-	parts  map[string]*circuit.Part
+	aux     map[string]quantity.Ampere // what auxiliary supplies feed, by stage name
+	cabled  bool
+	loads   map[string]Load
+	parts   map[string]*circuit.Part
+	sources map[*circuit.Part]raw // fuses that a transformer supply feeds, not the battery
 }
 
 // Size sizes every part and conductor of c and writes what came out to f. What
@@ -70,6 +71,7 @@ func Size(site *describe.Site, c *circuit.Circuit, f *facts.Facts) *Plan {
 	p := &Plan{
 		Site: site, C: c, F: f, System: catalogue.System(site.Practice.Conductors.Val),
 		aux: map[string]quantity.Ampere{}, loads: map[string]Load{}, parts: map[string]*circuit.Part{},
+		sources: map[*circuit.Part]raw{},
 	}
 	for _, part := range c.Parts {
 		p.parts[part.Key] = part

@@ -2,6 +2,7 @@ package stage
 
 import (
 	"container/heap"
+	"fmt"
 	"math"
 
 	"gloamwright/internal/catalogue"
@@ -33,6 +34,10 @@ func (p *Plan) protect() {
 		}
 	}
 	for _, f := range p.F.Fuses {
+		if r, ok := p.sources[f.Part]; ok {
+			p.clearRaw(f, r)
+			continue
+		}
 		near, far := p.reach(f, ref, at)
 		if f == main {
 			near = 0
@@ -91,6 +96,28 @@ func (p *Plan) clear(f *facts.Fuse, near, far float64) {
 	}
 	f.FarEnd, w = sizing.LeastFault(sizing.FaultInput{Source: p.Empty, Internal: p.Internal * usedBattery, Loop: []sizing.Series{{Name: "loop", Ohm: quantity.Ohm(far)}}})
 	p.work(f.Part.Designation, "current of a short at the far end", w)
+	p.opens(f)
+}
+
+// clearRaw fills in what a short circuit does at the fuse of a transformer supply: the
+// supply's own resistance limits its current.
+func (p *Plan) clearRaw(f *facts.Fuse, r raw) {
+	short := func(name string, mains quantity.Ratio, more quantity.Ohm) quantity.Ampere {
+		i := quantity.Ampere(float64(r.open) * float64(mains) / float64(r.ohm+more))
+		p.work(f.Part.Designation, name, sizing.Working{
+			Formula: "I_k = m × U_open ÷ (R + ΣR)", Value: float64(i), Unit: "A", Source: "Thévenin's theorem on the stated points",
+			Substituted: fmt.Sprintf("%v × %v ÷ (%s Ω + %s Ω)", float64(mains), r.open, sizing.Digits(float64(r.ohm)), sizing.Digits(float64(more))),
+		})
+		return i
+	}
+	f.Prospective = short("prospective current at the fuse", 1+r.mains.Plus, 0)
+	f.FarEnd = short("current of a short at the far end", 1-r.mains.Plus, quantity.Ohm(fuseOhm(f.Rating)+leadOhm(p)))
+	p.opens(f)
+}
+
+// opens fills in when a fuse opens at the current of a far-end short, and what its
+// cable stands.
+func (p *Plan) opens(f *facts.Fuse) {
 	o, w, err := sizing.OpeningTime(sizing.OpeningInput{Class: f.Class, Rating: f.Rating, Current: f.FarEnd})
 	if err != nil {
 		p.block(f.Part.Designation, f.Part.At, "", err)

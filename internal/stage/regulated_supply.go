@@ -59,7 +59,7 @@ func (b *Build) outRail(s *describe.Stage, port string) string {
 func sizeSupply(p *Plan, s *describe.Stage) {
 	t := p.part(s, "supply")
 	rated, given := describe.Get[quantity.Rating](s.Fields, "rated")
-	load := p.aux[s.Name.Val]
+	load := p.drawn(s.Name.Val)
 	if !given {
 		rated.Val.Volt = p.Site.Duty.Nominal.Val
 		c, w, err := sizing.SupplyCurrent(sizing.SupplyInput{Load: load})

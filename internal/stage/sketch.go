@@ -1,6 +1,9 @@
 package stage
 
-import "gloamwright/internal/circuit"
+import (
+	"gloamwright/internal/circuit"
+	"gloamwright/internal/describe"
+)
 
 // Levels that the leads of neighbouring stages meet at, in modules below the L+
 // rail, and the two ends of a stage's leads.
@@ -95,4 +98,19 @@ func (b *Build) converter(p *circuit.Part, x, y, h float64, left, right []string
 		it.Name = "theta"
 	}
 	b.add(it)
+}
+
+// output ends a stage's signal, whose track reaches x at level y, at the port on the
+// right edge. When several things take from it, it goes up at column col to a rail of
+// its own.
+func (b *Build) output(s *describe.Stage, port string, pin *circuit.Pin, y, x, col int) {
+	key := s.Name.Val + "." + port
+	if b.rails[key] != nil {
+		w := b.lead(circuit.OpUp, port, pin, key, x, y, col, y, col, upEnd)
+		b.number(w, float64(col), 9)
+		return
+	}
+	b.add(circuit.SketchItem{Op: circuit.OpWire, Name: port, Pts: points([]int{x, y, b.sk.Width, y})})
+	b.add(circuit.SketchItem{Op: circuit.OpRight, Name: port, Y: float64(y)})
+	b.outs[key] = pin
 }
