@@ -106,15 +106,26 @@ func (m *maker) environment(o operating) network.Environment {
 	}
 	if b := m.f.Battery.Part; b != nil {
 		emf, ohm, tol := m.batteryState(o.battery)
-		e = e.With(network.Override{Element: b.Designation, Params: []circuit.Param{
-			{Name: "emf", Value: float64(emf), Tol: tol}, {Name: "ohm", Value: float64(ohm), Tol: ohmSpread},
-		}})
+		params := []circuit.Param{{Name: "emf", Value: float64(emf), Tol: tol}, {Name: "ohm", Value: float64(ohm), Tol: ohmSpread}}
+		if over := m.plan.Float - m.plan.Full; o.battery == floating && over > 0 {
+			takes := floatDraw * m.f.Battery.Capacity
+			params = append(params, circuit.Param{Name: "charge_ohm", Value: float64(over) / float64(takes), Tol: floatSpread})
+		}
+		e = e.With(network.Override{Element: b.Designation, Params: params})
 	}
 	return e
 }
 
 // ohmSpread is the spread of a battery's resistance among products of a class.
 const ohmSpread = 0.3
+
+// A full battery at float takes about 1 mA for each ampere-hour (IEC 62485-2, table 1:
+// typical float current; from memory), half as much or half as much again (common
+// practice, no source). So the charger sets its voltage, not the battery.
+const (
+	floatDraw   = 1e-3
+	floatSpread = 0.5
+)
 
 // batteryState returns electromotive force, resistance and spread of the battery.
 func (m *maker) batteryState(state string) (quantity.Volt, quantity.Ohm, float64) {
@@ -128,8 +139,8 @@ func (m *maker) batteryState(state string) (quantity.Volt, quantity.Ohm, float64
 		return m.cutOffSource(), sourceOhm, sourceSpread
 	case recharging:
 		return p.Empty, p.Internal, emptySpread
-	default: // floating: it takes next to no current, its voltage is the charger's
-		return p.Float, p.Internal, restSpread
+	default: // floating: full, and what it takes in is little
+		return p.Full, p.Internal, restSpread
 	}
 }
 

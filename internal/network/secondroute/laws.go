@@ -141,7 +141,7 @@ func law(el *circuit.Element, c *Condition, v map[string]dual.Number) (map[strin
 	case "source":
 		from("+", "-", over(plus(d("+", "-"), -p["volt"]), max(p["ohm"], 1e-6)))
 	case "battery":
-		from("+", "-", over(plus(d("+", "-"), -p["emf"]), max(p["ohm"], 1e-6)))
+		from("+", "-", battery(plus(d("+", "-"), -p["emf"]), max(p["ohm"], 1e-6), p["charge_ohm"]))
 	case "charger":
 		for _, probe := range []string{"θ+", "θ-"} {
 			if _, there := v[probe]; there {
@@ -236,6 +236,26 @@ func law(el *circuit.Element, c *Condition, v map[string]dual.Number) (map[strin
 		return nil, fmt.Errorf("secondroute: model %q of %s is not written", el.Model, el.ID)
 	}
 	return out, nil
+}
+
+// battery is the current into a battery that stands u above its electromotive force.
+func battery(u dual.Number, ohm, charge float64) dual.Number {
+	const corner = 1e-3
+	if charge == 0 {
+		return over(u, ohm)
+	}
+	// Below −corner the one resistance holds, above corner both; between, the square.
+	k := (charge - ohm) / (4 * corner)
+	switch {
+	case u.Real <= -corner*ohm:
+		return over(u, ohm)
+	case u.Real >= corner*charge:
+		return over(u, charge)
+	}
+	// k·i² + (ohm + 2·k·corner)·i + k·corner² − u = 0
+	b := ohm + 2*k*corner
+	root := dual.Sqrt(plus(dual.Scale(4*k, u), b*b-4*k*k*corner*corner))
+	return over(plus(root, -b), 2*k)
 }
 
 // power is the current of a constant-power load.
