@@ -61,7 +61,8 @@ func (b *book) readingsTable(sh *Sheet, p *plan) {
 		columns = columns[:most]
 	}
 	if most := int(math.Floor((contactLeft - readingFirst) / readingColumn)); len(columns) > most && len(relaysOf(p)) > 0 {
-		columns = columns[:most]
+		columns = b.conditions(plainConditions[:most])
+		columns = columns[:min(len(columns), most)]
 	}
 	o := sh.scene.object(classTable, "readings", "Readings to expect")
 	o.add(textAt(colText, rowTables, "Readings against "+BlackLabel, nameStyle, ink.Start))

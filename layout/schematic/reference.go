@@ -22,6 +22,14 @@ func (p *place) String() string {
 	return fmt.Sprintf("/%d.%s", p.sheet.Number, p.sheet.Paper.Zone(p.at.X*module, p.at.Y*module))
 }
 
+// Sheet is the sheet of the place: "/3".
+func (p *place) Sheet() string {
+	if p == nil || p.sheet == nil {
+		return ""
+	}
+	return fmt.Sprintf("/%d", p.sheet.Number)
+}
+
 // reference is a wire's end that goes on elsewhere. Both ends of a connection
 // share one key; together they name one another's place.
 type reference struct {

@@ -42,6 +42,7 @@ type book struct {
 	current map[*circuit.Conductor]*facts.Conductor
 
 	boardSheets []*boardSheet
+	over        *overview
 }
 
 // Sheets draws the schematic of d. It fails only when the circuit holds something
@@ -99,6 +100,7 @@ func (b *book) make() error {
 	if err != nil {
 		return err
 	}
+	b.boardSheets = boards
 	overviews := b.planOverview()
 	for _, title := range overviews {
 		b.sheet("Overview diagram", title)
@@ -117,7 +119,6 @@ func (b *book) make() error {
 		}
 		b.drawnOn(s.number, []*circuit.Part{bd.Plus, bd.Minus})
 	}
-	b.boardSheets = boards
 	for _, s := range stages {
 		if err := b.drawStages(b.sheet("Circuit diagram", s.title), s); err != nil {
 			return err

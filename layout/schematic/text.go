@@ -50,13 +50,17 @@ func fit(s string, st style, room float64) string { return ink.Cut(s, st.font(),
 // run is a piece of a line in one style: fixed text, or the place of something
 // that is known only when all sheets are drawn.
 type run struct {
-	s  string
-	st style
-	to *place
+	s     string
+	st    style
+	to    *place
+	short bool // only the sheet of the place
 }
 
 func (r run) text() string {
-	if r.to != nil {
+	switch {
+	case r.to != nil && r.short:
+		return r.s + r.to.Sheet()
+	case r.to != nil:
 		return r.s + r.to.String()
 	}
 	return r.s
