@@ -109,7 +109,27 @@ func (p *plan) freesDrop(i int, sizes []*Option) string {
 	if o := p.repin(i, sizes, enough); o != nil {
 		return fmt.Sprintf("the given cable is too thin: %v would do", o.Size)
 	}
-	return p.shorter(i, sizes, enough)
+	return p.shorter(i, sizes, enough) + p.area(i, sizes)
+}
+
+// area says which cross-section the whole way to leg i would need by the moment rule.
+func (p *plan) area(i int, sizes []*Option) string {
+	_, amps, ok := p.t.Solve(sizes)
+	if !ok {
+		return ""
+	}
+	in := LeastAreaInput{Drop: p.t.Volts - p.t.Legs[i].MinVolt}
+	for _, j := range p.path(i) {
+		in.Moment += float64(amps[j]) * float64(p.t.Legs[j].Length)
+		in.Drop -= quantity.Volt(float64(amps[j]) * float64(p.t.Legs[j].Extra))
+		in.Resistivity = max(in.Resistivity, float64(sizes[j].PerMetre)*float64(sizes[j].Size.Area))
+	}
+	if in.Drop <= 0 {
+		return ""
+	}
+	s, _ := LeastArea(in)
+	const shown = 2 // significant digits: the rule is a first estimate
+	return fmt.Sprintf("; one cable all the way would need about %s", quantity.Format(s, shown))
 }
 
 // freesLoop does the same for a fault loop.
