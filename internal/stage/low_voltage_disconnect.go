@@ -120,7 +120,7 @@ func (p *Plan) nextRating(part *circuit.Part, name string, list []quantity.Amper
 	r, ok := catalogue.NextRating(list, need)
 	w := sizing.Working{
 		Formula: "I_rated ≥ I ÷ k_load, next standard rating", Value: float64(r), Unit: "A",
-		Substituted: fmt.Sprintf("%s ÷ %v = %s → %v", quantity.Format(load, 4), float64(k), quantity.Format(need, 4), r),
+		Substituted: fmt.Sprintf("%s A ÷ %v = %s A → %s A", sizing.Digits(float64(load)), float64(k), sizing.Digits(float64(need)), sizing.Digits(float64(r))),
 		Source:      catalogue.CommonPractice.String(),
 	}
 	if !ok {
