@@ -8,6 +8,7 @@ import (
 	"gloamwright/internal/circuit"
 	"gloamwright/internal/facts"
 	"gloamwright/internal/network"
+	"gloamwright/internal/quantity"
 )
 
 // expect says for every condition what is to be seen: lights, relay, cut-off, and the
@@ -83,6 +84,7 @@ func (m *maker) batteryCurrent(c *facts.Condition) (string, error) {
 		verb = "gives"
 		lo, hi = -hi, -lo
 	}
+	c.BatteryBand.Low, c.BatteryBand.High = quantity.Ampere(math.Max(lo, 0)), quantity.Ampere(hi)
 	who := "Battery"
 	if c.Battery == endOfDis || c.Battery == cutOff {
 		who = "Source"

@@ -33,6 +33,7 @@ func Make(site *describe.Site, kept circuit.Labels) (*Design, error) {
 	m.farEnds()
 	m.conductors()
 	m.function()
+	m.loops()
 	if err := m.readings(); err != nil {
 		return nil, err
 	}

@@ -29,6 +29,7 @@ type Facts struct {
 	Supply     *Supply
 	Endurance  Endurance
 	Function   []*FunctionRow
+	Loops      []*Loop // feeders first, then circuits
 	Thresholds []*Threshold
 	Faults     []*Fault
 	Workings   []sizing.Working
@@ -60,6 +61,18 @@ type Condition struct {
 	Volts      []quantity.Volt // by net
 	Residual   float64         // largest current imbalance at a node, A
 	Shown      bool            // printed in the packet's six conditions
+	// BatteryBand is the band of the current's magnitude; zero while floating.
+	BatteryBand quantity.Range[quantity.Ampere]
+}
+
+// Loop is the resistance of a run of two cores with its far end joined, as it is
+// measured before anything is live.
+type Loop struct {
+	Name      string          // "feeder of Annex board", "Boathouse"
+	From      [2]*circuit.Pin // where to measure
+	Joined    [2]*circuit.Pin // what to join
+	Low, High quantity.Ohm
+	Length    quantity.Metre
 }
 
 // What a charger does in a condition.
@@ -187,6 +200,7 @@ type Charger struct {
 	Compensated bool
 	Pinned      bool
 	Mains       quantity.Toleranced[quantity.Volt]
+	Impedance   quantity.Ohm // of its output; 0: a constant-current, constant-voltage charger
 }
 
 // Relay is the outcome at the changeover relay.
