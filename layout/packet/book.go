@@ -1,6 +1,7 @@
 package packet
 
 import (
+	"fmt"
 	"slices"
 
 	"gloamwright/internal/design"
@@ -39,6 +40,10 @@ type book struct {
 	refs       *refs
 	cuts       []string
 	symbols    map[string]ink.Target // of designations on the schematic
+	keys       []contentLine         // of the cover
+	blockOf    map[int]int           // block of the fault-finding table by fault group
+	words      words
+	lineNumber map[string]string // of checklist lines that texts refer to, by key
 }
 
 func newBook(d *design.Design, drawings []*schematic.Sheet) *book {
@@ -69,9 +74,12 @@ func (b *book) revision() string {
 	return r
 }
 
+// contentLine is a line of the contents.
+type contentLine struct{ key, title string }
+
 // sections lists the packet in the order of work.
 func (b *book) sections() []*section {
-	var out []*section
+	out := []*section{nil} // the cover, made when the others are known
 	add := func(list ...*section) {
 		for _, s := range list {
 			if s != nil {
@@ -79,9 +87,24 @@ func (b *book) sections() []*section {
 			}
 		}
 	}
-	add(b.basis())
+	b.numberBlocks()
+	b.numberLines()
+	add(b.cautions(), b.basis())
 	add(b.schematicSections()...)
-	add(b.parts(), b.wires())
+	add(b.parts(), b.labels(), b.wires(), b.terminals(), b.fuses(), b.checklist())
+	add(b.testPoints(), b.matrix(), b.faultFinding(), b.curves(), b.workings(), b.redLine())
+	b.keys = []contentLine{{keyCover, "Cover"}}
+	for _, s := range out[1:] {
+		if last := b.keys[len(b.keys)-1]; last.key == s.key {
+			continue
+		}
+		title := s.title
+		if s.key == keySchematic {
+			title = fmt.Sprintf("Schematic, %s %s", counted(len(b.drawings), "sheet"), b.drawings[0].Paper.Name)
+		}
+		b.keys = append(b.keys, contentLine{s.key, title})
+	}
+	out[0] = b.cover()
 	return out
 }
 

@@ -35,7 +35,7 @@ func pinName(p *circuit.Pin) string {
 		return ""
 	}
 	s := p.String()
-	if strings.HasSuffix(s, ":-") {
+	if strings.HasSuffix(s, "-") {
 		s = strings.TrimSuffix(s, "-") + "−"
 	}
 	return s
@@ -126,4 +126,20 @@ func (b *book) conditionIndex(c *facts.Condition) int {
 		}
 	}
 	return -1
+}
+
+// outward prints a bound of a band with so many decimals, rounded away from the band's
+// middle.
+func outward(v float64, decimals int, up bool) string {
+	k := math.Pow(10, float64(decimals))
+	if up {
+		v = math.Ceil(v*k-tiny) / k
+	} else {
+		v = math.Floor(v*k+tiny) / k
+	}
+	s := strconv.FormatFloat(v, 'f', decimals, 64)
+	if strings.Trim(s, "-0.") == "" {
+		s = strings.TrimPrefix(s, "-")
+	}
+	return strings.Replace(s, "-", "−", 1)
 }

@@ -49,6 +49,9 @@ func Build(d *design.Design, sheets []*schematic.Sheet) (*Packet, error) {
 	b := newBook(d, sheets)
 	for range rounds {
 		b.start()
+		if err := b.readTexts(); err != nil {
+			return nil, err
+		}
 		plans := b.layOut()
 		now := b.refsOf(plans)
 		if now.equal(b.refs) {

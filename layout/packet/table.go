@@ -250,7 +250,12 @@ func groupGap(first bool) float64 {
 
 // paragraph is running text over the whole width.
 func (b *book) paragraph(text string, st style, gap float64) block {
-	lines := wrap(text, st, b.pg.width)
+	return b.paragraphIn(text, st, gap, b.pg.width)
+}
+
+// paragraphIn is running text of a width.
+func (b *book) paragraphIn(text string, st style, gap, width float64) block {
+	lines := wrap(text, st, width)
 	return block{h: float64(len(lines))*st.lead + 1, gap: gap, draw: func(p *pad, y, h float64) {
 		p.lines(p.pg.l, y+rise*st.lead+0.5, lines, st.lead)
 	}}
