@@ -55,9 +55,10 @@ var conditionsOfAnyJob = []operating{
 }
 
 // wanted says whether a circuit must be lit in a condition, and whether the
-// condition asks anything of it: with the battery cut off nothing is asked.
-func wanted(lit string, c *facts.Condition) (lights, known bool) {
-	if c.Battery == cutOff {
+// condition asks anything of it: with the battery cut off nothing is asked, nor before
+// the cut-off has reclosed behind it.
+func (m *maker) wanted(lit string, c *facts.Condition) (lights, known bool) {
+	if c.Battery == cutOff || c.Battery == recharging && m.opened(c) {
 		return false, false
 	}
 	mains := c.MainsV > 0
@@ -71,4 +72,9 @@ func wanted(lit string, c *facts.Condition) (lights, known bool) {
 	default: // outage-night
 		return !mains && c.Dark, true
 	}
+}
+
+// opened reports whether the cut-off is open in a condition.
+func (m *maker) opened(c *facts.Condition) bool {
+	return m.f.CutOff != nil && !m.solved[c.Key].State[m.f.CutOff.Part.Designation]
 }

@@ -39,7 +39,7 @@ func (m *maker) luminaires() {
 						lit[i][w.Lighting.Name] = false
 					}
 					// A dark circuit is the function table's business, not the cables'.
-					if on, known := wanted(w.Lighting.Lit, c); on && known && v > 0 {
+					if on, known := m.wanted(w.Lighting.Lit, c); on && known && v > 0 {
 						l.WorstV = min(l.WorstV, quantity.Volt(v))
 						l.Drop = max(l.Drop, quantity.Ratio((float64(c.BatteryV)-v)/nominal))
 					}
@@ -185,7 +185,7 @@ func (m *maker) function() {
 	for _, s := range m.site.Circuits {
 		row := &facts.FunctionRow{Circuit: s.Name.Val, Asked: s.Lit.Val}
 		for _, c := range m.f.Conditions {
-			want, known := wanted(s.Lit.Val, c)
+			want, known := m.wanted(s.Lit.Val, c)
 			found := false
 			for _, name := range c.Lit {
 				found = found || name == s.Name.Val
