@@ -21,8 +21,11 @@ func (a axis) at(v float64) float64 {
 	return (v - a.min) / (a.max - a.min)
 }
 
-// round steps of a decade, for ticks and for the ends of an axis.
-var decade = []float64{1, 2, 5}
+// Round steps of a decade for logarithmic and for linear axes.
+var (
+	decade = []float64{1, 2, 5}
+	steps  = []float64{1, 2, 2.5, 5}
+)
 
 // crowded is the number of decades from which only whole ones have a tick.
 const crowded = 4.5
@@ -31,12 +34,12 @@ const crowded = 4.5
 // above high.
 func logAxis(low, high float64) axis {
 	a := axis{min: roundLog(low, false), max: roundLog(high, true), log: true}
-	steps := decade
+	of := decade
 	if math.Log10(a.max/a.min) > crowded {
-		steps = decade[:1]
+		of = decade[:1]
 	}
 	for e := math.Floor(math.Log10(a.min)); e <= math.Ceil(math.Log10(a.max)); e++ {
-		for _, s := range steps {
+		for _, s := range of {
 			if v := s * math.Pow(10, e); v >= a.min*(1-tiny) && v <= a.max*(1+tiny) {
 				a.ticks = append(a.ticks, v)
 			}
@@ -67,9 +70,9 @@ func linearAxis(low, high float64, n int) axis {
 	raw := (high - low) / float64(n)
 	unit := math.Pow(10, math.Floor(math.Log10(raw)))
 	step := 10 * unit
-	for i := len(decade) - 1; i >= 0; i-- {
-		if decade[i]*unit >= raw*(1-tiny) {
-			step = decade[i] * unit
+	for i := len(steps) - 1; i >= 0; i-- {
+		if steps[i]*unit >= raw*(1-tiny) {
+			step = steps[i] * unit
 		}
 	}
 	a := axis{min: math.Floor(low/step+tiny) * step, max: math.Ceil(high/step-tiny) * step}

@@ -63,8 +63,8 @@ func (b *book) askedAndCameOut() []block {
 		out = append(out, pair{"Stands an outage by day", fmt.Sprintf("%.0f days", math.Floor(e.Standing.Hours()/24)), "no limit"})
 	}
 	const halfWidth, gap = 87.5, 5.0
-	left := table{cols: []column{{w: 38}, {w: 49.5}}, st: tableText, min: plainRow}
-	right := table{cols: []column{{w: 44.5}, {w: 20, a: ink.End}, {w: 23, a: ink.End}}, st: tableText, min: plainRow}
+	left := table{cols: []column{{w: 38}, {w: 49.5}}, st: tableText, min: tightRow, air: tightAir}
+	right := table{cols: []column{{w: 44.5}, {w: 20, a: ink.End}, {w: 23, a: ink.End}}, st: tableText, min: tightRow, air: tightAir}
 	shift := 180 - halfWidth
 	blocks := []block{beside(b.head(0, halfWidth, "Asked", ""), b.head(shift, halfWidth, "Came out", ""))}
 	for i := range max(len(asked), len(out)) {
@@ -144,7 +144,7 @@ func (b *book) functionTable() []block {
 	if open > 0 {
 		remark += "; battery cut off: nothing is asked"
 	}
-	t := table{cols: []column{{head: "Circuit", w: 42}, {head: "To be lit in", w: 24}}, st: tableText, min: plainRow}
+	t := table{cols: []column{{head: "Circuit", w: 42}, {head: "To be lit in", w: 24}}, st: tableText, min: tightRow, air: tightAir}
 	each := (180.0 - 66) / float64(len(shown))
 	for _, c := range shown {
 		t.cols = append(t.cols, column{head: fmt.Sprintf("%d %s", c.Number, c.Name), w: each, a: ink.Middle})
@@ -175,15 +175,26 @@ func (b *book) findings() []block {
 	if len(d.Findings) == 0 {
 		return append(out, b.paragraph("Nothing was found: every check holds.", tableText, 1))
 	}
-	for i := range d.Findings {
-		c := b.card(&d.Findings[i])
-		c.gap = 2
-		if i == 0 {
+	const between = 2.4
+	half := (b.pg.width - between) / 2
+	for i := 0; i < len(d.Findings); i++ {
+		c := b.card(&d.Findings[i], 0, b.pg.width)
+		if i+1 < len(d.Findings) && b.short(&d.Findings[i], half) && b.short(&d.Findings[i+1], half) {
+			c = beside(b.card(&d.Findings[i], 0, half), b.card(&d.Findings[i+1], half+between, half))
+			i++
+		}
+		c.gap = 1.8
+		if len(out) == 1 {
 			c.h, c.draw = c.h+1.6, lowered(c.draw, 1.6)
 		}
 		out = append(out, c)
 	}
 	return out
+}
+
+// short reports whether a note may stand in half the width.
+func (b *book) short(f *finding.Finding, half float64) bool {
+	return f.Severity == finding.Note && len(wrap(f.Message, boxHead, half-cardText-cardRight)) <= 2 && len(wrap(f.Remedy, tableText, half-cardText-cardRight)) <= 2
 }
 
 // lowered draws a block further down, in the lower part of its height.
@@ -202,9 +213,10 @@ const (
 
 // card is one finding: edge and token by its gravity, the figure against its limit, and
 // what helps.
-func (b *book) card(f *finding.Finding) block {
-	room := b.pg.width - cardText - cardRight
-	gauge := f.Limit != 0 && f.Value > 0
+func (b *book) card(f *finding.Finding, left, width float64) block {
+	room := width - cardText - cardRight
+	narrow := width < b.pg.width
+	gauge := f.Limit != 0 && f.Value > 0 && !narrow
 	place := ""
 	if f.At.Line > 0 {
 		place = fmt.Sprintf("%s:%d:%d", filepath.Base(f.At.File), f.At.Line, f.At.Col)
@@ -215,18 +227,24 @@ func (b *book) card(f *finding.Finding) block {
 		b.noteCut(place)
 	}
 	side := pl.width() + 4
+	if narrow {
+		side = 0
+	}
 	if gauge {
 		side = max(side, gaugeLong+4)
 	}
 	head := wrap(f.Message, boxHead, room-side)
 	remedy := wrap(f.Remedy, tableText, room-side)
 	textHigh := float64(len(head))*boxHead.lead + float64(len(remedy))*tableText.lead
-	h := max(textHigh+4, 9.5)
+	if narrow {
+		textHigh += code.lead
+	}
+	h := max(textHigh+3.6, 9.5)
 	if gauge {
 		h = max(h, 11.5)
 	}
 	return block{h: h, draw: func(p *pad, y, h float64) {
-		x := p.pg.l
+		x := p.pg.l + left
 		edge, lw, c := 1.2, cardLine, ink.Black
 		switch f.Severity {
 		case finding.Stop:
@@ -234,7 +252,7 @@ func (b *book) card(f *finding.Finding) block {
 		case finding.Note:
 			edge, c = 0, ink.Rule
 		}
-		p.frame(x, y, p.pg.width, h, lw, c)
+		p.frame(x, y, width, h, lw, c)
 		if edge > 0 {
 			p.fill(x, y, edge, h, ink.Black)
 		}
@@ -242,7 +260,7 @@ func (b *book) card(f *finding.Finding) block {
 		base := y + (h-textHigh)/2 + rise*boxHead.lead
 		p.lines(x+cardText, base, head, boxHead.lead)
 		p.lines(x+cardText, base+float64(len(head))*boxHead.lead+0.1, remedy, tableText.lead)
-		right := p.pg.right() - cardRight
+		right := x + width - cardRight
 		if gauge {
 			p.limitGauge(right-gaugeLong, y+2.4, f.Value, f.Limit, f.Over)
 		}

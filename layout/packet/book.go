@@ -4,6 +4,7 @@ import (
 	"fmt"
 	"slices"
 
+	"gloamwright/internal/commission"
 	"gloamwright/internal/design"
 	"gloamwright/layout/ink"
 	"gloamwright/layout/schematic"
@@ -43,7 +44,8 @@ type book struct {
 	keys       []contentLine         // of the cover
 	blockOf    map[int]int           // block of the fault-finding table by fault group
 	words      words
-	lineNumber map[string]string // of checklist lines that texts refer to, by key
+	lineNumber map[string]string  // of checklist lines that texts refer to, by key
+	record     *commission.Record // the book is this record instead of a packet
 }
 
 func newBook(d *design.Design, drawings []*schematic.Sheet) *book {
@@ -74,11 +76,29 @@ func (b *book) revision() string {
 	return r
 }
 
+// kind is what the document is, pageWord what its sheets are called.
+func (b *book) kind() string {
+	if b.record != nil {
+		return "commissioning record"
+	}
+	return "build packet"
+}
+
+func (b *book) pageWord() string {
+	if b.record != nil {
+		return "Record"
+	}
+	return "Sheet"
+}
+
 // contentLine is a line of the contents.
 type contentLine struct{ key, title string }
 
 // sections lists the packet in the order of work.
 func (b *book) sections() []*section {
+	if b.record != nil {
+		return []*section{b.recordSection()}
+	}
 	out := []*section{nil} // the cover, made when the others are known
 	add := func(list ...*section) {
 		for _, s := range list {
@@ -89,9 +109,9 @@ func (b *book) sections() []*section {
 	}
 	b.numberBlocks()
 	b.numberLines()
-	add(b.cautions(), b.basis())
+	add(b.changes(), b.cautions(), b.basis(), b.legend())
 	add(b.schematicSections()...)
-	add(b.parts(), b.labels(), b.wires(), b.terminals(), b.fuses(), b.checklist())
+	add(b.parts(), b.labels(), b.wires(), b.cables(), b.terminals(), b.fuses(), b.checklist())
 	add(b.testPoints(), b.matrix(), b.faultFinding(), b.curves(), b.workings(), b.redLine())
 	b.keys = []contentLine{{keyCover, "Cover"}}
 	for _, s := range out[1:] {

@@ -101,11 +101,18 @@ func (b *book) repeats(each string) []map[string]string {
 		}
 	case "threshold":
 		for _, t := range b.d.Thresholds {
+			if unseen[t.Key] {
+				continue
+			}
 			out = append(out, map[string]string{"threshold-name": upper(t.Name), "threshold-band": thresholdBand(t), "threshold-unit": t.Unit})
 		}
 	}
 	return out
 }
+
+// unseen are thresholds that cannot be approached on site: they lie on the mains side or
+// in the coil.
+var unseen = map[string]bool{"mains": true, "pick-up": true}
 
 func pins(p [2]*circuit.Pin) string { return pinName(p[0]) + " and " + pinName(p[1]) }
 

@@ -183,6 +183,11 @@ func (p *pad) statusPanel(x, y, h float64) {
 		p.frame(x+warnLine/2, y+warnLine/2, coverPanel-warnLine, h-warnLine, 0.7, ink.Black)
 	}
 	big := style{ink.Bold, 13, 5.4, c}
+	if st == forConstruction {
+		for spans(st, big).width() > coverPanel-8 {
+			big.pt -= 0.25
+		}
+	}
 	at := y + 6.6
 	for _, l := range wrap(st, big, coverPanel-8) {
 		p.text(x+4, at, l, ink.Start)

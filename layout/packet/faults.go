@@ -88,19 +88,20 @@ func (b *book) faultFinding() *section {
 	}
 	s := &section{key: keyFaults, title: "Fault finding", document: "Fault-finding table", letter: "T", label: "How",
 		purpose: "Use this sheet to go from what you see, by one reading at a time, to the part.",
-		note:    "Find the block that fits. Set the condition named. Measure from its top; stop where the reading fits. Dead before you touch."}
+		note:    "Find the block that fits. Set the condition. Measure from its top; stop where the reading fits."}
 	t := &table{st: tableText, min: plainRow, cols: []column{{head: "Step", w: 9, a: midAnchor}, {head: "Measure", w: 47, indent: 2},
 		{head: "If it shows", w: 35}, {head: "Most likely", w: 45}, {head: "Do", w: 44}}}
 	head := t.head(0)
 	s.heads = &head
 	for i, x := range blocks {
-		h := b.numbered(i+1, x.sign, "", groupGap(i == 0))
+		list, common := b.steps(x)
+		h := b.numbered(i+1, x.sign, common, groupGap(i == 0))
 		for _, g := range x.groups {
 			h.marks = append(h.marks, faultMark(g))
 		}
 		s.blocks = append(s.blocks, h)
 		var rows []block
-		for k, st := range b.steps(x) {
+		for k, st := range list {
 			rows = append(rows, t.line(b, 0, row{cells: []cell{txt(fmt.Sprint(k + 1)), txt(st.measure), txt(st.shows), txt(strings.Join(st.likely, "; ")), txt(strings.Join(st.do, "; "))}}))
 		}
 		s.blocks = append(s.blocks, together(rows)...)
@@ -134,14 +135,27 @@ func (b *book) numbered(n int, name, remark string, gap float64) block {
 }
 
 // steps are the rows of a block; faults with the same reading share one.
-func (b *book) steps(x faultBlock) []step {
-	var out []step
+// The condition that all of them ask for stands at the head of the block.
+func (b *book) steps(x faultBlock) (out []step, common string) {
+	for i, f := range x.list {
+		c := b.conditionName(b.telling(f, x.list))
+		if i > 0 && c != common {
+			common = ""
+			break
+		}
+		common = c
+	}
 	at := map[string]int{}
 	for _, f := range x.list {
 		m := b.telling(f, x.list)
 		st := step{measure: "look; no reading tells", shows: ""}
 		if m.Point != "" {
 			st.measure, st.shows = b.measureText(m)
+			if common == "" {
+				if c := b.conditionName(m); c != "" {
+					st.measure += ", " + c
+				}
+			}
 		}
 		key := st.measure + "|" + st.shows
 		i, ok := at[key]
@@ -159,7 +173,15 @@ func (b *book) steps(x faultBlock) []step {
 			out[i].do = append(out[i].do, do)
 		}
 	}
-	return out
+	return out, common
+}
+
+// conditionName is "condition 3", the one of a reading that moves.
+func (b *book) conditionName(m facts.Moved) string {
+	if c := b.condition(m.Condition); c != nil && c.Number > 0 {
+		return fmt.Sprintf("condition %d", c.Number)
+	}
+	return ""
 }
 
 // telling is the reading that parts a fault from the others of its block: in the
@@ -217,9 +239,6 @@ func (b *book) measureText(m facts.Moved) (measure, shows string) {
 		}
 		c := b.condition(m.Condition)
 		measure = bold(r.Point.Label) + " " + r.Point.Shows
-		if c != nil && c.Number > 0 {
-			measure += fmt.Sprintf(", condition %d", c.Number)
-		}
 		shows = typicalVolt(m.Volt) + " V"
 		if c != nil {
 			band := r.Bands[b.conditionIndex(c)]

@@ -2,6 +2,7 @@ package packet
 
 import (
 	"fmt"
+	"strings"
 
 	"gloamwright/layout/ink"
 )
@@ -24,7 +25,7 @@ func (p *pad) drawFoot(s *sheetPlan, next *sheetPlan) {
 	}
 	if next != nil {
 		title := style{ink.Medium, 9.5, 4, ink.Black}
-		text := fmt.Sprintf("sheet %d, %s", next.n, next.short())
+		text := fmt.Sprintf("%s %d, %s", strings.ToLower(p.b.pageWord()), next.n, next.short())
 		w := p.write(pg.right(), yb-footHeight, text, title, ink.End)
 		x := pg.right() - w - 1.5
 		y := yb - footHeight - 1.1
@@ -33,7 +34,10 @@ func (p *pad) drawFoot(s *sheetPlan, next *sheetPlan) {
 		p.c.Link(ink.Rect{X: x - 4, Y: yb - footHeight - 3.4, W: w + 5.5, H: 4.4}, ink.Target{Sheet: next.n})
 	}
 	issued := ""
-	if p.b.d.Issued && p.b.d.ForConstruction() {
+	switch {
+	case p.b.record != nil:
+		issued = p.b.record.Date
+	case p.b.d.Issued && p.b.d.ForConstruction():
 		issued = job.Date.Val
 	}
 	values := []string{job.Client.Val, job.Number.Val + "-" + s.s.letter, p.b.revision(), issued, s.s.document, job.Prepared.Val, ""}

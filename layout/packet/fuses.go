@@ -26,11 +26,15 @@ type holder struct {
 func (b *book) fuses() *section {
 	s := &section{key: keyFuses, title: "Fuse map", document: "Fuse map", letter: "F", label: "Before",
 		purpose: "Use this sheet to put the right fuse in the right place, and to find a place again.",
-		note:    fmt.Sprintf("%s done. Fuses go in one by one, when %s says so.", b.upperSheets(keyWires), b.sheets(keyChecklist))}
+		note:    fmt.Sprintf("%s done. Fuses go in one by one, as %s tells.", b.upperSheets(keyWires), b.sheets(keyChecklist))}
+	var pics []picture
 	for _, h := range b.holders() {
-		s.blocks = append(s.blocks, b.holderPicture(h)...)
+		pics = append(pics, b.holderPictures(h)...)
 	}
-	s.blocks = append(s.blocks, b.systemFuses())
+	for _, f := range b.ofSystem() {
+		pics = append(pics, b.systemFuse(f))
+	}
+	s.blocks = append(s.blocks, packed(pics, b.pg.width)...)
 	s.blocks = append(s.blocks, b.fuseTable()...)
 	s.blocks = append(s.blocks, b.doorCopies()...)
 	return s
@@ -72,10 +76,49 @@ const (
 	feedsText   = 17.4
 )
 
-// holderPicture draws a holder as it is seen with the door open, eight places a row.
-func (b *book) holderPicture(h holder) []block {
-	rows := (len(h.places) + placesInRow - 1) / placesInRow
+// picture is a piece of the map that may stand beside others.
+type picture struct {
+	w, h  float64
+	under bool // goes on right below the one before
+	draw  func(p *pad, x, y float64)
+}
+
+// packed puts pictures into rows.
+func packed(list []picture, width float64) []block {
+	const gap, below = 4.4, 2.5
 	var out []block
+	for i := 0; i < len(list); {
+		j, w := i+1, list[i].w
+		for j < len(list) && !list[j].under && !list[i].under && w+gap+list[j].w <= width {
+			w += gap + list[j].w
+			j++
+		}
+		row := list[i:j]
+		h := 0.0
+		for _, x := range row {
+			h = max(h, x.h)
+		}
+		x := block{h: h, gap: below, draw: func(p *pad, y, _ float64) {
+			at := p.pg.l
+			for _, q := range row {
+				q.draw(p, at, y)
+				at += q.w + gap
+			}
+		}}
+		if row[0].under {
+			x.gap = 0
+		}
+		x.next = j < len(list) && list[j].under
+		out = append(out, x)
+		i = j
+	}
+	return out
+}
+
+// holderPictures draw a holder as it is seen with the door open, eight places a row.
+func (b *book) holderPictures(h holder) []picture {
+	rows := (len(h.places) + placesInRow - 1) / placesInRow
+	var out []picture
 	for r := range rows {
 		list := h.places[r*placesInRow : min(len(h.places), (r+1)*placesInRow)]
 		first := r == 0
@@ -91,45 +134,44 @@ func (b *book) holderPicture(h holder) []block {
 			}
 			texts = append(texts, l)
 		}
-		x := block{h: high, draw: func(p *pad, y, _ float64) {
-			w := float64(len(list)) * placeWide
-			p.frame(p.pg.l, y, w, high, barLine, ink.Black)
+		for _, p := range list {
+			if longColour(p.fuse) {
+				high += colourLine
+				break
+			}
+		}
+		w := float64(len(list)) * placeWide
+		out = append(out, picture{w: w, h: high, under: !first, draw: func(p *pad, x, y float64) {
+			p.frame(x, y, w, high, barLine, ink.Black)
 			top := y
 			if first {
 				side := "seen from the front"
-				sw := spans(side, groupRemark).width()
-				room := w - 4 - sw
+				room := w - 4 - spans(side, groupRemark).width()
 				if w < 60 {
 					side, room = "", w-4
 				}
-				p.fit(p.pg.l+2, y+4.4, h.title+" "+h.strip, groupHead, room, ink.Start)
-				p.write(p.pg.l+w-2, y+4.4, side, groupRemark, ink.End)
-				p.rule(p.pg.l, y+holderHead, w, hairline, ink.Black)
+				p.fit(x+2, y+4.4, h.title+" "+h.strip, groupHead, room, ink.Start)
+				p.write(x+w-2, y+4.4, side, groupRemark, ink.End)
+				p.rule(x, y+holderHead, w, hairline, ink.Black)
 				top += holderHead
-				p.hinge(p.pg.l+w+3, y+holderHead+3)
+				if len(list) == placesInRow {
+					p.countFromLeft(x+w+3, y+holderHead+3)
+				}
 			}
 			for i, q := range list {
-				at := p.pg.l + float64(i)*placeWide
+				at := x + float64(i)*placeWide
 				if i > 0 {
-					p.stroke(at, top, at, top+placeHigh, hairline, ink.Black)
+					p.stroke(at, top, at, y+high, hairline, ink.Black)
 				}
 				p.fusePlace(at, top, q, texts[i])
 			}
-		}}
-		if r > 0 {
-			x.gap = 0
-		} else {
-			x.gap = 2.5
-		}
-		x.next = r < rows-1
-		out = append(out, x)
+		}})
 	}
 	return out
 }
 
-// hinge says that places count from the left as the door stands open; which side the
-// hinge is on is the builder's choice, so it is written in.
-func (p *pad) hinge(x, y float64) {
+// countFromLeft says how places count.
+func (p *pad) countFromLeft(x, y float64) {
 	if x+17 > p.pg.right() {
 		return
 	}
@@ -152,10 +194,28 @@ func (p *pad) fusePlace(x, y float64, q place, feeds []line) {
 		return
 	}
 	p.fuseBody(bx, by, bare(q.fuse.Rating.String()))
-	name := spans(q.fuse.Part.Designation, style{ink.MonoBold, 9, 3.7, ink.Black})
-	w := p.text(x+1.5, y+12.6, name, ink.Start)
-	p.fit(x+placeWide-1.3, y+12.6, q.fuse.Colour, noteText, placeWide-w-3.6, ink.End)
-	p.lines(x+1.5, y+16.4, feeds, noteText.lead)
+	p.text(x+1.2, y+12.6, spans(q.fuse.Part.Designation, placeName), ink.Start)
+	word := spans(q.fuse.Colour, bodyColour)
+	if longColour(q.fuse) { // stands on a line of its own
+		p.text(x+1.2, y+16.2, word, ink.Start)
+		p.lines(x+1.2, y+16.4+colourLine, feeds, noteText.lead)
+		return
+	}
+	p.text(x+placeWide-0.9, y+12.6, word, ink.End)
+	p.lines(x+1.2, y+16.4, feeds, noteText.lead)
+}
+
+// Lettering of a place, and the line that a long colour takes, mm.
+var (
+	placeName  = style{ink.MonoBold, 8.5, 3.7, ink.Black}
+	bodyColour = style{ink.Regular, 8, 3.3, ink.Black}
+)
+
+const colourLine = 3.3
+
+// longColour reports whether a fuse's colour does not stand beside its designation.
+func longColour(f *facts.Fuse) bool {
+	return f != nil && spans(f.Part.Designation, placeName).width()+spans(f.Colour, bodyColour).width() > placeWide-2.9
 }
 
 // fuseBody is a blade fuse with its rating.
@@ -191,39 +251,29 @@ func (b *book) ofSystem() []*facts.Fuse {
 	return out
 }
 
-// systemFuses are the fuses outside the boards, and how to read the picture.
-func (b *book) systemFuses() block {
-	const wide, high = 31.0, 29.0
-	list := b.ofSystem()
-	list = list[:min(len(list), 3)]
-	x0 := float64(len(list)) * (wide + 4)
-	text := wrap("Places count from the left. The figure in a fuse is its rating in amperes, the word its body colour. A fuse is never rated above what its wire may carry: compare the two bold columns.", noteText, b.pg.width-x0-8)
-	return block{h: high, gap: 2.5, draw: func(p *pad, y, _ float64) {
-		for i, f := range list {
-			x := p.pg.l + float64(i)*(wide+4)
-			p.frame(x, y, wide, high, barLine, ink.Black)
-			where := ""
-			if f.Part.Place != nil {
-				where = f.Part.Place.Name
-			}
-			p.fit(x+2, y+4.4, where, groupHead, wide-4, ink.Start)
-			p.rule(x, y+holderHead, wide, hairline, ink.Black)
-			if f.Colour == "" {
-				p.cartridge(x+6, y+8.4, bare(f.Rating.String()))
-			} else {
-				p.fuseBody(x+wide/2-4.8, y+8, bare(f.Rating.String()))
-			}
-			w := p.write(x+1.8, y+19.4, f.Part.Designation, style{ink.MonoBold, 9, 3.7, ink.Black}, ink.Start)
-			p.fit(x+wide-1.5, y+19.4, f.Colour, noteText, wide-w-4.5, ink.End)
-			lines, cut := cutLines(upper(f.Feeds), noteText, wide-3.4, 2)
-			if cut {
-				p.b.noteCut(f.Feeds)
-			}
-			p.lines(x+1.8, y+23.2, lines, noteText.lead)
+// systemFuse is a fuse outside the boards.
+func (b *book) systemFuse(f *facts.Fuse) picture {
+	const wide, high = 28.5, 29.0
+	where := ""
+	if f.Part.Place != nil {
+		where = f.Part.Place.Name
+	}
+	lines, cut := cutLines(upper(f.Feeds), noteText, wide-3.4, 2)
+	if cut {
+		b.noteCut(f.Feeds)
+	}
+	return picture{w: wide, h: high, draw: func(p *pad, x, y float64) {
+		p.frame(x, y, wide, high, barLine, ink.Black)
+		p.fit(x+2, y+4.4, where, groupHead, wide-4, ink.Start)
+		p.rule(x, y+holderHead, wide, hairline, ink.Black)
+		if f.Colour == "" {
+			p.cartridge(x+wide/2-9.5, y+8.4, bare(f.Rating.String()))
+		} else {
+			p.fuseBody(x+wide/2-4.8, y+8, bare(f.Rating.String()))
 		}
-		p.frame(p.pg.l+x0, y, p.pg.width-x0, high, cardLine, ink.Black)
-		p.write(p.pg.l+x0+2.5, y+4.8, "How to read it", groupHead, ink.Start)
-		p.lines(p.pg.l+x0+2.5, y+9.6, text, noteText.lead)
+		w := p.write(x+1.8, y+19.4, f.Part.Designation, style{ink.MonoBold, 9, 3.7, ink.Black}, ink.Start)
+		p.fit(x+wide-1.5, y+19.4, f.Colour, noteText, wide-w-4.5, ink.End)
+		p.lines(x+1.8, y+23.2, lines, noteText.lead)
 	}}
 }
 
@@ -260,7 +310,7 @@ func (b *book) fuseTable() []block {
 			txt(thousands(float64(f.Prospective))), upTo(txt(upper(f.Feeds)), 2), txt(ampereBand(float64(f.LoadLow), float64(f.LoadHigh))), writeIn(), tickBox()}}))
 	}
 	out := append([]block{head}, together(rows)...)
-	return append(out, b.paragraph(b.fuseNote(list), noteText, 0.5))
+	return append(out, b.paragraph("Places count from the left. The figure in a fuse is its rating in amperes, the word its body colour. A fuse is never rated above what its wire may carry: compare the two bold columns. "+b.fuseNote(list), noteText, 0.5))
 }
 
 // fuseNote names the classes of the fuses with their voltage and breaking capacity, and

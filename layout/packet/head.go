@@ -18,6 +18,8 @@ func (b *book) status() string {
 	switch {
 	case !b.d.ForConstruction():
 		return notForConstruction
+	case b.record != nil:
+		return recordStatus(b.record)
 	case !b.d.Issued:
 		return draft
 	}
@@ -36,7 +38,7 @@ func (p *pad) drawHead(s *sheetPlan) {
 	number := style{ink.Bold, 14, 5, ink.Black}
 	x -= p.write(x, base, fmt.Sprintf("of %d", p.last), small, ink.End) + 1
 	x -= p.write(x, base, fmt.Sprint(p.n), number, ink.End) + 1
-	x -= p.write(x, base, "Sheet", small, ink.End) + 5
+	x -= p.write(x, base, p.b.pageWord(), small, ink.End) + 5
 	x -= p.write(x, base, "Revision "+p.b.revision(), small.as(ink.Medium), ink.End) + 5
 	// the left block, cut before it
 	left := pg.l

@@ -46,7 +46,11 @@ const rounds = 8
 
 // Build is Make with an account of what was made.
 func Build(d *design.Design, sheets []*schematic.Sheet) (*Packet, error) {
-	b := newBook(d, sheets)
+	return newBook(d, sheets).settle()
+}
+
+// settle lays the book out until nothing moves, and draws it.
+func (b *book) settle() (*Packet, error) {
 	for range rounds {
 		b.start()
 		if err := b.readTexts(); err != nil {
@@ -59,7 +63,7 @@ func Build(d *design.Design, sheets []*schematic.Sheet) (*Packet, error) {
 		}
 		b.refs = now
 	}
-	return nil, errors.New("the sheet numbers of the packet do not settle")
+	return nil, errors.New("the sheet numbers of the document do not settle")
 }
 
 // refsOf collects where everything stands.
@@ -110,7 +114,7 @@ func (b *book) draw(plans []*sheetPlan) (*Packet, error) {
 		date = time.Time{} // none, or not in the form of ISO 8601: a finding says so
 	}
 	pdf := ink.NewPDF(ink.Info{
-		Title:    fmt.Sprintf("%s %s, build packet, revision %s", job.Number.Val, job.Title.Val, job.Revision.Val),
+		Title:    fmt.Sprintf("%s %s, %s, revision %s", job.Number.Val, job.Title.Val, b.kind(), job.Revision.Val),
 		Author:   job.Prepared.Val,
 		Subject:  strings.TrimSpace(job.Site.Val + " for " + job.Client.Val),
 		Keywords: strings.Join([]string{b.status(), job.Number.Val, "revision " + job.Revision.Val}, ", "),

@@ -96,7 +96,7 @@ func (b *book) parts() *section {
 	for _, g := range partOrder {
 		group(partGroups[g].title, "", items[g])
 	}
-	group("Wire", "cut lengths on "+b.on("cutting list"), b.wireItems())
+	group("Wire", b.conductorStandard()+"; cut lengths on "+b.on("cutting list"), b.wireItems())
 	group("Spares", "keep in the cabinet", b.spareItems())
 	s.blocks = append(s.blocks, b.paragraph("Ratings include the margin. “A substitute must” lists what the calculation needs; anything that meets it may be fitted: write it on "+b.sheets(keyRedLine)+".", remarkText, 1))
 	return s
@@ -166,7 +166,7 @@ func (b *book) describe(p *circuit.Part) (what, must string) {
 	case p == d.Charger.Part:
 		must = fmt.Sprintf("≥ %s, ≤ %s; float %s", figure(d.Charger.Required), figure(d.Charger.Limit), quantity.Fixed(d.Charger.Float, 1))
 		if d.Charger.Compensated {
-			must += "; with probe input"
+			must += "; probe"
 		}
 	case d.Supply != nil && p == d.Supply.Part:
 		must = fmt.Sprintf("%v regulated; ≥ %s", d.Supply.Volt, figure(d.Supply.Current))
@@ -179,10 +179,7 @@ func (b *book) describe(p *circuit.Part) (what, must string) {
 			if f.Colour != "" {
 				what += ", " + f.Colour
 			}
-			must = fmt.Sprintf("DC ≥ %v; breaks ≥ %s", d.Site.Duty.Nominal.Val, figure(f.Prospective))
-			if f.Class != nil && f.Class.Name == "blade" {
-				must = "ISO 8820-3 type C; " + must
-			}
+			must = fmt.Sprintf("DC ≥ %v; breaks ≥ %s", d.Site.Duty.Nominal.Val, figure(b.worstShort(f)))
 		}
 	case p.Kind == circuit.LuminaireLamp:
 		if l := b.lamp(p); l != nil {
@@ -199,7 +196,7 @@ func (b *book) describe(p *circuit.Part) (what, must string) {
 			must = "DC rated ≥ " + figure(f.Design)
 		}
 	case p.Kind == circuit.Terminal:
-		what, must = bold("Terminals")+" of strip "+stripOf(p), "for the sizes on "+b.sheets(keyTerminals)
+		what, must = bold("Terminals")+" of strip "+stripOf(p), b.sheets(keyTerminals)
 	case p.Kind == circuit.BusBar:
 		what = bold(p.Description) + " of " + stripOf(p)
 	}
@@ -212,6 +209,18 @@ func (b *book) describe(p *circuit.Part) (what, must string) {
 		must = "the same values"
 	}
 	return what, must
+}
+
+// worstShort is the greatest current that a fuse of the same kind and rating may have to
+// break, so that all of them are one item.
+func (b *book) worstShort(f *facts.Fuse) quantity.Ampere {
+	var most quantity.Ampere
+	for _, x := range b.d.Fuses {
+		if x.Style == f.Style && x.Rating == f.Rating {
+			most = max(most, x.Prospective)
+		}
+	}
+	return most
 }
 
 func stripOf(p *circuit.Part) string {
@@ -242,7 +251,7 @@ func (b *book) wireItems() []item {
 	var out []item
 	for _, c := range b.cuttingList() {
 		what := bold("Wire") + " " + c.size.String() + ", " + c.colour
-		it := item{qty: metres(c.total), unit: "m", names: c.names, what: what, must: b.conductorStandard()}
+		it := item{qty: metres(c.total), unit: "m", names: c.names, what: what, must: "copper, stranded"}
 		if c.cores > 0 {
 			it.what = fmt.Sprintf("%s %d × %v", bold("Cable"), c.cores, c.size)
 		} else {
@@ -255,9 +264,9 @@ func (b *book) wireItems() []item {
 
 func (b *book) conductorStandard() string {
 	if b.d.Site.Practice.Conductors.Val == "awg" {
-		return "ASTM B258, stranded copper"
+		return "ASTM B258"
 	}
-	return "IEC 60228, stranded copper"
+	return "IEC 60228"
 }
 
 // sparePerRating is how many spare fuse-links of each rating are kept; common practice,

@@ -70,6 +70,8 @@ const (
 	plainRow = 6.0 // least height of a row that is only printed
 	padding  = 1.5 // kept free at the right of a cell
 	rowAir   = 2.5 // of a row beyond its lines
+	tightAir = 1.8 // the same in tables that are only read
+	tightRow = 5.8 // least height of their rows
 	rise     = 0.765
 )
 

@@ -18,6 +18,7 @@ type table struct {
 	cols []column
 	st   style
 	min  float64 // least height of a row that is only printed
+	air  float64 // of a row beyond its lines; rowAir if 0
 }
 
 // kinds of cells.
@@ -170,7 +171,11 @@ func (t *table) line(b *book, x float64, r row) block {
 		at += col.w
 		i += 1 + c.span
 	}
-	h := max(least, float64(n)*t.st.lead+rowAir)
+	air := t.air
+	if air == 0 {
+		air = rowAir
+	}
+	h := max(least, float64(n)*t.st.lead+air)
 	return block{h: h, marks: r.marks, topic: r.topic, draw: func(p *pad, y, h float64) {
 		first := y + (h-float64(n)*t.st.lead)/2 + rise*t.st.lead
 		if !r.bare {
