@@ -44,7 +44,7 @@ works. Nothing is written.`,
 				return nil
 			}
 			to := "to revision " + changes.To
-			if j.Released.Has(changes.To) {
+			if changes.To == changes.From {
 				to = "to the description as it is"
 			}
 			fmt.Fprintf(w, "%s  Changes from revision %s %s\n\n", j.Design.Site.Job.Number.Val, base.Revision, to)

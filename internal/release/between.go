@@ -32,9 +32,12 @@ func recordOf(d *design.Design) (*record, error) {
 func compareDesign(old *record, was *describe.Site, now *record, d *design.Design, schema *describe.Schema) *design.Changes {
 	values, scopes := changedValues(was, d.Site, schema)
 	nameLamps(values, scopes, now)
-	titles, strips := map[string]string{}, map[string]string{}
+	n := names{map[string]string{}, map[string]string{}, map[string]string{}}
 	for _, b := range d.Circuit.Boards {
-		titles[b.Name], strips[b.Name] = b.Title, b.Strip
+		n.titles[b.Name], n.strips[b.Name] = b.Title, b.Strip
 	}
-	return compareRecords(old, now, values, scopes, titles, strips)
+	for from, to := range renamings(was, d.Site) {
+		n.renamed[from] = to.Name.Val
+	}
+	return compareRecords(old, now, values, scopes, n)
 }

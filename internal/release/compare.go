@@ -11,8 +11,7 @@ import (
 type comparison struct {
 	old, now *record
 	scopes   []scope // of the changed values
-	titles   map[string]string
-	strips   map[string]string // of boards
+	names    names
 	homes    map[string]home
 	types    map[string][]string // lamp types by circuit, in either record
 	work     map[string][]design.WorkItem
@@ -25,11 +24,15 @@ type home struct {
 	lamp             string
 }
 
+// names is what records do not hold: titles and strips of boards by name, and the new
+// names of circuits by the old.
+type names struct{ titles, strips, renamed map[string]string }
+
 // compareRecords compares two records. values and scopes are what changed in the
-// description; titles and strips name the boards of the new record.
-func compareRecords(old, now *record, values []design.ValueChange, scopes []scope, titles, strips map[string]string) *design.Changes {
+// description.
+func compareRecords(old, now *record, values []design.ValueChange, scopes []scope, n names) *design.Changes {
 	c := &comparison{
-		old: old, now: now, scopes: scopes, titles: titles, strips: strips, homes: map[string]home{}, types: map[string][]string{},
+		old: old, now: now, scopes: scopes, names: n, homes: map[string]home{}, types: map[string][]string{},
 		work: map[string][]design.WorkItem{},
 		out:  &design.Changes{From: old.Job.Revision, To: now.Job.Revision, Values: values, Touched: map[string]bool{}, Rows: map[string]bool{}},
 	}
@@ -51,19 +54,28 @@ func compareRecords(old, now *record, values []design.ValueChange, scopes []scop
 	return c.out
 }
 
+// of returns the present name of a circuit of either record.
+func (n names) of(circuit string) string {
+	if now, ok := n.renamed[circuit]; ok {
+		return now
+	}
+	return circuit
+}
+
 // place notes where everything of a record belongs.
 func (c *comparison) place(r *record) {
 	stage, circuit := map[string]string{}, map[string]string{}
 	for _, p := range r.Parts {
-		stage[p.Designation], circuit[p.Designation] = p.Stage, p.Circuit
-		c.at(p.Designation, p.Circuit, p.Stage)
+		stage[p.Designation] = p.Stage
+		circuit[p.Designation] = c.names.of(p.Circuit)
+		c.at(p.Designation, circuit[p.Designation], p.Stage)
 	}
 	for _, l := range r.Luminaires {
 		h := c.homes[l.Designation]
 		h.lamp = l.Type
 		c.homes[l.Designation] = h
-		if !slices.Contains(c.types[l.Circuit], l.Type) {
-			c.types[l.Circuit] = append(c.types[l.Circuit], l.Type)
+		if in := c.names.of(l.Circuit); !slices.Contains(c.types[in], l.Type) {
+			c.types[in] = append(c.types[in], l.Type)
 		}
 	}
 	ends := func(label string, ends ...string) {
@@ -77,7 +89,7 @@ func (c *comparison) place(r *record) {
 	for _, w := range r.Conductors {
 		for _, label := range []string{w.Run, w.Number} {
 			if label != "" {
-				c.at(label, w.Circuit, "")
+				c.at(label, c.names.of(w.Circuit), "")
 				ends(label, w.From, w.To)
 			}
 		}
@@ -115,27 +127,30 @@ func (c *comparison) do(item design.WorkItem, label string) {
 	c.work[item.Tool] = append(c.work[item.Tool], item)
 }
 
-// causes returns the numbers of the changed values that can force work at a label:
-// those that act on its circuit, stage or lamp type, and those that act everywhere;
-// if there are none of these, all that act on more than paper.
+// causes returns the numbers of the changed values that can force work at a label. If
+// some act on its circuit, stage or lamp type, these and those that act everywhere can;
+// else all can that act on more than paper.
 func (c *comparison) causes(label string) []int {
 	h := c.homes[label]
 	var near, all, paper []int
+	direct := false
 	for i, s := range c.scopes {
 		switch {
 		case s.paper:
 			paper = append(paper, i+1)
 			continue
-		case s.circuit == "" && s.stage == "" && s.lamp == "",
-			s.circuit != "" && slices.Contains(h.circuits, s.circuit),
+		case s.circuit == "" && s.stage == "" && s.lamp == "":
+			near = append(near, i+1)
+		case s.circuit != "" && slices.Contains(h.circuits, s.circuit),
 			s.stage != "" && slices.Contains(h.stages, s.stage),
 			s.lamp != "" && (s.lamp == h.lamp || h.lamp == "" && c.uses(h.circuits, s.lamp)):
 			near = append(near, i+1)
+			direct = true
 		}
 		all = append(all, i+1)
 	}
 	switch {
-	case len(near) > 0:
+	case direct:
 		return near
 	case len(all) > 0:
 		return all

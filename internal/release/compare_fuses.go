@@ -34,9 +34,15 @@ func (c *comparison) fuses() {
 		}
 	})
 	for _, b := range boards {
-		if strip := c.strips[b]; strip != "" {
-			c.do(design.WorkItem{Tool: design.Relabel, Do: "New door copy: " + c.title(b), Was: "revision " + c.old.Job.Revision, Is: "revision " + c.now.Job.Revision}, strip)
+		strip := c.names.strips[b]
+		if strip == "" {
+			continue
 		}
+		item := design.WorkItem{Tool: design.Relabel, Do: "New door copy: " + c.title(b), Was: "revision " + c.old.Job.Revision}
+		if c.now.Job.Revision != c.old.Job.Revision {
+			item.Is = "revision " + c.now.Job.Revision
+		}
+		c.do(item, strip)
 	}
 }
 
@@ -56,13 +62,13 @@ func (f *recordFuse) body() string {
 // spot says where the fuse sits.
 func (c *comparison) spot(f *recordFuse) string {
 	if f.Board == "" {
-		return "Fuse of " + f.Feeds
+		return "Fuse, feeds " + f.Feeds
 	}
 	return fmt.Sprintf("%s, place %d", c.title(f.Board), f.Way)
 }
 
 func (c *comparison) title(board string) string {
-	if t := c.titles[board]; t != "" {
+	if t := c.names.titles[board]; t != "" {
 		return t
 	}
 	return capital(board)

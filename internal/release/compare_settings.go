@@ -24,7 +24,10 @@ func (c *comparison) settings() {
 			if o != nil {
 				was = o.Values[name].Text
 			}
-			if was != is || c.replaced(n.Designation) {
+			if c.replaced(n.Designation) {
+				was = "" // the new one comes with another, or none
+			}
+			if was != is {
 				c.do(design.WorkItem{Tool: design.Adjust, Do: "Set it: " + settingWords[name], Was: figureOf(was), Is: figureOf(is)}, n.Designation)
 			}
 		}

@@ -131,7 +131,7 @@ func load(a float64) string { return fmt.Sprintf("%.2f A", a) }
 // functions finds the circuits that are lit in other conditions than before.
 func (c *comparison) functions(again againFunc) {
 	var names []string
-	pairs(c.old.Function, c.now.Function, func(f *recordFunction) string { return f.Circuit }, func(o, n *recordFunction) {
+	pairs(c.old.Function, c.now.Function, func(f *recordFunction) string { return c.names.of(f.Circuit) }, func(o, n *recordFunction) {
 		if n == nil {
 			return
 		}

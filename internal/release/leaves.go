@@ -60,7 +60,7 @@ func leaves(site *describe.Site, schema *describe.Schema) []leaf {
 		f.thing("stages", s.Name, s.Kind, s.Fields, schema.Stages, title, scope{stage: s.Name.Val})
 	}
 	for _, l := range site.Luminaires {
-		f.thing("luminaires", l.Name, l.Kind, l.Fields, schema.Luminaires, capital(l.Name.Val)+" lights", scope{lamp: l.Name.Val})
+		f.thing("luminaires", l.Name, l.Kind, l.Fields, schema.Luminaires, "Light type "+l.Name.Val, scope{lamp: l.Name.Val})
 	}
 	for _, c := range site.Circuits {
 		f.circuit(c)

@@ -42,6 +42,9 @@ func WriteNotice(w io.Writer, c *design.Changes) {
 		fmt.Fprintln(w, "\n  What stays")
 	}
 	for _, s := range c.Stays {
+		if s.Of > 0 && s.Count == 0 {
+			continue
+		}
 		fmt.Fprintf(w, "    %s: %s\n", stayHead(s), s.Text)
 	}
 }

@@ -11,16 +11,10 @@ import (
 // in the new one: circuits follow their was:, luminaires are paired as for labels.
 func moves(old, now *describe.Site) map[string]string {
 	out := map[string]string{}
-	was := map[string]*describe.Circuit{}
-	for _, c := range old.Circuits {
-		was[c.Name.Val] = c
-	}
-	for _, c := range now.Circuits {
-		o := was[c.Name.Val]
-		if o == nil && c.Was.Given {
-			o = was[c.Was.Val]
-		}
-		if o == nil {
+	same := renamings(old, now)
+	for _, o := range old.Circuits {
+		c := same[o.Name.Val]
+		if c == nil {
 			continue
 		}
 		from, to := "circuits."+o.Name.Val, "circuits."+c.Name.Val
@@ -37,6 +31,25 @@ func moves(old, now *describe.Site) map[string]string {
 			if !paired[p.Path] {
 				out[from+".points."+p.Path] = to + ".points." + p.Path + " " // no path of now
 			}
+		}
+	}
+	return out
+}
+
+// renamings returns, by the names in the old description, the circuits that are the
+// same in the new one.
+func renamings(old, now *describe.Site) map[string]*describe.Circuit {
+	before := map[string]bool{}
+	for _, c := range old.Circuits {
+		before[c.Name.Val] = true
+	}
+	out := map[string]*describe.Circuit{}
+	for _, c := range now.Circuits {
+		switch {
+		case before[c.Name.Val]:
+			out[c.Name.Val] = c
+		case c.Was.Given && before[c.Was.Val]:
+			out[c.Was.Val] = c
 		}
 	}
 	return out

@@ -62,7 +62,7 @@ func TestChangedValues(t *testing.T) {
 		{"a circuit added", []string{"circuits:\n", "circuits:\n  - {name: Attic, board: main, points: [3 m small, 3 m big]}\n"},
 			[]string{"circuits.Attic | Circuit Attic |  | 2 lights on main | "}},
 		{"a luminaire type", []string{"power: 6 W", "power: 9 W"},
-			[]string{"luminaires.big.power | Big lights, power | 6 W | 9 W | "}},
+			[]string{"luminaires.big.power | Light type big, power | 6 W | 9 W | "}},
 		{"practice and duty", []string{"outage: 4 h}", "outage: 5 h, cable_ambient: 40 degC}\npractice: {lamp_drop: 6 %}"},
 			[]string{"practice.lamp_drop | Practice, drop to the farthest light, at most | 5 % | 6 % | ", "duty.outage | Outage that the lights last | 4 h | 5 h | ",
 				"duty.cable_ambient | Ambient of the cables | 30 °C | 40 degC | "}},
