@@ -67,7 +67,7 @@ func battery() *Kind {
 			pin, _ := describe.Get[quantity.WireSize](s.Fields, "cable")
 			w.Pinned = pin.Given
 
-			b.sketch(28, "carries the lights", "through an outage")
+			b.sketch(30, "carries the lights", "through an outage")
 			top := f.Pin("1")
 			if q != nil {
 				top = q.Pin("1")
