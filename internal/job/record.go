@@ -1,16 +1,23 @@
 package job
 
 import (
+	"fmt"
+
 	"gloamwright/internal/commission"
 	"gloamwright/internal/design"
 	"gloamwright/internal/release"
+	"gloamwright/layout/packet"
 )
 
 // Record writes the documents of a commissioning record.
-func Record(_ *design.Design, r *commission.Record) ([]release.File, error) {
+func Record(d *design.Design, r *commission.Record) ([]release.File, error) {
 	js, err := r.JSON()
 	if err != nil {
 		return nil, err
 	}
-	return []release.File{{Name: "record.json", Data: js}}, nil
+	pdf, err := packet.Record(d, r)
+	if err != nil {
+		return nil, fmt.Errorf("commissioning record: %w", err)
+	}
+	return []release.File{{Name: "record.pdf", Data: pdf}, {Name: "record.json", Data: js}}, nil
 }
