@@ -16,7 +16,7 @@ func TestLabelsEqualEnds(t *testing.T) {
 		p := built(t, d)
 		got := map[string]int{} // what is set in the type of labels
 		for _, r := range sheetsOf(p, keyLabels) {
-			for _, w := range textsOf(r) {
+			for _, w := range writtenOn(r) {
 				if w.Font.Face == ink.MonoBold || strings.HasPrefix(w.Text, "TP") && w.Font.Face == ink.Bold {
 					got[w.Text]++
 				}

@@ -6,8 +6,8 @@ import (
 	"gloamwright/layout/ink"
 )
 
-// textsOf lists the texts of a sheet in the order in which they were drawn.
-func textsOf(r *ink.Recorder) []ink.Written {
+// writtenOn lists the texts of a sheet in the order in which they were drawn.
+func writtenOn(r *ink.Recorder) []ink.Written {
 	var out []ink.Written
 	var walk func([]ink.Call)
 	walk = func(calls []ink.Call) {
@@ -39,7 +39,7 @@ func sheetsOf(p *Packet, key string) []*ink.Recorder {
 func textOf(p *Packet, key string) string {
 	var b strings.Builder
 	for _, r := range sheetsOf(p, key) {
-		for _, w := range textsOf(r) {
+		for _, w := range writtenOn(r) {
 			b.WriteString(w.Text)
 			b.WriteByte(' ')
 		}
@@ -51,7 +51,7 @@ func textOf(p *Packet, key string) string {
 func countOf(p *Packet, key string) map[string]int {
 	out := map[string]int{}
 	for _, r := range sheetsOf(p, key) {
-		for _, w := range textsOf(r) {
+		for _, w := range writtenOn(r) {
 			out[w.Text]++
 		}
 	}
