@@ -25,7 +25,7 @@ func Make(site *describe.Site, kept circuit.Labels) (*Design, error) {
 	for _, e := range f.Netlist.Elements {
 		f.Elements = append(f.Elements, facts.ElementValues{Element: e.ID, Params: n.Values(e.ID)})
 	}
-	m := &maker{site: site, plan: plan, f: f, net: n, solved: map[string]*network.Solution{}}
+	m := &maker{site: site, plan: plan, f: f, net: n, solved: map[string]*network.Solution{}, stuck: map[string][]network.Override{}}
 	if err := m.conditions(); err != nil {
 		return nil, err
 	}
@@ -61,6 +61,7 @@ type maker struct {
 	plan   *stage.Plan
 	f      *facts.Facts
 	net    *network.Network
-	solved map[string]*network.Solution // by condition key
-	envs   []network.Environment        // by condition
+	solved map[string]*network.Solution  // by condition key
+	stuck  map[string][]network.Override // what is held because it never comes to rest, by condition key
+	envs   []network.Environment         // by condition
 }

@@ -55,6 +55,11 @@ func (m *maker) conditions() error {
 			}
 		}
 		sol, err := m.net.Solve(m.environment(o), from)
+		var restless *network.ChatterError
+		if errors.As(err, &restless) {
+			m.hold(o, restless, from)
+			sol, err = m.net.Solve(m.environment(o), from)
+		}
 		if err != nil {
 			return m.explain(o, err)
 		}
@@ -73,6 +78,19 @@ func (m *maker) conditions() error {
 		m.f.Conditions = append(m.f.Conditions, m.condition(o, number))
 	}
 	return nil
+}
+
+// hold keeps what never comes to rest in a condition where it was before, so that the
+// condition has figures to show. Its finding is a stop.
+func (m *maker) hold(o operating, e *network.ChatterError, from network.State) {
+	rest := m.net.Rest()
+	for _, id := range e.Elements {
+		on, ok := from[id]
+		if !ok {
+			on = rest[id]
+		}
+		m.stuck[o.key] = append(m.stuck[o.key], network.Override{Element: id, Stuck: &on})
+	}
 }
 
 // applies leaves out the conditions that the job cannot be in.
@@ -112,6 +130,9 @@ func (m *maker) environment(o operating) network.Environment {
 			params = append(params, circuit.Param{Name: "charge_ohm", Value: float64(over) / float64(takes), Tol: floatSpread})
 		}
 		e = e.With(network.Override{Element: b.Designation, Params: params})
+	}
+	for _, h := range m.stuck[o.key] {
+		e = e.With(h)
 	}
 	return e
 }
@@ -165,11 +186,17 @@ func (m *maker) condition(o operating, number int) *facts.Condition {
 	env := m.environment(o)
 	c := &facts.Condition{
 		Key: o.key, Name: o.name, From: o.from, Dark: o.dark, Battery: o.battery, Shown: o.shown,
-		Lux: quantity.Lux(env.Lux), Settled: true, Residual: sol.Residual,
+		Lux: quantity.Lux(env.Lux), Settled: len(m.stuck[o.key]) == 0, Residual: sol.Residual,
 		MainsV: quantity.Volt(env.Mains * float64(m.mainsNominal())), Mains: env.Mains,
 		Charge: map[network.ChargeStage]string{network.NoCharge: facts.Off, network.Float: facts.Float, network.Boost: facts.Boost}[env.Charge],
 	}
+	for _, h := range m.stuck[o.key] {
+		c.Restless = append(c.Restless, h.Element)
+	}
 	for _, v := range env.Overrides {
+		if v.Params == nil {
+			continue
+		}
 		c.Values = append(c.Values, facts.ElementValues{Element: v.Element, Params: v.Params})
 	}
 	if o.shown {

@@ -1,6 +1,7 @@
 package design
 
 import (
+	"errors"
 	"fmt"
 
 	"gloamwright/internal/circuit"
@@ -34,6 +35,21 @@ func (m *maker) threshold(key, name, unit string, at float64, text string) {
 	m.f.Thresholds = append(m.f.Thresholds, &facts.Threshold{Key: key, Name: name, Value: at, Unit: unit, Text: text})
 }
 
+// sweep walks a condition through a range. Where something never comes to rest on the
+// way there is no threshold; that is recorded, and ok is false.
+func (m *maker) sweep(key, name, unit string, s network.Sweep, from network.State) (t network.Threshold, ok bool, err error) {
+	t, err = m.net.Threshold(s, from)
+	var restless *network.ChatterError
+	if errors.As(err, &restless) {
+		m.f.Thresholds = append(m.f.Thresholds, &facts.Threshold{Key: key, Name: name, Unit: unit, Restless: restless.Elements, Text: "it never comes to rest"})
+		return t, false, nil
+	}
+	if err != nil {
+		return t, false, fmt.Errorf("sweep for where %s: %w", name, err)
+	}
+	return t, true, nil
+}
+
 // Ends of the sweeps.
 const (
 	sweepMost  = 10000. // lx
@@ -49,8 +65,8 @@ func (m *maker) twilight() error {
 		return nil
 	}
 	coil := r.Part.Designation + ".coil"
-	sweep := func(from, to float64, state network.State) (network.Threshold, error) {
-		return m.net.Threshold(network.Sweep{
+	sweep := func(key, name string, from, to float64, state network.State) (network.Threshold, bool, error) {
+		return m.sweep(key, name, "lx", network.Sweep{
 			From: from, To: to, Geometric: true, Steps: sweepSteps, Watch: []string{coil},
 			Set: func(x float64) network.Environment {
 				e := m.environment(o)
@@ -59,24 +75,25 @@ func (m *maker) twilight() error {
 			},
 		}, state)
 	}
-	down, err := sweep(dayLux, sweepLeast, m.solved[o.key].State)
-	if err != nil {
-		return fmt.Errorf("sweep of the illuminance: %w", err)
+	const dark, light = "lights come on in an outage", "lights go off again"
+	down, ok, err := sweep("dark", dark, dayLux, sweepLeast, m.solved[o.key].State)
+	if err != nil || !ok {
+		return err
 	}
 	if !down.Found {
-		m.threshold("dark", "lights come on in an outage", "lx", 0, "they do not come on, however dark it gets")
+		m.threshold("dark", dark, "lx", 0, "they do not come on, however dark it gets")
 		return nil
 	}
-	m.threshold("dark", "lights come on in an outage", "lx", down.At, "")
-	up, err := sweep(down.At, sweepMost, down.After.State)
-	if err != nil {
-		return fmt.Errorf("sweep of the illuminance: %w", err)
+	m.threshold("dark", dark, "lx", down.At, "")
+	up, ok, err := sweep("light", light, down.At, sweepMost, down.After.State)
+	if err != nil || !ok {
+		return err
 	}
 	if !up.Found {
-		m.threshold("light", "lights go off again", "lx", 0, "they do not go off, however light it gets")
+		m.threshold("light", light, "lx", 0, "they do not go off, however light it gets")
 		return nil
 	}
-	m.threshold("light", "lights go off again", "lx", up.At, "")
+	m.threshold("light", light, "lx", up.At, "")
 	return nil
 }
 
@@ -102,9 +119,10 @@ func (m *maker) cutOffVolts() error {
 	read := func(s *network.Solution) (battery, sense float64) {
 		return s.Across(b.Pin("+").Net, b.Pin("-").Net), s.Across(q.Part.Pin("in").Net, q.Part.Pin("-").Net)
 	}
-	down, err := m.net.Threshold(network.Sweep{From: float64(m.plan.Full), To: float64(q.Opens) * 0.8, Steps: sweepSteps, Set: set, Watch: []string{id}}, m.solved[o.key].State)
-	if err != nil {
-		return fmt.Errorf("sweep of the battery: %w", err)
+	down, ok, err := m.sweep("opens", "cut-off opens", "V",
+		network.Sweep{From: float64(m.plan.Full), To: float64(q.Opens) * 0.8, Steps: sweepSteps, Set: set, Watch: []string{id}}, m.solved[o.key].State)
+	if err != nil || !ok {
+		return err
 	}
 	if !down.Found {
 		m.threshold("opens", "cut-off opens", "V", 0, "it does not open")
@@ -114,9 +132,10 @@ func (m *maker) cutOffVolts() error {
 	q.AtBattery = quantity.Volt(at)
 	m.threshold("opens-battery", "cut-off opens, read at the battery", "V", at, "")
 	m.threshold("opens-sense", "cut-off opens, read at its input", "V", sense, "")
-	up, err := m.net.Threshold(network.Sweep{From: down.At, To: float64(m.plan.Highest) * 1.1, Steps: sweepSteps, Set: set, Watch: []string{id}}, down.After.State)
-	if err != nil {
-		return fmt.Errorf("sweep of the battery: %w", err)
+	up, ok, err := m.sweep("recloses", "cut-off recloses", "V",
+		network.Sweep{From: down.At, To: float64(m.plan.Highest) * 1.1, Steps: sweepSteps, Set: set, Watch: []string{id}}, down.After.State)
+	if err != nil || !ok {
+		return err
 	}
 	if up.Found {
 		at, sense = read(up.Before)
@@ -137,7 +156,8 @@ func (m *maker) lowestMains() error {
 	if !m.solved[o.key].State[coil] {
 		return nil
 	}
-	down, err := m.net.Threshold(network.Sweep{
+	const mains = "relay lets go when the mains falls to"
+	down, ok, err := m.sweep("mains", mains, "V", network.Sweep{
 		From: 1, To: 0, Steps: sweepSteps, Watch: []string{coil},
 		Set: func(x float64) network.Environment {
 			e := m.environment(o)
@@ -145,11 +165,11 @@ func (m *maker) lowestMains() error {
 			return e
 		},
 	}, m.solved[o.key].State)
-	if err != nil {
-		return fmt.Errorf("sweep of the mains: %w", err)
+	if err != nil || !ok {
+		return err
 	}
 	if down.Found {
-		m.threshold("mains", "relay lets go when the mains falls to", "V", down.At*float64(m.mainsNominal()), "")
+		m.threshold("mains", mains, "V", down.At*float64(m.mainsNominal()), "")
 	}
 	m.threshold("pick-up", "coil picks up when hot at", "V", float64(r.PickUp), "")
 	return nil

@@ -56,6 +56,7 @@ type Condition struct {
 	BatteryA   quantity.Ampere // into the battery positive
 	Lit        []string        // circuit names
 	Settled    bool
+	Restless   []string // elements that never come to rest, where not settled
 	State      []State
 	Values     []ElementValues // parameters that stand in place of the netlist's here
 	Volts      []quantity.Volt // by net
@@ -299,6 +300,7 @@ type Threshold struct {
 	Unit      string
 	Low, High float64 // band
 	Text      string
+	Restless  []string // elements that never come to rest on the way there
 }
 
 // Fault is the circuit with one thing wrong.

@@ -18,20 +18,34 @@ var settled = &Check{
 			if c.Settled {
 				continue
 			}
-			var parts []string
-			for _, s := range c.State {
-				parts = append(parts, s.Element)
-			}
-			of := ""
-			if len(parts) > 0 {
-				of = ": " + names(parts) + " switch to and fro"
-			}
 			report(Finding{
 				Severity: Stop, Subject: c.Key,
-				Message: fmt.Sprintf("Condition %d, %s: does not come to rest%s", c.Number, c.Name, of),
+				Message: fmt.Sprintf("Condition %d, %s: does not come to rest%s", c.Number, c.Name, toAndFro(c.Restless)),
 				Remedy:  fmt.Sprintf("More distance between the switching voltages than the step when the load switches; the battery stands at %s here.", say(c.BatteryV)),
 				Value:   0, Limit: 1, Unit: "settled", Over: true,
 			})
 		}
+		for _, t := range f.Thresholds {
+			if len(t.Restless) == 0 {
+				continue
+			}
+			report(Finding{
+				Severity: Stop, Subject: t.Restless[0],
+				Message: fmt.Sprintf("Where %s: nothing comes to rest%s", t.Name, toAndFro(t.Restless)),
+				Remedy:  fmt.Sprintf("More distance between the switching voltages than the step when the load of %s switches.", say(f.Totals.LoadA)),
+				Value:   0, Limit: 1, Unit: "settled", Over: true,
+			})
+		}
 	},
+}
+
+// toAndFro says which parts switch by turns.
+func toAndFro(elements []string) string {
+	switch len(elements) {
+	case 0:
+		return ""
+	case 1:
+		return ": " + elements[0] + " switches to and fro"
+	}
+	return ": " + names(elements) + " switch to and fro"
 }

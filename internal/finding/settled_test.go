@@ -11,9 +11,12 @@ func TestSettled(t *testing.T) {
 		{"all settle", nil, nil},
 		{"one does not", func(f *facts.Facts) {
 			c := f.Conditions[1]
-			c.Settled, c.State = false, []facts.State{{Element: "-K1"}, {Element: "-Q1"}}
+			c.Settled, c.Restless = false, []string{"-K1", "-Q1"}
 		}, []string{
 			"stop c2: Condition 2, Mains off, dark: does not come to rest: -K1 and -Q1 switch to and fro",
 		}},
+		{"a sweep does not", func(f *facts.Facts) {
+			f.Thresholds = append(f.Thresholds, &facts.Threshold{Key: "opens", Name: "cut-off opens", Restless: []string{"-Q1"}})
+		}, []string{"stop -Q1: Where cut-off opens: nothing comes to rest: -Q1 switches to and fro"}},
 	})
 }
