@@ -225,7 +225,7 @@ func (m *maker) refill(bat endurance.Battery, o endurance.Outage, at quantity.Ce
 	if err != nil {
 		return m.unknownHours(err)
 	}
-	ch := endurance.Charger{Current: c.Current, Boost: c.Boost, Float: c.Float}
+	ch := endurance.Charger{Current: c.Current, Boost: c.Boost, Float: c.Float, Ohm: c.Impedance}
 	if c.Compensated {
 		shift := c.PerKelvin * quantity.Volt(at-m.plan.Class.ChargeAt)
 		ch.Boost += shift

@@ -14,6 +14,9 @@ type Charger struct {
 	Float   quantity.Volt
 	// Standing is what the site takes from the charger meanwhile.
 	Standing quantity.Ampere
+	// Ohm is the charger's output impedance, by which its current falls as the battery
+	// fills; 0: it holds its voltage.
+	Ohm quantity.Ohm
 }
 
 // Refill is a recharge followed to its end.
@@ -67,10 +70,10 @@ func (m *model) recharge(out float64, c Charger, limit float64, whole bool) (Ref
 		if boosting {
 			set = float64(c.Boost)
 		}
-		v, i := m.taken(owed, set, most)
+		v, i := m.taken(owed, set, most, float64(c.Ohm))
 		if boosting && i <= boostTail*m.capacity && v >= set-loadAgrees {
 			boosting = false
-			v, i = m.taken(owed, float64(c.Float), most)
+			v, i = m.taken(owed, float64(c.Float), most, float64(c.Ohm))
 		}
 		full := owed/factor <= (1-fullFrom)*m.full
 		if full && !r.Full.Happens {
@@ -92,14 +95,15 @@ func (m *model) recharge(out float64, c Charger, limit float64, whole bool) (Ref
 }
 
 // taken returns terminal voltage and current of a battery to which owed ampere-hours
-// must still be returned, on a charger set to a voltage and limited to a current.
-func (m *model) taken(owed, set, most float64) (v, i float64) {
+// must still be returned, on a charger set to a voltage and limited to a current, with
+// an output impedance.
+func (m *model) taken(owed, set, most, ohm float64) (v, i float64) {
 	s := 1 - owed/float64(m.class.ChargeFactor)/m.full
 	e := m.rest(s)
 	if owed <= 0 {
 		return math.Max(set, e), 0
 	}
 	r := m.ohm + ampereHour*m.lift/owed
-	i = math.Min(most, math.Max(0, (set-e)/r))
+	i = math.Min(most, math.Max(0, (set-e)/(r+ohm)))
 	return math.Min(e+r*i, math.Max(set, e)), i
 }

@@ -56,6 +56,7 @@ func Expand(site *describe.Site) *circuit.Circuit {
 		k.Expand(b, s)
 		b.cur.Sketch = b.sk
 	}
+	b.expandSingles()
 	b.joinRails()
 	return b.C
 }
@@ -115,13 +116,22 @@ func (b *Build) Place(key, letter, name string) *circuit.Place {
 // stage's name and local.
 func (b *Build) Part(local string, kind circuit.Kind, desc string, pins ...string) *circuit.Part {
 	p := &circuit.Part{
-		Key: b.cur.Name + "/" + local, Kind: kind, Stage: b.cur.Name, Place: b.cur.Place,
+		Key: b.key(local), Kind: kind, Stage: b.cur.Name, Place: b.cur.Place,
 		Description: desc, At: b.cur.At,
 	}
 	addPins(p, pins)
 	b.C.Parts = append(b.C.Parts, p)
 	b.cur.Parts = append(b.cur.Parts, p)
 	return p
+}
+
+// key is the stable identity of something of the current stage. All blocks of single
+// parts share one name, so that a part keeps its label when it moves to another block.
+func (b *Build) key(local string) string {
+	if strings.HasPrefix(b.cur.Name, partsStage) {
+		return partsStage + "/" + local
+	}
+	return b.cur.Name + "/" + local
 }
 
 func addPins(p *circuit.Part, pins []string) {
@@ -164,7 +174,7 @@ func (b *Build) Wire(from, to *circuit.Pin, positive bool, length quantity.Metre
 
 // Cable adds a cable; its cores are added by Core.
 func (b *Build) Cable(local string, from, to *circuit.Place, length quantity.Metre) *circuit.Cable {
-	w := &circuit.Cable{Key: b.cur.Name + "/" + local, From: from, To: to, Length: length, At: b.cur.At}
+	w := &circuit.Cable{Key: b.key(local), From: from, To: to, Length: length, At: b.cur.At}
 	b.C.Cables = append(b.C.Cables, w)
 	return w
 }
@@ -188,7 +198,7 @@ func (b *Build) Terminal(strip, local string) *circuit.Part {
 
 // TestPoint adds a test point of the current stage.
 func (b *Build) TestPoint(local, shows string, red *circuit.Pin) *circuit.TestPoint {
-	t := &circuit.TestPoint{Key: b.cur.Name + "/tp/" + local, Shows: shows, Red: red, Stage: b.cur.Name}
+	t := &circuit.TestPoint{Key: b.key("tp/" + local), Shows: shows, Red: red, Stage: b.cur.Name}
 	b.C.TestPoints = append(b.C.TestPoints, t)
 	return t
 }
@@ -227,8 +237,9 @@ func (b *Build) nameRails(list []*describe.Stage) {
 // used reports whether anything takes from the source port of that key.
 func (b *Build) used(key string) bool { return b.takers(nil, key) > 0 }
 
-// takers counts what takes from the source port of that key: stages, single parts and
-// test points that name it, and the stages that its own stage s feeds, if s is given.
+// takers counts what takes from the source port of that key: stages that name it, and
+// the stages that its own stage s feeds, if s is given. Single parts and test points
+// count double, for they are drawn at rails only.
 func (b *Build) takers(s *describe.Stage, key string) int {
 	n := 0
 	for _, o := range b.Site.Stages {
@@ -244,12 +255,12 @@ func (b *Build) takers(s *describe.Stage, key string) int {
 	}
 	for _, p := range b.Site.Parts {
 		if slices.ContainsFunc(p.Pins, func(x describe.PinNet) bool { return x.Net.Val == key }) {
-			n++
+			n += 2
 		}
 	}
 	for _, t := range b.Site.TestPoints {
 		if t.At_.Val == key {
-			n++
+			n += 2
 		}
 	}
 	return n

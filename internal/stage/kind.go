@@ -48,6 +48,7 @@ type LuminaireKind struct {
 var (
 	kindTable      []*Kind
 	luminaireTable []*LuminaireKind
+	partTable      []*PartKind
 )
 
 func init() {
@@ -56,6 +57,13 @@ func init() {
 		shuntRegulator(), testSwitch(), photocell(), changeoverRelay(), indicator(), suppressor(), distributionBoard(),
 	}
 	luminaireTable = []*LuminaireKind{ledDriver(), ledString(), filament(), ballast(), resistive()}
+	partTable = []*PartKind{
+		partResistor(), partCapacitor(), partDiode(), partSchottky(), partZener(), partLED(),
+		partFuse(), partSwitch(), partLamp(), partRelay(), partContact(), partTerminal(),
+	}
+	for _, k := range kindTable {
+		k.Nets = []string{minusNet}
+	}
 }
 
 // Kinds returns the stage kinds by reference order.
@@ -72,6 +80,9 @@ func Schema() *describe.Schema {
 	}
 	for _, k := range luminaireTable {
 		s.Luminaires = append(s.Luminaires, k.Kind)
+	}
+	for _, k := range partTable {
+		s.Parts = append(s.Parts, k.Kind)
 	}
 	return s
 }

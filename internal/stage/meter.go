@@ -1,8 +1,11 @@
 package stage
 
 import (
+	"gloamwright/internal/catalogue"
 	"gloamwright/internal/circuit"
 	"gloamwright/internal/describe"
+	"gloamwright/internal/quantity"
+	"gloamwright/internal/sizing"
 )
 
 // meter shows the volts of a rail, or the amperes through a shunt in it.
@@ -27,15 +30,15 @@ func meter() *Kind {
 			if must[string](s, "reads") == "amps" {
 				sh := b.Part("shunt", circuit.Shunt, "Shunt", "1", "2", "3", "4")
 				b.Element(sh, "", "resistor", "1", "1", "2", "2")
+				b.Element(sh, "sense1", "resistor", "1", "1", "2", "3")
+				b.Element(sh, "sense2", "resistor", "1", "2", "2", "4")
 				p := b.Part("meter", circuit.Ammeter, "Ammeter", "1", "2")
 				b.Element(p, "", "meter", "1", "1", "2", "2")
-				b.Join(sh.Pin("1"), sh.Pin("3"))
-				b.Join(sh.Pin("2"), sh.Pin("4"))
 				b.Join(sh.Pin("3"), p.Pin("1"))
 				b.Join(sh.Pin("4"), p.Pin("2"))
 				b.sketch(16, "shows the", "load")
 				in := b.lead(circuit.OpIn, "in", sh.Pin("1"), from, 4, upEnd, 4, 17, 6, 17)
-				b.symbol("shunt", sh, 8, 17, "H", "A")
+				b.symbol("shunt", sh, 8, 17, "HU", "A", "1", "2", "2", "1", "3", "4", "4", "3")
 				out := b.lead(circuit.OpUp, "out", sh.Pin("2"), b.outRail(s, "out"), 10, 17, 12, 17, 12, upEnd)
 				b.line(nil, 7, 19, 7, 21, 4, 21, 4, 25, 6, 25)
 				b.line(nil, 9, 19, 9, 21, 12, 21, 12, 25, 10, 25)
@@ -57,5 +60,69 @@ func meter() *Kind {
 			b.number(up, 6, 9)
 			b.number(down, 6, 42)
 		},
+		Steps: []Step{{Trunk, sizeMeter}},
 	}
 }
+
+// Figures of meters (common practice, no source): the tolerance of what a meter takes
+// itself, the resistance of an ammeter's input and of a shunt's sense tags, and how far
+// a shunt's resistance may be off.
+const (
+	ammeterOhm = 1e6
+	senseOhm   = 1e-4
+	shuntTol   = 0.005
+)
+
+// sizeMeter chooses the range of an ammeter and its shunt, or the fuse of a voltmeter.
+func sizeMeter(p *Plan, s *describe.Stage) {
+	m := p.part(s, "meter")
+	if must[string](s, "reads") == "volts" {
+		own := must[quantity.Ampere](s, "own")
+		p.controlFuse(p.part(s, "fuse"), "meter")
+		full, _ := catalogue.NextRating(meterVolts, p.Highest)
+		set(m, "range", full.String(), float64(full), "V", true, false)
+		ohm := float64(ammeterOhm)
+		if own > 0 {
+			ohm = float64(p.Site.Duty.Nominal.Val) / float64(own)
+		}
+		params(m, "", circuit.Param{Name: "ohm", Value: ohm, Tol: ownTol})
+		for _, o := range p.Site.Stages {
+			for _, f := range kindOf(o.Kind.Val).Fields {
+				if f.Type != describe.StageRef {
+					continue
+				}
+				if r, ok := describe.Get[describe.Ref](o.Fields, f.Name); ok && r.Val.Stage == s.Name.Val {
+					p.block(m.Designation, o.Name.Pos, "", &sizing.UnknownError{What: "what feeds " + o.Name.Val, Source: s.Name.Val + " is a voltmeter and passes nothing on", Ask: "name the stage that the voltmeter itself takes from"})
+				}
+			}
+		}
+		return
+	}
+	load := max(p.Light+p.Standing, p.F.Charger.Current)
+	full, given := describe.Get[quantity.Ampere](s.Fields, "range")
+	if !given {
+		full.Val = p.nextRating(m, "range", catalogue.MeterRanges, load)
+	}
+	sh := p.part(s, "shunt")
+	ohm := quantity.Ohm(float64(catalogue.ShuntVolt) / float64(full.Val))
+	set(sh, "rating", full.Val.String(), float64(full.Val), "A", true, given)
+	set(sh, "drop", catalogue.ShuntVolt.String(), float64(catalogue.ShuntVolt), "V", true, false)
+	set(m, "range", full.Val.String(), float64(full.Val), "A", true, given)
+	p.work(sh.Designation, "shunt", sizing.Working{
+		Formula: "R = 60 mV ÷ I_range", Value: float64(ohm), Unit: "Ω", Source: "IEC 60051-2 (from memory)",
+		Substituted: "0.06 V ÷ " + sizing.Digits(float64(full.Val)) + " A",
+	})
+	params(sh, "", circuit.Param{Name: "ohm", Value: float64(ohm), Tol: shuntTol})
+	params(sh, "sense1", circuit.Param{Name: "ohm", Value: senseOhm})
+	params(sh, "sense2", circuit.Param{Name: "ohm", Value: senseOhm})
+	params(m, "", circuit.Param{Name: "ohm", Value: ammeterOhm})
+	p.TrunkOhm += ohm
+	if load > full.Val {
+		p.block(m.Designation, m.At, "", &sizing.BlockedError{
+			Limit: sizing.LimitLoad, Subject: "the current of the ammeter", Value: float64(load), Bound: float64(full.Val), Unit: "A", Frees: "take a range of at least " + load.String(),
+		})
+	}
+}
+
+// meterVolts are full scales of voltmeters: IEC 60051-2, from memory.
+var meterVolts = []quantity.Volt{6, 10, 15, 25, 40, 60, 100}

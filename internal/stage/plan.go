@@ -93,6 +93,7 @@ func Size(site *describe.Site, c *circuit.Circuit, f *facts.Facts) *Plan {
 			}
 		}
 	}
+	p.singles()
 	p.wires()
 	p.protect()
 	return p
@@ -139,8 +140,11 @@ func (p *Plan) voltages() {
 			p.Boost = v.Val
 		}
 	}
+	if p.floatOnly() {
+		p.Boost = p.Float
+	}
 	p.Highest = p.Boost
-	if compensatedSite(p.Site) {
+	if compensatedSite(p.Site) || p.floatOnly() { // a trimmer is set for the season
 		cold := p.Site.Duty.BatteryRoom.Val.Low
 		p.Highest = max(p.Highest, p.Boost+n*p.Class.Slope*quantity.Volt(cold-p.Class.ChargeAt))
 	}
@@ -206,6 +210,18 @@ func (p *Plan) usedType(name string) bool {
 		}
 	}
 	return false
+}
+
+// floatOnly reports whether only linear chargers fill the battery, which know no boost.
+func (p *Plan) floatOnly() bool {
+	linear := false
+	for _, s := range p.Site.Stages {
+		linear = linear || s.Kind.Val == "linear-charger"
+		if s.Kind.Val == "charger" {
+			return false
+		}
+	}
+	return linear
 }
 
 func compensatedSite(site *describe.Site) bool {
@@ -375,7 +391,7 @@ func (p *Plan) chooseFuse(part *circuit.Part, class *catalogue.FuseClass, feeds 
 	}
 	if in.LoadFactor == 1 && least > 0 {
 		w.Formula = "I_n ≥ 1.6 × largest fuse behind it, next standard rating"
-		w.Substituted = fmt.Sprintf("1.6 × %v = %v → %v", behind, least, r)
+		w.Substituted = fmt.Sprintf("1.6 × %s A = %s A → %s A", sizing.Digits(float64(behind)), sizing.Digits(float64(least)), sizing.Digits(float64(r)))
 		w.Source = "discrimination ratio of IEC 60269-1 (from memory)"
 	}
 	p.work(part.Designation, "fuse rating", w, feeds+": design current")

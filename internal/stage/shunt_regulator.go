@@ -1,8 +1,13 @@
 package stage
 
 import (
+	"strings"
+
+	"gloamwright/internal/catalogue"
 	"gloamwright/internal/circuit"
 	"gloamwright/internal/describe"
+	"gloamwright/internal/quantity"
+	"gloamwright/internal/sizing"
 )
 
 // shuntRegulator returns the kind: a Zener feed for a relay coil.
@@ -38,13 +43,93 @@ func shuntRegulator() *Kind {
 			}
 			b.symbol("resistor", r, 8, 16, "V", "L")
 			b.line(nil, 8, 18, 8, 30)
-			b.add(circuit.SketchItem{Op: circuit.OpWire, Name: "out", Pts: points([]int{8, coilLevel1, 22, coilLevel1})})
-			b.add(circuit.SketchItem{Op: circuit.OpRight, Name: "out", Y: coilLevel1})
-			b.outs[s.Name.Val+".out"] = z.Pin("K")
+			b.output(s, "out", z.Pin("K"), coilLevel1, 8, 19)
 			b.symbol("zener", z, 8, 32, "U", "L")
 			down := b.lead(circuit.OpDown, "minus", z.Pin("A"), Minus, 8, 34, 8, downEnd)
 			b.point(b.TestPoint("out", "Steadied coil feed", z.Pin("K")), 11, coilLevel1, "N")
 			b.number(down, 8, 42)
 		},
+		Steps: []Step{{Storage, sizeShunt}},
 	}
+}
+
+// sizeShunt chooses the Zener and the dropper between its two bounds: enough current
+// at the lowest supply for the coil that draws most, no more heat in the Zener than it
+// bears with the coil unplugged at the highest.
+func sizeShunt(p *Plan, s *describe.Stage) {
+	r, z := p.part(s, "dropper"), p.part(s, "zener")
+	volts, given := describe.Get[quantity.Volt](s.Fields, "volts")
+	if !given {
+		volts.Val = p.Site.Duty.Nominal.Val
+	}
+	from := must[describe.Ref](s, "from")
+	low, high, _ := p.supplyRange(from.Stage)
+	nominal := p.Site.Duty.Nominal.Val
+	load := p.drawn(s.Name.Val)
+	coil := openCoil
+	if load > 0 {
+		coil = quantity.Ohm(float64(nominal) / float64(load))
+	}
+	pinned, fixed := describe.Get[quantity.Ohm](s.Fields, "dropper")
+	in := sizing.CoilFeedInput{
+		Low: low, High: high, Coil: coil, CoilTol: relayClass(nominal).CoilTol, Ambient: p.Site.Duty.CableAmbient.Val, Pinned: pinned.Val,
+	}
+	f, zener, ws, err := coilFeedWith(in, volts.Val)
+	if err != nil {
+		p.block(r.Designation, r.At, "", err)
+	}
+	for _, w := range ws {
+		p.work(r.Designation, "", w)
+	}
+	if f.Dropper <= 0 { // nothing fits: the smaller bound lets the circuit be solved
+		f.Dropper = quantity.Ohm(catalogue.E24.AtLeast(max(1, float64(f.Least))))
+		f.SupplyAt = quantity.Ampere(float64(high-zener.Volt) / float64(f.Dropper))
+	}
+	set(r, "resistance", f.Dropper.String(), float64(f.Dropper), "Ω", true, fixed)
+	params(r, "", circuit.Param{Name: "ohm", Value: float64(f.Dropper), Tol: carbonTol})
+	p.watts(r, quantity.Watt(float64(f.SupplyAt)*float64(f.SupplyAt)*float64(f.Dropper)))
+	set(z, "voltage", zener.Volt.String(), float64(zener.Volt), "V", true, given)
+	set(z, "power", zener.Power.String(), float64(zener.Power), "W", true, false)
+	set(z, "heat", quantity.Format(f.Heat, 2)+" at most", float64(f.Heat), "W", false, false)
+	z.Note = zener.Type + " or like it: " + zener.Volt.String() + ", " + zener.Power.String()
+	params(z, "",
+		circuit.Param{Name: "vz", Value: float64(zener.Volt), Tol: float64(zener.Tol)}, circuit.Param{Name: "iz", Value: float64(zener.Test)},
+		circuit.Param{Name: "rz", Value: float64(zener.Impedance)},
+	)
+	switch p.stageOf(from.Stage).Kind.Val {
+	case "transformer-supply", "regulated-supply":
+		p.aux[from.Stage] += f.SupplyAt
+	default: // it hangs on the battery's rail and draws all the time
+		p.Standing += quantity.Ampere(max(0, float64(nominal-zener.Volt)/float64(f.Dropper)))
+	}
+}
+
+// openCoil stands for no coil at all.
+const openCoil quantity.Ohm = 1e9
+
+// coilFeedWith tries the 1 W Zener of that voltage and, where it gets too hot, the 5 W
+// one.
+func coilFeedWith(in sizing.CoilFeedInput, v quantity.Volt) (f sizing.CoilFeed, z catalogue.Zener, ws []sizing.Working, err error) {
+	small, ok := catalogue.ZenerOf(v)
+	large, okLarge := catalogue.Zener5WOf(v)
+	if !ok || !okLarge {
+		var have []string
+		near := catalogue.Zeners1W[0]
+		for _, x := range catalogue.Zeners1W {
+			have = append(have, x.Volt.String())
+			if x.Volt <= v {
+				near = x
+			}
+		}
+		in.Zener = near
+		f, ws, _ = sizing.CoilDropper(in)
+		return f, near, ws, &sizing.UnknownError{What: "a Zener diode of " + v.String(), Source: "the list has " + strings.Join(have, ", "), Ask: "give volts: one of these"}
+	}
+	for _, z = range []catalogue.Zener{small, large} {
+		in.Zener = z
+		if f, ws, err = sizing.CoilDropper(in); err == nil {
+			return f, z, ws, nil
+		}
+	}
+	return f, z, ws, err
 }

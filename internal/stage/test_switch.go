@@ -1,8 +1,11 @@
 package stage
 
 import (
+	"gloamwright/internal/catalogue"
 	"gloamwright/internal/circuit"
 	"gloamwright/internal/describe"
+	"gloamwright/internal/quantity"
+	"gloamwright/internal/sizing"
 )
 
 // testSwitch returns the kind: a push-button in a coil feed: pressed, it simulates an outage.
@@ -26,12 +29,32 @@ func testSwitch() *Kind {
 			key, _ := b.ref(s, "from")
 			b.coilFeed(b.feedOf(key), p.Pin("1"), "feed", coilLevel1, 0, coilLevel1, 6, coilLevel1)
 			b.symbol("push_break", p, 8, coilLevel1, "H", "A")
-			b.add(circuit.SketchItem{Op: circuit.OpWire, Name: "out", Pts: points([]int{10, coilLevel1, 16, coilLevel1})})
-			b.add(circuit.SketchItem{Op: circuit.OpRight, Name: "out", Y: coilLevel1})
-			b.outs[s.Name.Val+".out"] = p.Pin("2")
+			b.output(s, "out", p.Pin("2"), coilLevel1, 10, 13)
 		},
+		Steps: []Step{{Supplying, sizeTestSwitch}},
 	}
 }
+
+// buttonCurrent is what the contact of a small push-button breaks at the voltages of
+// this program, with an inductive load (common practice, no source).
+const buttonCurrent quantity.Ampere = 1
+
+// sizeTestSwitch holds the button against the coils that it opens.
+func sizeTestSwitch(p *Plan, s *describe.Stage) {
+	k := p.part(s, "button")
+	set(k, "rating", buttonCurrent.String()+" DC", float64(buttonCurrent), "A", true, false)
+	k.Note = "break contact, returns by itself"
+	params(k, "", circuit.Param{Name: "ohm", Value: buttonOhm, Tol: contactTol}, circuit.Param{Name: "closed", Value: 1})
+	if load := p.drawn(s.Name.Val); load > buttonCurrent {
+		p.block(k.Designation, k.At, catalogue.CommonPractice.String(), &sizing.BlockedError{
+			Limit: sizing.LimitContact, Subject: "the current of the button", Value: float64(load), Bound: float64(buttonCurrent), Unit: "A",
+			Frees: "take a button with a contact for that direct current",
+		})
+	}
+}
+
+// buttonOhm is the resistance of a closed contact (common practice, no source).
+const buttonOhm = 0.02
 
 // coilFeed joins a feed to a pin of the current stage through the left edge at level
 // y: a rail through a terminal of the cabinet, a signal by a wire of its own.

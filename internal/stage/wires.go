@@ -142,10 +142,21 @@ func seriesPin(p *circuit.Pin) bool {
 func (p *Plan) chargeWire(w *circuit.Conductor) bool {
 	for _, pin := range []*circuit.Pin{w.From, w.To} {
 		if s := pin.Part.Stage; s != "" && (pin.Part.Kind == circuit.ChargerUnit || pin.Part.Kind == circuit.Fuse || pin.Part.Kind == circuit.Schottky || pin.Part.Kind == circuit.Preset) {
-			if k := p.stageOf(s).Kind.Val; k == "charger" || k == "linear-charger" {
+			if k := p.kindName(s); k == "charger" || k == "linear-charger" {
 				return !strings.HasPrefix(pin.Name, "θ")
 			}
 		}
 	}
 	return false
+}
+
+// kindName returns the kind of the stage of that name; empty for the block of single
+// parts.
+func (p *Plan) kindName(stage string) string {
+	for _, s := range p.Site.Stages {
+		if s.Name.Val == stage {
+			return s.Kind.Val
+		}
+	}
+	return ""
 }
