@@ -48,9 +48,9 @@ func (b *book) isolatorName() string {
 }
 
 func (b *book) changedValues(c *design.Changes) []block {
-	moved := "no designation moved"
+	moved := "no label changes"
 	if n := len(c.New.All()) + len(c.Gone.All()); n > 0 {
-		moved = counted(len(c.New.All()), "designation") + " new, " + fmt.Sprint(len(c.Gone.All())) + " gone"
+		moved = counted(len(c.New.All()), "label") + " to print, " + fmt.Sprint(len(c.Gone.All())) + " to take off"
 	}
 	t := &table{st: tableText, min: plainRow, cols: []column{{head: "", w: 8}, {head: "Value", w: 74}, {head: "Was", w: 18, a: ink.End}, {head: "Is", w: 20, a: ink.End}, {head: "Why", w: 60, indent: 4}}}
 	out := []block{b.head(0, b.pg.width, "What changed", counted(len(c.Values), "value")+" in the description; "+moved), t.head(0)}
@@ -75,7 +75,8 @@ func (b *book) changeWork(c *design.Changes) []block {
 	}
 	t := &table{st: tableText, min: plainRow, cols: []column{{head: "Done", w: 10, a: ink.Middle}, {head: "What", w: 23, indent: 2, pad: 0.6}, {head: "Do this", w: 60},
 		{head: "Was", w: 24, a: ink.End}, {head: "Is", w: 26, a: ink.End}, {head: "From", w: 11, a: ink.End}, {head: "Sheet", w: 12, a: ink.End}, {head: "Initials", w: 14, a: ink.Middle}}}
-	out := []block{b.head(0, b.pg.width, "What to do", `in this order; "from" names the change that forces it`), t.head(0)}
+	head := t.head(0)
+	out := []block{b.head(0, b.pg.width, "What to do", `in this order; "from" names the change that forces it`), head}
 	first := true
 	for _, tool := range design.Tools {
 		var rows []block
@@ -90,8 +91,8 @@ func (b *book) changeWork(c *design.Changes) []block {
 		if len(rows) == 0 {
 			continue
 		}
-		out = append(out, b.band(upper(tool), counted(things, toolThing(tool)), groupGap(first)))
-		out = append(out, together(rows)...)
+		group := append([]block{b.band(upper(tool), counted(things, toolThing(tool)), groupGap(first))}, together(rows)...)
+		out = append(out, under(head, group)...)
 		first = false
 	}
 	return out

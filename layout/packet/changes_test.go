@@ -76,6 +76,26 @@ func TestChangeNotice(t *testing.T) {
 	}
 }
 
+// A table of work that runs on has its column heads on each sheet.
+func TestNoticeRepeatsHeads(t *testing.T) {
+	p := built(t, revised(t, "along: 28 m", "along: 42 m", "power: 6 W", "power: 8 W", "revision: A", "revision: B"))
+	list := sheetsOf(p, keyChange)
+	if len(list) < 2 {
+		t.Fatalf("the notice has %d sheet: nothing runs on", len(list))
+	}
+	for i, r := range list {
+		texts := map[string]bool{}
+		for _, w := range writtenOn(r) {
+			texts[w.Text] = true
+		}
+		for _, tool := range design.Tools {
+			if texts[upper(tool)] && !(texts["Done"] && texts["Initials"]) {
+				t.Errorf("sheet %d of the notice has %q without column heads", i+1, upper(tool))
+			}
+		}
+	}
+}
+
 // A first revision has no change notice, and no sheet speaks of one.
 func TestNoNoticeOnFirstRevision(t *testing.T) {
 	p := built(t, example(t, "bracken-reach"))

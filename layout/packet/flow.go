@@ -14,6 +14,9 @@ type block struct {
 	next bool    // stays on one sheet with the block after it
 	fill bool    // takes what is left of the sheet, up to most
 	most float64
+	// above is drawn over the block where a sheet goes on with it: the column heads of
+	// its table.
+	above *block
 	// opens starts a new sheet with a head of its own.
 	opens *opening
 	topic string   // what the block is about, for the sheet's title
@@ -103,6 +106,12 @@ func (s *section) paginate(pg page) []*sheetPlan {
 		at = 0
 	}
 	put := func(b block) {
+		if len(cur.blocks) == 0 && b.above != nil && len(out) > 1 {
+			head := *b.above
+			head.marks = nil
+			cur.blocks, at = append(cur.blocks, head), head.h
+			b.gap = 0
+		}
 		if len(cur.blocks) > 0 {
 			at += b.gap
 		}
@@ -124,6 +133,9 @@ func (s *section) paginate(pg page) []*sheetPlan {
 		whole := stacked(unit)
 		if len(cur.blocks) > 0 && at+unit[0].gap+whole > room+slack {
 			open(nil)
+		}
+		if len(cur.blocks) == 0 && unit[0].above != nil && len(out) > 1 {
+			whole += unit[0].above.h
 		}
 		if whole <= room+slack {
 			for _, b := range unit {
@@ -182,6 +194,14 @@ func (s *sheetPlan) drawBlocks(p *pad) {
 		b.draw(p, y, h)
 		y += h
 	}
+}
+
+// under gives rows the head that they repeat where a sheet goes on with them.
+func under(head block, rows []block) []block {
+	for i := range rows {
+		rows[i].above = &head
+	}
+	return rows
 }
 
 // together makes a run of rows follow the rules of a group: up to six stay together,

@@ -71,8 +71,9 @@ func (p *pad) drawHead(s *sheetPlan) {
 	p.fit(pg.l, pg.t+headPurpose, purpose, purposeText, pg.width, ink.Start)
 	if note != "" {
 		y := pg.t + headPurpose + purposeText.lead + 0.4
-		p.write(pg.l, y, s.s.label, tableText.as(ink.Bold), ink.Start)
-		p.fit(pg.l+15, y, note, tableText, pg.width-15, ink.Start)
+		w := p.write(pg.l, y, s.s.label, tableText.as(ink.Bold), ink.Start)
+		indent := max(15, w+3)
+		p.fit(pg.l+indent, y, note, tableText, pg.width-indent, ink.Start)
 	}
 }
 

@@ -34,7 +34,7 @@ func (b *book) labelBlocks(l labelStrip) []block {
 	out := []block{head}
 	for from := 0; from < l.count; from += per {
 		n := min(per, l.count-from)
-		r := block{h: l.h, topic: l.title, draw: func(p *pad, y, _ float64) { p.labelRow(l, from, n, y) }}
+		r := block{h: l.h, topic: l.title, above: &head, draw: func(p *pad, y, _ float64) { p.labelRow(l, from, n, y) }}
 		if from > 0 {
 			r.gap = l.apart
 		}

@@ -11,10 +11,12 @@ import (
 const (
 	recordHalf  = 87.5
 	recordGap   = 5
-	recordRow   = 6.2
-	recordHead  = 7
-	gaugeStart  = 58
-	gaugeWide   = 17
+	recordRow   = 5.8
+	recordHead  = 7.0
+	figureAt    = 45.5 // right end of the reading
+	lowAt       = 54.6 // right end of the lowest value
+	gaugeStart  = 60
+	gaugeWide   = 14
 	gaugeMissed = 3.2 // from the end that a reading missed to its mark
 )
 
@@ -60,7 +62,10 @@ func (b *book) recordPair(pair [][]commission.Judged, gap bool) []block {
 			}
 		}})
 	}
-	return append([]block{head}, together(list)...)
+	for i := range list[:len(list)-1] {
+		list[i].next = true // a condition is not split while it fits a sheet
+	}
+	return append([]block{head}, under(head, list)...)
 }
 
 func (p *pad) recordHead(dx, y float64, g []commission.Judged) {
@@ -84,13 +89,16 @@ func (p *pad) recordReading(dx, y, h float64, j commission.Judged) {
 	x, base, mid := p.pg.l+dx, y+h/2+1.15, y+h/2
 	small := noteText
 	p.write(x+1, base, j.Point, tableText.as(ink.Medium), ink.Start)
-	p.fit(x+12.5, base, j.Shows, tableText, 25, ink.Start)
-	figureEnd := x + 47.5
+	figureEnd, room := x+figureAt, 24.0
+	if j.Verdict == commission.UnitSlip || j.Verdict == commission.Swapped || j.Verdict == commission.Unreadable {
+		room = 19 // the reading stands as it was written
+	}
+	p.fit(x+12.5, base, j.Shows, tableText, room, ink.Start)
 	switch {
 	case j.Verdict == commission.Missing:
 		p.write(x+recordHalf-1.5, base, "not measured", small.as(ink.Bold), ink.End)
 	case j.Verdict != commission.Inside && j.Verdict != commission.Outside:
-		p.fit(figureEnd, base, j.Text, tableText.as(ink.Bold), 11, ink.End)
+		p.fit(figureEnd+4, base, j.Text, small.as(ink.Bold), 18, ink.End)
 		p.write(x+recordHalf-1.5, base, verdictWords[j.Verdict], small.as(ink.Bold), ink.End)
 	default:
 		p.write(figureEnd, base, fmt.Sprintf("%.1f", j.Measured), tableText.as(ink.Bold), ink.End)
@@ -108,7 +116,7 @@ func (p *pad) recordBand(x, mid, base float64, j commission.Judged) {
 		p.write(x+recordHalf-1.5, base, "dead, as it must be", noteText, ink.End)
 		return
 	}
-	p.write(x+gaugeStart-4.2, base, fmt.Sprintf("%.1f", j.Low), noteText, ink.End)
+	p.write(x+lowAt, base, fmt.Sprintf("%.1f", j.Low), noteText, ink.End)
 	p.write(x+recordHalf-1.5, base, fmt.Sprintf("%.1f", j.High), noteText, ink.End)
 	p.bandGauge(x+gaugeStart, mid, gaugeWide, j.Low, j.Typical, j.High, j.Measured)
 }
