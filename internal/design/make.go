@@ -1,6 +1,8 @@
 package design
 
 import (
+	"errors"
+
 	"gloamwright/internal/circuit"
 	"gloamwright/internal/describe"
 	"gloamwright/internal/facts"
@@ -42,17 +44,31 @@ func Make(site *describe.Site, kept circuit.Labels) (*Design, error) {
 	}
 	m.dropWorkings()
 	m.relay()
-	if err := m.thresholds(); err != nil {
+	if err := m.besideFaults(func() error {
+		if err := m.thresholds(); err != nil {
+			return err
+		}
+		return m.endurance()
+	}); err != nil {
 		return nil, err
 	}
-	if err := m.endurance(); err != nil {
-		return nil, err
-	}
-	if err := m.faults(); err != nil {
-		return nil, err
-	}
-
 	return &Design{Facts: f, Findings: finding.Judge(f), Labels: labels}, nil
+}
+
+// besideFaults runs rest while the fault study, the longest part of a design, runs on
+// a network of its own. Both read what was found so far; the study writes the faults
+// only, rest everything else.
+func (m *maker) besideFaults(rest func() error) error {
+	n, err := network.New(m.f.Netlist)
+	if err != nil {
+		return err
+	}
+	study := *m
+	study.net = n
+	done := make(chan error, 1)
+	go func() { done <- study.faults() }()
+	err = rest()
+	return errors.Join(err, <-done)
 }
 
 // maker is a design in the making.
