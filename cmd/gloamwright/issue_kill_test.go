@@ -73,7 +73,7 @@ func TestIssueKilled(t *testing.T) {
 	writes := time.Since(begin)
 	want := files(t, dir)
 
-	const rounds = 24
+	const rounds = 12
 	random := rand.New(rand.NewPCG(7, 7))
 	before, after, between := 0, 0, 0
 	for range rounds {

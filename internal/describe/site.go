@@ -3,7 +3,11 @@
 // written, and reports all mistakes of a file in one pass.
 package describe
 
-import "gloamwright/internal/quantity"
+import (
+	"maps"
+
+	"gloamwright/internal/quantity"
+)
 
 // Span is a stretch of one line of a description. Line and Col count from 1, Col
 // and Len count characters. The zero Span means "no place": the value is a default.
@@ -238,6 +242,9 @@ func Get[T any](f Fields, name string) (v At[T], ok bool) {
 	}
 	return At[T]{Val: a.Val.(T), Pos: a.Pos, Given: a.Given}, true
 }
+
+// Clone returns a copy that Set does not share.
+func (f Fields) Clone() Fields { return Fields{vals: maps.Clone(f.vals)} }
 
 // Set stores a value; the decoder and tests use it.
 func (f *Fields) Set(name string, v At[any]) {

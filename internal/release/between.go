@@ -17,7 +17,7 @@ func Between(was, is *design.Design, schema *describe.Schema) (*design.Changes, 
 	if err != nil {
 		return nil, err
 	}
-	return compareDesign(old, was.Site, now, is, schema), nil
+	return compareDesign(old, was.Site, now, is, schema).notice(), nil
 }
 
 func recordOf(d *design.Design) (*record, error) {
@@ -29,7 +29,7 @@ func recordOf(d *design.Design) (*record, error) {
 }
 
 // compareDesign compares a record with its description and a design.
-func compareDesign(old *record, was *describe.Site, now *record, d *design.Design, schema *describe.Schema) *design.Changes {
+func compareDesign(old *record, was *describe.Site, now *record, d *design.Design, schema *describe.Schema) *comparison {
 	values, scopes := changedValues(was, d.Site, schema)
 	nameLamps(values, scopes, now)
 	n := names{map[string]string{}, map[string]string{}, map[string]string{}}

@@ -28,9 +28,9 @@ type home struct {
 // names of circuits by the old.
 type names struct{ titles, strips, renamed map[string]string }
 
-// compareRecords compares two records. values and scopes are what changed in the
-// description.
-func compareRecords(old, now *record, values []design.ValueChange, scopes []scope, n names) *design.Changes {
+// compareRecords finds what two records differ in. values and scopes are what changed in
+// the description.
+func compareRecords(old, now *record, values []design.ValueChange, scopes []scope, n names) *comparison {
 	c := &comparison{
 		old: old, now: now, scopes: scopes, names: n, homes: map[string]home{}, types: map[string][]string{},
 		work: map[string][]design.WorkItem{},
@@ -47,6 +47,11 @@ func compareRecords(old, now *record, values []design.ValueChange, scopes []scop
 	c.readings()
 	c.tests()
 	c.findings()
+	return c
+}
+
+// notice returns what was found, work put together where it differs only in labels.
+func (c *comparison) notice() *design.Changes {
 	for _, tool := range design.Tools {
 		c.out.Work = append(c.out.Work, grouped(c.work[tool])...)
 	}
@@ -121,9 +126,6 @@ func (c *comparison) do(item design.WorkItem, label string) {
 		}
 	}
 	item.Causes = c.causes(label)
-	if len(item.Causes) == 1 {
-		item.From = item.Causes[0]
-	}
 	c.work[item.Tool] = append(c.work[item.Tool], item)
 }
 
@@ -176,6 +178,9 @@ func grouped(items []design.WorkItem) []design.WorkItem {
 		}
 	}
 	for k := range out {
+		if len(out[k].Causes) == 1 {
+			out[k].From = out[k].Causes[0]
+		}
 		slices.SortFunc(out[k].Labels, compareLabels)
 		if out[k].What == "" {
 			out[k].What = together(out[k].Labels)

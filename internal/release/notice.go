@@ -29,7 +29,9 @@ func (p *Project) Notice(base *Issued, d *design.Design, schema *describe.Schema
 	if err != nil {
 		return nil, err
 	}
-	c := compareDesign(old, was, now, d, schema)
+	found := compareDesign(old, was, now, d, schema)
+	found.attribute(p.Register, was, d)
+	c := found.notice()
 	c.Revisions, err = p.revisions(c, d)
 	return c, err
 }

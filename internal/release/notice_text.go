@@ -92,9 +92,9 @@ func workLine(i design.WorkItem) string {
 	return text
 }
 
-// from names the changed values that can force an item, where there are several.
+// from names the changed values that force an item, unless it is all of them.
 func from(i design.WorkItem, c *design.Changes) string {
-	if len(i.Causes) == 0 || len(c.Values) < 2 {
+	if len(i.Causes) == 0 || len(i.Causes) == len(c.Values) {
 		return ""
 	}
 	return " (from " + strings.Trim(strings.ReplaceAll(fmt.Sprint(i.Causes), " ", ", "), "[]") + ")"
