@@ -144,7 +144,7 @@ func ordered(site *describe.Site) []*describe.Stage {
 			}
 			for _, other := range site.Stages {
 				for _, f := range kindOf(other.Kind.Val).Fields {
-					if f.Type != describe.StageRef || !f.Feeds || kindOf(s.Kind.Val).Class != ControlClass {
+					if f.Type != describe.StageRef || !f.Feeds || kindOf(s.Kind.Val).Class != ControlClass && f.Port != "charge" {
 						continue
 					}
 					if r, ok := describe.Get[describe.Ref](other.Fields, f.Name); ok && r.Val.Stage == s.Name.Val {

@@ -188,7 +188,7 @@ func (p *Plan) watts(r *circuit.Part, heat quantity.Watt) {
 		})
 		rating = most
 	}
-	set(r, "power", rating.String(), float64(rating), "W", rating > smallResistor, false)
+	set(r, "power", sizing.Digits(float64(rating))+" W", float64(rating), "W", rating > smallResistor, false)
 }
 
 // resistorReserve is how many times its heat a resistor is rated for, smallResistor

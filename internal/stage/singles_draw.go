@@ -21,6 +21,7 @@ const (
 	blockWidth  = 110 // at most, unless one group is wider
 	firstRow    = 6   // where the first band of parts begins
 	lastRow     = 50  // where the last must end
+	headingRoom = 3   // left of the first column, for the heading
 	halfSymbol  = 2
 	stubLength  = 8 // of the lead to a test point on a rail
 )
@@ -110,7 +111,7 @@ func (g *group) last(n *net) *run {
 
 func (g *group) width() int {
 	if len(g.runs) == 0 {
-		return (len(g.nets[0].ends) + len(g.nets[0].points)) * (labelColumn + probeRoom)
+		return len(g.nets[0].ends)*labelColumn + len(g.nets[0].points)*(labelColumn+probeRoom)
 	}
 	w := 0
 	for _, c := range g.columns() {
@@ -143,7 +144,7 @@ func (x *singles) draw(groups []*group) {
 	for i, list := range blocks {
 		x.b.cur = x.b.C.Stages[len(x.b.C.Stages)-len(blocks)+i]
 		x.b.sketch(0)
-		left := 0
+		left := headingRoom
 		for _, g := range list {
 			left = x.group(g, left)
 		}
@@ -313,7 +314,7 @@ func (x *singles) alone(n *net, left int) int {
 	for _, s := range n.ends {
 		s.part = lead(s.d.Name.Val, left+labelColumn, 0)
 		s.part.Key, s.part.At = "parts/"+s.d.Name.Val, s.d.Pos
-		left += labelColumn + probeRoom
+		left += labelColumn
 	}
 	for _, t := range n.points {
 		term := lead("tp/"+t.Name.Val, left+labelColumn, stubLength)
@@ -331,6 +332,7 @@ func (x *singles) alone(n *net, left int) int {
 // tap is where a run meets a bus.
 type tap struct {
 	pin  *circuit.Pin
+	part *single
 	x, y int // of the pin's side of the line
 }
 
@@ -382,8 +384,12 @@ func (d *groupDrawing) run(r *run) {
 				pts = append(pts, col, fromY)
 			}
 			b.line(w, append(pts, d.down(s, col, topY)...)...)
-			if topY-fromY >= 3 {
-				b.number(w, float64(col), float64(fromY)+2.6)
+			below := 2.6
+			if fromX != col { // clear of the contact's marks
+				below = 4.2
+			}
+			if float64(topY-fromY) > below {
+				d.number(w, s, col, float64(fromY)+below)
 			}
 			for _, t := range above.points {
 				b.point(b.TestPoint(t.Name.Val, capital(t.Name.Val), upper), float64(col), float64((fromY+topY)/2), "E")
@@ -397,6 +403,19 @@ func (d *groupDrawing) run(r *run) {
 	}
 	d.finish(r, from, fromX, fromY, col, y)
 }
+
+// number prints a wire's number left of the line at x; right of it over a coil, whose
+// mark stands left.
+func (d *groupDrawing) number(w *circuit.Conductor, s *single, x int, y float64) {
+	at := float64(x)
+	if s.kind.Name == "relay" {
+		at += coilNumber
+	}
+	d.x.b.number(w, at, y)
+}
+
+// coilNumber moves a number to the right of its line.
+const coilNumber = 3.4
 
 // down is the way from above to a part's upper pin: straight, or round the corner into
 // a contact.
@@ -416,7 +435,7 @@ func (d *groupDrawing) begin(r *run, pin *circuit.Pin, col, y int, s *single) {
 		way[i], way[i+1] = way[i+1], way[i]
 	}
 	if r.top.free() {
-		d.taps[r.top] = append(d.taps[r.top], tap{pin, col, y})
+		d.taps[r.top] = append(d.taps[r.top], tap{pin, s, col, y})
 		if len(way) > 2 {
 			b.line(nil, way...)
 		}
@@ -439,7 +458,7 @@ func (d *groupDrawing) finish(r *run, pin *circuit.Pin, x, y, col, slotEnd int) 
 	local := "part/" + s.d.Name.Val + "/" + pin.Name
 	switch {
 	case r.bottom.free():
-		d.taps[r.bottom] = append(d.taps[r.bottom], tap{pin, col, y})
+		d.taps[r.bottom] = append(d.taps[r.bottom], tap{pin, s, col, y})
 		if len(way) > 2 {
 			b.line(nil, way...)
 		}
@@ -508,7 +527,7 @@ func (d *groupDrawing) bus(n *net) {
 		if t.y < y {
 			at = float64(y) - 0.6
 		}
-		b.number(w, float64(t.x), at)
+		d.number(w, t.part, t.x, at)
 	}
 	if len(taps) == 0 {
 		return

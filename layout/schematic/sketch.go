@@ -10,7 +10,8 @@ import (
 
 const (
 	labelGap  = 0.6 // from a symbol's body to its label
-	labelRoom = 8.0 // width that stacked ratings are packed into
+	labelRoom = 6.0 // width that stacked ratings are packed into
+	blockRoom = 8.0 // the same, under a block
 )
 
 // symbol draws a part's symbol with its designation and ratings.
@@ -40,8 +41,12 @@ func (k *sketcher) symbol(it *circuit.SketchItem) {
 	switch {
 	case it.Turn == "B" && it.Label == "A" || it.Turn == "B" && it.Label == "B":
 		o.add(textAt(x-h.left, yy-h.top-0.7, it.Part.Designation, nameStyle, ink.Start))
+		a, tx := ink.Start, x-h.left
+		if it.Symbol == "regulator3" { // its lead comes down in the middle
+			a, tx = ink.End, x-labelGap
+		}
 		for i, s := range lines[1:] {
-			o.add(textAt(x-h.left, yy+h.bottom+1.7+linePitch*float64(i), s, valueStyle, ink.Start))
+			o.add(textAt(tx, yy+h.bottom+1.7+linePitch*float64(i), s, valueStyle, a))
 		}
 	case it.Label == "L" || it.Label == "R":
 		a, tx := ink.End, x-h.left-labelGap
@@ -102,7 +107,7 @@ func (k *sketcher) block(it *circuit.SketchItem) {
 	a, c := k.at(it.X, it.Y), k.at(it.X2, it.Y2)
 	o.add(box(normalPen, a.X, a.Y, c.X, c.Y))
 	o.add(textAt(a.X, a.Y-0.7, it.Part.Designation, nameStyle, ink.Start))
-	for i, s := range valueLines(it.Part, labelRoom) {
+	for i, s := range valueLines(it.Part, blockRoom) {
 		o.add(textAt((a.X+c.X)/2+1, c.Y+2.2+linePitch*float64(i), s, valueStyle, ink.Start))
 	}
 }
@@ -131,7 +136,7 @@ func (k *sketcher) converter(it *circuit.SketchItem) {
 	k.sc.symbols = append(k.sc.symbols, &symbol{sym: s, at: p, turn: symbols.V, part: it.Part, obj: o})
 	x, y := float64(p.X)-3, float64(p.Y)
 	o.add(textAt(x, y-it.Y2-0.7, it.Part.Designation, nameStyle, ink.Start))
-	for i, s := range valueLines(it.Part, labelRoom) {
+	for i, s := range valueLines(it.Part, blockRoom) {
 		o.add(textAt(x, y+it.Y2+1.7+linePitch*float64(i), s, valueStyle, ink.Start))
 	}
 }
@@ -141,11 +146,11 @@ func (s *scene) pin(p *circuit.Part, name string, at node) {
 	o := s.part(p, "")
 	for _, y := range s.symbols {
 		if y.obj == o && y.fixed != nil {
-			y.fixed = append(y.fixed, pinAt{at, p, name})
+			y.fixed = append(y.fixed, pinAt{at, p, name, ""})
 			return
 		}
 	}
-	s.symbols = append(s.symbols, &symbol{part: p, obj: o, fixed: []pinAt{{at, p, name}}})
+	s.symbols = append(s.symbols, &symbol{part: p, obj: o, fixed: []pinAt{{at, p, name, ""}}})
 }
 
 // partName is a part's name in data attributes.
