@@ -183,9 +183,9 @@ func (b *book) findings() []block {
 			c = beside(b.card(&d.Findings[i], 0, half), b.card(&d.Findings[i+1], half+between, half))
 			i++
 		}
-		c.gap = 1.8
+		c.gap = 1.4
 		if len(out) == 1 {
-			c.h, c.draw = c.h+1.6, lowered(c.draw, 1.6)
+			c.h, c.draw = c.h+1.4, lowered(c.draw, 1.4)
 		}
 		out = append(out, c)
 	}
@@ -239,9 +239,9 @@ func (b *book) card(f *finding.Finding, left, width float64) block {
 	if narrow {
 		textHigh += code.lead
 	}
-	h := max(textHigh+3.6, 9.5)
+	h := max(textHigh+2.8, 9)
 	if gauge {
-		h = max(h, 11.5)
+		h = max(h, 11)
 	}
 	return block{h: h, draw: func(p *pad, y, h float64) {
 		x := p.pg.l + left

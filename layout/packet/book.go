@@ -37,6 +37,7 @@ const (
 type book struct {
 	d          *design.Design
 	drawings   []*schematic.Sheet
+	recordings map[*schematic.Sheet]*ink.Recorder
 	pg, sidePg page
 	refs       *refs
 	cuts       []string
@@ -49,7 +50,7 @@ type book struct {
 }
 
 func newBook(d *design.Design, drawings []*schematic.Sheet) *book {
-	b := &book{d: d, drawings: drawings, refs: newRefs()}
+	b := &book{d: d, drawings: drawings, refs: newRefs(), recordings: map[*schematic.Sheet]*ink.Recorder{}}
 	b.pg, b.sidePg = pages(d.Site.Practice.Paper.Val)
 	return b
 }

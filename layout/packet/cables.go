@@ -6,7 +6,8 @@ import (
 	"gloamwright/internal/circuit"
 )
 
-// cables is the list of cables from place to place, one row each.
+// cables is the list of cables from place to place, one row each. Here the names of
+// places stand in full.
 func (b *book) cables() *section {
 	if len(b.d.Circuit.Cables) == 0 {
 		return nil
@@ -30,7 +31,7 @@ func (b *book) cables() *section {
 		for _, c := range list {
 			from, to := b.cableEnds(c)
 			rows = append(rows, t.line(b, 0, row{changed: b.touched(c.Designation), marks: []string{"cable " + c.Designation}, cells: []cell{
-				txt(bold(c.Designation)), txt(fmt.Sprintf("%d × %v", len(c.Cores), c.Size)), upTo(txt(from), 2), upTo(txt(to), 2),
+				txt(bold(c.Designation)), txt(fmt.Sprintf("%d × %v", len(c.Cores), c.Size)), txt(from), txt(to),
 				txt(wireLength(float64(c.Length))), writeIn(), tickBox(), tickBox(), tickBox()}}))
 		}
 		s.blocks = append(s.blocks, together(rows)...)

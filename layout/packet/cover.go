@@ -33,7 +33,26 @@ func (b *book) cover() *section {
 	s.blocks = append(s.blocks, b.contents()...)
 	s.blocks = append(s.blocks, b.revisions()...)
 	s.blocks = append(s.blocks, b.signOff()...)
+	s.tighten(b.pg)
 	return s
+}
+
+// tighten takes the gaps between the blocks of a single sheet as narrow as it must to
+// keep them on it.
+func (s *section) tighten(pg page) {
+	over := stacked(s.blocks) - (pg.end() - pg.top())
+	gaps := 0.0
+	for _, x := range s.blocks[1:] {
+		gaps += x.gap
+	}
+	if over <= 0 || gaps == 0 {
+		return
+	}
+	const least = 0.35 // of a gap
+	share := max(least, 1-over/gaps)
+	for i := range s.blocks {
+		s.blocks[i].gap *= share
+	}
 }
 
 // coverHead is the head of the cover, with the title block in words.
@@ -53,10 +72,28 @@ func (p *pad) coverHead() {
 			break
 		}
 	}
-	p.fit(pg.l, pg.t+22, job.Title.Val, title, pg.width, ink.Start)
-	p.fit(pg.l, pg.t+30.3, job.Site.Val, coverPlace, coverSun-13-pg.l-4, ink.Start)
+	if spans(job.Title.Val, title).width() <= pg.width {
+		p.write(pg.l, pg.t+22, job.Title.Val, title, ink.Start)
+	} else { // two lines
+		title.pt = 16
+		lines, cut := cutLines(job.Title.Val, title, pg.width, 2)
+		if cut {
+			p.b.noteCut(job.Title.Val)
+		}
+		p.lines(pg.l, pg.t+15.8, lines, 7)
+	}
+	room := coverSun - 13 - pg.l - 4
+	site, cut := cutLines(job.Site.Val, coverPlace, room, 2)
+	if cut {
+		p.b.noteCut(job.Site.Val)
+	}
+	p.lines(pg.l, pg.t+30.3, site, coverPlace.lead)
 	if job.Client.Val != "" {
-		p.fit(pg.l, pg.t+37, "for "+job.Client.Val, coverClient, coverSun-13-pg.l-4, ink.Start)
+		y := pg.t + 37
+		if len(site) > 1 {
+			y = pg.t + 41.2
+		}
+		p.fit(pg.l, y, "for "+job.Client.Val, coverClient, room, ink.Start)
 	}
 	if p.b.status() == notForConstruction {
 		p.halfDisc(coverSun, coverRules-2, 13)

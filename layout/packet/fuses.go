@@ -281,7 +281,7 @@ func (b *book) systemFuse(f *facts.Fuse) picture {
 func (b *book) fuseTable() []block {
 	t := &table{st: tableText, min: plainRow, cols: []column{{head: "Place", w: 16}, {head: "Fuse", w: 14}, {head: "Rating A", w: 13, a: endAnchor},
 		{head: "Wire carries A", w: 17, a: endAnchor}, {head: "Wire mm²", w: 12, a: endAnchor}, {head: "Fault here A", w: 16, a: endAnchor},
-		{head: "Feeds", w: 40, indent: 3}, {head: "Load A, low to high", w: 22, a: midAnchor}, {head: "Measured A", w: 20, a: midAnchor}, {head: "Spare", w: 10, a: midAnchor}}}
+		{head: "Feeds", w: 37, indent: 3}, {head: "Load A, low to high", w: 25, a: midAnchor}, {head: "Measured A", w: 20, a: midAnchor}, {head: "Spare", w: 10, a: midAnchor}}}
 	if b.d.Site.Practice.Conductors.Val == "awg" {
 		t.cols[4].head = "Wire AWG"
 	}
@@ -440,6 +440,8 @@ func (p *pad) doorCopy(x, y, w, h float64, hd holder) {
 	if w < 100 {
 		warn = fmt.Sprintf("Live with the mains off: DC %v.", p.b.d.Site.Duty.Nominal.Val)
 	}
-	p.fit(x+3, y+h-2, warn, noteText, w-18, ink.Start)
+	st := noteText
+	st.pt = 8
+	p.fit(x+3, y+h-2, warn, st, w-17, ink.Start)
 	p.write(x+w-3, y+h-2, "cut out", remarkText, ink.End)
 }

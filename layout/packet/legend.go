@@ -3,7 +3,6 @@ package packet
 import (
 	"gloamwright/internal/finding"
 	"gloamwright/layout/ink"
-	"gloamwright/layout/schematic"
 	"gloamwright/symbols"
 	"gloamwright/templates"
 )
@@ -109,7 +108,7 @@ func (b *book) symbolLegend() []block {
 	var used []*symbols.Symbol
 	seen := map[string]bool{}
 	for _, s := range b.drawings {
-		for _, id := range symbolIDs(s) {
+		for _, id := range symbolIDs(b.recorded(s)) {
 			if !seen[id] {
 				seen[id] = true
 				if y := symbols.ByID(id); y != nil {
@@ -132,13 +131,13 @@ func (b *book) symbolLegend() []block {
 				x := p.pg.l + float64(k)*each
 				box := u.Bounds(symbols.H)
 				at := symbols.Place{Turn: symbols.H, Scale: scale}
-				fit := min(1, 24/(box.W*symbols.M*scale), (high-3)/(box.H*symbols.M*scale))
+				fit := min(1, 20/(box.W*symbols.M*scale), (high-3)/(box.H*symbols.M*scale))
 				at.Scale *= fit
 				m := symbols.M * at.Scale
-				at.At = ink.Point{X: x + 13 - (box.X+box.W/2)*m, Y: y + h/2 - (box.Y+box.H/2)*m}
+				at.At = ink.Point{X: x + 11 - (box.X+box.W/2)*m, Y: y + h/2 - (box.Y+box.H/2)*m}
 				u.Draw(p.c, at, ink.Pen{Width: 0.3, Color: ink.Black}, "")
-				lines := wrap(upper(u.Name), tableText, each-30)
-				p.lines(x+28, y+(h-float64(len(lines))*tableText.lead)/2+rise*tableText.lead, lines, tableText.lead)
+				lines := wrap(upper(u.Name), tableText, each-26)
+				p.lines(x+25, y+(h-float64(len(lines))*tableText.lead)/2+rise*tableText.lead, lines, tableText.lead)
 			}
 			p.rule(p.pg.l, y+h, p.pg.width, hairline, ink.Rule)
 		}})
@@ -147,8 +146,7 @@ func (b *book) symbolLegend() []block {
 }
 
 // symbolIDs lists the symbols of a drawing in the order in which they are drawn.
-func symbolIDs(s *schematic.Sheet) []string {
-	r, _ := symbolsOf(s)
+func symbolIDs(r *ink.Recorder) []string {
 	var out []string
 	var walk func(calls []ink.Call)
 	walk = func(calls []ink.Call) {

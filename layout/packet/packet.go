@@ -28,6 +28,8 @@ type Packet struct {
 
 	recorders []*ink.Recorder
 	plans     []*sheetPlan
+	refs      *refs
+	contents  []contentLine
 }
 
 // Make draws the build packet of d with its schematic sheets as a PDF document. It
@@ -120,7 +122,7 @@ func (b *book) draw(plans []*sheetPlan) (*Packet, error) {
 		Keywords: strings.Join([]string{b.status(), job.Number.Val, "revision " + job.Revision.Val}, ", "),
 		Date:     date,
 	})
-	out := &Packet{plans: plans}
+	out := &Packet{plans: plans, refs: b.refs, contents: b.keys}
 	b.findSymbols(plans)
 	for i, s := range plans {
 		w, h := b.size(s.s)
@@ -145,7 +147,7 @@ func (b *book) draw(plans []*sheetPlan) (*Packet, error) {
 		if i+1 < len(plans) {
 			next = plans[i+1]
 		}
-		if s.s.ownHead == nil {
+		if s.s.ownHead == nil || s.k > 1 {
 			p.drawHead(s)
 		} else {
 			s.s.ownHead(p)

@@ -39,6 +39,7 @@ func (p *pad) text(x, y float64, l line, a ink.Anchor) float64 {
 		x -= w
 	}
 	for _, s := range l {
+		x += s.pre
 		sw := ink.Width(s.text, s.font)
 		p.c.Text(ink.Point{X: x, Y: y + s.drop}, s.text, s.font, ink.Start, s.color, false)
 		if s.ref != "" {

@@ -85,7 +85,9 @@ func (b *book) parts() *section {
 			}
 			r := row{cells: []cell{txt(fmt.Sprint(pos)), fat(it.qty), txt(it.unit), txt(name), txt(it.what), txt(it.must), tickBox(), fitted}}
 			for _, n := range it.names {
-				r.marks = append(r.marks, rowMark(n))
+				if !strings.Contains(n, ":") { // terminals stand on their plans
+					r.marks = append(r.marks, rowMark(n))
+				}
 				r.changed = r.changed || b.touched(n)
 			}
 			rows = append(rows, t.line(b, 0, r))

@@ -25,6 +25,7 @@ type span struct {
 	color ink.Color
 	ref   string
 	drop  float64 // mm below the baseline, of an index
+	pre   float64 // mm kept free before it
 }
 
 // line is one set line.
@@ -33,7 +34,7 @@ type line []span
 func (l line) width() float64 {
 	w := 0.0
 	for _, s := range l {
-		w += ink.Width(s.text, s.font)
+		w += s.pre + ink.Width(s.text, s.font)
 	}
 	return w
 }
@@ -137,7 +138,7 @@ func fallBack(s span) line {
 func (l line) add(s span) line {
 	if n := len(l); n > 0 {
 		p := &l[n-1]
-		if p.font == s.font && p.color == s.color && p.ref == s.ref && p.drop == s.drop && s.ref == "" {
+		if p.font == s.font && p.color == s.color && p.ref == s.ref && p.drop == s.drop && s.pre == 0 && s.ref == "" {
 			p.text += s.text
 			return l
 		}

@@ -28,10 +28,19 @@ type symbolAt struct {
 	box  ink.Rect
 }
 
-// symbolsOf finds the symbols of parts and test points on a drawing.
-func symbolsOf(s *schematic.Sheet) (*ink.Recorder, []symbolAt) {
+// recorded draws a schematic sheet to read its symbols back; each is drawn once.
+func (b *book) recorded(s *schematic.Sheet) *ink.Recorder {
+	if r := b.recordings[s]; r != nil {
+		return r
+	}
 	r := ink.NewRecorder(s.Paper.W, s.Paper.H, s.Supplement)
 	s.Draw(r, schematic.Options{})
+	b.recordings[s] = r
+	return r
+}
+
+// symbolsOf finds the symbols of parts and test points on a drawing.
+func symbolsOf(r *ink.Recorder) []symbolAt {
 	var out []symbolAt
 	var walk func(calls []ink.Call)
 	walk = func(calls []ink.Call) {
@@ -49,7 +58,7 @@ func symbolsOf(s *schematic.Sheet) (*ink.Recorder, []symbolAt) {
 		}
 	}
 	walk(r.Calls)
-	return r, out
+	return out
 }
 
 // objectName is the designation or label that an object of the drawing stands for.
@@ -100,7 +109,7 @@ func (b *book) findSymbols(plans []*sheetPlan) {
 		if s.s.drawing == nil {
 			continue
 		}
-		_, list := symbolsOf(s.s.drawing)
+		list := symbolsOf(b.recorded(s.s.drawing))
 		for _, x := range list {
 			if _, ok := b.symbols[x.name]; !ok {
 				b.symbols[x.name] = ink.Target{Sheet: s.n, Anchor: symbolMark(x.name)}
@@ -129,7 +138,7 @@ func (b *book) target(name string) (ink.Target, bool) {
 // their rows in the lists.
 func (b *book) drawSchematic(c ink.Canvas, s *sheetPlan, last int) {
 	first := b.first(keySchematic)
-	_, list := symbolsOf(s.s.drawing)
+	list := symbolsOf(b.recorded(s.s.drawing))
 	places := map[string]string{} // object ID: mark
 	s.s.drawing.Draw(c, schematic.Options{Number: s.n, Of: last, Target: func(number int, object string) ink.Target {
 		if m, ok := places[object]; ok {

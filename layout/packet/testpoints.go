@@ -31,7 +31,7 @@ func (b *book) testPoints() *section {
 		for _, r := range b.d.Readings {
 			band := r.Bands[i]
 			rw := row{topic: topic, changed: b.d.Changes != nil && b.d.Changes.Moved(r.Point.Label, c.Key), cells: []cell{
-				fat(r.Point.Label), upTo(txt(r.Point.Shows), 2), txt(pinName(r.Point.Red)), txt(pinName(r.Point.Black)),
+				fat(r.Point.Label), txt(r.Point.Shows), txt(pinName(r.Point.Red)), txt(pinName(r.Point.Black)),
 				txt(lowVolt(band.Low)), half(typicalVolt(band.Typical)), txt(highVolt(band.High)), writeIn(), tickBox(), txt(b.elseBlock(r, c))}}
 			rw.marks = []string{readingMark(r.Point.Label, c.Key)}
 			if c.Number == 1 {

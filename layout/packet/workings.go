@@ -155,6 +155,9 @@ func resultDigits(v float64) string {
 // indexDrop is how far an index stands below the line, in em.
 const indexDrop = 0.18
 
+// indexSpace keeps the index clear of a leaning letter, mm.
+const indexSpace = 0.3
+
 // formulaLine sets a formula: letters in italics, words and signs upright, what follows
 // an underscore as an index.
 func formulaLine(f string) line {
@@ -170,6 +173,10 @@ func formulaLine(f string) line {
 		for _, x := range fallBack(span{text: s, font: st.font(), color: ink.Black}) {
 			if index {
 				x.drop = formulaText.font().Size * indexDrop
+				x.pre = indexSpace
+			}
+			if n := len(out); n > 0 && !index && x.font.Face != ink.Italic && out[n-1].font.Face == ink.Italic && s != noBreak && s != " " {
+				x.pre = indexSpace // a leaning letter reaches over its right neighbour
 			}
 			out = out.add(x)
 		}
