@@ -103,3 +103,9 @@ func TestNoNoticeOnFirstRevision(t *testing.T) {
 		t.Errorf("%d sheets of a change notice on a first revision", n)
 	}
 }
+
+// Text of a packet with a change notice stays inside the margins and apart.
+func TestNoticeIsClean(t *testing.T) {
+	p := built(t, revised(t, "along: 28 m", "along: 42 m", "power: 6 W", "power: 8 W", "revision: A", "revision: B"))
+	checkSheets(t, p, a4, a4Side)
+}

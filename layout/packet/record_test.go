@@ -106,3 +106,35 @@ func TestRecordOfBlockedDesign(t *testing.T) {
 		t.Error("the record of a blocked design lacks the black bar, or says PASSED")
 	}
 }
+
+// Text of a record stays inside the margins and apart, on both papers.
+func TestRecordIsClean(t *testing.T) {
+	for _, name := range examples {
+		for _, paper := range []string{"iso", "ansi"} {
+			d := example(t, name)
+			site := *d.Site
+			site.Practice.Paper.Val = paper
+			d.Facts = copyFacts(d.Facts)
+			d.Facts.Site = &site
+			i := 0
+			r := taken(t, d, func(k int, l commission.Line) string {
+				i++
+				switch {
+				case l.Low > 1 && i%5 == 0:
+					return fmt.Sprintf("%.1f V", l.Low-0.7)
+				case l.Low > 1 && i%7 == 0:
+					return fmt.Sprintf("-%.1f V", l.Typical)
+				case i%11 == 0:
+					return ""
+				}
+				return asTypical(k, l)
+			})
+			p, err := buildRecord(d, r)
+			if err != nil {
+				t.Fatal(err)
+			}
+			pg, side := pages(paper)
+			checkSheets(t, p, pg, side)
+		}
+	}
+}
