@@ -21,16 +21,24 @@ type trial struct {
 	overrides       []network.Override
 	opens           *facts.Fuse // fuse that the fault blows first
 	within          quantity.Second
-	night           bool // tried in the lit condition only
+	night           bool   // tried in the lit condition only
+	like            string // key of an earlier trial that leaves the circuit the same
 }
 
 // faults solves the circuit with one thing wrong at a time, and records what is then
 // to be seen and which readings leave their bands.
 func (m *maker) faults() error {
+	tried := map[string]*facts.Fault{}
 	for _, t := range m.trials() {
 		f := &facts.Fault{Key: t.key, Part: t.part, What: t.what, Within: t.within}
+		tried[t.key] = f
 		if t.opens != nil {
 			f.Opens = t.opens.Part.Designation
+		}
+		m.f.Faults = append(m.f.Faults, f)
+		if same := tried[t.like]; same != nil {
+			f.Dark, f.Lit, f.Moved, f.Unsettled, f.Sign = same.Dark, same.Lit, same.Moved, same.Unsettled, same.Sign
+			continue
 		}
 		for i, c := range m.f.Conditions {
 			if !c.Shown || t.night && c.Key != "outage-night" {
@@ -52,7 +60,6 @@ func (m *maker) faults() error {
 			m.compare(f, i, c, sol)
 		}
 		f.Sign = m.sign(f)
-		m.f.Faults = append(m.f.Faults, f)
 	}
 	m.group()
 	return nil

@@ -5,7 +5,6 @@ import (
 	"testing"
 
 	"gloamwright/internal/describe"
-	"gloamwright/internal/design"
 	"gloamwright/internal/stage"
 )
 
@@ -25,13 +24,4 @@ func load(tb testing.TB, name string) *describe.Site {
 		tb.FailNow()
 	}
 	return site
-}
-
-func BenchmarkMake(b *testing.B) {
-	site := load(b, "bracken-reach")
-	for b.Loop() {
-		if _, err := design.Make(site, nil); err != nil {
-			b.Fatal(err)
-		}
-	}
 }

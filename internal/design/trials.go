@@ -102,7 +102,7 @@ func (m *maker) farShort(w *circuit.Way) trial {
 		}
 	}
 	t := openPart("far-short/"+w.Fuse.Key, w.Fuse, fmt.Sprintf("short at the end of %s", w.Lighting.Name), true)
-	t.opens, t.within = f, f.OpensWithin
+	t.opens, t.within, t.like = f, f.OpensWithin, "fuse-open/"+w.Fuse.Key
 	return t
 }
 
