@@ -2,60 +2,28 @@ package network
 
 import (
 	"math"
-	"strconv"
-	"strings"
 	"testing"
 
 	"gloamwright/internal/circuit"
+	"gloamwright/internal/network/nettext"
 )
 
-// read makes a netlist from lines "ID model net net … name=value …"; nets stand in
-// the order of the model's pins, "0" is net 0, "-" leaves an optional pin out. A
-// value may carry a tolerance, "ohm=100~0.05". "by=K1" is the Control.
+// read makes a netlist from text as package nettext reads it.
 func read(t testing.TB, text string) *circuit.Netlist {
 	t.Helper()
-	nl := &circuit.Netlist{Nets: []string{"0"}}
-	index := map[string]int{"0": 0}
-	for _, line := range strings.Split(text, "\n") {
-		w := strings.Fields(line)
-		if len(w) == 0 || strings.HasPrefix(w[0], "#") {
-			continue
-		}
-		m := modelOf(w[1])
+	nl, err := nettext.Read(text, func(model string) []string {
+		m := modelOf(model)
 		if m == nil {
-			t.Fatalf("no model %q", w[1])
+			return nil
 		}
-		el := &circuit.Element{ID: w[0], Part: "part " + w[0], Model: w[1]}
-		pin := 0
-		for _, s := range w[2:] {
-			name, value, isParam := strings.Cut(s, "=")
-			switch {
-			case isParam && name == "by":
-				el.Control = value
-			case isParam:
-				number, tol, _ := strings.Cut(value, "~")
-				p := circuit.Param{Name: name, Value: number64(t, number)}
-				if tol != "" {
-					p.Tol = number64(t, tol)
-				}
-				el.Params = append(el.Params, p)
-			case s == "-":
-				pin++
-			default:
-				k, ok := index[s]
-				if !ok {
-					k = len(nl.Nets)
-					index[s] = k
-					nl.Nets = append(nl.Nets, s)
-				}
-				if pin >= len(m.Pins) {
-					t.Fatalf("%s: too many nets", line)
-				}
-				el.Pins = append(el.Pins, circuit.ElementPin{Name: m.Pins[pin].Name, Net: k})
-				pin++
-			}
+		var names []string
+		for _, p := range m.Pins {
+			names = append(names, p.Name)
 		}
-		nl.Elements = append(nl.Elements, el)
+		return names
+	})
+	if err != nil {
+		t.Fatal(err)
 	}
 	return nl
 }
@@ -67,15 +35,6 @@ func modelOf(name string) *Model {
 		}
 	}
 	return nil
-}
-
-func number64(t testing.TB, s string) float64 {
-	t.Helper()
-	v, err := strconv.ParseFloat(s, 64)
-	if err != nil {
-		t.Fatal(err)
-	}
-	return v
 }
 
 // circuitUnderTest is a network whose nets are known by name.

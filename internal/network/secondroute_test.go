@@ -69,28 +69,6 @@ func TestSecondRouteOnSites(t *testing.T) {
 	}
 }
 
-func TestSecondRouteOnPublishedExamples(t *testing.T) {
-	for _, e := range published {
-		nl := read(t, e.text)
-		if len(nl.Nets) > 100 {
-			continue
-		}
-		n, err := New(nl)
-		if err != nil {
-			t.Fatal(err)
-		}
-		at := Environment{Name: e.source}
-		s, err := n.Solve(at, nil)
-		if err != nil {
-			t.Fatal(err)
-		}
-		if slices.ContainsFunc(n.devices, func(d *device) bool { return d.m.direct != nil && d.m.direct(d.p, true) }) {
-			continue // an ideal source has no nodal equation
-		}
-		secondRoute(t, nl, at, s)
-	}
-}
-
 // On random circuits the sums alone are compared: many of them have several
 // operating points.
 func TestSecondRouteSumsOnRandomCircuits(t *testing.T) {
