@@ -226,15 +226,18 @@ func (b *book) card(f *finding.Finding, left, width float64) block {
 	if cut {
 		b.noteCut(place)
 	}
-	side := pl.width() + 4
-	if narrow {
-		side = 0
+	// the place stands at the right: under the gauge, beside the message, or in a line of
+	// its own
+	headSide, remedySide := pl.width()+4, 0.0
+	switch {
+	case narrow:
+		headSide = 0
+	case gauge:
+		headSide = gaugeLong + 4
+		remedySide = max(headSide, pl.width()+4)
 	}
-	if gauge {
-		side = max(side, gaugeLong+4)
-	}
-	head := wrap(f.Message, boxHead, room-side)
-	remedy := wrap(f.Remedy, tableText, room-side)
+	head := wrap(f.Message, boxHead, room-headSide)
+	remedy := wrap(f.Remedy, tableText, room-remedySide)
 	textHigh := float64(len(head))*boxHead.lead + float64(len(remedy))*tableText.lead
 	if narrow {
 		textHigh += code.lead
@@ -264,7 +267,11 @@ func (b *book) card(f *finding.Finding, left, width float64) block {
 		if gauge {
 			p.limitGauge(right-gaugeLong, y+2.4, f.Value, f.Limit, f.Over)
 		}
-		p.text(right, y+h-2, pl, ink.End)
+		if gauge || narrow {
+			p.text(right, y+h-1.8, pl, ink.End)
+		} else {
+			p.text(right, base, pl, ink.End)
+		}
 	}}
 }
 

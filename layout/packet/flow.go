@@ -85,8 +85,33 @@ func (s *sheetPlan) short() string {
 	return s.s.title
 }
 
-// paginate breaks the blocks of a section into sheets.
+// paginate breaks the blocks of a section into sheets. Gaps are drawn together where
+// that saves a sheet.
 func (s *section) paginate(pg page) []*sheetPlan {
+	out := s.broken(pg)
+	if len(out) < 2 {
+		return out
+	}
+	wide := make([]float64, len(s.blocks))
+	for i, b := range s.blocks {
+		wide[i] = b.gap
+	}
+	for _, share := range []float64{0.7, 0.45} {
+		for i := range s.blocks {
+			s.blocks[i].gap = wide[i] * share
+		}
+		if tight := s.broken(pg); len(tight) < len(out) {
+			return tight
+		}
+	}
+	for i := range s.blocks {
+		s.blocks[i].gap = wide[i]
+	}
+	return s.broken(pg)
+}
+
+// broken breaks the blocks of a section into sheets with the gaps as they are.
+func (s *section) broken(pg page) []*sheetPlan {
 	if s.drawing != nil {
 		return []*sheetPlan{{s: s, k: 1, of: 1}}
 	}

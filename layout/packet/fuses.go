@@ -300,6 +300,9 @@ func (b *book) fuseTable() []block {
 		where := ""
 		if f.Way != nil {
 			where = fmt.Sprintf("%s %d", firstWord(f.Board.Title), f.Way.Number)
+			if spans(where, t.st).width() > t.cols[0].w-padding {
+				where = fmt.Sprintf("%s %d", f.Board.Strip, f.Way.Number)
+			}
 		} else if f.Part.Place != nil {
 			where = firstWord(f.Part.Place.Name)
 		}

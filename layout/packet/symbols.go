@@ -1,6 +1,8 @@
 package packet
 
 import (
+	"regexp"
+	"strconv"
 	"strings"
 
 	"gloamwright/layout/ink"
@@ -134,13 +136,33 @@ func (b *book) target(name string) (ink.Target, bool) {
 	return ink.Target{}, false
 }
 
+// renumbered prints references from sheet to sheet with the numbers of the packet,
+// which has one series for all its sheets.
+type renumbered struct {
+	ink.Canvas
+	shift int
+}
+
+// sheetReference is "/3.B7" or "/3".
+var sheetReference = regexp.MustCompile(`/(\d+)(\.[A-Z]\d+)?$`)
+
+// Text implements ink.Canvas.
+func (r *renumbered) Text(at ink.Point, s string, f ink.Font, a ink.Anchor, c ink.Color, turn bool) {
+	if m := sheetReference.FindStringSubmatchIndex(s); m != nil {
+		if n, err := strconv.Atoi(s[m[2]:m[3]]); err == nil {
+			s = s[:m[2]] + strconv.Itoa(n+r.shift) + s[m[3]:]
+		}
+	}
+	r.Canvas.Text(at, s, f, a, c, turn)
+}
+
 // drawSchematic draws a schematic sheet with its packet number; its symbols lead to
 // their rows in the lists.
 func (b *book) drawSchematic(c ink.Canvas, s *sheetPlan, last int) {
 	first := b.first(keySchematic)
 	list := symbolsOf(b.recorded(s.s.drawing))
 	places := map[string]string{} // object ID: mark
-	s.s.drawing.Draw(c, schematic.Options{Number: s.n, Of: last, Target: func(number int, object string) ink.Target {
+	s.s.drawing.Draw(&renumbered{c, first - 1}, schematic.Options{Number: s.n, Of: last, Target: func(number int, object string) ink.Target {
 		if m, ok := places[object]; ok {
 			return ink.Target{Sheet: first + number - 1, Anchor: m}
 		}
