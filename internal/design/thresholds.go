@@ -31,8 +31,26 @@ func (m *maker) spec(key string) (operating, bool) {
 	return operating{}, false
 }
 
-func (m *maker) threshold(key, name, unit string, at float64, text string) {
-	m.f.Thresholds = append(m.f.Thresholds, &facts.Threshold{Key: key, Name: name, Value: at, Unit: unit, Text: text})
+func (m *maker) threshold(key, name, unit string, at float64, text string) *facts.Threshold {
+	t := &facts.Threshold{Key: key, Name: name, Value: at, Unit: unit, Text: text}
+	m.f.Thresholds = append(m.f.Thresholds, t)
+	return t
+}
+
+// settingBand gives a threshold the band that the accuracy of its setting and the
+// meter leave: the setting moves it volt for volt.
+func (m *maker) settingBand(t *facts.Threshold, element, param string) {
+	for _, e := range m.f.Netlist.Elements {
+		if e.ID != element {
+			continue
+		}
+		for _, p := range e.Params {
+			if p.Name == param {
+				half := p.Value*p.Tol + t.Value*meterShare + float64(meterVolt)
+				t.Low, t.High = t.Value-half, t.Value+half
+			}
+		}
+	}
 }
 
 // sweep walks a condition through a range. Where something never comes to rest on the
@@ -130,8 +148,8 @@ func (m *maker) cutOffVolts() error {
 	}
 	at, sense := read(down.Before)
 	q.AtBattery = quantity.Volt(at)
-	m.threshold("opens-battery", "cut-off opens, read at the battery", "V", at, "")
-	m.threshold("opens-sense", "cut-off opens, read at its input", "V", sense, "")
+	m.settingBand(m.threshold("opens-battery", "cut-off opens, read at the battery", "V", at, ""), id, "opens_volt")
+	m.settingBand(m.threshold("opens-sense", "cut-off opens, read at its input", "V", sense, ""), id, "opens_volt")
 	up, ok, err := m.sweep("recloses", "cut-off recloses", "V",
 		network.Sweep{From: down.At, To: float64(m.plan.Highest) * 1.1, Steps: sweepSteps, Set: set, Watch: []string{id}}, down.After.State)
 	if err != nil || !ok {
@@ -139,8 +157,8 @@ func (m *maker) cutOffVolts() error {
 	}
 	if up.Found {
 		at, sense = read(up.Before)
-		m.threshold("recloses-battery", "cut-off recloses, read at the battery", "V", at, "")
-		m.threshold("recloses-sense", "cut-off recloses, read at its input", "V", sense, "")
+		m.settingBand(m.threshold("recloses-battery", "cut-off recloses, read at the battery", "V", at, ""), id, "recloses_volt")
+		m.settingBand(m.threshold("recloses-sense", "cut-off recloses, read at its input", "V", sense, ""), id, "recloses_volt")
 	}
 	return nil
 }

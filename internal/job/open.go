@@ -37,6 +37,9 @@ func Open(path string, set []string) (*Job, error) {
 		return nil, &Mistakes{list, site.Sources}
 	}
 	warnings := list
+	if t := &site.Practice.Texts; t.Val != "" { // named from the description's folder
+		t.Val = filepath.Join(filepath.Dir(path), t.Val)
+	}
 	released, err := release.Open(path)
 	if err != nil {
 		return nil, err
