@@ -80,12 +80,16 @@ func (b *book) arrange(boxes []*stageBox, alone bool) (*plan, bool) {
 		case i == 0:
 			x = max(20, 16+gapFirst+gapTrack*(n-1))
 		case bx.mains:
-			x += gapPlain + stripWidth
-			if n > 0 {
-				x += gapTrack * n
-			}
+			x += gapPlain + stripWidth + gapTrack*n
 		default:
 			x += gap
+		}
+		if i > 0 { // a heading that reaches over needs its room before leads and strip
+			over := boxes[i-1].headOver
+			if n == 0 && !bx.mains {
+				over = max(0, over-2)
+			}
+			x += over
 		}
 		p.xs = append(p.xs, x)
 		x += bx.st.Sketch.Width

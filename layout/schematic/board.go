@@ -20,6 +20,7 @@ const (
 	colBoard      = 12
 	colBoardFed   = 19
 	colBoardNames = 12.8
+	longPlace     = 24.0 // the most room of a place's name
 )
 
 // drawBoard draws one sheet of a board.
@@ -75,13 +76,14 @@ func (b *book) bars(sh *Sheet, s *boardSheet, xs []int, end int) {
 	if s.more {
 		right, open = colEnd, open+"E"
 	}
-	o := sc.object(classFrame, "board-"+bd.Name, bd.Title, ink.Attr{Name: "board", Value: bd.Name})
+	o := sc.object(classBoundary, "board-"+bd.Name, bd.Title, ink.Attr{Name: "board", Value: bd.Name})
 	boundary(o, left, rowBoardTop, right, rowBoardEnd, open)
-	name := textAt(left+0.8, rowPlace, bd.Place.Designation+" "+bd.Place.Name, valueStyle, ink.Start)
+	name := textAt(left+0.8, rowPlace, fit(bd.Place.Designation+" "+bd.Place.Name, valueStyle, longPlace), valueStyle, ink.Start)
 	o.add(name)
 
 	last := len(xs) - 1
 	plusEnd, minusEnd := xs[last], xs[last]+s.columns[last].minus
+	reached := 0 // end of the L+ bar
 	for _, r := range []struct {
 		bar  *circuit.Part
 		y    int
@@ -96,6 +98,9 @@ func (b *book) bars(sh *Sheet, s *boardSheet, xs []int, end int) {
 		}
 		if after > 0 {
 			x1 = colLeave
+		}
+		if r.y == rowBarPlus {
+			reached = x1
 		}
 		w := sc.wire(nil, node{x0, r.y}, node{x1, r.y})
 		w.rail, w.thick, w.name = true, true, rail.Name
@@ -120,14 +125,14 @@ func (b *book) bars(sh *Sheet, s *boardSheet, xs []int, end int) {
 		b.entry(sh, bd)
 	}
 	if s.first && bd.TestPoint != nil {
-		b.barPoint(sh, s, xs, name.box())
+		b.barPoint(sh, s, xs, reached, name.box())
 	}
 }
 
-// barPoint marks the test point on the L+ bar, in the first place over the bar that
-// is clear of the place's name and of the ways.
-func (b *book) barPoint(sh *Sheet, s *boardSheet, xs []int, name ink.Rect) {
-	for x := s.start + 3; x < s.start+60; x++ {
+// barPoint marks the test point on the L+ bar: in the first place over the bar that
+// is clear of the place's name and of the ways, else at the bar's end.
+func (b *book) barPoint(sh *Sheet, s *boardSheet, xs []int, end int, name ink.Rect) {
+	for x := s.start + 3; x < end-1; x++ {
 		near := float64(x)-1 < name.X+name.W
 		for _, at := range xs {
 			near = near || x-at < 3 && at-x < 3
@@ -137,6 +142,7 @@ func (b *book) barPoint(sh *Sheet, s *boardSheet, xs []int, name ink.Rect) {
 			return
 		}
 	}
+	b.probe(sh, s.board.TestPoint, node{end, rowBarPlus}, "E")
 }
 
 // entry draws the incoming cable of a board that another board feeds.
@@ -182,7 +188,7 @@ func (b *book) drawColumn(sh *Sheet, s *boardSheet, c *column, x int) {
 		b.columnOval(sh, v, x)
 	}
 	for _, l := range c.lengths {
-		sc.cable(l.cable).add(textAt(l.at.X+float64(x), l.at.Y, l.cable.Length.String(), valueStyle, ink.Middle))
+		sc.cable(l.cable).add(textAt(l.at.X+float64(x), l.at.Y, metres(l.cable.Length), valueStyle, ink.Middle))
 	}
 	for _, r := range c.rungs {
 		b.luminaire(sh, r, x)
@@ -195,13 +201,27 @@ func (b *book) drawColumn(sh *Sheet, s *boardSheet, c *column, x int) {
 		b.probe(sh, c.way.Lighting.TestPoint, at, side)
 	}
 	for _, k := range c.cuts {
-		plus, minus := shift([]node{k.plus}, x)[0], shift([]node{k.minus}, x)[0]
-		obj, mate := b.refer(sh, "leg "+k.cable.Key, k.cable.Designation, true, k.turn, plus, minus)
-		at := point{float64(minus.X) + 1.1, float64(minus.Y) + 0.9}
-		if k.turn == 'E' {
-			at = point{float64(minus.X) + arrowLead + 0.5, float64(minus.Y) + 1 + textHeight/2}
-		}
-		obj.add(&line{at: at, runs: []run{{s: k.cable.Designation, st: nameStyle}, {to: mate}}})
+		b.drawCut(sh, k, x)
+	}
+}
+
+// drawCut draws the arrows of a leg that goes on on another sheet. Cores that end
+// side by side share one text, the left being L+; cores that end one over the other
+// are named each.
+func (b *book) drawCut(sh *Sheet, k cut, x int) {
+	plus, minus := shift([]node{k.plus}, x)[0], shift([]node{k.minus}, x)[0]
+	obj, mate := b.refer(sh, "leg "+k.cable.Key, k.cable.Designation, true, k.turn, plus, minus)
+	if k.turn != 'E' {
+		obj.add(&line{at: point{float64(minus.X) + 1.1, float64(minus.Y) + 0.9}, runs: []run{{s: k.cable.Designation, st: nameStyle}, {to: mate}}})
+		return
+	}
+	cp, cm := cores(k.cable)
+	for _, e := range []struct {
+		at node
+		c  *circuit.Conductor
+	}{{plus, cp}, {minus, cm}} {
+		obj.add(&line{at: point{float64(e.at.X) + arrowLead + 0.4, float64(e.at.Y) + textHeight/2},
+			runs: []run{{s: e.c.Number, st: wireStyle}, {to: mate}}})
 	}
 }
 
@@ -268,7 +288,7 @@ func (b *book) feederWay(sh *Sheet, c *column, x int) {
 	sh.scene.wire(plus, node{x, rowTerminal + 1}, p)
 	sh.scene.wire(minus, node{x + minusCore, rowTerminal + 1}, m)
 	b.columnOval(sh, columnOval{bd.Feeder, 0, rowCable, false}, x)
-	sh.scene.cable(bd.Feeder).add(textAt(float64(x)+minusCore/2, rowLamp-2, bd.Feeder.Length.String(), valueStyle, ink.Middle))
+	sh.scene.cable(bd.Feeder).add(textAt(float64(x)+minusCore/2, rowLamp-2, metres(bd.Feeder.Length), valueStyle, ink.Middle))
 	names := b.railOf[bd.Plus.Pin("in")].Name + ", " + b.railOf[bd.Minus.Pin("in")].Name
 	obj, mate := b.refer(sh, "feeder "+bd.Name, names, true, 'S', p, m)
 	obj.add(textAt(float64(x)+legText, rowLamp+0.4, names, nameStyle, ink.Start),

@@ -90,6 +90,9 @@ func (b *book) columns(bd *circuit.Board) (ways, rests []*column, err error) {
 			c.kind, c.width, c.minus = feederColumn, feederWidth, minusCore
 		default:
 			c.kind, c.width, c.minus = spareColumn, spareWidth, spareMinus
+			if w.Number > 9 {
+				c.width, c.minus = spareLong, minusCore
+			}
 		}
 		ways = append(ways, c)
 	}

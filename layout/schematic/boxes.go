@@ -1,6 +1,9 @@
 package schematic
 
 import (
+	"math"
+	"slices"
+
 	"gloamwright/internal/circuit"
 	"gloamwright/internal/stage"
 )
@@ -17,12 +20,23 @@ const (
 	rowTables    = 75
 )
 
-// rowsPlus are the rows of plus rails, the first free one is taken; auxiliary
-// rails begin at the second.
-var rowsPlus = []int{11, 8, 6}
+// rowsTwo and rowsThree are the rows of plus rails where two suffice and where three
+// are needed. Rails that carry the load begin at the first, auxiliary ones at the
+// second.
+var (
+	rowsTwo   = []int{11, 8}
+	rowsThree = []int{11, 9, 7}
+)
 
 // rowsLow are the rows below L− for leads between stages that are no neighbours.
-var rowsLow = []int{69, 71, 73}
+var rowsLow = []int{70, 72}
+
+// overLine is how far a text stands over its line, overTight over one with another
+// two rows above; there the text keeps clear of the arrow as well.
+const (
+	overLine  = 0.8
+	overTight = 0.6
+)
 
 // Columns of a supply sheet.
 const (
@@ -48,6 +62,42 @@ type stageBox struct {
 	links    []*link
 	drops    []*drop
 	readings int
+	head     float64 // where the heading begins, from the frame's left edge
+	headOver int     // how far it reaches beyond the frame
+	headText string
+	headSize style
+}
+
+// longHeading is the most room that a heading takes, in modules.
+const longHeading = 24.0
+
+// placeHeading finds where the heading stands clear of the leads that pass it: left
+// of the first, else between two, else right of the last, where it may reach beyond
+// the frame and pushes the next stage away.
+func (x *stageBox) placeHeading() {
+	x.headText, x.headSize = x.st.Heading, headStyle
+	if width(x.headText, headStyle) > longHeading {
+		x.headSize = nameStyle
+		x.headText = fit(x.headText, nameStyle, longHeading)
+	}
+	w := width(x.headText, x.headSize)
+	var posts []float64
+	for _, l := range x.leads() {
+		if !l.term.Lower && l.x >= 0 {
+			posts = append(posts, float64(l.x))
+		}
+	}
+	slices.Sort(posts)
+	const clear = 0.6
+	at := 0.0
+	for _, p := range posts {
+		if at+w+clear <= p {
+			break
+		}
+		at = p + clear
+	}
+	x.head = at
+	x.headOver = max(0, int(math.Ceil(at+w+0.5))-x.st.Sketch.Width-2)
 }
 
 // link joins a right port of one stage to a left port of another.
@@ -97,6 +147,7 @@ func (b *book) boxes() []*stageBox {
 				x.readings++
 			}
 		}
+		x.placeHeading()
 		out = append(out, x)
 		byName[st.Name] = x
 	}

@@ -20,9 +20,10 @@ const (
 const (
 	laneWidth    = 18
 	foldWidth    = 22 // a further ladder of a folded run
-	feederWidth  = 14
+	feederWidth  = 16
 	spareWidth   = 10
-	minusCore    = 6 // the L− core of a ladder stands right of its L+ core
+	spareLong    = 14 // of a spare way with a number of two figures
+	minusCore    = 6  // the L− core of a ladder stands right of its L+ core
 	spareMinus   = 3
 	legText      = 7.1 // texts right of a ladder
 	lampText     = 6.7
@@ -245,7 +246,7 @@ func (r *runner) branch(p *circuit.Point, b []*circuit.Point, row, lane, y, afte
 	}
 	leg := b[0].Leg
 	if !side {
-		to := x + minusCore + 3
+		to := x + minusCore + 1
 		plus, minus = append(plus, node{to, yb + 1}), append(minus, node{to, yb - 1})
 		r.cut(b, plus, minus, 'E')
 		return row + 1

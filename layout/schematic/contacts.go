@@ -95,7 +95,7 @@ func (b *book) contactUse(n *circuit.Pin) string {
 func (b *book) contactTables(sh *Sheet, p *plan) {
 	y := float64(rowTables)
 	for _, k := range relaysOf(p) {
-		o := sh.scene.object(classTable, "contacts-"+k.Designation, "Contacts of "+k.Designation)
+		o := sh.scene.object(classTable, "contacts-"+k.Designation, "Contacts of "+k.Designation, ink.Attr{Name: "relay", Value: k.Designation})
 		o.add(textAt(contactLeft, y, k.Designation+" contacts", nameStyle, ink.Start))
 		o.add(segment(middlePen, contactLeft, y+1, contactRight, y+1))
 		y += 2.6

@@ -27,7 +27,7 @@ func (s *scene) finish(b *book) {
 		s.conductor(b, n.c).add(n.l)
 	}
 	rank := map[string]int{}
-	for i, c := range []string{classFrame, classGuide, classRail, classWire, classDot, classCable, classPart,
+	for i, c := range []string{classBoundary, classGuide, classRail, classWire, classDot, classCable, classPart,
 		classTerminal, classTestPoint, classReference, classBlock, classTable, classNote} {
 		rank[c] = i
 	}

@@ -23,10 +23,10 @@ func (b *book) drawLinks(sh *Sheet, p *plan) {
 	var cables []*circuit.Cable
 	for _, r := range p.runs {
 		sc.wire(r.link.wire, r.pts...).name = "link " + r.link.key
-		b.linkReferences(sh, r)
+		b.linkReferences(sh, p, r)
 		c := r.link.cable
 		if c == nil {
-			b.linkNumber(sh, r)
+			b.linkNumber(sh, p, r)
 			continue
 		}
 		if pairs[c] == nil {
@@ -39,8 +39,9 @@ func (b *book) drawLinks(sh *Sheet, p *plan) {
 	}
 }
 
-// linkNumber writes the wire number over the level end of a link, in the gap.
-func (b *book) linkNumber(sh *Sheet, r linkRun) {
+// linkNumber writes the wire number over the level end of a link, in the gap, left of
+// any upright lead; or beside the link's own upright piece.
+func (b *book) linkNumber(sh *Sheet, p *plan, r linkRun) {
 	c := r.link.wire
 	if c == nil {
 		return
@@ -48,19 +49,49 @@ func (b *book) linkNumber(sh *Sheet, r linkRun) {
 	a, z := r.pts[0], r.pts[1]
 	x := float64(a.X+z.X) / 2
 	switch {
-	case r.leave && len(r.pts) == 2:
-		x = float64(a.X) + 3
-	case r.arrive && len(r.pts) == 2:
-		return
-	case len(r.pts) > 2 && !r.arrive: // beside the upright piece
+	case len(r.pts) > 2 && !r.arrive:
 		sh.scene.number(c, textAt(float64(r.pts[1].X)-0.5, float64(r.pts[1].Y+r.pts[2].Y)/2+0.5, c.Number, wireStyle, ink.End))
 		return
+	case r.arrive && len(r.pts) == 2: // the reference says it
+		return
+	case r.leave:
+		x = float64(a.X) + 3
+	case !r.arrive && p.crossed(a, z):
+		x = float64(a.X) + gapFirst/2.0
 	}
-	sh.scene.number(c, textAt(x, float64(a.Y)-0.6, c.Number, wireStyle, ink.Middle))
+	sh.scene.number(c, textAt(x, float64(a.Y)-overTight, c.Number, wireStyle, ink.Middle))
+}
+
+// crossed reports whether an upright lead passes through a level piece.
+func (p *plan) crossed(a, z node) bool {
+	passes := func(pts []node) bool {
+		for i := 1; i < len(pts); i++ {
+			if q, r := pts[i-1], pts[i]; q.X == r.X && a.X < q.X && q.X < z.X && between(q.Y, a.Y, r.Y) {
+				return true
+			}
+		}
+		return false
+	}
+	for _, d := range p.drops {
+		if passes(d.pts) {
+			return true
+		}
+	}
+	for _, k := range p.runs {
+		if passes(k.pts) {
+			return true
+		}
+	}
+	for i, x := range p.boxes {
+		if x.ownLead && p.xs[i]-gapFirst > a.X && p.xs[i]-gapFirst < z.X {
+			return true
+		}
+	}
+	return false
 }
 
 // linkReferences draws the ends of a link that goes on to another sheet.
-func (b *book) linkReferences(sh *Sheet, r linkRun) {
+func (b *book) linkReferences(sh *Sheet, p *plan, r linkRun) {
 	name := "signal"
 	if c := r.link.wire; c != nil {
 		name = c.Number
@@ -68,13 +99,12 @@ func (b *book) linkReferences(sh *Sheet, r linkRun) {
 	if r.arrive {
 		at := r.pts[0]
 		obj, mate := b.refer(sh, r.link.key, name, false, 'W', at)
-		obj.add(&line{at: point{colText, float64(at.Y) - 0.9}, runs: []run{{s: name, st: wireStyle}, {to: mate}}})
+		obj.add(arriving(p.over(at.Y), at.Y, run{s: name, st: wireStyle}, mate))
 	}
 	if r.leave {
 		at := r.pts[len(r.pts)-1]
 		obj, mate := b.refer(sh, r.link.key, name, true, 'E', at)
-		obj.add(&line{at: point{colLeave + arrowLead + 0.3, float64(at.Y) - 0.9}, anchor: ink.End,
-			runs: []run{{s: name, st: wireStyle}, {to: mate}}})
+		obj.add(leaving(p.over(at.Y), at.Y, run{s: name, st: wireStyle}, mate))
 	}
 }
 

@@ -100,7 +100,7 @@ func (b *book) mainsBlock(sh *Sheet, o *overview, bottom float64, rows []float64
 			}
 		}
 	}
-	f := sh.scene.object(classFrame, "mains", "Mains side: licensed persons only")
+	f := sh.scene.object(classBoundary, "mains", "Mains side: licensed persons only")
 	boundary(f, colMains, top, colMains+mainsWidth, bottom, "")
 	f.add(textAt(colMains+0.8, top+2.2, "Mains", headStyle, ink.Start))
 	for i, s := range b.mainsText(name) {
@@ -127,7 +127,7 @@ func (b *book) batteryBlock(sh *Sheet, o *overview) {
 		}
 	}
 	top := float64(rowBattery)
-	f := sh.scene.object(classFrame, "place-"+place.Designation, place.Designation+" "+place.Name)
+	f := sh.scene.object(classBoundary, "place-"+place.Designation, place.Designation+" "+place.Name)
 	if place.Key != mainCabinet {
 		boundary(f, colBus-11, rowBattery-3, colBus+11, rowBattery+blockHeight+2, "")
 		f.add(textAt(colBus-10.2, rowBattery-1.2, placeName(place, 20), valueStyle, ink.Start))
@@ -232,7 +232,7 @@ func (b *book) sensorBlock(sh *Sheet, c *control, y float64) {
 		return
 	}
 	mid := y + blockHeight/2
-	f := sh.scene.object(classFrame, "place-"+c.sensor.Designation, c.sensor.Designation+" "+c.sensor.Name)
+	f := sh.scene.object(classBoundary, "place-"+c.sensor.Designation, c.sensor.Designation+" "+c.sensor.Name)
 	boundary(f, colSource-2, y-3, colSource+blockWidth+2, y+blockHeight+2, "")
 	f.add(textAt(colSource-1.2, y-1.2, placeName(c.sensor, 20), valueStyle, ink.Start))
 	b.plainBlock(sh, c.middle.st.Name+"-sensor", "Sensor", colSource, y,
@@ -240,7 +240,7 @@ func (b *book) sensorBlock(sh *Sheet, c *control, y float64) {
 	w := b.flow(sh, c.middle.st.Name+"-sensor", "light signal", false, false, point{colSource + blockWidth, mid}, point{colChain, mid})
 	for _, k := range b.c.Cables {
 		if k.From == c.sensor || k.To == c.sensor {
-			w.add(&line{at: point{colSource + blockWidth + 3, mid - 1.1}, runs: []run{{s: k.Designation, st: nameStyle}, {s: k.Length.String()}}})
+			w.add(&line{at: point{colSource + blockWidth + 3, mid - 1.1}, runs: []run{{s: k.Designation, st: nameStyle}, {s: metres(k.Length)}}})
 			break
 		}
 	}

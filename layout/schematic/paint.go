@@ -1,8 +1,6 @@
 package schematic
 
 import (
-	"math"
-
 	"gloamwright/layout/ink"
 	"gloamwright/symbols"
 )
@@ -17,9 +15,9 @@ var (
 	guidePen      = ink.Pen{Width: 0.25, Dash: []float64{0.25, 2.25}}
 )
 
-// dashLengths is the boundary's long dash, gap, dot, gap in line widths (24-3-0.5-3
-// of ISO 128-2, from memory).
-var dashLengths = [4]float64{24, 3, 0.5, 3}
+// dashLengths is the boundary's long dash, gap, dot, gap in mm: 24-3-0.5-3 line
+// widths (ISO 128-2, from memory).
+var dashLengths = []float64{24 * 0.25, 3 * 0.25, 0.5 * 0.25, 3 * 0.25}
 
 const (
 	dotRadius     = 0.2  // joint of wires
@@ -124,19 +122,8 @@ func (t *tag) draw(p *painter) { symbols.Tag(p.c, mm(t.at), t.label, ink.Start) 
 
 // boundarySide is one straight dash-dot line that begins and ends with a whole dash.
 func boundarySide(x0, y0, x1, y1 float64) *stroke {
-	length := math.Hypot(x1-x0, y1-y0) * module
-	var d [4]float64
-	sum := 0.0
-	for i, v := range dashLengths {
-		d[i] = v * normalPen.Width
-		sum += d[i]
-	}
-	n := math.Max(1, math.Round((length-d[0])/sum))
-	k := length / (n*sum + d[0])
 	pen := normalPen
-	for _, v := range d {
-		pen.Dash = append(pen.Dash, math.Round(v*k*1e4)/1e4)
-	}
+	pen.Dash = (&ink.Path{}).Move(x0*module, y0*module).Line(x1*module, y1*module).FitDash(dashLengths...)
 	return segment(pen, x0, y0, x1, y1)
 }
 

@@ -54,6 +54,18 @@ func (b *book) layRails(p *plan) bool {
 		}
 	}
 	slices.SortStableFunc(order, func(x, y *railRun) int { return cmp.Compare(x.leads[0].x, y.leads[0].x) })
+	ok := layRows(order, rowsTwo) || layRows(order, rowsThree)
+	for _, run := range order {
+		if !run.rail.Positive {
+			run.y = rowMinus
+		}
+		p.rails = append(p.rails, *run)
+	}
+	return ok
+}
+
+// layRows gives the plus rails rows and reports whether they suffice.
+func layRows(order []*railRun, rows []int) bool {
 	var in []taken
 	ok := true
 	for _, main := range []bool{true, false} {
@@ -61,20 +73,14 @@ func (b *book) layRails(p *plan) bool {
 			if !run.rail.Positive || mainRail(run.rail) != main {
 				continue
 			}
-			rows := rowsPlus
+			from := rows
 			if !main {
-				rows = rowsPlus[1:]
+				from = rows[1:]
 			}
 			var free bool
-			run.y, free = freeRow(&in, rows, run.x0, run.x1)
+			run.y, free = freeRow(&in, from, run.x0, run.x1)
 			ok = ok && free
 		}
-	}
-	for _, run := range order {
-		if !run.rail.Positive {
-			run.y = rowMinus
-		}
-		p.rails = append(p.rails, *run)
 	}
 	return ok
 }
@@ -107,17 +113,46 @@ func (b *book) drawRails(sh *Sheet, p *plan) {
 		b.railLine(sh, r)
 		if r.before {
 			obj, mate := b.railRefer(sh, r.rail, before, node{r.x0, r.y})
-			obj.add(&line{at: point{colText, float64(r.y) - 0.8}, runs: []run{{s: r.rail.Name, st: nameStyle}, {to: mate}}})
+			obj.add(arriving(p.over(r.y), r.y, run{s: r.rail.Name, st: nameStyle}, mate))
 		}
 		if r.after {
 			obj, mate := b.railRefer(sh, r.rail, after, node{r.x1, r.y})
-			obj.add(&line{at: point{colLeave + arrowLead + 0.3, float64(r.y) - 0.8}, anchor: ink.End,
-				runs: []run{{s: r.rail.Name, st: nameStyle}, {to: mate}}})
+			obj.add(leaving(p.over(r.y), r.y, run{s: r.rail.Name, st: nameStyle}, mate))
 		}
 		if !r.before {
 			b.railName(sh, p, r)
 		}
 	}
+}
+
+// over is how far texts stand over a line in that row.
+func (p *plan) over(y int) float64 {
+	if y > rowsLow[0] {
+		return overTight
+	}
+	for _, r := range p.rails {
+		if r.y == y-2 {
+			return overTight
+		}
+	}
+	return overLine
+}
+
+// arriving is the text of a reference at the left edge, leaving one at the right.
+func arriving(over float64, y int, name run, mate *place) *line {
+	x := float64(colText)
+	if over < overLine {
+		x = colArrive + 0.3
+	}
+	return &line{at: point{x, float64(y) - over}, runs: []run{name, {to: mate}}}
+}
+
+func leaving(over float64, y int, name run, mate *place) *line {
+	x := colLeave + arrowLead + 0.3
+	if over < overLine {
+		x = colLeave + 0.4
+	}
+	return &line{at: point{x, float64(y) - over}, anchor: ink.End, runs: []run{name, {to: mate}}}
 }
 
 // railLine draws the line of a rail, one stroke for each conductor between
@@ -173,7 +208,7 @@ func (b *book) railName(sh *Sheet, p *plan, r railRun) {
 			}
 		}
 	}
-	y := float64(r.y) - 0.7
+	y := float64(r.y) - p.over(r.y)
 	end := float64(r.x1)
 	if r.after {
 		end -= 8

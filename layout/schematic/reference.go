@@ -4,6 +4,7 @@ import (
 	"fmt"
 
 	"gloamwright/layout/ink"
+	"gloamwright/symbols"
 )
 
 // place is where something stands on the sheets. It is filled in when the thing is
@@ -50,7 +51,7 @@ func (b *book) refer(sh *Sheet, key, name string, out bool, turn byte, ends ...n
 	obj.Data = []ink.Attr{{Name: "key", Value: key}, {Name: "net", Value: name}}
 	here.sheet, here.at, here.anchor = sh, ends[0].point(), obj.ID
 	for _, e := range ends {
-		obj.add(&arrow{at: e.point(), turn: turn, out: out})
+		obj.add(&arrow{at: e, turn: turn, out: out})
 	}
 	sc.refs = append(sc.refs, r)
 	return obj, mate
@@ -73,36 +74,23 @@ func (b *book) place(name string) *place {
 	return p
 }
 
-// arrow is the open chevron of an off-sheet reference on its lead of 1.2 modules.
+// arrow is the open chevron of an off-sheet reference on its lead.
 type arrow struct {
-	at   point
+	at   node
 	turn byte
 	out  bool
 }
 
-const (
-	arrowLead = 1.2
-	arrowTip  = 0.2 // an arriving tip stands this far from the wire's end
-)
+// arrowLead is how far an arrow reaches beyond the wire's end.
+const arrowLead = 1.2
 
 func (a *arrow) draw(p *painter) {
-	dx, dy := 0.0, 0.0
-	switch a.turn {
-	case 'E':
-		dx = 1
-	case 'W':
-		dx = -1
-	case 'S':
-		dy = 1
-	case 'N':
-		dy = -1
+	s, turn := &symbols.ReferenceArriving, symbols.V
+	if a.out {
+		s = &symbols.ReferenceLeaving
 	}
-	segment(normalPen, a.at.X, a.at.Y, a.at.X+dx*arrowLead, a.at.Y+dy*arrowLead).draw(p)
-	tip, back := arrowLead, arrowLead-0.5
-	if !a.out {
-		tip, back = arrowTip, arrowTip+0.5
+	if a.turn == 'N' || a.turn == 'S' {
+		turn = symbols.HU
 	}
-	t := point{a.at.X + dx*tip, a.at.Y + dy*tip}
-	u := point{a.at.X + dx*back, a.at.Y + dy*back}
-	(&stroke{pts: []point{{u.X - dy*0.4, u.Y + dx*0.4}, t, {u.X + dy*0.4, u.Y - dx*0.4}}, pen: normalPen}).draw(p)
+	s.Draw(p.c, symbols.On(a.at.X, a.at.Y, turn), normalPen, "")
 }

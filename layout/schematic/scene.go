@@ -24,7 +24,7 @@ func (n node) point() point { return point{float64(n.X), float64(n.Y)} }
 
 // The classes of objects, in drawing order.
 const (
-	classFrame     = "frame"
+	classBoundary  = "boundary"
 	classGuide     = "guide"
 	classWire      = "wire"
 	classRail      = "rail"

@@ -17,7 +17,7 @@ import (
 // Sheet is one drawn sheet.
 type Sheet struct {
 	Number     int    // schematic sheet number, from 1
-	Kind       string // "Overview diagram" or "Circuit diagram"
+	Kind       string // document type, as the title block has it
 	Title      string // of the job
 	Supplement string // "Supply and battery"
 	Paper      sheet.Format
@@ -27,6 +27,12 @@ type Sheet struct {
 	cautions []sheet.Caution
 	notes    []string
 }
+
+// The document types of the sheets.
+const (
+	overviewDiagram = "Overview diagram"
+	circuitDiagram  = "Circuit diagram"
+)
 
 // book is the set of sheets while it is drawn.
 type book struct {
@@ -103,7 +109,7 @@ func (b *book) make() error {
 	b.boardSheets = boards
 	overviews := b.planOverview()
 	for _, title := range overviews {
-		b.sheet("Overview diagram", title)
+		b.sheet(overviewDiagram, title)
 	}
 	first := len(b.sheets) + 1
 	for i, s := range stages {
@@ -120,12 +126,12 @@ func (b *book) make() error {
 		b.drawnOn(s.number, []*circuit.Part{bd.Plus, bd.Minus})
 	}
 	for _, s := range stages {
-		if err := b.drawStages(b.sheet("Circuit diagram", s.title), s); err != nil {
+		if err := b.drawStages(b.sheet(circuitDiagram, s.title), s); err != nil {
 			return err
 		}
 	}
 	for _, s := range boards {
-		if err := b.drawBoard(b.sheet("Circuit diagram", s.title), s); err != nil {
+		if err := b.drawBoard(b.sheet(circuitDiagram, s.title), s); err != nil {
 			return err
 		}
 	}

@@ -1,7 +1,7 @@
 package schematic
 
 import (
-	"strings"
+	"slices"
 
 	"gloamwright/internal/circuit"
 	"gloamwright/layout/ink"
@@ -74,7 +74,11 @@ func (k *sketcher) symbol(it *circuit.SketchItem) {
 
 // labelLines are the designation and the ratings of a part, one a line.
 func (k *sketcher) labelLines(it *circuit.SketchItem) []string {
-	return append([]string{it.Part.Designation}, valueLines(it.Part, labelRoom)...)
+	lines := append([]string{it.Part.Designation}, valueLines(it.Part, labelRoom)...)
+	if c := signalColour(it.Part); c != "" { // the symbol bears it
+		lines = slices.DeleteFunc(lines, func(s string) bool { return s == c })
+	}
+	return lines
 }
 
 func labelStack(o *object, lines []string, x, y float64, a ink.Anchor) {
@@ -163,9 +167,11 @@ func partName(p *circuit.Part) string {
 
 // signalColour is the mark in a signal lamp's slot.
 func signalColour(p *circuit.Part) string {
-	for _, v := range p.Values {
-		if strings.EqualFold(v.Name, "colour") {
-			return v.Text
+	if p.Kind == circuit.SignalLamp {
+		for _, v := range p.Values {
+			if v.Name == "colour" {
+				return v.Text
+			}
 		}
 	}
 	return ""

@@ -69,7 +69,7 @@ func (k *sketcher) item(it *circuit.SketchItem) {
 	case circuit.OpPair:
 		k.pair(it)
 	case circuit.OpPlace:
-		o := k.sc.object(classFrame, "place-"+it.Place.Designation, it.Place.Designation+" "+it.Place.Name)
+		o := k.sc.object(classBoundary, "place-"+it.Place.Designation, it.Place.Designation+" "+it.Place.Name)
 		a, c := k.at(it.X, it.Y), k.at(it.X2, it.Y2)
 		boundary(o, a.X, a.Y, c.X, c.Y, "")
 		o.add(textAt(a.X+0.8, a.Y+1.8, placeName(it.Place, it.X2-it.X-1.1), valueStyle, ink.Start))
@@ -96,10 +96,10 @@ func points(n []node) []point {
 // frame draws the stage's boundary, heading, place and purpose.
 func (k *sketcher) frame() {
 	st := k.x.st
-	o := k.sc.object(classFrame, "stage-"+st.Name, st.Heading, ink.Attr{Name: "stage", Value: st.Name})
+	o := k.sc.object(classBoundary, "stage-"+st.Name, st.Heading, ink.Attr{Name: "stage", Value: st.Name})
 	w := float64(st.Sketch.Width)
 	boundary(o, k.x0, rowFrameTop, k.x0+w, rowFrameEnd, "")
-	o.add(textAt(k.x0, rowHeading, fit(st.Heading, headStyle, k.headingRoom()), headStyle, ink.Start))
+	o.add(textAt(k.x0+k.x.head, rowHeading, k.x.headText, k.x.headSize, ink.Start))
 	if st.Place != nil {
 		room := k.clear(rowFrameTop, rowFrameTop+2) - 0.8 - 0.5
 		o.add(textAt(k.x0+0.8, rowFrameTop+1.8, stagePlace(st.Place, room), valueStyle, ink.Start))
@@ -129,17 +129,6 @@ func (k *sketcher) clear(y0, y1 float64) float64 {
 		}
 	}
 	return free
-}
-
-// headingRoom is how long the heading may be: to the first lead that passes it.
-func (k *sketcher) headingRoom() float64 {
-	room := float64(k.x.st.Sketch.Width) + gapPlain
-	for _, l := range k.x.leads() {
-		if l.x > 0 && !strings.HasPrefix(l.term.Key, "") {
-			room = min(room, float64(l.x))
-		}
-	}
-	return room
 }
 
 // stagePlace is what the frame of a stage says of its place: the designation for
@@ -183,7 +172,7 @@ func (k *sketcher) core(it *circuit.SketchItem) {
 	if c.Size.Area > 0 {
 		o.add(textAt(p.X, p.Y+linePitch, c.Size.String(), valueStyle, ink.Start))
 	}
-	o.add(textAt(p.X, p.Y+2*linePitch, c.Length.String(), valueStyle, ink.Start))
+	o.add(textAt(p.X, p.Y+2*linePitch, metres(c.Length), valueStyle, ink.Start))
 }
 
 // pair draws the upright oval of a cable and what is written at it.
@@ -196,7 +185,7 @@ func (k *sketcher) pair(it *circuit.SketchItem) {
 
 // cableText writes a cable's name and length, and under it cores and size.
 func cableText(o *object, c *circuit.Cable, x, y float64) {
-	o.add(&line{at: point{x, y}, runs: []run{{s: c.Designation, st: nameStyle}, {s: c.Length.String(), st: valueStyle}}})
+	o.add(&line{at: point{x, y}, runs: []run{{s: c.Designation, st: nameStyle}, {s: metres(c.Length), st: valueStyle}}})
 	if s := coresAndSize(c); s != "" {
 		o.add(textAt(x, y+linePitch, s, valueStyle, ink.Start))
 	}
@@ -204,7 +193,7 @@ func cableText(o *object, c *circuit.Cable, x, y float64) {
 
 // mains draws the boundary of the mains side: frame, rings, leads.
 func (k *sketcher) mains(it *circuit.SketchItem) {
-	o := k.sc.object(classFrame, "mains-"+k.x.st.Name, "Mains side: licensed persons only", ink.Attr{Name: "stage", Value: k.x.st.Name})
+	o := k.sc.object(classBoundary, "mains-"+k.x.st.Name, "Mains side: licensed persons only", ink.Attr{Name: "stage", Value: k.x.st.Name})
 	first, last := float64(it.Ys[0]), float64(it.Ys[len(it.Ys)-1])
 	a, c := k.at(it.X, first-9), k.at(it.X+9, last+4)
 	boundary(o, a.X, a.Y, c.X, c.Y, "")

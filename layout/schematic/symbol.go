@@ -61,6 +61,7 @@ type pinAt struct {
 	at   node
 	part *circuit.Part
 	name string // of the part; empty for the free side of a mains ring
+	own  string // the symbol's name for it
 }
 
 // pinsAt are the pins of a placed symbol on the sheet.
@@ -74,7 +75,7 @@ func (y *symbol) pinsAt() []pinAt {
 		if n, ok := y.pins[name]; ok {
 			name = n
 		}
-		out = append(out, pinAt{node{y.at.X + p.X, y.at.Y + p.Y}, y.part, name})
+		out = append(out, pinAt{node{y.at.X + p.X, y.at.Y + p.Y}, y.part, name, p.Name})
 	}
 	return out
 }
@@ -94,7 +95,7 @@ func (y *symbol) draw(s *scene) {
 			id = p.part.Key + ":" + p.name
 		}
 		y.obj.add(&pinMark{ink.Object{ID: s.id("pin-" + id), Class: "pin", Title: id,
-			Data: []ink.Attr{{Name: "pin", Value: id}, {Name: "part", Value: partName(p.part)}, {Name: "name", Value: p.name},
+			Data: []ink.Attr{{Name: "pin", Value: id}, {Name: "part", Value: partName(p.part)}, {Name: "name", Value: p.name}, {Name: "own", Value: p.own},
 				{Name: "x", Value: decimal(p.at.X)}, {Name: "y", Value: decimal(p.at.Y)}}}})
 	}
 }

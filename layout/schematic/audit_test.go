@@ -1,0 +1,52 @@
+package schematic
+
+import (
+	"fmt"
+	"testing"
+
+	"gloamwright/internal/design"
+	"gloamwright/internal/sitegen"
+	"gloamwright/layout/schematic/audit"
+)
+
+// Every sheet of the descriptions that come with the program is free of faults and
+// connects exactly what the circuit connects, read from the calls and from the files.
+func TestSamplesPassTheAudit(t *testing.T) {
+	for name, src := range samples(t) {
+		t.Run(name, func(t *testing.T) {
+			d := designed(t, src)
+			for _, files := range []bool{false, true} {
+				for _, f := range audit.Judge(drawn(t, d, files), audit.FromCircuit(d.Circuit)) {
+					t.Error(f)
+				}
+			}
+		})
+	}
+}
+
+// varied is how many generated sites are drawn.
+const varied = 200
+
+// Every generated site is drawn without a fault: with what sizing found, and with
+// ratings as long as they come.
+func TestGeneratedSitesPassTheAudit(t *testing.T) {
+	count := varied
+	if testing.Short() {
+		count = varied / 10
+	}
+	for i := range count {
+		n, o := sitegen.Varied(i)
+		t.Run(fmt.Sprint(i), func(t *testing.T) {
+			src := sitegen.Site(n, o)
+			list := []*design.Design{dressed(t, parsed(t, src))}
+			if d, err := design.Make(parsed(t, src), nil); err == nil {
+				list = append(list, d)
+			}
+			for _, d := range list {
+				for _, f := range audit.Judge(drawn(t, d, false), audit.FromCircuit(d.Circuit)) {
+					t.Errorf("%v (%d luminaires, %+v)", f, n, o)
+				}
+			}
+		})
+	}
+}
