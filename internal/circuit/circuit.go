@@ -177,6 +177,7 @@ type Join struct{ A, B *Pin }
 
 // Rail names a potential that is drawn as one line: 1L+, L−, P+.
 type Rail struct {
+	Key      string // stable identity: what feeds it; "" for L−
 	Name     string
 	Pins     []*Pin // every pin on it, in the energy's order
 	Size     quantity.WireSize

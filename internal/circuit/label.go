@@ -92,6 +92,8 @@ func (c *Circuit) Label(kept Labels) Labels {
 		sort := k[:strings.IndexByte(k+"/", '/')]
 		n.taken[sort+" "+kept[k]] = true
 	}
+	c.labelPlaces(n)
+	c.labelRails(n)
 	c.labelParts(n)
 	c.labelTerminals(n)
 	c.labelCables(n)

@@ -9,6 +9,8 @@ import (
 	"pgregory.net/rapid"
 
 	"gloamwright/internal/circuit"
+	"gloamwright/internal/describe"
+	"gloamwright/internal/stage"
 )
 
 // lamps returns the designations of a circuit's luminaires by path.
@@ -121,6 +123,52 @@ func TestWaysStay(t *testing.T) {
 	}
 	if got := wayOf(now, "annex"); got != wayOf(old, "annex") {
 		t.Errorf("annex: way %q, was %q", got, wayOf(old, "annex"))
+	}
+}
+
+// A stage put in between, or a board before another, renames nothing that was there.
+func TestRailsAndPlacesStay(t *testing.T) {
+	r, old := label(t, nil, twoCircuits)
+	src := strings.Replace(fmt.Sprintf(station, twoCircuits), "  guard:    {kind: low-voltage-disconnect, from: store}",
+		"  cut:      {kind: isolator, from: store}\n  guard:    {kind: low-voltage-disconnect, from: cut}", 1)
+	src = strings.Replace(src, "  annex: ", "  aloft:    {kind: distribution-board, from: main, along: 9 m, ways: 2}\n  annex: ", 1)
+	site, list := describe.Parse("t.yaml", []byte(src), stage.Schema())
+	if list.HasErrors() {
+		t.Fatal(list)
+	}
+	kept, _ := r.Keep(site)
+	now := stage.Expand(site)
+	now.Label(kept)
+	names := func(c *circuit.Circuit) map[string]string {
+		out := map[string]string{}
+		for _, rail := range c.Rails {
+			if rail.Key != "" {
+				out["rail "+rail.Key] = rail.Name
+			}
+		}
+		for _, p := range c.Places {
+			out["place "+p.Key] = p.Designation
+		}
+		return out
+	}
+	was, is := names(old), names(now)
+	if len(is) != len(was)+3 { // the isolator's rail, the new board's rail and place
+		t.Errorf("was %v, is %v", was, is)
+	}
+	taken := map[string]string{}
+	for _, id := range circuit.SortedKeys(is) {
+		if o, ok := was[id]; ok && o != is[id] {
+			t.Errorf("%s was %s, is %s", id, o, is[id])
+		}
+		if other, twice := taken[is[id]]; twice {
+			t.Errorf("%s and %s are both %s", id, other, is[id])
+		}
+		taken[is[id]] = id
+	}
+	for _, w := range now.Conductors {
+		if name, _, ok := strings.Cut(w.Number, "."); ok && name != w.Rail {
+			t.Errorf("%s stands on the rail %s", w.Number, w.Rail)
+		}
 	}
 }
 

@@ -51,6 +51,7 @@ var labelForms = []struct {
 	{"strip", "-X1", regexp.MustCompile(`^-X[1-9][0-9]*$`)},
 	{"tp", "TP1", regexp.MustCompile(`^TP[1-9][0-9]*$`)},
 	{"wire", "31", regexp.MustCompile(`^(?:[1-9][0-9]*|W?[1-9][0-9]*[+−]|(?:[1-9][0-9]*)?L[+−]\.[1-9][0-9]*|P[0-9]*\+\.[1-9][0-9]*)$`)},
+	{"rail", "1L+", regexp.MustCompile(`^(?:[1-9][0-9]*L|P[0-9]*)\+$`)},
 	{"place", "+A1", regexp.MustCompile(`^\+[A-Z][1-9][0-9]*$`)},
 }
 

@@ -213,7 +213,7 @@ func (b *Build) nameRails(list []*describe.Stage) {
 	for _, s := range list {
 		for _, p := range kindOf(s.Kind.Val).Ports {
 			key := s.Name.Val + "." + p.Name
-			if p.Sink || p.Signal && b.takers(s, key) < 2 || !p.Signal && !b.used(key) && p.Name != "plus" {
+			if p.Sink || p.Signal && (kindOf(s.Kind.Val).Class == BoardClass || b.takers(s, key) < 2) || !p.Signal && !b.used(key) && p.Name != "plus" {
 				continue
 			}
 			var name string
@@ -227,7 +227,7 @@ func (b *Build) nameRails(list []*describe.Stage) {
 				main++
 				name = fmt.Sprintf("%dL+", main)
 			}
-			r := &circuit.Rail{Name: name, Positive: true}
+			r := &circuit.Rail{Key: key, Name: name, Positive: true}
 			b.rails[key] = r
 			b.C.Rails = append(b.C.Rails, r)
 		}

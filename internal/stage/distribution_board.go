@@ -115,7 +115,7 @@ func (b *Build) feeder(bd *circuit.Board, s *describe.Stage) {
 			name++
 		}
 	}
-	r := &circuit.Rail{Name: fmt.Sprintf("%dL+", name+1), Positive: true}
+	r := &circuit.Rail{Key: s.Name.Val + ".feeder", Name: fmt.Sprintf("%dL+", name+1), Positive: true}
 	b.C.Rails = append(b.C.Rails, r)
 	b.onRail(r, bd.InPlus.Pin("in"))
 	b.onRail(r, bd.Plus.Pin("in"))

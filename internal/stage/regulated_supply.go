@@ -47,7 +47,7 @@ func regulatedSupply() *Kind {
 func (b *Build) outRail(s *describe.Stage, port string) string {
 	key := s.Name.Val + "." + port
 	if b.rails[key] == nil {
-		r := &circuit.Rail{Name: "P+", Positive: true}
+		r := &circuit.Rail{Key: key, Name: "P+", Positive: true}
 		b.rails[key] = r
 		b.C.Rails = append(b.C.Rails, r)
 	}
