@@ -20,7 +20,7 @@ type Evidence struct {
 
 // String returns the source with its remark, ready to print.
 func (e Evidence) String() string {
-	if e.Seen || e.Source == "" {
+	if e.Seen || e.Source == "" || e.Source == CommonPractice.Source {
 		return e.Source
 	}
 	return e.Source + " (from memory)"
