@@ -33,7 +33,8 @@ func ChargeImpedance(in ImpedanceInput) (quantity.Ohm, []Working, error) {
 	first, last := float64(in.Set-in.Diode-in.Empty), float64(in.Set-in.Diode-in.Full)
 	mean := logMean(first, last)
 	least := first / float64(in.Most) / in.Ratio
-	most := mean / float64(in.Need) / in.Ratio
+	need := max(float64(in.Need), leastNeed)
+	most := mean / need / in.Ratio
 	steady := float64(in.Steady) / float64(in.Changing) / in.Ratio
 	const source = "output impedance of the adjustable regulator (datasheet application)"
 	ws := []Working{{
@@ -46,7 +47,7 @@ func ChargeImpedance(in ImpedanceInput) (quantity.Ohm, []Working, error) {
 		Value:       mean, Unit: "V", Source: "logarithmic mean of an exponential approach",
 	}, {
 		Name: "output-impedance resistor, at most", Formula: "R_s ≤ ΔU ÷ I_need ÷ (1 + R2 ÷ R1)",
-		Substituted: fmt.Sprintf("%s ÷ %s ÷ %s", num(mean, "V"), num(float64(in.Need), "A"), num(in.Ratio, "")),
+		Substituted: fmt.Sprintf("%s ÷ %s ÷ %s", num(mean, "V"), num(need, "A"), num(in.Ratio, "")),
 		Value:       most, Unit: "Ω", Source: source, Uses: []string{"mean of the charging voltage"},
 	}}
 	if in.Pinned > 0 {
@@ -75,6 +76,9 @@ func ChargeImpedance(in ImpedanceInput) (quantity.Ohm, []Working, error) {
 	})
 	return quantity.Ohm(fit), ws, nil
 }
+
+// leastNeed is a current below which nothing has to be charged.
+const leastNeed = 1e-3
 
 // leastSense is the smallest resistor worth fitting: below it leads and joints count.
 const leastSense = 0.05

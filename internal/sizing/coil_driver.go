@@ -46,6 +46,12 @@ func CoilDriverResistors(in CoilDriverInput) (CoilDriver, []Working, error) {
 	d.Off = min(offMost, quantity.Ohm(catalogue.E24.AtMost(off)))
 	ib := float64(in.Low)/least/q.Forced + ube/float64(d.Off)
 	r := (float64(in.Low)-ube-sat)/ib - float64(k.Series)
+	if r <= 0 {
+		return d, nil, &BlockedError{
+			Limit: LimitVoltage, Subject: "the supply of the coil's driver", Value: float64(in.Low), Bound: ube + sat, Unit: "V",
+			Frees: "take a packaged module (built: module)",
+		}
+	}
 	d.Base = quantity.Ohm(catalogue.E24.AtMost(r))
 	d.Drive = quantity.Ampere((float64(in.High) - ube - sat) / (float64(d.Base) + float64(k.Series)))
 	if d.Drive > k.Sink { // drive it with less, as long as it still saturates

@@ -82,8 +82,11 @@ func linearCharger() *Kind {
 
 // Figures of a linear charger (common practice, no source): how far the float voltage
 // may follow the load that comes and goes, the accuracy with which a technician sets
-// it, the mounting of the regulator, and the rating of a diode over its current.
+// it, the mounting of the regulator, and the rating of a diode over its current. At a
+// float voltage the last part of a charge goes slowly: the resistor is chosen as if the
+// battery had to be full in a part of the time.
 const (
+	bulkShare      = 0.5
 	floatSteady    = 0.01
 	setAccuracy    = 0.005
 	regulatorMount = catalogue.CaseToSinkMica
@@ -110,14 +113,14 @@ func sizeLinearCharger(p *Plan, s *describe.Stage) {
 		diode = catalogue.Diode1N5822
 	}
 	drop := diode.Drop(load)
-	need, ws, _ := sizing.ChargerCurrent(sizing.ChargerInput{Class: p.Class, Capacity: b.Capacity, Removed: b.Removed, In: p.Site.Duty.Recharge.Val, Standing: standing + held})
+	need, ws, _ := sizing.ChargerCurrent(sizing.ChargerInput{Class: p.Class, Capacity: b.Capacity, Removed: b.Removed, In: p.Site.Duty.Recharge.Val * bulkShare, Standing: standing + held})
 	for _, w := range ws[:2] {
 		p.work(u.Designation, "", w, b.Part.Designation+": capacity fitted")
 	}
 	pinned, given := describe.Get[quantity.Ohm](s.Fields, "impedance")
 	set0 := p.Float + drop
 	imp := sizing.ImpedanceInput{
-		Set: set0, Ratio: float64(set0 / device.Reference), Diode: drop, Empty: p.Empty, Full: p.Full,
+		Set: set0, Ratio: float64(set0 / device.Reference), Diode: diode.Drop(need.Needed), Empty: p.Empty, Full: p.Full,
 		Most: most, Need: need.Needed, Changing: held, Steady: p.Float * floatSteady, Pinned: pinned.Val,
 	}
 	if k := p.stageOf(must[describe.Ref](s, "from").Stage).Kind.Val; k != "transformer-supply" && k != "regulated-supply" {
@@ -142,8 +145,8 @@ func sizeLinearCharger(p *Plan, s *describe.Stage) {
 	})
 	p.setResistors(s, u, device, setting)
 	start := p.chargerLimits(s, u, device, sizing.LinearInput{
-		Device: device, Set: setting, Battery: p.Empty, Diode: drop, Impedance: z, Ambient: p.Site.Duty.CableAmbient.Val, CaseSink: regulatorMount,
-	}, low, high)
+		Device: device, Set: setting, Battery: p.Empty, Impedance: z, Ambient: p.Site.Duty.CableAmbient.Val, CaseSink: regulatorMount,
+	}, diode, low, high)
 
 	r1 := p.part(s, "impedance")
 	set(r1, "resistance", rs.String(), float64(rs), "Ω", true, given)
@@ -265,8 +268,12 @@ func (p *Plan) setResistors(s *describe.Stage, u *circuit.Part, device catalogue
 
 // chargerLimits records the current into an empty battery, the headroom and the heat,
 // and returns that current.
-func (p *Plan) chargerLimits(s *describe.Stage, u *circuit.Part, device catalogue.AdjustableRegulator, in sizing.LinearInput, low, high func(quantity.Ampere) quantity.Volt) quantity.Ampere {
-	start := quantity.Ampere(max(0, min(float64(device.Current), float64(in.Set-in.Diode-in.Battery)/float64(in.Impedance))))
+func (p *Plan) chargerLimits(s *describe.Stage, u *circuit.Part, device catalogue.AdjustableRegulator, in sizing.LinearInput, diode catalogue.Diode, low, high func(quantity.Ampere) quantity.Volt) quantity.Ampere {
+	start := device.Current
+	for range 5 { // the diode's drop follows the current a little
+		in.Diode = diode.Drop(start)
+		start = quantity.Ampere(max(0, min(float64(device.Current), float64(in.Set-in.Diode-in.Battery)/float64(in.Impedance))))
+	}
 	in.SupplyLow, in.SupplyTop, in.SupplyOff = low(start), high(start), high(0)
 	l, ws, err := sizing.LinearCharger(in)
 	if err != nil {

@@ -100,30 +100,13 @@ func sizeComparator(p *Plan, s *describe.Stage, dark, light quantity.Lux) {
 	nominal := p.Site.Duty.Nominal.Val
 	in := sizing.TwilightInput{Cell: cell, Dark: dark, Bright: light, Most: p.Highest}
 	drive := sizing.CoilDriverInput{Transistor: pnp, Comparator: comp, Low: p.End, High: p.Highest, Coil: coil, CoilTol: class.CoilTol}
-	// Card and driver depend on each other a little: the driver's resistors hold the
-	// output up, and the current of the hysteresis flows through them.
-	var t sizing.Twilight
-	var d sizing.CoilDriver
-	var ws, wd []sizing.Working
-	var err, errD error
-	for range 3 {
-		in.PullUp = d.Base + d.Off
-		in.Low = (float64(comp.Saturation) + float64(comp.Series)*float64(d.Drive)) / float64(nominal)
-		if t, ws, err = sizing.TwilightCard(in); t.Hysteresis == 0 {
-			break
+	t, d, ws, wd, err := comparatorCard(in, drive, nominal)
+	if err != nil {
+		p.block(k.Designation, k.At, "", err)
+		if t.Hysteresis == 0 || d.Base == 0 { // values with which the circuit can be solved
+			in.Dark, in.Bright, drive.Low = 10, 10*twilightRatio, nominal
+			t, d, _, _, _ = comparatorCard(in, drive, nominal)
 		}
-		drive.Feedback = t.Source + t.Hysteresis
-		d, wd, errD = sizing.CoilDriverResistors(drive)
-	}
-	for _, e := range []error{err, errD} {
-		if e != nil {
-			p.block(k.Designation, k.At, "", e)
-		}
-	}
-	if t.Hysteresis == 0 { // no card for such thresholds; the findings say so
-		in.Bright = dark * twilightRatio
-		t, _, _ = sizing.TwilightCard(in)
-		d, _, _ = sizing.CoilDriverResistors(drive)
 	}
 	for _, w := range ws {
 		p.work(k.Designation, "", w)
@@ -160,6 +143,28 @@ func sizeComparator(p *Plan, s *describe.Stage, dark, light quantity.Lux) {
 	// What the card takes: its divider and comparator always, base and light divider by day.
 	p.Standing += comp.Own + quantity.Ampere(float64(nominal)/float64(t.Upper+t.Preset+t.Lower))
 	p.Held += d.Drive + quantity.Ampere(float64(nominal)/float64(t.Load))
+}
+
+// comparatorCard sizes card and driver, which depend on each other a little: the
+// driver's resistors hold the output up, and the current of the hysteresis flows
+// through them.
+func comparatorCard(in sizing.TwilightInput, drive sizing.CoilDriverInput, nominal quantity.Volt) (t sizing.Twilight, d sizing.CoilDriver, ws, wd []sizing.Working, err error) {
+	for range 3 {
+		in.PullUp = d.Base + d.Off
+		in.Low = (float64(drive.Comparator.Saturation) + float64(drive.Comparator.Series)*float64(d.Drive)) / float64(nominal)
+		var hot error
+		if t, ws, hot = sizing.TwilightCard(in); t.Hysteresis == 0 {
+			return t, d, nil, nil, hot
+		}
+		drive.Feedback = t.Source + t.Hysteresis
+		if d, wd, err = sizing.CoilDriverResistors(drive); err == nil {
+			err = hot
+		}
+		if d.Base == 0 {
+			return t, d, ws, wd, err
+		}
+	}
+	return t, d, ws, wd, err
 }
 
 // transistor records a small transistor of a registration.

@@ -16,7 +16,7 @@ type spot struct{ x, y int }
 
 // drawnPins reads a sketch back: which pins its wires connect, as sets. Terminals of
 // level wires belong to the side whose pins are of their own piece.
-func drawnPins(t *testing.T, st *circuit.Stage, piece map[*circuit.Pin]int) [][]*circuit.Pin {
+func drawnPins(t testing.TB, st *circuit.Stage, piece map[*circuit.Pin]int) [][]*circuit.Pin {
 	t.Helper()
 	type segment struct{ a, b spot }
 	var segs []segment
@@ -205,7 +205,7 @@ func drawnPins(t *testing.T, st *circuit.Stage, piece map[*circuit.Pin]int) [][]
 }
 
 // holdsSketch compares what the sketch of every stage connects with the circuit.
-func holdsSketch(t *testing.T, c *circuit.Circuit) {
+func holdsSketch(t testing.TB, c *circuit.Circuit) {
 	t.Helper()
 	piece := c.Pieces()
 	for _, st := range c.Stages {
