@@ -32,6 +32,9 @@ func Make(site *describe.Site, kept circuit.Labels) (*Design, error) {
 		return nil, err
 	}
 	m.luminaires()
+	if err := m.collapse(); err != nil {
+		return nil, err
+	}
 	m.farEnds()
 	m.conductors()
 	m.function()

@@ -34,6 +34,7 @@ type Facts struct {
 	Faults     []*Fault
 	Workings   []sizing.Working
 	Blocked    []*Blocked
+	Collapse   *Collapse // nil: every lamp gets its power where it must
 	Totals     Totals
 }
 
@@ -338,6 +339,14 @@ type Blocked struct {
 	Remedy        string // the smallest change that frees it
 	Source        string
 	At            describe.Span
+}
+
+// Collapse says that constant-power lamps ask more than their line can carry.
+type Collapse struct {
+	Circuit   string
+	Condition string
+	Share     float64 // of the power, that the line carries at most
+	At        describe.Span
 }
 
 // Totals is the sums that summaries print.

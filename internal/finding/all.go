@@ -19,7 +19,7 @@ func All() []*Check {
 		chargerCurrent,
 		chargerFloat,
 		chargerLimit,
-		colourBlue,
+		collapse, colourBlue,
 		colourEarth,
 		colourSame,
 		conductorAmpacity,
