@@ -37,6 +37,11 @@ func Issue(path string) (*Issuance, error) {
 			return out, nil
 		}
 	}
+	if last := j.Released.Last(); last != nil {
+		if err := last.Verify(); err != nil {
+			return nil, err
+		}
+	}
 	if err := j.Compare(j.Released.Last()); err != nil {
 		return nil, err
 	}
