@@ -5,6 +5,7 @@ package circuit
 // rail; y runs down, the L− rail is at y = 56, the frame from 6 to 50.
 type Sketch struct {
 	Width   int // modules
+	Bottom  int // level of the lowest part of a sketch that is made by itself; past 50 it leaves the frame
 	Purpose []string
 	Items   []SketchItem
 }

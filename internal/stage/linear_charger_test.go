@@ -55,7 +55,7 @@ func TestLinearChargerLimits(t *testing.T) {
 	empty := 6 * 1.95
 	s := d.solve(t, network.Environment{Mains: 1.1, Charge: network.Float}, empty, nil)
 	i := s.Current(d.part(t, "float/impedance").Designation)
-	near(t, "current into an empty battery", i, float64(d.Charger.Current), 0.05)
+	near(t, "current into an empty battery", i, float64(d.Charger.Current), 0.1) // battery, fuse and wires take their part
 	within(t, "the same", i, 0.1, min(1.5, 0.25*7, 2))
 	u := d.part(t, "float/regulator")
 	heat := (d.volts(t, s, u.Key, "IN") - d.volts(t, s, u.Key, "OUT")) * i

@@ -73,7 +73,7 @@ func expandComparator(b *Build, s *describe.Stage) {
 	b.line(nil, 65, 26, 65, 18, 56, 18)
 	b.symbol("resistor", r6, 54, 18, "H", "A")
 	b.line(nil, 52, 18, 50, 18, 50, 25)
-	b.symbol("resistor", r7, 71, 26, "H", "A")
+	b.symbol("resistor", r7, 71, 26, "H", "B")
 	b.line(nil, 73, 26, 79, 26)
 	b.line(nil, 75, 26, 75, 19)
 	b.symbol("resistor", r8, 75, 17, "V", "L")

@@ -43,7 +43,7 @@ type net struct {
 	points []*describe.ExtraTestPoint
 	ends   []*single // terminals on it
 	level  int       // row of its bus, counted from the top
-	cut    bool      // opens a ring
+	cut    bool      // a plain link, drawn as a bus all the same
 }
 
 func (n *net) free() bool  { return n.rail == "" }
@@ -248,6 +248,13 @@ func (g *group) trace() {
 	}
 	g.levels()
 	for _, r := range g.runs {
+		// One that comes back to its bus or to L− gets a bus in between; only from plus to
+		// plus can a run go up again.
+		if r.top.level == r.bottom.level && (r.top.free() || r.top.minus()) {
+			r.links[0].cut, g.runs = true, nil
+			g.trace()
+			return
+		}
 		if r.top.level > r.bottom.level {
 			r.top, r.bottom = r.bottom, r.top
 			slices.Reverse(r.list)

@@ -5,7 +5,6 @@ import (
 	"slices"
 
 	"gloamwright/internal/circuit"
-	"gloamwright/internal/quantity"
 )
 
 // Measures of the block of single parts, in modules. Labels stand left of the parts;
@@ -240,6 +239,7 @@ func (x *singles) group(g *group, left int) int {
 		left += c.width()
 	}
 	slot, rows := g.bands()
+	x.b.sk.Bottom = max(x.b.sk.Bottom, rows[len(rows)-1])
 	d := &groupDrawing{x: x, g: g, slot: slot, rows: rows, taps: map[*net][]tap{}}
 	for _, r := range g.runs {
 		d.run(r)
@@ -352,9 +352,6 @@ func (d *groupDrawing) run(r *run) {
 	col, y := r.col.x, firstRow
 	if r.top.level >= 0 {
 		y = d.rows[r.top.level]
-	}
-	if r.top.minus() { // both ends on L−: cannot be, a part has two nets
-		return
 	}
 	above := r.top
 	var from *circuit.Pin
@@ -533,18 +530,19 @@ func (d *groupDrawing) bus(n *net) {
 		return
 	}
 	first, last := taps[0], taps[len(taps)-1]
-	end := last.x
-	for i, s := range n.ends {
+	for i, s := range n.ends { // one under the other, right of the bus
 		t := b.Terminal(cabinet, s.d.Name.Val)
 		t.Key, t.At, s.part = "parts/"+s.d.Name.Val, s.d.Pos, t
-		w := b.Wire(last.pin, t.Pin("in"), true, quantity.Metre(bridgeLength))
-		pts := []int{end, y, end + 2 + 3*i, y}
-		if len(taps) == 1 && i == 0 {
-			pts = append([]int{last.x, last.y}, pts...)
+		w := b.Wire(last.pin, t.Pin("in"), true, bridgeLength)
+		pts := []int{last.x + 1, y, last.x + 1, y + 2*i, last.x + 2, y + 2*i}
+		if i == 0 {
+			pts = []int{last.x, y, last.x + 2, y}
+			if len(taps) == 1 {
+				pts = append([]int{last.x, last.y}, pts...)
+			}
 		}
 		b.line(w, pts...)
-		b.add(circuit.SketchItem{Op: circuit.OpTerminal, Part: t, X: float64(end + 3), Y: float64(y)})
-		end += 3
+		b.add(circuit.SketchItem{Op: circuit.OpTerminal, Part: t, X: float64(last.x + 3), Y: float64(y + 2*i)})
 	}
 	for _, t := range n.points {
 		at := first.x + 3

@@ -19,6 +19,9 @@ func (p *Plan) singles() {
 			if part != nil && part.Kind != circuit.Relay {
 				part = nil
 			}
+		} else if part == nil && len(k.Ports) == 1 {
+			p.block("part "+d.Name.Val, d.Pos, "", &sizing.UnknownError{What: "what the terminal is for", Ask: "put it on a net that a part with two pins is on"})
+			continue
 		} else if part == nil {
 			p.block("part "+d.Name.Val, d.Pos, "", &sizing.UnknownError{What: "a use for a part with both pins on one net", Ask: "put its pins on two nets"})
 			continue
@@ -32,6 +35,11 @@ func (p *Plan) singles() {
 		p.knownNet(t.At_)
 	}
 	p.looseEnds()
+	for _, st := range p.C.Stages {
+		if st.Sketch != nil && st.Sketch.Bottom > lastRow {
+			p.block("parts", st.At, "", &sizing.UnknownError{What: "how to draw so many parts in series", Ask: "join some of them into one, such as two resistors"})
+		}
+	}
 }
 
 // knownNet refuses stage.port where the stage gives nothing there.

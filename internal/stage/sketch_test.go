@@ -110,6 +110,22 @@ func drawnPins(t testing.TB, st *circuit.Stage, piece map[*circuit.Pin]int) [][]
 	on := func(s segment, p spot) bool {
 		return min(s.a.x, s.b.x) <= p.x && p.x <= max(s.a.x, s.b.x) && min(s.a.y, s.b.y) <= p.y && p.y <= max(s.a.y, s.b.y)
 	}
+	// No wire runs through a symbol's middle.
+	for _, it := range st.Sketch.Items {
+		if it.Op != circuit.OpSymbol || it.Part == nil {
+			continue
+		}
+		for _, g := range segs {
+			if on(g, spot{int(it.X), int(it.Y)}) {
+				t.Errorf("%s: a wire runs through %s", st.Name, it.Part.Key)
+			}
+		}
+		for _, o := range st.Sketch.Items {
+			if o.Op == circuit.OpSymbol && o.Part != nil && o.Part != it.Part && max(o.X-it.X, it.X-o.X) < 3 && max(o.Y-it.Y, it.Y-o.Y) < 4 {
+				t.Errorf("%s: %s stands on %s", st.Name, it.Part.Key, o.Part.Key)
+			}
+		}
+	}
 	// Segments that share an end point, or where one ends on the other, are joined;
 	// those that only cross are not.
 	set := make([]int, len(segs))
