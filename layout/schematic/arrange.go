@@ -13,6 +13,7 @@ type plan struct {
 	title string
 	xs    []int // left edges of the frames
 	end   int   // right edge of the last frame
+	tight bool  // plus rails in three rows
 	runs  []linkRun
 	drops []dropRun
 	rails []railRun
@@ -47,6 +48,23 @@ type railRun struct {
 // than one sheet has. Sheet numbers of rails are not known while breaks are being
 // sought: a rail with pins outside is then taken to reach the edge.
 func (b *book) arrange(boxes []*stageBox, alone bool) (*plan, bool) {
+	p, ok := b.arrangeFrom(boxes, alone, 0)
+	if !ok || !p.tight {
+		return p, ok
+	}
+	for _, r := range p.rails { // close texts at the left edge need their room
+		if s := clearArriving - r.leads[0].x; s > 0 {
+			return b.arrangeFrom(boxes, alone, s)
+		}
+	}
+	return p, true
+}
+
+// clearArriving is where the first lead may stand when rails arrive in three rows.
+const clearArriving = 21
+
+// arrangeFrom is arrange with everything moved right by shift.
+func (b *book) arrangeFrom(boxes []*stageBox, alone bool, shift int) (*plan, bool) {
 	p := &plan{boxes: boxes}
 	index := map[*stageBox]int{}
 	for i, x := range boxes {
@@ -83,6 +101,9 @@ func (b *book) arrange(boxes []*stageBox, alone bool) (*plan, bool) {
 			x += gapPlain + stripWidth + gapTrack*n
 		default:
 			x += gap
+		}
+		if i == 0 {
+			x += shift
 		}
 		if i > 0 { // a heading that reaches over needs its room before leads and strip
 			over := boxes[i-1].headOver

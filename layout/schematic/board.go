@@ -17,9 +17,9 @@ const (
 	rowPlusName   = 10.1 // name of the L+ bar
 	rowMinusName  = 14.6
 	rowNumber     = 20.6 // wire numbers
-	colBoard      = 12
+	colBoard      = 11
 	colBoardFed   = 19
-	colBoardNames = 12.8
+	colBoardNames = 11.5
 	longPlace     = 24.0 // the most room of a place's name
 )
 
@@ -106,7 +106,7 @@ func (b *book) bars(sh *Sheet, s *boardSheet, xs []int, end int) {
 		w.rail, w.thick, w.name = true, true, rail.Name
 		if before > 0 && !fed {
 			obj, mate := b.railRefer(sh, rail, before, node{x0, r.y})
-			obj.add(&line{at: point{colBoardNames, r.text}, runs: []run{{s: rail.Name, st: nameStyle}, {to: mate}}})
+			obj.add(&line{at: point{colBoardNames, r.text}, runs: []run{{s: rail.Name, st: nameStyle}, {to: mate}}, close: before > 9})
 		}
 		if after > 0 {
 			obj, mate := b.railRefer(sh, rail, after, node{x1, r.y})

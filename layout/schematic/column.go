@@ -200,6 +200,7 @@ func (r *runner) run(points []*circuit.Point, row, lane int, plus, minus []node,
 				return row
 			}
 			r.cutDown(points[i:], row, x, plus, minus)
+			r.free[lane] = row
 			return row
 		}
 		y := lampRow(at)
@@ -221,9 +222,7 @@ func (r *runner) run(points []*circuit.Point, row, lane int, plus, minus []node,
 		}
 		plus, minus = []node{{x, y}}, []node{{x + minusCore, y}}
 	}
-	if lane < len(r.free) {
-		r.free[lane] = used
-	}
+	r.free[lane] = used
 	return used
 }
 

@@ -227,6 +227,11 @@ func (s *scene) drawDots() {
 				}
 			}
 		}
+		for _, p := range s.points {
+			if p.at == n && d < 3 {
+				p.bare = true
+			}
+		}
 		if d >= 3 && !marked[n] {
 			o := s.object(classDot, fmt.Sprintf("%d-%d", n.X, n.Y), "Junction: "+of, ink.Attr{Name: "on", Value: of})
 			o.add(&disc{n.point(), r})

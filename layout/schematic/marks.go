@@ -118,18 +118,31 @@ func (b *book) probe(sh *Sheet, tp *circuit.TestPoint, at node, side string) {
 // farEnd is how far a core goes on below the last luminaire to its test point.
 const farEnd = 3.0
 
+// bareEnd is the same at a wire that ends in a test point elsewhere.
+const bareEnd = 1.5
+
 // tagGap is from the middle of a test point's ring to its tag.
 const tagGap = 0.6
 
 func (p *probe) draw(q *painter) {
-	if p.side != "F" {
-		d := map[string]symbols.Dir{"N": symbols.Up, "S": symbols.Down, "E": symbols.Right, "W": symbols.Left}[p.side]
+	d := map[string]symbols.Dir{"N": symbols.Up, "S": symbols.Down, "E": symbols.Right, "W": symbols.Left, "F": symbols.Down}[p.side]
+	if !p.bare && p.side != "F" {
 		symbols.Probe(q.c, mm(p.at.point()), d, normalPen, p.label)
 		return
 	}
-	// At a far end the core itself goes on to the ring.
-	x, y := float64(p.at.X), float64(p.at.Y)+farEnd
-	segment(normalPen, x, y-farEnd, x, y-ringRadius).draw(q)
-	(&ring{point{x, y}, ringRadius}).draw(q)
-	symbols.Tag(q.c, mm(point{x + tagGap, y}), p.label, ink.Start)
+	// The wire itself goes on to the ring: no joint, so no dot.
+	dx, dy := d.Step()
+	reach := farEnd
+	if p.side != "F" {
+		reach = bareEnd
+	}
+	x, y := float64(p.at.X), float64(p.at.Y)
+	rx, ry := x+reach*float64(dx), y+reach*float64(dy)
+	segment(normalPen, x, y, rx-ringRadius*float64(dx), ry-ringRadius*float64(dy)).draw(q)
+	(&ring{point{rx, ry}, ringRadius}).draw(q)
+	at, anchor := point{rx + tagGap, ry}, ink.Start
+	if p.side == "W" {
+		at, anchor = point{rx - tagGap, ry}, ink.End
+	}
+	symbols.Tag(q.c, mm(at), p.label, anchor)
 }

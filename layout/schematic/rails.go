@@ -54,7 +54,11 @@ func (b *book) layRails(p *plan) bool {
 		}
 	}
 	slices.SortStableFunc(order, func(x, y *railRun) int { return cmp.Compare(x.leads[0].x, y.leads[0].x) })
-	ok := layRows(order, rowsTwo) || layRows(order, rowsThree)
+	ok := layRows(order, rowsTwo)
+	if !ok {
+		p.tight = true
+		ok = layRows(order, rowsThree)
+	}
 	for _, run := range order {
 		if !run.rail.Positive {
 			run.y = rowMinus

@@ -143,7 +143,8 @@ type symbol struct {
 // probe is a test point's mark: a dot on the wire, a stub, a ring, a tag.
 type probe struct {
 	at    node
-	side  string // N, E, S, W; C: the ring ends the wire itself
+	side  string // N, E, S, W; F at the far end of a circuit
+	bare  bool   // the wire ends here: no joint
 	label string
 	obj   *object
 }

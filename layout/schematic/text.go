@@ -74,10 +74,18 @@ type line struct {
 	anchor ink.Anchor
 	runs   []run
 	white  bool
+	close  bool // little room between the pieces
+}
+
+func (l *line) gap() float64 {
+	if l.close {
+		return wordGap / 2
+	}
+	return wordGap
 }
 
 func (l *line) width() float64 {
-	w := wordGap * float64(len(l.runs)-1)
+	w := l.gap() * float64(len(l.runs)-1)
 	for _, r := range l.runs {
 		w += width(r.text(), r.st)
 	}
@@ -103,7 +111,7 @@ func (l *line) draw(p *painter) {
 		if r.to != nil {
 			p.link(point{x, l.at.Y - textHeight}, w, textHeight, r.to)
 		}
-		x += w + wordGap
+		x += w + l.gap()
 	}
 }
 
