@@ -80,6 +80,10 @@ func live(v float64) float64 {
 	return v
 }
 
+// leakage is a current that no meter of the trade shows: what flows through the
+// insulation of a dead wire.
+const leakage quantity.Ampere = 1e-6
+
 // copperDensity is 8.89 g/cm³ (IEC 60028), in kg per metre and mm².
 const copperDensity = 8.89e-3
 
@@ -115,6 +119,9 @@ func (m *maker) conductors() {
 		if inNet[w.Number] {
 			for _, cond := range m.f.Conditions {
 				c.Current = max(c.Current, quantity.Ampere(math.Abs(m.solved[cond.Key].Current(w.Number))))
+			}
+			if c.Current < leakage {
+				c.Current = 0
 			}
 		}
 		m.f.Conductors = append(m.f.Conductors, c)
