@@ -13,7 +13,7 @@ func (b *book) cautions() *section {
 		purpose: "Use this sheet to know what can hurt you here, and who may do which work.",
 		note:    "Read it before any other sheet, and once more before the battery goes in."}
 	var absent []string
-	first := true
+	first, noticed := true, false
 	for i := range b.words.texts.Cautions {
 		c := &b.words.texts.Cautions[i]
 		if !b.words.applies(c.When) {
@@ -27,6 +27,9 @@ func (b *book) cautions() *section {
 			x.gap = 0
 		}
 		first = false
+		if c.Signal == "notice" && !noticed {
+			x.group, noticed = true, true
+		}
 		s.blocks = append(s.blocks, x)
 	}
 	s.blocks = append(s.blocks, b.competence()...)

@@ -133,7 +133,7 @@ func thresholdBand(t *facts.Threshold) string {
 // checklist is commissioning from the first look to the hand-over.
 func (b *book) checklist() *section {
 	s := &section{key: keyChecklist, title: "Commissioning", document: "Commissioning checklist", letter: "K", label: "Before"}
-	t := &table{st: lineText, min: plainRow, cols: []column{{head: "Line", w: 10}, {head: "Do", w: 76}, {head: "Expect", w: 28}, {head: "Measured", w: 34},
+	t := &table{st: lineText, min: plainRow, cols: []column{{head: "Line", w: 10}, {head: "Do", w: 76, pad: 3}, {head: "Expect", w: 28}, {head: "Measured", w: 34},
 		{head: "OK     Not", w: 19, a: midAnchor}, {head: "Initials", w: 13, a: midAnchor}}}
 	head := t.head(0)
 	s.heads = &head

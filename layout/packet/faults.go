@@ -86,11 +86,11 @@ func (b *book) faultFinding() *section {
 	if len(blocks) == 0 {
 		return nil
 	}
-	s := &section{key: keyFaults, title: "Fault finding", document: "Fault-finding table", letter: "T", label: "How",
+	s := &section{key: keyFaults, title: "Fault finding", document: "Fault-finding table", letter: "H", label: "How",
 		purpose: "Use this sheet to go from what you see, by one reading at a time, to the part.",
 		note:    "Find the block that fits. Set the condition. Measure from its top; stop where the reading fits."}
-	t := &table{st: tableText, min: plainRow, cols: []column{{head: "Step", w: 9, a: midAnchor}, {head: "Measure", w: 47, indent: 2},
-		{head: "If it shows", w: 35}, {head: "Most likely", w: 45}, {head: "Do", w: 44}}}
+	t := &table{st: tableText, min: plainRow, cols: []column{{head: "Step", w: 9, a: midAnchor}, {head: "Measure", w: 46, indent: 2},
+		{head: "If it shows", w: 39}, {head: "Most likely", w: 44}, {head: "Do", w: 42}}}
 	head := t.head(0)
 	s.heads = &head
 	for i, x := range blocks {
@@ -123,7 +123,7 @@ func (b *book) numbered(n int, name, remark string, gap float64) block {
 	room := b.pg.width - 13
 	lines := wrap(name, groupHead, room)
 	h := max(7, float64(len(lines))*groupHead.lead+3)
-	return block{h: h, gap: gap, next: true, draw: func(p *pad, y, h float64) {
+	return block{h: h, gap: gap, next: true, group: true, draw: func(p *pad, y, h float64) {
 		p.fill(p.pg.l, y, p.pg.width, h, ink.Tint)
 		p.fill(p.pg.l, y, 9, h, ink.Black)
 		p.write(p.pg.l+4.5, y+h/2+1.4, fmt.Sprint(n), style{ink.Bold, 11, 4, ink.White}, ink.Middle)

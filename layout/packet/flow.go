@@ -9,11 +9,13 @@ import (
 
 // block is a piece of a sheet that is never split.
 type block struct {
-	h    float64
-	gap  float64 // clear above, but not at the top of a sheet
-	next bool    // stays on one sheet with the block after it
-	fill bool    // takes what is left of the sheet, up to most
-	most float64
+	h     float64
+	gap   float64 // clear above, but not at the top of a sheet
+	next  bool    // stays on one sheet with the block after it
+	head  bool    // column heads that a sheet repeats
+	group bool    // begins a group that may move to the next sheet
+	fill  bool    // takes what is left of the sheet, up to most
+	most  float64
 	// above is drawn over the block where a sheet goes on with it: the column heads of
 	// its table.
 	above *block
@@ -85,9 +87,64 @@ func (s *sheetPlan) short() string {
 	return s.s.title
 }
 
-// paginate breaks the blocks of a section into sheets. Gaps are drawn together where
-// that saves a sheet.
+// paginate breaks the blocks of a section into sheets and evens out the last two. Gaps
+// are drawn together where that saves a sheet.
 func (s *section) paginate(pg page) []*sheetPlan {
+	out := s.packed(pg)
+	if len(out) > 1 {
+		s.balance(out, pg)
+	}
+	return out
+}
+
+// Shares of the body of a sheet: below leastFull the last sheet of a section takes a
+// group more, if the sheet before it keeps leastLeft.
+const (
+	leastFull = 0.6
+	leastLeft = 0.35
+)
+
+// balance moves the last group of the sheet before the last one onto a last sheet that is
+// little filled.
+func (s *section) balance(list []*sheetPlan, pg page) {
+	last, before := list[len(list)-1], list[len(list)-2]
+	room := pg.end() - pg.top()
+	if s.heads != nil {
+		room -= s.heads.h
+	}
+	if stacked(last.blocks) >= leastFull*room || last.blocks[0].opens != nil {
+		return
+	}
+	rest := last.blocks
+	if rest[0].head {
+		rest = rest[1:] // the sheet goes on with rows: their heads move along
+	}
+	for k := len(before.blocks) - 1; k > 0; k-- {
+		if !before.blocks[k].group {
+			continue
+		}
+		moved := slices.Concat(before.blocks[k:], rest)
+		if stacked(moved) > room+slack || stacked(before.blocks[:k]) < leastLeft*room {
+			return
+		}
+		before.setBlocks(before.blocks[:k])
+		last.setBlocks(moved)
+		return
+	}
+}
+
+// setBlocks puts blocks on a sheet and collects what they are about.
+func (s *sheetPlan) setBlocks(list []block) {
+	s.blocks, s.topics = list, nil
+	for _, b := range list {
+		if b.topic != "" && !slices.Contains(s.topics, b.topic) {
+			s.topics = append(s.topics, b.topic)
+		}
+	}
+}
+
+// packed breaks the blocks of a section into as few sheets as it can.
+func (s *section) packed(pg page) []*sheetPlan {
 	out := s.broken(pg)
 	if len(out) < 2 {
 		return out
@@ -133,7 +190,7 @@ func (s *section) broken(pg page) []*sheetPlan {
 	put := func(b block) {
 		if len(cur.blocks) == 0 && b.above != nil && len(out) > 1 {
 			head := *b.above
-			head.marks = nil
+			head.marks, head.head = nil, true
 			cur.blocks, at = append(cur.blocks, head), head.h
 			b.gap = 0
 		}
@@ -206,7 +263,8 @@ func (s *sheetPlan) drawBlocks(p *pad) {
 		s.s.heads.draw(p, y, s.s.heads.h)
 		y += s.s.heads.h
 	}
-	left := p.pg.end() - y - stacked(s.blocks)
+	const apart = 1.5 // of what fills a sheet from the line under it
+	left := p.pg.end() - y - stacked(s.blocks) - apart
 	for i, b := range s.blocks {
 		if i > 0 {
 			y += b.gap

@@ -245,7 +245,7 @@ func (p *pad) doorCopy(x, y, w, h float64, hd holder) {
 	p.rule(x+3, y+h-5.6, w-6, hairline, ink.Rule)
 	warn := fmt.Sprintf("Live with the mains off: DC %v. Same rating only; find the cause first.", p.b.d.Site.Duty.Nominal.Val)
 	if w < 100 {
-		warn = fmt.Sprintf("Live with the mains off: DC %v.", p.b.d.Site.Duty.Nominal.Val)
+		warn = fmt.Sprintf("Live with mains off: DC %v.", p.b.d.Site.Duty.Nominal.Val)
 	}
 	st := noteText
 	st.pt = 8

@@ -310,12 +310,13 @@ func (b *book) sleeves() []labelStrip {
 	for _, title := range order {
 		list := lists[title]
 		w := sleeveWidth(list)
+		name := sleeveName(list, w)
 		out = append(out, labelStrip{title: title, remark: fmt.Sprintf("%s %g × %d mm, 2 for each, text twice", counted(ends*len(list), "sleeve"), w, sleeveH),
 			w: w, h: sleeveH, count: ends * len(list), changed: func(i int) bool { return b.relabelled(list[i/ends]) },
 			draw: func(p *pad, i int, x, y float64) {
 				fold(p, x+w/2, y, sleeveH)
 				for _, at := range []float64{x + w/4, x + w*3/4} {
-					p.fit(at, y+4.1, list[i/ends], flagName, w/2-0.8, ink.Middle)
+					p.fit(at, y+4.1, list[i/ends], name, w/2-0.8, ink.Middle)
 				}
 			}})
 	}
@@ -337,6 +338,19 @@ func sleeveWidth(texts []string) float64 {
 		}
 	}
 	return sleeveWidths[len(sleeveWidths)-1]
+}
+
+// sleeveName is the lettering of a strip of sleeves: smaller where the longest text would
+// touch the fold.
+func sleeveName(texts []string, w float64) style {
+	const clear = 2.0
+	st := flagName
+	for _, t := range texts {
+		if spans(t, flagName).width() > w/2-clear {
+			st.pt = 8
+		}
+	}
+	return st
 }
 
 // tags are the numbers of the terminals, strip by strip.

@@ -12,35 +12,69 @@ func (b *book) legend() *section {
 	s := &section{key: keyLegend, title: "Legend", document: "Legend", letter: "G", label: "See also",
 		purpose: "Use this sheet to read every mark, reference and colour of this packet.",
 		note:    "What begins with a dash is the name of a thing, and stands on the thing itself."}
-	groups := b.words.texts.Legend
-	for i := 0; i < len(groups); i += 2 {
-		left := b.legendGroup(&groups[i], 0)
-		var right []block
-		if i+1 < len(groups) {
-			right = b.legendGroup(&groups[i+1], 92.5)
-		}
-		for k := range max(len(left), len(right)) {
-			var l, r block
-			if k < len(left) {
-				l = left[k]
-			}
-			if k < len(right) {
-				r = right[k]
-			}
-			x := beside(l, r)
-			if k == 0 {
-				x.gap = 5
-			}
-			x.next = k < 2
-			s.blocks = append(s.blocks, x)
-		}
-	}
+	s.blocks = append(s.blocks, b.legendColumns()...)
 	s.blocks = append(s.blocks, b.symbolLegend()...)
 	return s
 }
 
-// legendWide is the width of one of two columns of the legend, mm.
-const legendWide = 87.5
+// Measures of the two columns of the legend, mm.
+const (
+	legendWide  = 87.5
+	legendRight = 92.5 // left edge of the right column
+	legendGap   = 4.0  // above a group
+)
+
+// legendColumns sets the groups in two columns: each goes where there is most room, and
+// a new pair of columns begins when both are full.
+func (b *book) legendColumns() []block {
+	type piece struct {
+		y    float64
+		list []block
+	}
+	var out []block
+	var pieces []piece
+	var high [2]float64
+	flush := func() {
+		if len(pieces) == 0 {
+			return
+		}
+		now := pieces
+		out = append(out, block{h: max(high[0], high[1]), gap: legendGap, draw: func(p *pad, y, _ float64) {
+			for _, x := range now {
+				at := y + x.y
+				for _, r := range x.list {
+					r.draw(p, at, r.h)
+					at += r.h
+				}
+			}
+		}})
+		pieces, high = nil, [2]float64{}
+	}
+	for i := range b.words.texts.Legend {
+		side := 0
+		if high[1] < high[0] {
+			side = 1
+		}
+		list := b.legendGroup(&b.words.texts.Legend[i], float64(side)*legendRight)
+		h := 0.0
+		for _, x := range list {
+			h += x.h
+		}
+		y := high[side]
+		if y > 0 {
+			y += legendGap
+		}
+		if y+h > b.pg.end()-b.pg.top() {
+			flush()
+			side, y = 0, 0
+			list = b.legendGroup(&b.words.texts.Legend[i], 0)
+		}
+		pieces = append(pieces, piece{y, list})
+		high[side] = y + h
+	}
+	flush()
+	return out
+}
 
 // legendGroup is one group of signs, at x.
 func (b *book) legendGroup(g *templates.LegendGroup, x float64) []block {
@@ -120,7 +154,7 @@ func (b *book) symbolLegend() []block {
 	if len(used) == 0 {
 		return nil
 	}
-	const columns, high, scale = 3, 17.0, 0.7
+	const columns, high, scale = 4, 14.0, 0.7
 	out := []block{b.head(0, b.pg.width, "Symbols on the schematic", "IEC 60617; on "+b.sheets(keySchematic))}
 	each := b.pg.width / columns
 	var rows []block
@@ -129,20 +163,34 @@ func (b *book) symbolLegend() []block {
 		rows = append(rows, block{h: high, draw: func(p *pad, y, h float64) {
 			for k, u := range row {
 				x := p.pg.l + float64(k)*each
-				box := u.Bounds(symbols.H)
-				at := symbols.Place{Turn: symbols.H, Scale: scale}
-				fit := min(1, 20/(box.W*symbols.M*scale), (high-3)/(box.H*symbols.M*scale))
+				turn := legendTurn(u)
+				box := u.Bounds(turn)
+				at := symbols.Place{Turn: turn, Scale: scale}
+				fit := min(1, 18/(box.W*symbols.M*scale), (high-2)/(box.H*symbols.M*scale))
 				at.Scale *= fit
 				m := symbols.M * at.Scale
-				at.At = ink.Point{X: x + 11 - (box.X+box.W/2)*m, Y: y + h/2 - (box.Y+box.H/2)*m}
+				at.At = ink.Point{X: x + 9.5 - (box.X+box.W/2)*m, Y: y + h/2 - (box.Y+box.H/2)*m}
 				u.Draw(p.c, at, ink.Pen{Width: 0.3, Color: ink.Black}, "")
-				lines := wrap(upper(u.Name), tableText, each-26)
-				p.lines(x+25, y+(h-float64(len(lines))*tableText.lead)/2+rise*tableText.lead, lines, tableText.lead)
+				lines := wrap(upper(u.Name), tableText, each-22)
+				p.lines(x+20.5, y+(h-float64(len(lines))*tableText.lead)/2+rise*tableText.lead, lines, tableText.lead)
 			}
 			p.rule(p.pg.l, y+h, p.pg.width, hairline, ink.Rule)
 		}})
 	}
 	return append(out, together(rows)...)
+}
+
+// legendTurn is the turn in which the legend shows a symbol: lying, as current runs on
+// paper, but a symbol with words in it stands as it is recorded.
+func legendTurn(u *symbols.Symbol) symbols.Turn {
+	var r ink.Recorder
+	u.Draw(&r, symbols.Place{Turn: symbols.H, Scale: 1}, ink.Pen{Width: hairline, Color: ink.Black}, "")
+	for _, c := range r.Calls {
+		if w, ok := c.(ink.Written); ok && len([]rune(w.Text)) > 2 {
+			return symbols.V
+		}
+	}
+	return symbols.H
 }
 
 // symbolIDs lists the symbols of a drawing in the order in which they are drawn.

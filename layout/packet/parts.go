@@ -60,8 +60,8 @@ func (b *book) parts() *section {
 		s.note = fmt.Sprintf("If you hold parts for revision %s, read %s first.", b.d.Changes.From, b.sheets(keyChange))
 	}
 	t := &table{st: tableText, min: plainRow, cols: []column{
-		{head: "Pos", w: 8}, {head: "Qty", w: 12, a: endAnchor}, {head: "Unit", w: 8}, {head: "Designation", w: 40},
-		{head: "What it is", w: 58}, {head: "A substitute must", w: 33}, {head: "Arrived", w: 11, a: midAnchor}, {head: "Fitted", w: 10, a: midAnchor}}}
+		{head: "Pos", w: 8}, {head: "Qty", w: 12, a: endAnchor}, {head: "Unit", w: 8}, {head: "Designation", w: 39},
+		{head: "What it is", w: 54}, {head: "A substitute must", w: 38, indent: 2}, {head: "Arrived", w: 11, a: midAnchor}, {head: "Fitted", w: 10, a: midAnchor}}}
 	head := t.head(0)
 	s.heads = &head
 	pos := 0

@@ -11,11 +11,13 @@ import (
 const (
 	recordHalf  = 87.5
 	recordGap   = 5
-	recordRow   = 5.8
+	recordRow   = 5.8 // with one line
 	recordHead  = 7.0
-	figureAt    = 45.5 // right end of the reading
-	lowAt       = 54.6 // right end of the lowest value
-	gaugeStart  = 60
+	recordLead  = 3.7
+	showsAt     = 12.5
+	figureAt    = 44.0 // right end of the reading
+	lowAt       = 55.0 // right end of the lowest value
+	gaugeStart  = 60.3
 	gaugeWide   = 14
 	gaugeMissed = 3.2 // from the end that a reading missed to its mark
 )
@@ -54,7 +56,13 @@ func (b *book) recordPair(pair [][]commission.Judged, gap bool) []block {
 	}
 	var list []block
 	for i := range rows {
-		list = append(list, block{h: recordRow, draw: func(p *pad, y, h float64) {
+		h := recordRow
+		for _, g := range pair {
+			if i < len(g) {
+				h = max(h, recordRow+float64(len(recordShows(g[i]))-1)*recordLead)
+			}
+		}
+		list = append(list, block{h: h, draw: func(p *pad, y, h float64) {
 			for k, g := range pair {
 				if i < len(g) {
 					p.recordReading(float64(k)*(recordHalf+recordGap), y, h, g[i])
@@ -84,16 +92,23 @@ func (p *pad) recordHead(dx, y float64, g []commission.Judged) {
 	p.fit(x+9.5, y+4.7, g[0].Name, groupHead, recordHalf-13-w, ink.Start)
 }
 
+// recordShows is what a reading shows, in as many lines as it takes beside the figure.
+func recordShows(j commission.Judged) []line {
+	room := 22.5
+	if j.Verdict == commission.UnitSlip || j.Verdict == commission.Swapped || j.Verdict == commission.Unreadable {
+		room = 18 // the reading stands as it was written
+	}
+	return wrap(j.Shows, tableText, room)
+}
+
 // recordReading is one reading with its band as a gauge.
 func (p *pad) recordReading(dx, y, h float64, j commission.Judged) {
 	x, base, mid := p.pg.l+dx, y+h/2+1.15, y+h/2
 	small := noteText
 	p.write(x+1, base, j.Point, tableText.as(ink.Medium), ink.Start)
-	figureEnd, room := x+figureAt, 24.0
-	if j.Verdict == commission.UnitSlip || j.Verdict == commission.Swapped || j.Verdict == commission.Unreadable {
-		room = 19 // the reading stands as it was written
-	}
-	p.fit(x+12.5, base, j.Shows, tableText, room, ink.Start)
+	figureEnd := x + figureAt
+	shows := recordShows(j)
+	p.lines(x+showsAt, mid+1.15-float64(len(shows)-1)*recordLead/2, shows, recordLead)
 	switch {
 	case j.Verdict == commission.Missing:
 		p.write(x+recordHalf-1.5, base, "not measured", small.as(ink.Bold), ink.End)

@@ -236,7 +236,7 @@ func (b *book) head(x, w float64, name, remark string) block {
 
 // band is the head of a group of rows.
 func (b *book) band(name, remark string, gap float64) block {
-	return block{h: 6.5, gap: gap, next: true, draw: func(p *pad, y, h float64) {
+	return block{h: 6.5, gap: gap, next: true, group: true, draw: func(p *pad, y, h float64) {
 		p.fill(p.pg.l, y, p.pg.width, h, ink.Tint)
 		w := p.fit(p.pg.l+1.5, y+4.4, name, groupHead, p.pg.width-3, ink.Start)
 		if remark != "" {

@@ -168,6 +168,9 @@ func (b *book) matrix() *section {
 			}
 		}})
 	}
+	if room := pg.end() - pg.top() - headHigh; float64(len(rows))*high > room {
+		rows[(len(rows)+1)/2].group = true // two sheets of equal length
+	}
 	s.blocks = append(s.blocks, together(rows)...)
 	note := fmt.Sprintf("Each pair of figures is the highest and the lowest reading to expect, in volts DC; 0.0 stands for 0.0 to 0.1. A reading outside its pair: %s.", b.sheets(keyFaults))
 	s.blocks = append(s.blocks, b.paragraphIn(note, noteText, 0.5, pg.width))

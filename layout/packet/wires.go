@@ -157,7 +157,7 @@ func (b *book) wireRemark(g wireGroup) string {
 func (b *book) wireRow(t *table, c *circuit.Conductor) block {
 	note := c.Size.String()
 	if c.Rail != "" {
-		note += ", rail " + c.Rail
+		note += ", " + c.Rail
 	}
 	return t.line(b, 0, row{changed: b.touched(c.Number), marks: []string{rowMark("wire " + c.Number)}, cells: []cell{
 		txt(c.Number), txt(pinName(c.From)), txt(pinName(c.To)), txt(c.Colour), txt(wireLength(float64(c.Length))),
