@@ -37,6 +37,12 @@ func TestGeneratedSitesAreDesigned(t *testing.T) {
 			if err != nil {
 				t.Fatalf("%+v: %v\n%s", o, err, sitegen.Site(n, o))
 			}
+			checkWorkings(t, d)
+			for _, c := range d.Conditions {
+				if !(c.Residual < nanoAmpere) {
+					t.Errorf("%s: %g A left over", c.Key, c.Residual)
+				}
+			}
 			if len(d.Luminaires) != n || d.Totals.Luminaires != n {
 				t.Errorf("%d luminaires in the outcome, %d in the totals, want %d", len(d.Luminaires), d.Totals.Luminaires, n)
 			}

@@ -8,7 +8,6 @@ import (
 
 	"gloamwright/internal/design"
 	"gloamwright/internal/pocket"
-	"gloamwright/internal/sitegen"
 )
 
 // threeDigits is how well a pocket calculator must agree with the program.
@@ -42,21 +41,6 @@ func TestWorkingsGiveTheirValues(t *testing.T) {
 			t.Fatal(err)
 		}
 		t.Logf("%s: %d workings", name, checkWorkings(t, d))
-	}
-}
-
-// The same on generated sites, whose names and figures nobody chose.
-func TestWorkingsOfGeneratedSites(t *testing.T) {
-	for i := range 30 {
-		n, o := sitegen.Varied(i)
-		d, err := design.Make(generated(t, n, o), nil)
-		if err != nil {
-			continue // TestGeneratedSitesAreDesigned reports it
-		}
-		checkWorkings(t, d)
-		if t.Failed() {
-			t.Fatalf("site %d, %+v\n%s", i, o, sitegen.Site(n, o))
-		}
 	}
 }
 

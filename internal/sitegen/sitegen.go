@@ -32,12 +32,13 @@ type Control string
 const (
 	Module     Control = "module"     // relay, twilight switch module
 	Comparator Control = "comparator" // relay, comparator card with a light-dependent resistor
+	Follower   Control = "follower"   // relay, light-dependent resistor and transistor
 	MainsOnly  Control = "mains only" // relay without a sensor: lit by day and night
 	Direct     Control = "direct"     // no relay: boards on the cut-off, always lit
 )
 
 // Controls lists all controls.
-var Controls = []Control{Module, Comparator, MainsOnly, Direct}
+var Controls = []Control{Module, Comparator, Follower, MainsOnly, Direct}
 
 // Options chooses a site. The zero value is a 24 V site in rows with a twilight module.
 type Options struct {
@@ -48,9 +49,13 @@ type Options struct {
 	Cells   string  // battery class; "": vrla-agm
 	Gauges  bool    // AWG, feet and ANSI paper
 	Long    bool    // names as long as the language allows, with letters beyond ASCII
-	Extras  bool    // isolator, indicator, meters, suppressor, more test points
-	Taper   bool    // legs may get thinner
-	Lamps   Lamps   // "": Mixed
+	Extras  bool    // isolator, indicator, meters, suppressor, test switch, more test points
+	// Discrete takes a transformer supply, a linear charger and a Zener feed for the coil
+	// in place of modules, at 12 and 24 V.
+	Discrete bool
+	Singles  bool  // one single part of each kind
+	Taper    bool  // legs may get thinner
+	Lamps    Lamps // "": Mixed
 	// Backwards writes stages, luminaires and keys of circuits in the opposite order; it
 	// is the same site.
 	Backwards bool
@@ -75,9 +80,9 @@ func Varied(i int) (n int, o Options) {
 		Seed: uint64(i), Volts: []int{12, 24, 36, 48}[pick(4)], Shape: Shapes[i%len(Shapes)], Control: Controls[pick(len(Controls))],
 		Cells:  []string{"vrla-agm", "vrla-gel", "flooded", "nicd", "nimh", "lifepo4"}[pick(6)],
 		Gauges: pick(3) == 0, Long: pick(4) == 0, Extras: pick(2) == 0, Taper: pick(3) == 0,
-		Lamps: []Lamps{Mixed, Drivers, Old}[pick(3)],
+		Lamps: []Lamps{Mixed, Drivers, Old}[pick(3)], Discrete: pick(3) == 0, Singles: pick(4) == 0,
 	}
-	return 1 + pick([]int{6, 20, 60}[pick(3)]), o
+	return 1 + pick([]int{6, 16, 40}[pick(3)]), o
 }
 
 // Site writes a description with n luminaires.
@@ -97,12 +102,16 @@ func Site(n int, o Options) []byte {
 	if o.Lamps == "" {
 		o.Lamps = Mixed
 	}
+	if o.Volts > 24 {
+		o.Discrete = false
+	}
 	w := &writer{Options: o, n: max(n, 1), rand: rand.New(rand.NewPCG(o.Seed, 7))}
 	w.plan()
 	w.head()
 	w.section("stages", w.stages())
 	w.section("luminaires", w.luminaires())
 	w.circuits()
+	w.singles()
 	if o.Extras {
 		w.line("test_points:\n  - {name: Battery plus again, at: store.plus}")
 	}

@@ -60,6 +60,9 @@ func TestEveryKindOccurs(t *testing.T) {
 		for _, l := range site.Luminaires {
 			used[l.Kind.Val] = true
 		}
+		for _, p := range site.Parts {
+			used["single "+p.Kind.Val] = true
+		}
 	}
 	for _, k := range stage.Kinds() {
 		if !used[k.Name] {
@@ -69,6 +72,11 @@ func TestEveryKindOccurs(t *testing.T) {
 	for _, k := range stage.LuminaireKinds() {
 		if !used[k.Name] {
 			t.Errorf("no site has a %s", k.Name)
+		}
+	}
+	for _, k := range stage.Schema().Parts {
+		if !used["single "+k.Name] {
+			t.Errorf("no site has a single %s", k.Name)
 		}
 	}
 }

@@ -10,7 +10,12 @@ func (w *writer) stages() []string {
 	}
 	var out []string
 	add := func(format string, args ...any) { out = append(out, fmt.Sprintf(format, args...)) }
-	add("charger: {kind: charger, to: store, mains: %s}", mains)
+	if w.Discrete {
+		add("raw: {kind: transformer-supply, rated: %.0f V 1.5 A, open: %.0f V, mains: %s}", 1.5*float64(w.Volts), 1.8*float64(w.Volts), mains)
+		add("charger: {kind: linear-charger, from: raw, to: store}")
+	} else {
+		add("charger: {kind: charger, to: store, mains: %s}", mains)
+	}
 	add("store: {kind: battery, cells: %s, along: %s}", w.Cells, w.length(2))
 	guarded := "store"
 	if w.Extras {
@@ -25,7 +30,11 @@ func (w *writer) stages() []string {
 		add("surge: {kind: suppressor, from: guard}")
 	}
 	if w.Control != Direct {
-		add("presence: {kind: regulated-supply, mains: %s}", mains)
+		if w.Discrete {
+			add("presence: {kind: shunt-regulator, from: raw, volts: %d V}", w.Volts)
+		} else {
+			add("presence: {kind: regulated-supply, mains: %s}", mains)
+		}
 		coil := "presence"
 		if w.Extras {
 			add("try: {kind: test-switch, from: presence}")
@@ -34,7 +43,7 @@ func (w *writer) stages() []string {
 		add("transfer: {kind: changeover-relay, coil: %s, from: guard}", coil)
 	}
 	switch w.Control {
-	case Module, Comparator:
+	case Module, Comparator, Follower:
 		add("dusk: {kind: photocell, built: %s, from: guard, holds: transfer, dark_below: %d lx}", w.Control, 5+w.rand.IntN(20))
 	}
 	for k, b := range w.boards {
@@ -75,7 +84,7 @@ func (w *writer) luminaires() []string {
 // circuits writes the section circuits.
 func (w *writer) circuits() {
 	w.line("circuits:")
-	lit := map[Control]string{Module: "outage-night", Comparator: "outage-night", MainsOnly: "outage", Direct: "always"}[w.Control]
+	lit := map[Control]string{Module: "outage-night", Comparator: "outage-night", Follower: "outage-night", MainsOnly: "outage", Direct: "always"}[w.Control]
 	lamp := 0
 	next := func(metres float64) string {
 		lamp++
@@ -128,4 +137,30 @@ func (w *writer) points(n, depth int, next func(float64) string) string {
 		}
 	}
 	return s + "]"
+}
+
+// singles writes the section parts: a spur of the battery with one single part of each
+// kind at least.
+func (w *writer) singles() {
+	if !w.Singles {
+		return
+	}
+	w.line("parts:")
+	for _, p := range []string{
+		"{name: spur-fuse, kind: fuse, rating: 1 A, pins: {1: store.plus, 2: spur}}",
+		"{name: spur-switch, kind: switch, pins: {1: spur, 2: on}}",
+		"{name: eye-resistor, kind: resistor, value: 10 kΩ, power: 0.5 W, pins: {1: on, 2: eye}}",
+		"{name: eye-led, kind: led, pins: {A: eye, K: minus}}",
+		fmt.Sprintf("{name: pilot, kind: lamp, rated: %d V, power: 1 W, pins: {1: on, 2: minus}}", w.Volts),
+		fmt.Sprintf("{name: helper-coil, kind: relay, rated: %d V, pins: {A1: on, A2: minus}}", w.Volts),
+		"{name: helper-contact, kind: contact, of: helper-coil, pins: {1: on, 2: out}}",
+		"{name: way-out, kind: diode, pins: {A: out, K: mid}}",
+		"{name: way-on, kind: schottky, pins: {A: mid, K: load}}",
+		"{name: load-resistor, kind: resistor, value: 4.7 kΩ, power: 1 W, pins: {1: load, 2: ref}}",
+		fmt.Sprintf("{name: ref-zener, kind: zener, volts: %d V, pins: {A: minus, K: ref}}", w.Volts/2),
+		"{name: load-capacitor, kind: capacitor, value: 100 nF, pins: {1: load, 2: minus}}",
+		"{name: load-terminal, kind: terminal, pins: {1: load}}",
+	} {
+		w.line("  - %s", p)
+	}
 }
