@@ -44,7 +44,7 @@ type overview struct {
 // control is one source that holds the relay in, from its source on.
 type control struct {
 	sensor *circuit.Place // of a photocell with a cable to its sensor
-	source *stageBox      // fed by mains, or nil
+	source *stageBox      // what feeds it: fed by mains, or the stage before; or nil
 	middle *stageBox      // in column of the chain: photocell, shunt regulator, test switch
 	says   string
 }
@@ -132,6 +132,23 @@ func (b *book) controls(o *overview, boxes []*stageBox, used map[*stageBox]bool)
 		}
 		return nil
 	}
+	// above is the stage that feeds x in a coil feed: over a level lead, or over an
+	// auxiliary rail.
+	above := func(x *stageBox) *stageBox {
+		for _, k := range x.links {
+			if k.to == x {
+				return k.from
+			}
+		}
+		for _, l := range append(x.leads(), dropLeads(x)...) {
+			if r := b.railOf[l.term.Pin("out")]; r != nil && r.Positive && !mainRail(r) {
+				if s := supplyOf(r); s != x {
+					return s
+				}
+			}
+		}
+		return nil
+	}
 	for _, k := range o.relay.links {
 		if k.to != o.relay || used[k.from] {
 			continue
@@ -142,19 +159,13 @@ func (b *book) controls(o *overview, boxes []*stageBox, used map[*stageBox]bool)
 				c.sensor = it.Place
 			}
 		}
-		for _, d := range k.from.drops {
-			c.source = supplyOf(b.railOf[d.term.Pin("out")])
-		}
-		for _, up := range k.from.links {
-			if up.to == k.from && up.from.mains {
-				c.source = up.from
+		for up, n := above(k.from), 0; up != nil && n < len(boxes); up, n = above(up), n+1 {
+			if up.mains {
+				c.says = says(up)
 			}
-		}
-		if c.source != nil && used[c.source] {
-			c.source = nil
-		}
-		if c.source != nil {
-			c.says = says(c.source)
+			if !used[up] && (c.source == nil || up.mains) {
+				c.source = up
+			}
 		}
 		add(c)
 	}
@@ -175,6 +186,15 @@ func (b *book) controls(o *overview, boxes []*stageBox, used map[*stageBox]bool)
 	}
 }
 
+// dropLeads are the leads that come down to a stage from rails.
+func dropLeads(x *stageBox) []lead {
+	var out []lead
+	for _, d := range x.drops {
+		out = append(out, lead{term: d.term})
+	}
+	return out
+}
+
 // says is the plain sentence on a control's arrow.
 func says(x *stageBox) string {
 	switch x.st.Kind {
@@ -193,7 +213,7 @@ func (b *book) drawOverview(sh *Sheet, i int) error {
 		b.drawEnergy(sh, o)
 		b.drawControls(sh, o)
 		b.drawOthers(sh, o)
-		b.legend(sh, o)
+		b.legend(sh)
 		b.litTable(sh)
 		b.figures(sh)
 		if o.beside {

@@ -26,15 +26,17 @@ func (b *book) drawEnergy(sh *Sheet, o *overview) {
 	bottom := 0.0
 	if o.charger != nil {
 		bottom = rowEnergy + blockHeight
-		b.block(sh, o.charger, o.charger.st.Heading, colSource, rowEnergy, b.blockLines(o.charger))
-		if o.raw != nil {
-			b.block(sh, o.raw, o.raw.st.Heading, colSource, rowEnergy-15, b.blockLines(o.raw))
-			b.flow(sh, "raw", "raw plus", true, false, point{colSource + 9, rowEnergy - 5}, point{colSource + 9, rowEnergy})
+		lines := b.blockLines(o.charger)
+		if o.raw != nil { // the supply of a linear charger stands in the same block
+			if raw := b.blockLines(o.raw); len(raw) > 0 {
+				lines = append([]string{raw[0]}, lines...)
+			}
 		}
+		b.block(sh, o.charger, o.charger.st.Heading, colSource, rowEnergy, lines)
 	}
 	rows := b.controlRows(o)
 	for i, c := range o.controls {
-		if c.source != nil {
+		if c.source != nil && c.source.mains {
 			bottom = rows[i] + blockHeight
 		}
 	}
@@ -86,14 +88,13 @@ func (b *book) mainsBlock(sh *Sheet, o *overview, bottom float64, rows []float64
 	name := ""
 	if o.charger != nil {
 		name = o.charger.st.Name
-		y := float64(midEnergy)
 		if o.raw != nil {
-			top, y, name = rowEnergy-15, midEnergy-15, o.raw.st.Name
+			name = o.raw.st.Name
 		}
-		arrows = append(arrows, y)
+		arrows = append(arrows, midEnergy)
 	}
 	for i, c := range o.controls {
-		if c.source != nil {
+		if c.source != nil && c.source.mains {
 			arrows = append(arrows, rows[i]+blockHeight/2)
 			if name == "" {
 				name, top = c.source.st.Name, rows[i]
@@ -339,18 +340,29 @@ func stageField[T any](b *book, stage, field string) (v T, ok bool) {
 	return v, false
 }
 
-// drawOthers lists the stages that have no block, under the rows.
+// drawOthers lists the stages that have no block, under the legend.
 func (b *book) drawOthers(sh *Sheet, o *overview) {
 	if len(o.others) == 0 {
 		return
 	}
+	const room, rows = colBus - 12 - colText, 3
 	t := sh.scene.object(classBlock, "others", "Further stages")
-	l := &line{at: point{colText, b.down(77.5)}, runs: []run{{s: "Also:"}}}
+	l := &line{at: point{colText, 19.2}, runs: []run{{s: "Also:"}}}
 	for i, x := range o.others {
-		r := run{s: x.st.Heading + " ", to: b.place("stage " + x.st.Name), short: true}
-		if l.width()+width(r.s+"/00,", valueStyle) > colBoards-colText-4 {
-			l.runs = append(l.runs, run{s: fmt.Sprintf("and %d more", len(o.others)-i)})
-			break
+		r := run{s: fit(x.st.Heading, valueStyle, room-6) + " ", to: b.place("stage " + x.st.Name), short: true}
+		more := run{s: fmt.Sprintf("and %d more", len(o.others)-i)}
+		last := l.at.Y > 19.2+linePitch*(rows-1.5)
+		need := width(r.s+"/000", valueStyle)
+		if last && i+1 < len(o.others) {
+			need += width(more.s, valueStyle) + wordGap
+		}
+		if l.width()+wordGap+need > room {
+			if last {
+				l.runs = append(l.runs, more)
+				break
+			}
+			t.add(l)
+			l = &line{at: point{colText, l.at.Y + linePitch}}
 		}
 		l.runs = append(l.runs, r)
 	}
@@ -358,11 +370,8 @@ func (b *book) drawOthers(sh *Sheet, o *overview) {
 }
 
 // legend explains the lines.
-func (b *book) legend(sh *Sheet, o *overview) {
-	x := float64(colText)
-	if o.raw != nil {
-		x = colBus + 24
-	}
+func (b *book) legend(sh *Sheet) {
+	const x = float64(colText)
 	t := sh.scene.object(classBlock, "lines", "Lines")
 	t.add(textAt(x, 8.5, "Lines", nameStyle, ink.Start))
 	for i, s := range []string{"energy", "control, its supply", "place of its own"} {

@@ -93,10 +93,13 @@ func (b *book) readingsTable(sh *Sheet, p *plan) {
 	o.add(segment(middlePen, colText, y+0.75, right, y+0.75))
 }
 
+// nothing is a voltage that a meter's own error may show on a dead conductor, V.
+const nothing = 0.12
+
 // bandText prints the typical value and the band of one reading.
 func bandText(o *object, x, y float64, v facts.Band) {
 	typical := volts(v.Typical)
-	if v.High < 0.05 && v.Low > -0.05 {
+	if v.High < nothing && v.Low > -nothing {
 		o.add(textAt(x+4.4, y, "0 V", nameStyle, ink.End))
 		return
 	}

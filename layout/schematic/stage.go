@@ -47,14 +47,18 @@ func (k *sketcher) item(it *circuit.SketchItem) {
 	case circuit.OpWire:
 		k.sc.wire(it.Wire, k.nodes(it.Pts)...)
 	case circuit.OpUp, circuit.OpIn:
-		k.sc.wire(it.Wire, k.nodes(it.Pts)...)
+		if len(it.Pts) > 1 { // else a terminal for what is wired later
+			k.sc.wire(it.Wire, k.nodes(it.Pts)...)
+		}
 		end := it.Pts[len(it.Pts)-1]
 		if it.Op == circuit.OpIn {
 			end = it.Pts[0]
 		}
 		k.ring(it.Part, node{int(k.x0) + end[0], rowRingUpper}, false)
 	case circuit.OpDown:
-		k.sc.wire(it.Wire, k.nodes(it.Pts)...)
+		if len(it.Pts) > 1 {
+			k.sc.wire(it.Wire, k.nodes(it.Pts)...)
+		}
 		k.ring(it.Part, node{int(k.x0) + it.Pts[len(it.Pts)-1][0], rowRingLower}, false)
 	case circuit.OpTerminal:
 		k.ring(it.Part, k.node([2]int{int(it.X), int(it.Y)}), true)

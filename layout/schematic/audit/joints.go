@@ -87,8 +87,47 @@ func (r *reader) joints() {
 	for _, k := range order {
 		r.joint(k, dotted[k], pins[k] != nil)
 	}
+	r.loops(order)
 	r.bodies(pins)
 	r.crossings(pins, dotted)
+}
+
+// loops checks that lines form trees: between the joints on each line it draws the
+// edges of a graph, which must close no ring.
+func (r *reader) loops(places []spot) {
+	parent := make([]int, len(places))
+	for i := range parent {
+		parent[i] = i
+	}
+	find := func(i int) int {
+		for parent[i] != i {
+			parent[i] = parent[parent[i]]
+			i = parent[i]
+		}
+		return i
+	}
+	for _, l := range r.lines {
+		if l.lead && !r.inner[l.stroke] {
+			continue
+		}
+		var on []int
+		for i, k := range places {
+			if l.on(k.point()) {
+				on = append(on, i)
+			}
+		}
+		slices.SortFunc(on, func(i, j int) int {
+			a, b := places[i], places[j]
+			return cmp.Or(cmp.Compare(a.x, b.x), cmp.Compare(a.y, b.y))
+		})
+		for i := 1; i < len(on); i++ {
+			a, b := find(on[i-1]), find(on[i])
+			if a == b {
+				r.fault(RuleLoop, places[on[i]].point(), "a ring of lines")
+			}
+			parent[max(a, b)] = min(a, b)
+		}
+	}
 }
 
 // directions finds in which of the four ways lines leave p, and whether any ends

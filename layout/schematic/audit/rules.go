@@ -23,6 +23,7 @@ const (
 	RuleFour      Rule = "L4" // no joint of four directions
 	RuleBody      Rule = "L5" // no line through a symbol's body or past a foreign pin
 	RuleCrossing  Rule = "L6" // crossings are square, a module or more from dots, bends and pins
+	RuleLoop      Rule = "L7" // no ring of lines: one way only from pin to pin
 	RuleText      Rule = "T1" // texts clear of one another, of lines and of symbols
 	RuleHeight    Rule = "T2" // no text of the circuit under 2.5 mm
 	RuleName      Rule = "T3" // every symbol bears its designation, nearer than any other

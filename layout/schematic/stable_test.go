@@ -1,0 +1,235 @@
+package schematic
+
+import (
+	"bytes"
+	"fmt"
+	"strings"
+	"testing"
+
+	"gloamwright/internal/sitegen"
+	"gloamwright/layout/ink"
+	"gloamwright/layout/schematic/audit"
+)
+
+// The order in which a description names things does not show: the same bytes.
+func TestOrderOfTheFileDoesNotShow(t *testing.T) {
+	for i := range 24 {
+		n, o := sitegen.Varied(i)
+		var files [2][][]byte
+		for k, back := range []bool{false, true} {
+			o.Backwards = back
+			sheets, err := Sheets(dressed(t, parsed(t, sitegen.Site(n, o))))
+			if err != nil {
+				t.Fatal(err)
+			}
+			for _, s := range sheets {
+				data, err := s.SVG()
+				if err != nil {
+					t.Fatal(err)
+				}
+				files[k] = append(files[k], data)
+			}
+		}
+		if len(files[0]) != len(files[1]) {
+			t.Fatalf("site %d: %d sheets forward, %d backward", i, len(files[0]), len(files[1]))
+		}
+		for s := range files[0] {
+			if !bytes.Equal(files[0][s], files[1][s]) {
+				t.Errorf("site %d, sheet %d differs when the file is written backwards", i, s+1)
+			}
+		}
+	}
+}
+
+// strokesOf writes every stroke of a page outside tables, and where each text stands.
+func strokesOf(p *audit.Page) (strokes []string, texts []string) {
+	for _, s := range p.Strokes {
+		if !s.Group.In(classTestPoint) && !s.Group.In("notes") {
+			strokes = append(strokes, fmt.Sprint(s.Group.ID, s.Width, s.Path.Verbs, s.Path.Points))
+		}
+	}
+	for _, t := range p.Texts {
+		texts = append(texts, fmt.Sprintf("%s %.3f %q", t.Group.ID, t.At.Y, t.S))
+	}
+	return strokes, texts
+}
+
+// Changing a rating moves nothing; only its own text changes.
+func TestRatingsMoveNothing(t *testing.T) {
+	for name, src := range samples(t) {
+		before := dressed(t, parsed(t, src))
+		after := dressed(t, parsed(t, src))
+		var changed string
+		for _, p := range after.Circuit.Parts {
+			if len(p.Values) > 0 && p.Designation == "-F1" {
+				p.Values[0].Text, changed = "3 A", "3 A"
+			}
+		}
+		a, b := drawn(t, before, false), drawn(t, after, false)
+		if changed == "" || len(a) != len(b) {
+			t.Fatalf("%s: %d and %d sheets", name, len(a), len(b))
+		}
+		differ := 0
+		for i := range a {
+			s1, t1 := strokesOf(a[i].Page)
+			s2, t2 := strokesOf(b[i].Page)
+			if strings.Join(s1, "\n") != strings.Join(s2, "\n") {
+				t.Errorf("%s sheet %d: strokes moved", name, i+1)
+			}
+			for k := range t1 {
+				if t1[k] != t2[k] {
+					differ++
+					if !strings.Contains(t2[k], changed) {
+						t.Errorf("%s sheet %d: %s became %s", name, i+1, t1[k], t2[k])
+					}
+				}
+			}
+		}
+		if differ == 0 {
+			t.Errorf("%s: the new rating is not printed", name)
+		}
+	}
+}
+
+// A way added at the end of a board moves nothing that was there.
+func TestAWayAtTheEndMovesNothing(t *testing.T) {
+	src := samples(t)["bracken-reach"]
+	more := bytes.Replace(src, []byte("ways: 4"), []byte("ways: 5"), 1)
+	if bytes.Equal(src, more) {
+		t.Fatal("the example has no board of 4 ways")
+	}
+	a, b := drawn(t, dressed(t, parsed(t, src)), false), drawn(t, dressed(t, parsed(t, more)), false)
+	if len(a) != len(b) {
+		t.Fatalf("%d sheets became %d", len(a), len(b))
+	}
+	for i := range a {
+		was, is := objects(a[i].Page), objects(b[i].Page)
+		for id, at := range was {
+			if now, ok := is[id]; !ok || now != at {
+				t.Errorf("sheet %d: %s moved from %s to %s", i+1, id, at, now)
+			}
+		}
+	}
+}
+
+// objects are the places of all parts, terminals, test points and cables by ID.
+func objects(p *audit.Page) map[string]string {
+	out := map[string]string{}
+	for _, s := range p.Strokes {
+		if c := s.Group.Class; c == classPart || c == classTestPoint || c == classCable {
+			out[s.Group.ID] += fmt.Sprint(s.Path.Points[0])
+		}
+	}
+	return out
+}
+
+// Every drawn thing has an identifier, data and a title; links lead to sheets that
+// exist.
+func TestObjectsTellWhatTheyAre(t *testing.T) {
+	d := designed(t, samples(t)["bracken-reach"])
+	sheets, err := Sheets(d)
+	if err != nil {
+		t.Fatal(err)
+	}
+	parts := map[string]bool{}
+	links := 0
+	for _, s := range sheets {
+		r := recorded(t, s)
+		page := audit.FromRecorder(r)
+		for _, g := range page.Groups {
+			switch g.Class {
+			case classPart, classTerminal, classTestPoint, classWire, classRail, classDot, "pin":
+				if g.ID == "" || g.Title == "" || len(g.Data) == 0 && g.Class != classWire && g.Class != classRail {
+					t.Errorf("sheet %d: %s %q has title %q and %d data", s.Number, g.Class, g.ID, g.Title, len(g.Data))
+				}
+			}
+			if g.Class == classPart || g.Class == classTerminal {
+				parts[g.Get("part")] = true
+			}
+		}
+		links += countLinks(t, r.Calls, len(sheets))
+	}
+	for _, p := range d.Circuit.Parts {
+		if !parts[partName(p)] && p.Kind != "busbar" {
+			t.Errorf("%s is on no sheet", p.Designation)
+		}
+	}
+	if links < 20 {
+		t.Errorf("only %d links", links)
+	}
+}
+
+func countLinks(t *testing.T, calls []ink.Call, sheets int) int {
+	n := 0
+	for _, c := range calls {
+		switch c := c.(type) {
+		case ink.Linked:
+			n++
+			ok := false
+			for k := 1; k <= sheets; k++ {
+				ok = ok || c.Target.File == FileName(k)
+			}
+			if !ok {
+				t.Errorf("a link to %q", c.Target.File)
+			}
+		case ink.Grouped:
+			n += countLinks(t, c.Calls, sheets)
+		}
+	}
+	return n
+}
+
+// TestQuality prints the quality numbers of the descriptions that come with the
+// program and holds the hard ones.
+func TestQuality(t *testing.T) {
+	for name, src := range samples(t) {
+		d := designed(t, src)
+		for _, q := range audit.Measure(drawn(t, d, false)) {
+			t.Logf("%s sheet %d: X %d (bars %d)  B %.2f  Lr %.2f  A %.2f  U %.2f  R %d  T %.0f %%  lines %d  texts %d",
+				name, q.Sheet, q.Crossings, q.InBars, q.Bends, q.Length, q.Aligned, q.Used, q.References, 100*q.Turned, q.Lines, q.Texts)
+			if q.Crossings > 3 || q.Turned > 0.05 {
+				t.Errorf("%s sheet %d: %d crossings, %.0f %% of the texts turned", name, q.Sheet, q.Crossings, 100*q.Turned)
+			}
+		}
+	}
+}
+
+// BenchmarkThousand draws a site of a thousand luminaires, and for comparison replays
+// the recorded calls into both back ends.
+func BenchmarkThousand(b *testing.B) {
+	d := dressed(b, parsed(b, sitegen.Site(1000, sitegen.Options{Seed: 1})))
+	var recordings []*ink.Recorder
+	b.Run("draw", func(b *testing.B) {
+		for b.Loop() {
+			sheets, err := Sheets(d)
+			if err != nil {
+				b.Fatal(err)
+			}
+			recordings = recordings[:0]
+			for _, s := range sheets {
+				r := ink.NewRecorder(s.Paper.W, s.Paper.H, s.Supplement)
+				s.Draw(r, Options{Target: func(n int, object string) ink.Target {
+					return ink.Target{File: FileName(n), Sheet: n, Anchor: object}
+				}})
+				recordings = append(recordings, r)
+			}
+		}
+		b.ReportMetric(float64(len(recordings)), "sheets")
+	})
+	b.Run("replay", func(b *testing.B) {
+		for b.Loop() {
+			pdf := ink.NewPDF(ink.Info{})
+			for _, r := range recordings {
+				c := ink.NewSVG(r.W, r.H, r.Title, "")
+				r.Replay(c)
+				if _, err := c.Output(); err != nil {
+					b.Fatal(err)
+				}
+				r.Replay(pdf.Sheet(r.W, r.H, r.Title))
+			}
+			if _, err := pdf.Output(); err != nil {
+				b.Fatal(err)
+			}
+		}
+	})
+}
