@@ -162,7 +162,7 @@ func draw(t *testing.T, d *design.Design, index, n int) drawn {
 // extremes unless so many parts act on the reading that their errors never come
 // together in the draws.
 func TestBandsHoldTheDraws(t *testing.T) {
-	for _, name := range []string{"bracken-reach", "juniper-flat"} {
+	for _, name := range examples(t) {
 		t.Run(name, func(t *testing.T) {
 			d, err := design.Make(load(t, name), nil)
 			if err != nil {
