@@ -26,6 +26,7 @@ type Sheet struct {
 	book     *book
 	cautions []sheet.Caution
 	notes    []string
+	marks    []*place // objects that links lead to
 }
 
 // The document types of the sheets.
@@ -143,6 +144,11 @@ func (b *book) make() error {
 	for _, s := range b.sheets {
 		s.scene.finish(b)
 	}
+	for _, name := range circuit.SortedKeys(b.places) {
+		if pl := b.places[name]; pl.sheet != nil && pl.anchor != "" {
+			pl.sheet.marks = append(pl.sheet.marks, pl)
+		}
+	}
 	return nil
 }
 
@@ -211,6 +217,9 @@ func (s *Sheet) Draw(c ink.Canvas, o Options) {
 		return target(pl.sheet.Number, pl.anchor), true
 	}}
 	s.drawFrame(c, o)
+	for _, pl := range s.marks {
+		c.Mark(pl.anchor, mm(pl.at))
+	}
 	for _, obj := range s.scene.objects {
 		c.Group(obj.Object, func() {
 			for _, d := range obj.items {

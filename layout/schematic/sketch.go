@@ -98,8 +98,9 @@ func (k *sketcher) contact(it *circuit.SketchItem, o *object, at node) {
 	marks := [2]string{it.Pins["1"], it.Pins["2"]}
 	pl := k.b.place("contact " + it.Part.Designation + " " + marks[0] + "-" + marks[1])
 	pl.sheet, pl.at, pl.anchor = k.sh, at.point(), o.ID
-	coil := &line{at: point{x, y - 2.6}, anchor: ink.Middle, runs: []run{{to: k.b.place("coil " + it.Part.Designation)}}}
-	o.add(textAt(x, y-2.6-linePitch, it.Part.Designation, nameStyle, ink.Middle), coil)
+	top := y - 1.3 - reach(symbolNamed(it.Symbol), turnOf(it.Turn)).top
+	coil := &line{at: point{x, top}, anchor: ink.Middle, runs: []run{{to: k.b.place("coil " + it.Part.Designation)}}}
+	o.add(textAt(x, top-linePitch, it.Part.Designation, nameStyle, ink.Middle), coil)
 	o.add(textAt(x-2.6, y+1.8, marks[0], valueStyle, ink.Middle), textAt(x+2.6, y+1.8, marks[1], valueStyle, ink.Middle))
 }
 
