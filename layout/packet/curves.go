@@ -236,6 +236,11 @@ func (g *plot) selective(f *facts.Fuse) {
 // IEC 60364-4-43, which holds up to 5 s.
 func (g *plot) wires(chain []*facts.Fuse) {
 	var done []quantity.WireSize
+	type named struct {
+		at   []xy
+		size string
+	}
+	var names []named
 	for _, f := range chain {
 		if f.Withstand <= 0 || f.FarEnd <= 0 || slices.Contains(done, f.CableSize) {
 			continue
@@ -249,7 +254,10 @@ func (g *plot) wires(chain []*facts.Fuse) {
 		for _, share := range []float64{0, 0.15, 0.3, 0.45, 0.6} {
 			at = append(at, xy{from * math.Pow(to/from, share), float64(catalogue.AdiabaticLimit) * math.Pow(shortestTime/float64(catalogue.AdiabaticLimit), share)})
 		}
-		g.name(at, f.CableSize.String())
+		names = append(names, named{at, f.CableSize.String()})
+	}
+	for _, n := range names { // when all lines are known
+		g.name(n.at, n.size)
 	}
 }
 

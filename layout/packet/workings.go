@@ -2,42 +2,77 @@ package packet
 
 import (
 	"fmt"
+	"slices"
 	"strings"
-	"unicode"
 
 	"gloamwright/internal/sizing"
 	"gloamwright/layout/ink"
 )
 
 // workings show how every value came about, so that a pocket calculator can check it.
+// A method that serves many things stands once, with a row for each of them.
 func (b *book) workings() *section {
 	s := &section{key: keyWorkings, title: "Workings", document: "Workings", letter: "C", label: "Before",
 		purpose: "Use this sheet to check any figure with a pocket calculator.",
-		note:    fmt.Sprintf("%s names the inputs. A number in a box is the one that every other sheet prints.", b.upperSheets(keyBasis))}
-	number := map[string]int{}
-	for i, w := range b.d.Workings {
-		number[w.For+": "+w.Name] = i + 1
-	}
-	usedBy := make([][]string, len(b.d.Workings))
-	for i, w := range b.d.Workings {
-		for _, u := range w.Uses {
-			if n := number[u]; n > 0 && n != i+1 {
-				usedBy[n-1] = append(usedBy[n-1], fmt.Sprintf("W%d", i+1))
-			}
+		note:    fmt.Sprintf("%s names the inputs. A result in bold is the one that every other sheet prints.", b.upperSheets(keyBasis))}
+	methods := b.methods()
+	folded := map[int]bool{}
+	for _, m := range methods {
+		for _, i := range m {
+			folded[i] = true
 		}
 	}
-	for _, g := range b.workingGroups() {
-		s.blocks = append(s.blocks, b.head(0, b.pg.width, b.workingTitle(g.subject), ""))
-		for k, i := range g.list {
-			c := b.working(i+1, &b.d.Workings[i], usedBy[i])
-			c.marks = []string{workingMark(b.d.Workings[i].For, b.d.Workings[i].Name)}
-			if k == 0 {
-				c.marks = append(c.marks, "working of "+g.subject)
-			}
-			s.blocks = append(s.blocks, c)
+	groups := b.workingGroups(folded)
+	// numbers count in the order of print
+	number := make([]int, len(b.d.Workings))
+	n := 0
+	for _, g := range groups {
+		for _, i := range g.list {
+			n++
+			number[i] = n
 		}
+	}
+	for _, m := range methods {
+		for _, i := range m {
+			n++
+			number[i] = n
+		}
+	}
+	usedBy := b.workingsUsedBy(number)
+	for _, g := range groups {
+		head := b.head(0, b.pg.width, b.workingTitle(g.subject), "")
+		s.blocks = append(s.blocks, head)
+		for _, i := range g.list {
+			s.blocks = append(s.blocks, b.working(number[i], &b.d.Workings[i], usedBy[i]))
+		}
+	}
+	for k, m := range methods {
+		if k == 0 {
+			s.blocks = append(s.blocks, b.head(0, b.pg.width, "One method, many things", "the formula stands once; each row puts its own numbers in"))
+		}
+		s.blocks = append(s.blocks, b.method(m, number, k == 0)...)
 	}
 	return s
+}
+
+// workingsUsedBy lists the numbers of the workings that each one feeds, rising.
+func (b *book) workingsUsedBy(number []int) [][]int {
+	at := map[string]int{}
+	for i, w := range b.d.Workings {
+		at[w.For+": "+w.Name] = i + 1
+	}
+	out := make([][]int, len(b.d.Workings))
+	for i, w := range b.d.Workings {
+		for _, u := range w.Uses {
+			if k := at[u]; k > 0 && k != i+1 {
+				out[k-1] = append(out[k-1], number[i])
+			}
+		}
+	}
+	for _, list := range out {
+		slices.Sort(list)
+	}
+	return out
 }
 
 // workingGroup is the workings of one thing, by their place in the Design.
@@ -46,12 +81,15 @@ type workingGroup struct {
 	list    []int
 }
 
-// workingGroups keeps the workings of a thing together, in the order in which the things
-// first appear.
-func (b *book) workingGroups() []workingGroup {
+// workingGroups keeps the workings of a thing together that stand on their own, in the
+// order in which the things first appear.
+func (b *book) workingGroups(folded map[int]bool) []workingGroup {
 	var out []workingGroup
 	at := map[string]int{}
 	for i, w := range b.d.Workings {
+		if folded[i] {
+			continue
+		}
 		k, ok := at[w.For]
 		if !ok {
 			k = len(out)
@@ -62,8 +100,6 @@ func (b *book) workingGroups() []workingGroup {
 	}
 	return out
 }
-
-func workingMark(subject, name string) string { return "working " + subject + ": " + name }
 
 // workingTitle names what a group of workings is about: "Battery -G1".
 func (b *book) workingTitle(subject string) string {
@@ -83,50 +119,59 @@ func (b *book) workingTitle(subject string) string {
 // Measures of a working, mm.
 const (
 	workNumber = 14.0
+	workLead   = 4.6
 	resultWide = 34.0
-	resultHigh = 9.2
+	resultHigh = 8.0
 )
+
+var workingNumber = style{ink.MonoBold, 8.97, 4, ink.Black}
+
+// follow sets lines behind others: on the last of them if all fits there, else below.
+func follow(list, more []line, room float64) []line {
+	const gap = 3.0
+	n := len(list) - 1
+	if n < 0 || len(more) != 1 || list[n].width()+gap+more[0].width() > room {
+		return append(list, more...)
+	}
+	more[0][0].pre = gap
+	list[n] = append(list[n], more[0]...)
+	return list
+}
 
 // working is one card: name, formula, the numbers put in, the source, and the result in
 // its box.
-func (b *book) working(n int, w *sizing.Working, usedBy []string) block {
+func (b *book) working(n int, w *sizing.Working, usedBy []int) block {
 	room := b.pg.width - workNumber - resultWide - 4
-	name := wrap(upper(w.Name), tableText.as(ink.Bold), room)
-	formula := wrapLine(formulaLine(w.Formula), formulaText, room)
+	lines := wrap(upper(w.Name), tableText.as(ink.Bold), room)
+	lines = follow(lines, wrapLine(formulaLine(w.Formula), formulaText, room), room)
 	numbers := wrap(w.Substituted, numbersText, room)
-	source := wrap(w.Source, sourceText, room)
-	left := float64(len(name))*4.4 + float64(len(formula))*formulaText.lead + float64(len(numbers))*numbersText.lead + float64(len(source))*sourceText.lead
+	lines = append(lines, follow(numbers, wrap(w.Source, sourceText, room), room)...)
 	under := ""
 	switch {
 	case w.Pinned:
 		under = "pinned: checked"
 	case len(usedBy) > 0:
-		under = "used by " + strings.Join(usedBy[:min(2, len(usedBy))], ", ")
-		if len(usedBy) > 2 {
-			under += " …"
+		under = fmt.Sprintf("used by W%d", usedBy[0])
+		if len(usedBy) > 1 {
+			under = fmt.Sprintf("used by W%d, %d more", usedBy[0], len(usedBy)-1)
+		}
+		if len(usedBy) == 2 {
+			under = fmt.Sprintf("used by W%d, W%d", usedBy[0], usedBy[1])
 		}
 	}
-	right := resultHigh + 1.4
+	h := max(float64(len(lines))*workLead, resultHigh+1.2)
 	if under != "" {
-		right += 4
+		h = max(h, resultHigh+4.4)
 	}
-	h := max(left, right) + 2
-	return block{h: h, draw: func(p *pad, y, h float64) {
+	return block{h: h + 1.8, draw: func(p *pad, y, h float64) {
 		l := p.pg.l
-		p.write(l, y+rise*4.4+0.6, fmt.Sprintf("W%d", n), style{ink.MonoBold, 8.97, 4, ink.Black}, ink.Start)
-		at := y + 0.6
-		p.lines(l+workNumber, at+rise*4.4, name, 4.4)
-		at += float64(len(name)) * 4.4
-		p.lines(l+workNumber, at+rise*formulaText.lead, formula, formulaText.lead)
-		at += float64(len(formula)) * formulaText.lead
-		p.lines(l+workNumber, at+rise*numbersText.lead, numbers, numbersText.lead)
-		at += float64(len(numbers)) * numbersText.lead
-		p.lines(l+workNumber, at+rise*sourceText.lead, source, sourceText.lead)
+		p.write(l, y+0.9+rise*workLead, fmt.Sprintf("W%d", n), workingNumber, ink.Start)
+		p.lines(l+workNumber, y+0.9+rise*workLead, lines, workLead)
 		x := p.pg.right() - resultWide
 		p.frame(x, y+1, resultWide-0.25, resultHigh, 0.5, ink.Black)
-		p.result(p.pg.right()-3.5, y+1+resultHigh/2+1.65, w)
+		p.result(p.pg.right()-3, y+1+resultHigh/2+1.65, w)
 		if under != "" {
-			p.fit(p.pg.right(), y+1+resultHigh+4, under, noteText, resultWide+2, ink.End)
+			p.fit(p.pg.right(), y+1+resultHigh+3.3, under, noteText, resultWide+2, ink.End)
 		}
 		p.rule(l, y+h, p.pg.width, hairline, ink.Rule)
 	}}
@@ -150,63 +195,4 @@ func resultDigits(v float64) string {
 		s = sizing.Digits(v)
 	}
 	return strings.Replace(s, "-", "−", 1)
-}
-
-// indexDrop is how far an index stands below the line, in em.
-const indexDrop = 0.18
-
-// indexSpace keeps the index clear of a leaning letter, mm.
-const indexSpace = 0.3
-
-// formulaLine sets a formula: letters in italics, words and signs upright, what follows
-// an underscore as an index.
-func formulaLine(f string) line {
-	var out line
-	put := func(s string, face ink.Face, index bool) {
-		if s == "" {
-			return
-		}
-		st := formulaText.as(face)
-		if index {
-			st.pt *= 0.72
-		}
-		for _, x := range fallBack(span{text: s, font: st.font(), color: ink.Black}) {
-			if index {
-				x.drop = formulaText.font().Size * indexDrop
-				x.pre = indexSpace
-			}
-			if n := len(out); n > 0 && !index && x.font.Face != ink.Italic && out[n-1].font.Face == ink.Italic && s != noBreak && s != " " {
-				x.pre = indexSpace // a leaning letter reaches over its right neighbour
-			}
-			out = out.add(x)
-		}
-	}
-	runes := []rune(glue(f))
-	for i := 0; i < len(runes); {
-		r := runes[i]
-		switch {
-		case r == '_' && i > 0:
-			j := i + 1
-			for j < len(runes) && (unicode.IsLetter(runes[j]) || unicode.IsDigit(runes[j])) {
-				j++
-			}
-			put(string(runes[i+1:j]), ink.Regular, true)
-			i = j
-		case unicode.IsLetter(r):
-			j := i
-			for j < len(runes) && unicode.IsLetter(runes[j]) {
-				j++
-			}
-			face := ink.Italic
-			if j-i > 1 && !(runes[i] == 'Δ' || runes[i] == 'Σ') {
-				face = ink.Regular // a word, not a symbol
-			}
-			put(string(runes[i:j]), face, false)
-			i = j
-		default:
-			put(string(r), ink.Regular, false)
-			i++
-		}
-	}
-	return out
 }
