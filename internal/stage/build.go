@@ -47,8 +47,13 @@ func Expand(site *describe.Site) *circuit.Circuit {
 	b.Place("cabinet", "A", "Main cabinet")
 	list := ordered(site)
 	b.nameRails(list)
+	singles := false // they stand before the boards
 	for _, s := range list {
 		k := kindOf(s.Kind.Val)
+		if k.Class == BoardClass && !singles {
+			b.expandSingles()
+			singles = true
+		}
 		b.cur = &circuit.Stage{Name: s.Name.Val, Kind: s.Kind.Val, Heading: b.heading(s, k), At: s.Name.Pos}
 		b.cur.Place = b.places["cabinet"]
 		b.sk = nil
@@ -56,7 +61,9 @@ func Expand(site *describe.Site) *circuit.Circuit {
 		k.Expand(b, s)
 		b.cur.Sketch = b.sk
 	}
-	b.expandSingles()
+	if !singles {
+		b.expandSingles()
+	}
 	b.joinRails()
 	return b.C
 }
@@ -212,6 +219,9 @@ func (b *Build) nameRails(list []*describe.Stage) {
 	main, aux := 0, 0
 	for _, s := range list {
 		for _, p := range kindOf(s.Kind.Val).Ports {
+			if p.Signal && kindOf(s.Kind.Val).Class == BoardClass { // its ways
+				continue
+			}
 			key := s.Name.Val + "." + p.Name
 			if p.Sink || p.Signal && (kindOf(s.Kind.Val).Class == BoardClass || b.takers(s, key) < 2) || !p.Signal && !b.used(key) && p.Name != "plus" {
 				continue

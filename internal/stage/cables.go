@@ -2,6 +2,7 @@ package stage
 
 import (
 	"fmt"
+	"slices"
 	"strings"
 
 	"gloamwright/internal/catalogue"
@@ -39,6 +40,9 @@ func sizeBoard(p *Plan, _ *describe.Stage) {
 		}
 	}
 	res, err := t.Choose()
+	if err == nil && t.drawsMore() {
+		res, err = t.full(res)
+	}
 	if err != nil {
 		p.block("cables", p.C.Boards[0].At, "", err)
 		if res == nil {
@@ -46,6 +50,55 @@ func sizeBoard(p *Plan, _ *describe.Stage) {
 		}
 	}
 	t.assign(res)
+}
+
+// drawsMore reports whether some lamp draws more at a higher voltage, so that it loses
+// most on its way not at the end of discharge but while the battery is full.
+func (t *tree) drawsMore() bool {
+	for _, l := range t.Legs {
+		if l.Load.Ohm > 0 {
+			return true
+		}
+	}
+	return false
+}
+
+// costSlack is how far two costs may differ by rounding and still be equal.
+const costSlack = 1e-9
+
+// full chooses once more with the battery full, or on float where circuits are lit
+// while mains is on, and returns for each leg the thicker of both choices.
+func (t *tree) full(end *sizing.TreeResult) (*sizing.TreeResult, error) {
+	high := t.Tree
+	high.Volts = t.p.Full
+	for _, c := range t.p.Site.Circuits {
+		if c.Lit.Val == "night" || c.Lit.Val == "always" {
+			high.Volts = max(high.Volts, t.p.Float)
+		}
+	}
+	high.Legs = slices.Clone(t.Legs)
+	for i := range high.Legs {
+		if high.Legs[i].MinVolt > 0 {
+			high.Legs[i].MinVolt = high.Volts - t.p.permittedDrop()
+		}
+	}
+	res, err := high.Choose()
+	if err != nil {
+		return res, err
+	}
+	sizes := slices.Clone(res.Sizes)
+	for i, o := range end.Sizes {
+		if o.Size.Area > sizes[i].Size.Area {
+			sizes[i] = o
+		}
+	}
+	both, err := t.Check(sizes)
+	if err != nil {
+		return both, err
+	}
+	both.Bound = max(end.Bound, res.Bound)
+	both.Proven = both.Cost <= both.Bound*(1+costSlack)
+	return both, nil
 }
 
 // tree is the tree of feeders and legs with what belongs to each leg.

@@ -17,30 +17,33 @@ presence: {kind: regulated-supply, mains: 230 V ± 10 %}
 transfer: {kind: changeover-relay, coil: presence, from: guard}
 `
 
+// sites has a minimal site for each kind.
+var sites = map[string]bench{
+	"charger":           {stages: packaged},
+	"regulated-supply":  {stages: standby, from: "transfer.break", lit: "outage"},
+	"isolator":          {stages: packaged + "main: {kind: isolator, from: guard}", from: "main"},
+	"voltmeter":         {stages: packaged + "volts: {kind: meter, from: store}"},
+	"ammeter":           {stages: packaged + "amps: {kind: meter, reads: amps, from: guard}", from: "amps"},
+	"suppressor":        {stages: packaged + "surge: {kind: suppressor, from: guard}"},
+	"indicator":         {stages: packaged + "live: {kind: indicator, from: guard}"},
+	"test-switch":       {stages: strings.Replace(standby, "coil: presence", "coil: try", 1) + "try: {kind: test-switch, from: presence}", from: "transfer.break", lit: "outage"},
+	"photocell module":  {stages: standby + "dusk: {kind: photocell, built: module, from: guard, holds: transfer}", from: "transfer.break", lit: "outage-night"},
+	"comparator":        {stages: standby + "dusk: {kind: photocell, built: comparator, from: guard, holds: transfer}", from: "transfer.break", lit: "outage-night"},
+	"comparator, 24 V":  {nominal: "24 V", lamp: "{kind: led-driver, power: 6 W, works: 18 V..32 V}", stages: standby + "dusk: {kind: photocell, built: comparator, from: guard, holds: transfer}", from: "transfer.break", lit: "outage-night"},
+	"follower":          {stages: standby + "dusk: {kind: photocell, built: follower, from: guard, holds: transfer, dark_below: 5 lx}", from: "transfer.break", lit: "outage-night"},
+	"shunt, regulated":  {stages: strings.Replace(standby, "coil: presence", "coil: steady", 1) + "steady: {kind: shunt-regulator, from: presence, volts: 10 V}", from: "transfer.break", lit: "outage"},
+	"linear-charger":    {stages: "raw: {kind: transformer-supply, rated: 18 V 2 A, open: 22 V, mains: 230 V ± 10 %}\nfloat: {kind: linear-charger, from: raw, to: store}"},
+	"filament":          {lamp: "{kind: filament, rated: 12 V, power: 5 W}", stages: packaged},
+	"led-string":        {lamp: "{kind: led-string, forward: 3 V, series: 3, strings: 12, current: 20 mA}", stages: packaged, battery: ", capacity: 7 Ah"},
+	"ballast":           {lamp: "{kind: ballast, power: 8 W, works: 9 V..16 V}", stages: packaged},
+	"resistive":         {lamp: "{kind: resistive, rated: 12 V, power: 5 W}", stages: packaged},
+	"everything on raw": {stages: rawPlant, from: "transfer.break", lit: "outage-night"},
+}
+
 // TestEveryKind designs a minimal site with each stage kind in both systems of sizes;
 // nothing stands in its way and the sketches draw what the circuit connects.
 func TestEveryKind(t *testing.T) {
-	for name, b := range map[string]bench{
-		"charger":           {stages: packaged},
-		"regulated-supply":  {stages: standby, from: "transfer.break", lit: "outage"},
-		"isolator":          {stages: packaged + "main: {kind: isolator, from: guard}", from: "main"},
-		"voltmeter":         {stages: packaged + "volts: {kind: meter, from: store}"},
-		"ammeter":           {stages: packaged + "amps: {kind: meter, reads: amps, from: guard}", from: "amps"},
-		"suppressor":        {stages: packaged + "surge: {kind: suppressor, from: guard}"},
-		"indicator":         {stages: packaged + "live: {kind: indicator, from: guard}"},
-		"test-switch":       {stages: strings.Replace(standby, "coil: presence", "coil: try", 1) + "try: {kind: test-switch, from: presence}", from: "transfer.break", lit: "outage"},
-		"photocell module":  {stages: standby + "dusk: {kind: photocell, built: module, from: guard, holds: transfer}", from: "transfer.break", lit: "outage-night"},
-		"comparator":        {stages: standby + "dusk: {kind: photocell, built: comparator, from: guard, holds: transfer}", from: "transfer.break", lit: "outage-night"},
-		"comparator, 24 V":  {nominal: "24 V", lamp: "{kind: led-driver, power: 6 W, works: 18 V..32 V}", stages: standby + "dusk: {kind: photocell, built: comparator, from: guard, holds: transfer}", from: "transfer.break", lit: "outage-night"},
-		"follower":          {stages: standby + "dusk: {kind: photocell, built: follower, from: guard, holds: transfer, dark_below: 5 lx}", from: "transfer.break", lit: "outage-night"},
-		"shunt, regulated":  {stages: strings.Replace(standby, "coil: presence", "coil: steady", 1) + "steady: {kind: shunt-regulator, from: presence, volts: 10 V}", from: "transfer.break", lit: "outage"},
-		"linear-charger":    {stages: "raw: {kind: transformer-supply, rated: 18 V 2 A, open: 22 V, mains: 230 V ± 10 %}\nfloat: {kind: linear-charger, from: raw, to: store}"},
-		"filament":          {lamp: "{kind: filament, rated: 12 V, power: 5 W}", stages: packaged},
-		"led-string":        {lamp: "{kind: led-string, forward: 3 V, series: 3, strings: 12, current: 20 mA}", stages: packaged, battery: ", capacity: 7 Ah"},
-		"ballast":           {lamp: "{kind: ballast, power: 8 W, works: 9 V..16 V}", stages: packaged},
-		"resistive":         {lamp: "{kind: resistive, rated: 12 V, power: 5 W}", stages: packaged},
-		"everything on raw": {stages: rawPlant, from: "transfer.break", lit: "outage-night"},
-	} {
+	for name, b := range sites {
 		t.Run(name, func(t *testing.T) {
 			d := b.design(t)
 			for _, s := range d.stops() {

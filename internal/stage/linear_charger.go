@@ -73,7 +73,7 @@ func linearCharger() *Kind {
 			b.point(b.TestPoint("in", "Raw voltage at the regulator", u.Pin("IN")), 2, 16, "N")
 			b.point(b.TestPoint("set", "Regulated, before the diode", d.Pin("A")), 29, 16, "N")
 			b.point(b.TestPoint("output", b.cur.Heading+" output", d.Pin("K")), 42, 14, "E")
-			b.number(up, 42, 6)
+			b.number(up, 42, 5)
 			b.number(down, 26, 48.5)
 		},
 		Steps: []Step{{Charging, sizeLinearCharger}},

@@ -53,6 +53,9 @@ func (n *net) minus() bool { return n.rail == Minus }
 // parts.
 func (n *net) joint() bool { return n.free() && (len(n.at) != 2 || len(n.ends) > 0 || n.cut) }
 
+// loose reports whether only one pin is on the net; sizing refuses it.
+func (n *net) loose() bool { return len(n.at)+len(n.ends) == 1 }
+
 // singles is what parts and test_points describe, before it is drawn.
 type singles struct {
 	b      *Build

@@ -10,7 +10,7 @@ import (
 // Measures of the block of single parts, in modules. Labels stand left of the parts;
 // a contact stands level and moves its run to the right.
 const (
-	labelColumn = 9   // from a column's left edge to its line
+	labelColumn = 10  // from a column's left edge to its line
 	columnGap   = 1   // from a column's right edge to the next
 	contactJog  = 10  // from a run's line to its line behind a contact
 	contactLead = 3   // from the line to the contact's pin
@@ -26,7 +26,7 @@ const (
 )
 
 // slots are the heights that a part and a contact take in a band, from roomy to tight.
-var slots = [][2]int{{8, 10}, {7, 9}, {6, 8}, {5, 8}}
+var slots = [][2]int{{9, 11}, {8, 10}, {7, 9}, {6, 8}, {5, 8}}
 
 // column is an upright strip of the drawing: the runs that stand in it one under the
 // other.
@@ -433,7 +433,7 @@ func (d *groupDrawing) begin(r *run, pin *circuit.Pin, col, y int, s *single) {
 	}
 	if r.top.free() {
 		d.taps[r.top] = append(d.taps[r.top], tap{pin, s, col, y})
-		if len(way) > 2 {
+		if len(way) > 2 && !r.top.loose() {
 			b.line(nil, way...)
 		}
 		return
@@ -456,7 +456,7 @@ func (d *groupDrawing) finish(r *run, pin *circuit.Pin, x, y, col, slotEnd int) 
 	switch {
 	case r.bottom.free():
 		d.taps[r.bottom] = append(d.taps[r.bottom], tap{pin, s, col, y})
-		if len(way) > 2 {
+		if len(way) > 2 && !r.bottom.loose() {
 			b.line(nil, way...)
 		}
 	case r.bottom.minus():

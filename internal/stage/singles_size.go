@@ -50,7 +50,7 @@ func (p *Plan) knownNet(net describe.At[string]) {
 	}
 	var have []string
 	for _, x := range kindOf(p.stageOf(name).Kind.Val).Ports {
-		if x.Sink && x.Signal {
+		if x.Signal && (x.Sink || kindOf(p.stageOf(name).Kind.Val).Class == BoardClass) {
 			continue
 		}
 		if x.Name == port {
