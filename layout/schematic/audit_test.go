@@ -50,3 +50,41 @@ func TestGeneratedSitesPassTheAudit(t *testing.T) {
 		})
 	}
 }
+
+// What a revision changes is marked, and the marks touch nothing.
+func TestChangesAreMarked(t *testing.T) {
+	for name, src := range samples(t) {
+		d := designed(t, src)
+		d.Changes = &design.Changes{From: "A", To: "B", Touched: map[string]bool{}}
+		for _, p := range d.Circuit.Parts {
+			d.Changes.Touched[p.Designation] = true
+		}
+		for _, c := range d.Circuit.Conductors {
+			d.Changes.Touched[c.Number] = true
+		}
+		for _, p := range d.Circuit.TestPoints {
+			d.Changes.Touched[p.Label] = true
+		}
+		sheets := drawn(t, d, false)
+		for _, f := range audit.Judge(sheets, audit.FromCircuit(d.Circuit)) {
+			t.Errorf("%s: %v", name, f)
+		}
+		marked, all := 0, 0
+		for _, s := range sheets {
+			for _, g := range s.Page.Groups {
+				if g.Class == classPart {
+					all++
+				}
+			}
+			for _, k := range s.Page.Strokes {
+				b := k.Path.Bounds()
+				if k.Width == 0 && len(k.Path.Points) == 3 && k.Group.Class == classPart && abs(b.W-deltaWidth*module) < 0.01 && abs(b.H-deltaHeight*module) < 0.01 {
+					marked++
+				}
+			}
+		}
+		if marked < all*9/10 {
+			t.Errorf("%s: %d of %d symbols are marked", name, marked, all)
+		}
+	}
+}

@@ -146,3 +146,14 @@ func (p *probe) draw(q *painter) {
 	}
 	symbols.Tag(q.c, mm(at), p.label, anchor)
 }
+
+// box is the room of a test point's ring and tag.
+func (p *probe) box() ink.Rect {
+	d := map[string]symbols.Dir{"N": symbols.Up, "S": symbols.Down, "E": symbols.Right, "W": symbols.Left, "F": symbols.Down}[p.side]
+	at := p.at.point()
+	if p.side == "F" {
+		at.Y += farEnd - 1.7
+	}
+	b := symbols.ProbeBox(mm(at), d, p.label)
+	return ink.Rect{X: b.X / module, Y: b.Y / module, W: b.W / module, H: b.H / module}
+}

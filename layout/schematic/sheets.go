@@ -143,6 +143,11 @@ func (b *book) make() error {
 	}
 	for _, s := range b.sheets {
 		s.scene.finish(b)
+		if c := b.d.Changes; c != nil && s.scene.markChanged(c.Touched) {
+			if err := b.note(s, s.cautions, append([]string{"A filled triangle marks what revision " + c.To + " changes."}, s.notes...)); err != nil {
+				return err
+			}
+		}
 	}
 	for _, name := range circuit.SortedKeys(b.places) {
 		if pl := b.places[name]; pl.sheet != nil && pl.anchor != "" {
