@@ -73,8 +73,8 @@ func (b *book) changeWork(c *design.Changes) []block {
 	if len(c.Work) == 0 {
 		return nil
 	}
-	t := &table{st: tableText, min: plainRow, cols: []column{{head: "Done", w: 10, a: ink.Middle}, {head: "What", w: 23, indent: 2, pad: 0.6}, {head: "Do this", w: 60},
-		{head: "Was", w: 24, a: ink.End}, {head: "Is", w: 26, a: ink.End}, {head: "From", w: 11, a: ink.End}, {head: "Sheet", w: 12, a: ink.End}, {head: "Initials", w: 14, a: ink.Middle}}}
+	t := &table{st: tableText, min: plainRow, cols: []column{{head: "Done", w: 10, a: ink.Middle}, {head: "What", w: 23, indent: 2, pad: 0.6}, {head: "Do this", w: 47},
+		{head: "Was", w: 30, a: ink.End}, {head: "Is", w: 32, a: ink.End}, {head: "From", w: 14, a: ink.End}, {head: "Sheet", w: 11, a: ink.End}, {head: "Initials", w: 13, a: ink.Middle}}}
 	head := t.head(0)
 	out := []block{b.head(0, b.pg.width, "What to do", `in this order; "from" names the change that forces it`), head}
 	first := true
@@ -144,13 +144,22 @@ func (b *book) workSheet(w design.WorkItem) string {
 		key = keyFuses
 	case design.Relabel:
 		key = keyLabels
+		for _, h := range b.holders() {
+			if w.What == h.strip { // its door copy
+				key = keyFuses
+			}
+		}
 	case design.TestAgain:
 		if w.Test == design.TestReadings {
 			key = keyTestPoints
 		}
 	}
 	for _, l := range w.Labels { // the row itself, where it is one of few
-		if n := b.refs.at[rowMark(l)]; n > 0 && (w.Tool == design.ReCut || w.Tool == design.ReFuse) {
+		mark := runMark(l)
+		if w.Tool == design.ReFuse {
+			mark = "fuse " + l
+		}
+		if n := b.refs.at[mark]; n > 0 && (w.Tool == design.ReCut || w.Tool == design.ReFuse) {
 			return fmt.Sprint(n)
 		}
 	}

@@ -245,7 +245,7 @@ func (p *pad) statusPanel(x, y, h float64) {
 	}
 	f := fmt.Sprintf("%s, %s", counted(b.d.Count(finding.Caution), "caution"), counted(b.d.Count(finding.Note), "note"))
 	if n := b.d.Count(finding.Stop); n > 0 {
-		f = fmt.Sprintf("%d stop: %s", n, b.sheets(keyBasis))
+		f = fmt.Sprintf("%d stop: sheet %d", n, b.first(keyBasis))
 	}
 	rows = append(rows, pair{"Findings", f, ""})
 	at += 1.8
@@ -308,7 +308,11 @@ func (b *book) revisions() []block {
 	if ch := b.d.Changes; ch != nil && len(ch.Revisions) > 0 {
 		list = nil
 		for _, r := range ch.Revisions {
-			list = append(list, rev{r.Index, r.Issued, r.Why, r.Sheets, initials(r.By)})
+			sheets := r.Sheets
+			if sheets == "" {
+				sheets = "all" // an issue replaces the whole packet
+			}
+			list = append(list, rev{r.Index, r.Issued, r.Why, sheets, initials(r.By)})
 		}
 		slices.Reverse(list)
 	}

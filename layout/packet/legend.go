@@ -171,8 +171,8 @@ func (b *book) symbolLegend() []block {
 				m := symbols.M * at.Scale
 				at.At = ink.Point{X: x + 9.5 - (box.X+box.W/2)*m, Y: y + h/2 - (box.Y+box.H/2)*m}
 				u.Draw(p.c, at, ink.Pen{Width: 0.3, Color: ink.Black}, "")
-				lines := wrap(upper(u.Name), tableText, each-22)
-				p.lines(x+20.5, y+(h-float64(len(lines))*tableText.lead)/2+rise*tableText.lead, lines, tableText.lead)
+				lines := wrap(upper(u.Name), tableText, each-21)
+				p.lines(x+20, y+(h-float64(len(lines))*tableText.lead)/2+rise*tableText.lead, lines, tableText.lead)
 			}
 			p.rule(p.pg.l, y+h, p.pg.width, hairline, ink.Rule)
 		}})

@@ -230,7 +230,7 @@ func broken(w line, width float64) []line {
 			cur, at = cur.add(s), at+sw
 			continue
 		}
-		for _, piece := range strings.SplitAfter(s.text, noBreak) {
+		for _, piece := range breakable(s.text) {
 			if pw := ink.Width(strings.TrimRight(piece, noBreak), s.font); pw <= width {
 				if at+pw > width {
 					flush()
@@ -253,6 +253,22 @@ func broken(w line, width float64) []line {
 	}
 	flush()
 	return out
+}
+
+// breakable cuts a word where it breaks best: behind no-break spaces, and behind hyphens
+// between letters.
+func breakable(word string) []string {
+	var out []string
+	start := 0
+	runes := []rune(word)
+	for i, r := range runes {
+		hyphen := r == '-' && i > 0 && i < len(runes)-1 && unicode.IsLetter(runes[i-1]) && unicode.IsLetter(runes[i+1])
+		if hyphen || string(r) == noBreak {
+			out = append(out, string(runes[start:i+1]))
+			start = i + 1
+		}
+	}
+	return append(out, string(runes[start:]))
 }
 
 // cutLine is a text on one line of at most width mm, with an ellipsis where it had to

@@ -153,13 +153,16 @@ func (b *book) wireRemark(g wireGroup) string {
 	return kind + "; ferrules; torque as the terminal says"
 }
 
+// runMark names the row of a wire or cable in the wire run table.
+func runMark(name string) string { return "run " + name }
+
 // wireRow is a single wire.
 func (b *book) wireRow(t *table, c *circuit.Conductor) block {
 	note := c.Size.String()
 	if c.Rail != "" {
 		note += ", " + c.Rail
 	}
-	return t.line(b, 0, row{changed: b.touched(c.Number), marks: []string{rowMark("wire " + c.Number)}, cells: []cell{
+	return t.line(b, 0, row{changed: b.touched(c.Number), marks: []string{rowMark("wire " + c.Number), runMark(c.Number)}, cells: []cell{
 		txt(c.Number), txt(pinName(c.From)), txt(pinName(c.To)), txt(c.Colour), txt(wireLength(float64(c.Length))),
 		tickBox(), tickBox(), tickBox(), tickBox(), upTo(txt(note), 2)}})
 }
@@ -191,7 +194,7 @@ func (b *book) cableRows(t *table, c *circuit.Cable) block {
 	if short {
 		b.noteCut(text)
 	}
-	return block{h: float64(n) * high, marks: []string{rowMark(c.Designation)}, draw: func(p *pad, y, h float64) {
+	return block{h: float64(n) * high, marks: []string{rowMark(c.Designation), runMark(c.Designation)}, draw: func(p *pad, y, h float64) {
 		l := p.pg.l
 		base := func(i int) float64 { return y + float64(i)*high + (high-t.st.lead)/2 + rise*t.st.lead }
 		p.text(l, base(0), name[0], ink.Start)
