@@ -66,8 +66,9 @@ func (t *tree) drawsMore() bool {
 // costSlack is how far two costs may differ by rounding and still be equal.
 const costSlack = 1e-9
 
-// full chooses once more with the battery full, or on float where circuits are lit
-// while mains is on, and returns for each leg the thicker of both choices.
+// full holds the choice against the limits with the battery full, or on float where
+// circuits are lit while mains is on. If it breaks them, it chooses once more there and
+// returns for each leg the thicker of both choices.
 func (t *tree) full(end *sizing.TreeResult) (*sizing.TreeResult, error) {
 	high := t.Tree
 	high.Volts = t.p.Full
@@ -81,6 +82,9 @@ func (t *tree) full(end *sizing.TreeResult) (*sizing.TreeResult, error) {
 		if high.Legs[i].MinVolt > 0 {
 			high.Legs[i].MinVolt = high.Volts - t.p.permittedDrop()
 		}
+	}
+	if _, err := high.Check(end.Sizes); err == nil {
+		return end, nil
 	}
 	res, err := high.Choose()
 	if err != nil {
