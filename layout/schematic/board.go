@@ -78,7 +78,11 @@ func (b *book) bars(sh *Sheet, s *boardSheet, xs []int, end int) {
 	}
 	o := sc.object(classBoundary, "board-"+bd.Name, bd.Title, ink.Attr{Name: "board", Value: bd.Name})
 	boundary(o, left, rowBoardTop, right, rowBoardEnd, open)
-	name := textAt(left+0.8, rowPlace, fit(bd.Place.Designation+" "+bd.Place.Name, valueStyle, longPlace), valueStyle, ink.Start)
+	at := colBoardNames
+	if fed {
+		at = left + 0.8
+	}
+	name := textAt(at, rowPlace, fit(bd.Place.Designation+" "+bd.Place.Name, valueStyle, longPlace), valueStyle, ink.Start)
 	o.add(name)
 
 	last := len(xs) - 1

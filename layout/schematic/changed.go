@@ -23,7 +23,7 @@ func (d *delta) box() ink.Rect {
 }
 
 // markChanged puts a triangle beside every designation, wire number and test point tag
-// at which the revision changes something, left or right of it where there is room.
+// at which the revision changes something, left or right of it or over it, where there is room.
 // It reports whether it marked any.
 func (s *scene) markChanged(touched map[string]bool) bool {
 	var texts []ink.Rect
@@ -56,8 +56,8 @@ func (s *scene) markChanged(touched map[string]bool) bool {
 				continue
 			}
 			base := b.Y + textHeight
-			for _, x := range []float64{b.X - deltaGap - deltaWidth, b.X + b.W + deltaGap} {
-				if m := (&delta{point{x, base}}); s.clear(m.box(), texts, b) {
+			for _, at := range []point{{b.X - deltaGap - deltaWidth, base}, {b.X + b.W + deltaGap, base}, {b.X, b.Y - deltaGap}} {
+				if m := (&delta{at}); s.clear(m.box(), texts, b) {
 					o.add(m)
 					any = true
 					break

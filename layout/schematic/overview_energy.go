@@ -350,6 +350,9 @@ func (b *book) drawOthers(sh *Sheet, o *overview) {
 	l := &line{at: point{colText, 19.2}, runs: []run{{s: "Also:"}}}
 	for i, x := range o.others {
 		r := run{s: fit(x.st.Heading, valueStyle, room-6) + " ", to: b.place("stage " + x.st.Name), short: true}
+		if i+1 < len(o.others) {
+			r.after = ","
+		}
 		more := run{s: fmt.Sprintf("and %d more", len(o.others)-i)}
 		last := l.at.Y > 19.2+linePitch*(rows-1.5)
 		need := width(r.s+"/000", valueStyle)

@@ -56,12 +56,13 @@ type run struct {
 	st    style
 	to    *place
 	short bool // only the sheet of the place
+	after string
 }
 
 func (r run) text() string {
 	switch {
 	case r.to != nil && r.short:
-		return r.s + r.to.Sheet()
+		return r.s + r.to.Sheet() + r.after
 	case r.to != nil:
 		return r.s + r.to.String()
 	}
