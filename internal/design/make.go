@@ -2,6 +2,7 @@ package design
 
 import (
 	"errors"
+	"slices"
 
 	"gloamwright/internal/circuit"
 	"gloamwright/internal/describe"
@@ -14,11 +15,54 @@ import (
 // Make designs a site: it expands the description, gives labels (kept ones stay),
 // sizes everything, solves the circuit in every operating condition and judges what
 // came out. The site must have passed the decoder without errors.
+//
+// When the simulated outage or recharge falls short of what is asked and the user has
+// not given the battery or the charger, the next larger one is tried.
 func Make(site *describe.Site, kept circuit.Labels) (*Design, error) {
+	more := stage.Reserve{Capacity: 1, Charge: 1}
+	for try := 1; ; try++ {
+		d, err := attempt(site, kept, more)
+		if err != nil || try == mostAttempts || !d.asks(&more) {
+			return d, err
+		}
+	}
+}
+
+// mostAttempts bounds the designs of one site; each takes at least a standard step.
+const mostAttempts = 4
+
+// asks raises more to what the simulations ask beyond the sizing, and reports whether
+// they ask anything that may be chosen.
+func (d *Design) asks(more *stage.Reserve) bool {
+	const step = 1.02 // beyond what was short, so that the next attempt stands clear
+	e, duty := d.Endurance, d.Site.Duty
+	asked := false
+	if b := d.Battery; b.Part != nil && !b.Pinned && e.Held > 0 && e.Held < duty.Outage.Val && len(e.Lit) > 0 {
+		more.Capacity = step * float64(b.Capacity/b.Required) * max(more.Capacity, 1) * float64(duty.Outage.Val/e.Held)
+		asked = true
+	}
+	if c := d.Charger; c.Part != nil && c.Part.Kind == circuit.ChargerUnit && !c.Pinned && c.Current < c.Limit && recharged(e.Runs) && (e.Recharge == 0 || e.Recharge > duty.Recharge.Val) {
+		k := 1.5 // it never filled: half as much again
+		if e.Recharge > 0 {
+			k = float64(e.Recharge / duty.Recharge.Val)
+		}
+		more.Charge = step * float64(c.Current/c.Required) * max(more.Charge, 1) * k
+		asked = true
+	}
+	return asked
+}
+
+// recharged reports whether a recharge was followed.
+func recharged(runs []*facts.Run) bool {
+	return slices.ContainsFunc(runs, func(r *facts.Run) bool { return r.Recharge })
+}
+
+// attempt is one design of a site.
+func attempt(site *describe.Site, kept circuit.Labels, more stage.Reserve) (*Design, error) {
 	c := stage.Expand(site)
 	labels := c.Label(kept)
 	f := &facts.Facts{Site: site, Circuit: c}
-	plan := stage.Size(site, c, f)
+	plan := stage.Size(site, c, f, more)
 	f.Netlist = c.Resolve()
 	n, err := network.New(f.Netlist)
 	if err != nil {

@@ -306,6 +306,13 @@ func sizeBattery(p *Plan, s *describe.Stage) {
 	for _, w := range ws {
 		p.work(g.Designation, "", w, "battery: end of discharge")
 	}
+	if k := p.more.Capacity; k > 1 {
+		p.work(g.Designation, "capacity that the simulated outage asks", sizing.Working{
+			Formula: "C × k, k from the outage followed hour by hour", Substituted: fmt.Sprintf("%.4f Ah × %.4f", float64(need), k),
+			Value: float64(need) * k, Unit: "Ah", Source: "simulated discharge",
+		}, g.Designation+": required capacity")
+		need *= quantity.AmpereHour(k)
+	}
 	given, pinned := describe.Get[quantity.AmpereHour](s.Fields, "capacity")
 	parallel, _ := describe.Get[int](s.Fields, "parallel")
 	bank, w, err := sizing.NextCapacity(sizing.BankInput{Class: p.Class, Required: need, Cells: p.Cells, Stock: practice.Blocks.Val, Parallel: parallel.Val})

@@ -1,6 +1,8 @@
 package stage
 
 import (
+	"fmt"
+
 	"gloamwright/internal/catalogue"
 	"gloamwright/internal/circuit"
 	"gloamwright/internal/describe"
@@ -96,6 +98,17 @@ func sizeCharger(p *Plan, s *describe.Stage) {
 		rated = max(c.Rated, catalogue.ChargerCurrents[0])
 	}
 	need := c.Needed
+	if k := p.more.Charge; k > 1 && !pinned {
+		asked := need * quantity.Ampere(k)
+		if r, ok := catalogue.NextRating(catalogue.ChargerCurrents, asked); ok && r <= c.Limit {
+			rated = r
+		}
+		p.work(t.Designation, "current that the simulated recharge asks", sizing.Working{
+			Formula: "I × k, k from the recharge followed hour by hour", Substituted: fmt.Sprintf("%.4f A × %.4f", float64(need), k),
+			Value: float64(asked), Unit: "A", Source: "simulated recharge",
+		}, t.Designation+": charger current needed")
+		need = asked
+	}
 	limit := quantity.Ampere(float64(p.Class.MaxCharge) * float64(b.Capacity))
 	mains := must[quantity.Toleranced[quantity.Volt]](s, "mains")
 	_, pinnedFloat := describe.Get[quantity.Volt](s.Fields, "float")

@@ -1,10 +1,15 @@
 package stage_test
 
 import (
+	"fmt"
+	"math"
 	"strings"
 	"testing"
 
+	"gloamwright/internal/facts"
 	"gloamwright/internal/network"
+	"gloamwright/internal/stage"
+	"pgregory.net/rapid"
 )
 
 const linear = "raw: {kind: transformer-supply, rated: 18 V 2 A, open: 22 V, mains: 230 V ± 10 %}\nfloat: {kind: linear-charger, from: raw, to: store"
@@ -109,4 +114,38 @@ func TestBlocking(t *testing.T) {
 	if i := s.Current(d.part(t, "float/blocking").Designation); i > 0 || i < -1e-3 {
 		t.Errorf("%.3g mA flow back", i*1e3)
 	}
+}
+
+// TestOddSupplies sizes supplies, chargers and feeds of any values that the fields take:
+// sizing comes to an end, and every working that it keeps is a number.
+func TestOddSupplies(t *testing.T) {
+	rapid.Check(t, func(rt *rapid.T) {
+		pick := func(name string, list ...string) string { return rapid.SampledFrom(list).Draw(rt, name) }
+		stages := fmt.Sprintf(`
+raw:      {kind: transformer-supply, rated: %s %s, open: %s, mains: 230 V ± %s}
+float:    {kind: linear-charger, from: raw, to: store%s}
+steady:   {kind: shunt-regulator, from: %s%s}
+dusk:     {kind: photocell, built: %s, from: guard, holds: transfer, dark_below: %s%s}
+transfer: {kind: changeover-relay, coil: steady, from: guard%s}
+`,
+			pick("volt", "1 V", "12 V", "18 V", "40 V"), pick("ampere", "1 mA", "0.5 A", "2 A", "50 A"), pick("open", "1 V", "17 V", "22 V", "60 V"), pick("mains", "0 %", "10 %", "20 %"),
+			pick("charger", "", ", impedance: 0.05 Ω", ", impedance: 10 Ω", ", float: 12 V", ", float: 16 V"),
+			pick("from", "raw", "guard"), pick("volts", "", ", volts: 10 V", ", volts: 11 V", ", dropper: 1 Ω", ", dropper: 100 kΩ"),
+			pick("built", "follower", "comparator", "module"), pick("dark", "0.1 lx", "10 lx", "2000 lx"), pick("light", "", ", light_above: 20 lx", ", light_above: 5000 lx"),
+			pick("coil", "", ", coil_resistance: 1 Ω", ", coil_resistance: 100 kΩ"))
+		nominal := pick("nominal", "12 V", "24 V", "48 V")
+		site := bench{stages: stages, nominal: nominal, lamp: "{kind: resistive, rated: " + nominal + ", power: 5 W}", from: "transfer.break", lit: "outage-night"}.site(t)
+		c := stage.Expand(site)
+		c.Label(nil)
+		f := &facts.Facts{Site: site, Circuit: c}
+		stage.Size(site, c, f, stage.Reserve{})
+		for _, w := range f.Workings {
+			if math.IsNaN(w.Value) || math.IsInf(w.Value, 0) {
+				rt.Fatalf("%s, %s is no number: %s", w.For, w.Name, w.Substituted)
+			}
+		}
+		if _, err := network.New(c.Resolve()); err != nil {
+			rt.Fatal(err)
+		}
+	})
 }

@@ -58,6 +58,7 @@ type Plan struct {
 
 	TrunkSize, ChargeSize quantity.WireSize
 
+	more    Reserve
 	aux     map[string]quantity.Ampere // what auxiliary supplies feed, by stage name
 	cabled  bool
 	loads   map[string]Load
@@ -65,11 +66,16 @@ type Plan struct {
 	sources map[*circuit.Part]raw // fuses that a transformer supply feeds, not the battery
 }
 
+// Reserve is what the simulated outage and recharge ask beyond the sizing formulas, as
+// factors of the battery's capacity and of the charger's current; 1 or less asks
+// nothing.
+type Reserve struct{ Capacity, Charge float64 }
+
 // Size sizes every part and conductor of c and writes what came out to f. What
 // cannot be met is listed in f.Blocked.
-func Size(site *describe.Site, c *circuit.Circuit, f *facts.Facts) *Plan {
+func Size(site *describe.Site, c *circuit.Circuit, f *facts.Facts, more Reserve) *Plan {
 	p := &Plan{
-		Site: site, C: c, F: f, System: catalogue.System(site.Practice.Conductors.Val),
+		more: more, Site: site, C: c, F: f, System: catalogue.System(site.Practice.Conductors.Val),
 		aux: map[string]quantity.Ampere{}, loads: map[string]Load{}, parts: map[string]*circuit.Part{},
 		sources: map[*circuit.Part]raw{},
 	}
