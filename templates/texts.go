@@ -21,6 +21,7 @@ type Texts struct {
 	Checklist  []Block
 	Legend     []LegendGroup
 	Remedies   []Remedy
+	Firm       Firm
 }
 
 // Caution is one warning and what it is printed for.
@@ -86,7 +87,8 @@ const (
 )
 
 // Load reads the standing texts. A file of the same name in the folder dir stands in for
-// the one that the program brings; dir may be empty. Mistakes in such a file are
+// the one that the program brings; firm.yaml there names the firm and its logo. dir may
+// be empty. Mistakes in such a file are
 // reported like those of a description, with the sources to print their lines from.
 func Load(dir string) (*Texts, describe.List, describe.Sources) {
 	t := &Texts{}
@@ -112,6 +114,13 @@ func Load(dir string) (*Texts, describe.List, describe.Sources) {
 		r.file(name, src, func(n node) { f.read(r, t, n) })
 	}
 	if dir != "" {
+		own := filepath.Join(dir, firmFile)
+		switch text, err := os.ReadFile(own); {
+		case err == nil:
+			r.file(own, text, func(n node) { readFirm(r, t, n) })
+		case !errors.Is(err, fs.ErrNotExist):
+			r.report(describe.Span{File: own}, "unreadable text file", err.Error())
+		}
 		if info, err := os.Stat(dir); err != nil || !info.IsDir() {
 			r.report(describe.Span{File: dir}, "no folder of texts", "practice.texts names a folder with files such as "+cautionsFile+"; there is none here.")
 		}

@@ -19,7 +19,12 @@ func Documents(d *design.Design) ([]release.File, error) {
 	if err != nil {
 		return nil, fmt.Errorf("the schematic cannot be drawn: %w", err)
 	}
+	firm, err := packet.Firm(d)
+	if err != nil {
+		return nil, fmt.Errorf("the packet: %w", err)
+	}
 	for i, s := range sheets {
+		s.Firm = firm
 		data, err := s.SVG()
 		if err != nil {
 			return nil, fmt.Errorf("schematic sheet %d: %w", i+1, err)

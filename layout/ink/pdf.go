@@ -2,6 +2,7 @@ package ink
 
 import (
 	"bytes"
+	"crypto/sha256"
 	"errors"
 	"fmt"
 	"slices"
@@ -208,6 +209,21 @@ func (d *pdfDoc) font(f Font) {
 
 // Group implements Canvas: the content only.
 func (d *pdfDoc) Group(_ Object, draw func()) { draw() }
+
+// Image implements Imager. Equal pictures stand in the document once.
+func (d *pdfDoc) Image(r Rect, png []byte) {
+	name := fmt.Sprintf("%x", sha256.Sum256(png))
+	kind := gofpdf.ImageOptions{ImageType: "PNG"}
+	if d.f.GetImageInfo(name) == nil {
+		d.f.RegisterImageOptionsReader(name, kind, bytes.NewReader(png))
+	}
+	if err := d.f.Error(); err != nil {
+		d.faults = append(d.faults, fmt.Errorf("picture: %w", err))
+		d.f.ClearError()
+		return
+	}
+	d.f.ImageOptions(name, r.X, r.Y, r.W, r.H, false, kind, 0, "")
+}
 
 // Link implements Canvas. Targets are looked up when all sheets are drawn.
 func (d *pdfDoc) Link(r Rect, t Target) {

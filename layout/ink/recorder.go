@@ -11,7 +11,7 @@ import (
 )
 
 // Call is one recorded call of a Canvas: Stroked, Filled, Written, Grouped,
-// Linked or Marked.
+// Linked, Marked or Pictured.
 type Call interface{ replay(Canvas) }
 
 // The calls a Recorder keeps.

@@ -158,6 +158,13 @@ func (d *svgDoc) Stroke(p *Path, pen Pen) {
 // Fill implements Canvas.
 func (d *svgDoc) Fill(p *Path, c Color) { d.svg.Path(pathData(p), d.ink("", "fill", c)...) }
 
+// Image implements Imager: the file carries the picture.
+func (d *svgDoc) Image(r Rect, png []byte) {
+	// svgo knows pictures of whole sizes alone
+	fmt.Fprintf(d.svg.Writer, `<image x="%s" y="%s" width="%s" height="%s" preserveAspectRatio="none" xlink:href="data:image/png;base64,%s"/>`+"\n",
+		number(r.X), number(r.Y), number(r.W), number(r.H), base64.StdEncoding.EncodeToString(png))
+}
+
 // Text implements Canvas.
 func (d *svgDoc) Text(at Point, s string, f Font, a Anchor, c Color, turn bool) {
 	generic := "sans-serif"

@@ -62,9 +62,11 @@ func (p *pad) coverHead() {
 	x := pg.right()
 	x -= p.write(x, pg.t+4.6, fmt.Sprintf("of %d", p.last), small, ink.End) + 1
 	x -= p.write(x, pg.t+4.6, fmt.Sprint(p.n), style{ink.Bold, 14, 5, ink.Black}, ink.End) + 1
-	p.write(x, pg.t+4.6, "Sheet", small, ink.End)
+	x -= p.write(x, pg.t+4.6, "Sheet", small, ink.End) + 8
 	w := p.fit(pg.l, pg.t+4.6, job.Number.Val, style{ink.MonoBold, 11, 4.5, ink.Black}, 90, ink.Start)
-	p.write(pg.l+w+9, pg.t+4.6, "Build packet", style{ink.Regular, 11, 4.5, ink.Mid}, ink.Start)
+	left := pg.l + w + 9
+	left += p.write(left, pg.t+4.6, "Build packet", style{ink.Regular, 11, 4.5, ink.Mid}, ink.Start) + 8
+	p.coverFirm(left, x)
 	title := coverTitle
 	for _, pt := range []float64{30, 24, 20} {
 		title.pt = pt
@@ -105,6 +107,27 @@ func (p *pad) coverHead() {
 	}
 	p.rule(pg.l, coverRules+3.5, pg.width, 0.35, ink.Dusk)
 	p.rule(pg.l, coverRules+4.8, pg.width, hairline, ink.Dusk)
+}
+
+// coverFirm names the firm between two places of the cover's head, its mark before the
+// name.
+func (p *pad) coverFirm(left, right float64) {
+	const most, high, gap = 32.0, 9.0, 2.5
+	firm := p.b.words.texts.Firm
+	name := style{ink.Medium, 10.5, 4.5, ink.Black}
+	mark := 0.0
+	if firm.Logo != nil {
+		w, h := firm.Logo.Fit(most, high)
+		mark = w + gap
+		x := right - w
+		if firm.Name != "" {
+			x = max(left, right-mark-spans(firm.Name, name).width())
+		}
+		firm.Logo.Draw(p.c, ink.Rect{X: x, Y: max(p.pg.t, p.pg.t+3.2-h/2), W: w, H: h})
+	}
+	if firm.Name != "" {
+		p.fit(right, p.pg.t+4.6, firm.Name, name, right-left-mark, ink.End)
+	}
 }
 
 // spelled are small numbers in words.

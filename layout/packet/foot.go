@@ -2,16 +2,38 @@ package packet
 
 import (
 	"fmt"
+	"slices"
 	"strings"
 
 	"gloamwright/layout/ink"
 )
 
 // footCells are the fields of ISO 7200 at the foot; widths are for 180 mm.
-var footCells = []struct {
+type footCell struct {
 	caption string
 	w       float64
-}{{"Owner", 37}, {"Identification", 28}, {"Revision", 14}, {"Issued", 22}, {"Document", 43}, {"Prepared", 21}, {"Approved", 15}}
+}
+
+var footCells = []footCell{{"Owner", 37}, {"Identification", 28}, {"Revision", 14}, {"Issued", 22}, {"Document", 43}, {"Prepared", 21}, {"Approved", 15}}
+
+// preparedCell is the place of who prepared the document among the cells.
+const preparedCell = 5
+
+// footWithFirm are the widths of the cells where a firm stands with who prepared.
+var footWithFirm = []float64{37, 25, 14, 19, 40, 32, 13}
+
+// footCells are the cells at the foot; the firm, if there is one, stands over who
+// prepared.
+func (b *book) footCells() []footCell {
+	out := slices.Clone(footCells)
+	if name := b.words.texts.Firm.Name; name != "" {
+		for i, w := range footWithFirm {
+			out[i].w = w
+		}
+		out[preparedCell].caption += ", " + name
+	}
+	return out
+}
 
 // language of the documents, ISO 639.
 const language = "en"
@@ -43,7 +65,7 @@ func (p *pad) drawFoot(s *sheetPlan, next *sheetPlan) {
 	values := []string{job.Client.Val, job.Number.Val + "-" + s.s.letter, p.b.revision(), issued, s.s.document, job.Prepared.Val, ""}
 	p.rule(pg.l, yb-15, pg.width, 0.35, ink.Black)
 	x := pg.l
-	for i, c := range footCells {
+	for i, c := range p.b.footCells() {
 		w := c.w * pg.width / 180
 		at := x + 1.5
 		if i == 0 {
@@ -51,7 +73,7 @@ func (p *pad) drawFoot(s *sheetPlan, next *sheetPlan) {
 		} else {
 			p.stroke(x, yb-14.2, x, yb-7.4, hairline, ink.Rule)
 		}
-		p.write(at, yb-15+3.1, c.caption, footCaption, ink.Start)
+		p.fit(at, yb-15+3.1, c.caption, footCaption, x+w-at-1, ink.Start)
 		p.fit(at, yb-15+6.8, values[i], footValue, x+w-at-1, ink.Start)
 		x += w
 	}

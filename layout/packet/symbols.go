@@ -146,6 +146,13 @@ type renumbered struct {
 // sheetReference is "/3.B7" or "/3".
 var sheetReference = regexp.MustCompile(`/(\d+)(\.[A-Z]\d+)?$`)
 
+// Image implements ink.Imager.
+func (r *renumbered) Image(b ink.Rect, png []byte) {
+	if m, ok := r.Canvas.(ink.Imager); ok {
+		m.Image(b, png)
+	}
+}
+
 // Text implements ink.Canvas.
 func (r *renumbered) Text(at ink.Point, s string, f ink.Font, a ink.Anchor, c ink.Color, turn bool) {
 	if m := sheetReference.FindStringSubmatchIndex(s); m != nil {

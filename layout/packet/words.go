@@ -9,8 +9,10 @@ import (
 	"strings"
 
 	"gloamwright/internal/circuit"
+	"gloamwright/internal/design"
 	"gloamwright/internal/facts"
 	"gloamwright/internal/quantity"
+	"gloamwright/layout/sheet"
 	"gloamwright/templates"
 )
 
@@ -26,15 +28,34 @@ type textError struct{ text string }
 
 func (e *textError) Error() string { return e.text }
 
-// readTexts loads the standing texts, those of the firm first.
-func (b *book) readTexts() error {
-	dir := b.d.Site.Practice.Texts.Val
+// Firm reads who makes the documents of a design, for the title blocks of its schematic.
+// Mistakes in the firm's texts are an error that names their places.
+func Firm(d *design.Design) (sheet.Firm, error) {
+	texts, err := loadTexts(d)
+	if err != nil {
+		return sheet.Firm{}, err
+	}
+	return sheet.Firm{Name: texts.Firm.Name, Logo: texts.Firm.Logo}, nil
+}
+
+// loadTexts loads the standing texts, those of the firm first.
+func loadTexts(d *design.Design) (*templates.Texts, error) {
+	dir := d.Site.Practice.Texts.Val
 	if dir != "" && !filepath.IsAbs(dir) {
-		dir = filepath.Join(filepath.Dir(b.d.Site.File), dir)
+		dir = filepath.Join(filepath.Dir(d.Site.File), dir)
 	}
 	texts, list, sources := templates.Load(dir)
 	if list.HasErrors() {
-		return &textError{"the standing texts hold mistakes:\n" + list.Render(sources)}
+		return nil, &textError{"the standing texts hold mistakes:\n" + list.Render(sources)}
+	}
+	return texts, nil
+}
+
+// readTexts fills the standing texts in.
+func (b *book) readTexts() error {
+	texts, err := loadTexts(b.d)
+	if err != nil {
+		return err
 	}
 	b.words = words{texts: texts, holds: b.holding(), values: b.valuesOfJob()}
 	return nil

@@ -12,7 +12,7 @@ const notForConstruction = "NOT FOR CONSTRUCTION"
 func (s *Sheet) drawFrame(c ink.Canvas, o Options) {
 	d := s.book.d
 	b := sheet.TitleBlock{Supplement: s.Supplement, Status: "Draft", Type: s.Kind, Language: "en", Class: "SELV",
-		Sheet: o.Number, Of: o.Of}
+		Sheet: o.Number, Of: o.Of, Firm: s.Firm}
 	if d.Site != nil {
 		j := d.Site.Job
 		b.Owner, b.Title, b.ID = j.Client.Val, j.Title.Val, j.Number.Val+"-E"

@@ -21,6 +21,7 @@ type Sheet struct {
 	Title      string // of the job
 	Supplement string // "Supply and battery"
 	Paper      sheet.Format
+	Firm       sheet.Firm // stands in the title block
 
 	scene    *scene
 	book     *book

@@ -240,3 +240,34 @@ func TestNotes(t *testing.T) {
 		}
 	}
 }
+
+// The firm stands with who drew the sheet; its mark keeps its proportions and stays
+// clear of the words.
+func TestFirmInTitleBlock(t *testing.T) {
+	c := ink.NewRecorder(420, 297, "x")
+	mark := &ink.Picture{W: 2, H: 1, Shapes: []ink.Shape{{Path: new(ink.Path).Rect(ink.Rect{W: 2, H: 1}), Color: ink.Dusk}}}
+	A3.DrawTitleBlock(c, TitleBlock{Creator: "A. Marlowe", Firm: Firm{Name: "Hollow and Hill", Logo: mark}})
+	var box, words ink.Rect
+	var walk func(calls []ink.Call)
+	walk = func(calls []ink.Call) {
+		for _, x := range calls {
+			switch x := x.(type) {
+			case ink.Grouped:
+				walk(x.Calls)
+			case ink.Filled:
+				box = x.Path.Bounds()
+			case ink.Written:
+				if x.Text == "A. Marlowe, Hollow and Hill" {
+					words = ink.TextBox(x.At, x.Text, x.Font, x.Anchor, x.Turn)
+				}
+			}
+		}
+	}
+	walk(c.Calls)
+	if words.W == 0 || box.W == 0 || box.W != 2*box.H {
+		t.Fatalf("words %+v, mark %+v", words, box)
+	}
+	if words.X+words.W > box.X || box.X+box.W > A3.TitleBlock().X+60 {
+		t.Errorf("words %+v, mark %+v overlap or leave the field", words, box)
+	}
+}

@@ -42,7 +42,41 @@ type TitleBlock struct {
 	Reference  string // technical reference: who knows
 	Class      string // classification
 	Sheet, Of  int
+	Firm       Firm   // who drew it; zero for none
 	Warning    string // written white on a black bar over the block; empty for none
+}
+
+// Firm is who made a document: its name, and its mark if it has one.
+type Firm struct {
+	Name string
+	Logo *ink.Picture
+}
+
+// Most that a firm's mark takes in the field of the creator, mm.
+const (
+	logoWidth  = 20
+	logoHeight = 7
+	logoInset  = 1
+)
+
+// drawLogo draws the firm's mark at the right of the creator's field and returns the
+// width that it takes there.
+func (b TitleBlock) drawLogo(c ink.Canvas, block ink.Rect) float64 {
+	if b.Firm.Logo == nil {
+		return 0
+	}
+	w, h := b.Firm.Logo.Fit(logoWidth, logoHeight)
+	const field, row = 60, 2 // of the creator
+	b.Firm.Logo.Draw(c, ink.Rect{X: block.X + field - logoInset - w, Y: block.Y + row*blockRow + (blockRow-h)/2, W: w, H: h})
+	return w + logoInset
+}
+
+// creator is the creator with the firm.
+func (b TitleBlock) creator() string {
+	if b.Firm.Name == "" || b.Creator == "" {
+		return b.Creator + b.Firm.Name
+	}
+	return b.Creator + ", " + b.Firm.Name
 }
 
 // cell is one field: its name in data attributes, caption, place in the block and
@@ -65,7 +99,7 @@ func (b TitleBlock) cells() []cell {
 		{"supplement", "Supplementary title", 60, 60, 1, b.Supplement, m},
 		{"language", "Language", 120, 30, 1, b.Language, r},
 		{"size", "Size", 150, 30, 1, b.Size, r},
-		{"creator", "Created by", 0, 60, 2, b.Creator, r},
+		{"creator", "Created by", 0, 60, 2, b.creator(), r},
 		{"approved", "Approved by", 60, 60, 2, b.Approved, r},
 		{"date", "Date of issue", 120, 30, 2, b.Date, r},
 		{"revision", "Revision", 150, 30, 2, b.Revision, m},
@@ -112,7 +146,11 @@ func (f Format) DrawTitleBlock(c ink.Canvas, b TitleBlock) {
 		stroke(c, middleWidth, r.X+60, r.Y, r.X+60, bottom)
 		stroke(c, middleWidth, r.X+150, r.Y, r.X+150, bottom)
 		stroke(c, middleWidth, r.X+120, r.Y+blockRow, r.X+120, bottom)
+		logo := b.drawLogo(c, r)
 		for _, k := range b.cells() {
+			if k.field == "creator" {
+				k.width -= logo
+			}
 			k.draw(c, r)
 		}
 		stroke(c, frameWidth, r.X, bottom, r.X, r.Y, r.X+r.W, r.Y)
