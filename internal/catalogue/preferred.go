@@ -1,6 +1,9 @@
 package catalogue
 
-import "math"
+import (
+	"fmt"
+	"math"
+)
 
 // Series is a series of preferred values of IEC 60063: so many to the decade.
 type Series int
@@ -44,8 +47,12 @@ func (s Series) Decade() []float64 {
 // seriesSlack lets a value that equals a preferred one but for rounding count as it.
 const seriesSlack = 1e-9
 
-// AtLeast returns the smallest value of the series that is not below v; v > 0.
+// AtLeast returns the smallest value of the series that is not below v; v is finite
+// and above zero, else it panics, as do the methods below.
 func (s Series) AtLeast(v float64) float64 {
+	if !(v > 0) || math.IsInf(v, 1) {
+		panic(fmt.Sprintf("catalogue: no preferred value for %v", v))
+	}
 	exp := math.Floor(math.Log10(v))
 	for e := exp - 1; ; e++ {
 		for _, d := range s.Decade() {

@@ -31,6 +31,9 @@ type CoilDriver struct {
 const (
 	offMost quantity.Ohm  = 10e3
 	offVolt quantity.Volt = 0.3
+	// leastDrive makes the output stiff against the hysteresis resistor, however little
+	// the coil takes.
+	leastDrive = 1e-3
 )
 
 // CoilDriverResistors chooses base and off resistor: the base gets the coil's current
@@ -44,7 +47,7 @@ func CoilDriverResistors(in CoilDriverInput) (CoilDriver, []Working, error) {
 	d := CoilDriver{Coil: quantity.Ampere(float64(in.High) / least)}
 	off := float64(offVolt) * float64(in.Feedback) / float64(in.High)
 	d.Off = min(offMost, quantity.Ohm(catalogue.E24.AtMost(off)))
-	ib := float64(in.Low)/least/q.Forced + ube/float64(d.Off)
+	ib := max(leastDrive, float64(in.Low)/least/q.Forced+ube/float64(d.Off))
 	r := (float64(in.Low)-ube-sat)/ib - float64(k.Series)
 	if r <= 0 {
 		return d, nil, &BlockedError{
@@ -66,8 +69,8 @@ func CoilDriverResistors(in CoilDriverInput) (CoilDriver, []Working, error) {
 		Substituted: fmt.Sprintf("min(10000 Ω ; 0.3 V × %s ÷ %s) → %s", num(float64(in.Feedback), "Ω"), num(float64(in.High), "V"), num(float64(d.Off), "Ω")),
 		Value:       float64(d.Off), Unit: "Ω", Source: "common practice, no source",
 	}, {
-		Name: "base resistor", Formula: "R ≤ (U − U_BE − U_sat) ÷ (U ÷ R_coil ÷ β + U_BE ÷ R_off) − R_out, E24 value",
-		Substituted: fmt.Sprintf("(%s − %s − %s) ÷ (%s ÷ %s ÷ %s + %s ÷ %s) − %s → %s", num(float64(in.Low), "V"), num(ube, "V"), num(sat, "V"),
+		Name: "base resistor", Formula: "R ≤ (U − U_BE − U_sat) ÷ max(1 mA ; U ÷ R_coil ÷ β + U_BE ÷ R_off) − R_out, E24 value",
+		Substituted: fmt.Sprintf("(%s − %s − %s) ÷ max(0.001 A ; %s ÷ %s ÷ %s + %s ÷ %s) − %s → %s", num(float64(in.Low), "V"), num(ube, "V"), num(sat, "V"),
 			num(float64(in.Low), "V"), num(least, "Ω"), num(q.Forced, ""), num(ube, "V"), num(float64(d.Off), "Ω"), num(float64(k.Series), "Ω"), num(float64(d.Base), "Ω")),
 		Value: float64(d.Base), Unit: "Ω", Source: source, Uses: []string{"off resistor"},
 	}, {

@@ -44,6 +44,9 @@ const (
 	inputLow       = 33e3
 	inputHigh      = 82e3
 	slowTime       = 0.1
+	wiperLeast     = 0.02 // of the supply: the reference stays off both rails
+	twilightTol    = 0.05 // of the light threshold, with preferred values
+	twilightLeast  = 1.2  // ratio of thresholds that any card reaches
 )
 
 // cellReference is the illuminance that cells are listed at, in lx.
@@ -67,7 +70,9 @@ func TwilightCard(in TwilightInput) (Twilight, []Working, error) {
 	t := Twilight{Load: quantity.Ohm(catalogue.E24.Nearest(math.Sqrt(rd * rb)))}
 	t.SignalDark, t.SignalBright = DividerRatio(quantity.Ohm(rd), t.Load), DividerRatio(quantity.Ohm(rb), t.Load)
 	t.Slow = quantity.Farad(catalogue.E6.AtLeast(slowTime / float64(t.Load)))
-	t.reach(in)
+	if !t.reach(in) {
+		return Twilight{}, nil, tooWide(in)
+	}
 	best := math.Inf(1)
 	for _, r := range catalogue.E24.Between(inputLow, inputHigh) {
 		try := t
@@ -76,6 +81,9 @@ func TwilightCard(in TwilightInput) (Twilight, []Working, error) {
 		if e := math.Abs(math.Log(float64(try.Bright / in.Bright))); e < best {
 			best, t = e, try
 		}
+	}
+	if t.Wiper < 0 || t.Wiper > 1 || best > math.Log(1+twilightTol) {
+		return Twilight{}, nil, tooWide(in)
 	}
 	ws := t.workings(in, rd, rb)
 	if heat := quantity.Watt(float64(in.Most) * float64(in.Most) / (4 * float64(t.Load))); heat > in.Cell.Power {
@@ -93,15 +101,42 @@ func (in *TwilightInput) cell(e quantity.Lux) float64 {
 	return float64(in.Cell.At10) * math.Pow(float64(e)/cellReference, -in.Cell.Gamma)
 }
 
+// tooWide says that the thresholds lie too far apart for one card.
+func tooWide(in TwilightInput) error {
+	most := widest(in)
+	return &BlockedError{
+		Limit: LimitRange, Subject: "light_above over dark_below", Value: float64(in.Bright / in.Dark), Bound: most,
+		Frees: fmt.Sprintf("set light_above to %v at most, or take a packaged module (built: module)", in.Dark*quantity.Lux(most)),
+	}
+}
+
+// widest is the greatest round ratio of the thresholds at which the preset still
+// reaches the setting of any cell of the class.
+func widest(in TwilightInput) float64 {
+	for _, r := range []float64{50, 20, 10, 5, 3, 2, 1.5} {
+		try := in
+		try.Bright = in.Dark * quantity.Lux(r)
+		t := Twilight{Load: quantity.Ohm(catalogue.E24.Nearest(math.Sqrt(try.cell(try.Dark) * try.cell(try.Bright))))}
+		t.SignalDark, t.SignalBright = DividerRatio(quantity.Ohm(try.cell(try.Dark)), t.Load), DividerRatio(quantity.Ohm(try.cell(try.Bright)), t.Load)
+		if t.reach(try) {
+			return r
+		}
+	}
+	return twilightLeast
+}
+
 // reach chooses the reference divider: the preset with the largest fixed resistors
 // with which its wiper reaches the signal of any cell of the class at the dark
-// threshold, at all tolerances.
-func (t *Twilight) reach(in TwilightInput) {
+// threshold, at all tolerances. It reports false when none does.
+func (t *Twilight) reach(in TwilightInput) bool {
 	least, most := in.Cell.Bounds(in.Dark)
 	k := t.SignalBright - t.SignalDark // share of the output in the + input, nearly
 	wiper := func(signal float64) float64 { return (signal - k*in.Low) / (1 - k) }
 	low := wiper(DividerRatio(most, t.Load*quantity.Ohm(1-setTolerance)))
 	high := wiper(DividerRatio(least, t.Load*quantity.Ohm(1+setTolerance)))
+	if low < wiperLeast || high > 1-wiperLeast {
+		return false
+	}
 	t.Preset = twilightPreset
 	track := twilightPreset * (1 - float64(catalogue.PresetTol))
 	covers := func(upper, lower float64) bool {
@@ -116,6 +151,7 @@ func (t *Twilight) reach(in TwilightInput) {
 			}
 		}
 	}
+	return t.Upper > 0
 }
 
 // fit finds the hysteresis resistor for the input resistor at hand, and with it the

@@ -107,6 +107,12 @@ func CoilDropper(in CoilFeedInput) (CoilFeed, []Working, error) {
 		Value:       float64(f.Least), Unit: "Ω", Source: z.Evidence.String(),
 	}
 	ws := []Working{wm, wl}
+	if most <= 0 {
+		return f, ws, &BlockedError{
+			Limit: LimitVoltage, Subject: "the supply of the Zener when it is lowest", Value: float64(in.Low), Bound: float64(vHigh), Unit: "V",
+			Frees: "take a higher supply voltage or a lower Zener voltage",
+		}
+	}
 	if most <= f.Least {
 		return f, ws, &BlockedError{
 			Limit: LimitDissipation, Subject: "the dropper that spares the Zener with the coil unplugged", Value: float64(f.Least), Bound: float64(most), Unit: "Ω",

@@ -1,12 +1,14 @@
 package stage_test
 
 import (
+	"math"
 	"strings"
 	"testing"
 
 	"gloamwright/internal/describe"
 	"gloamwright/internal/facts"
 	"gloamwright/internal/network"
+	"gloamwright/internal/pocket"
 )
 
 const packaged = "charger: {kind: charger, to: store, mains: 230 V ± 10 %, compensation: no}\n"
@@ -48,6 +50,11 @@ func TestEveryKind(t *testing.T) {
 			d := b.design(t)
 			for _, s := range d.stops() {
 				t.Error(s)
+			}
+			for _, w := range d.Workings {
+				if v, err := pocket.Result(w.Substituted); err != nil || math.Abs(v-w.Value) > 1e-3*math.Abs(w.Value) {
+					t.Errorf("%s, %s: %q gives %.6g, the value is %.6g (%v)", w.For, w.Name, w.Substituted, v, w.Value, err)
+				}
 			}
 			for _, c := range d.Conditions {
 				if c.Residual > 1e-9 {

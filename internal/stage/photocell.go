@@ -98,7 +98,7 @@ func sizeModule(p *Plan, s *describe.Stage, dark, light quantity.Lux, given bool
 	set(m, "light", "light "+quantity.Format(light, 3), float64(light), "lx", true, given)
 	params(m, "",
 		circuit.Param{Name: "dark_below_lx", Value: float64(dark)},
-		circuit.Param{Name: "light_above_lx", Value: float64(light)},
+		circuit.Param{Name: "light_above_lx", Value: float64(max(light, dark))},
 		circuit.Param{Name: "own_ampere", Value: float64(must[quantity.Ampere](s, "own")), Tol: ownTol},
 	)
 	if light < dark {

@@ -104,7 +104,7 @@ func sizeComparator(p *Plan, s *describe.Stage, dark, light quantity.Lux) {
 	if err != nil {
 		p.block(k.Designation, k.At, "", err)
 		if t.Hysteresis == 0 || d.Base == 0 { // values with which the circuit can be solved
-			in.Dark, in.Bright, drive.Low = 10, 10*twilightRatio, nominal
+			in.Dark, in.Bright, drive.Low, drive.Coil = 10, 10*twilightRatio, nominal, class.CoilResistance(nominal)
 			t, d, _, _, _ = comparatorCard(in, drive, nominal)
 		}
 	}

@@ -171,8 +171,15 @@ func sizeTransformer(p *Plan, s *describe.Stage) {
 	t.Note = "safety transformer, IEC 61558-2-6, " + quantity.Format(r.open, 3) + " at the reservoir without load"
 
 	top := r.high(0)
-	volt, _ := catalogue.NextRating(catalogue.BridgeVolts, top*bridgeSpare)
-	amp, _ := catalogue.NextRating(catalogue.BridgeCurrents, r.rated.Ampere*bridgeSpare)
+	volt, okVolt := catalogue.NextRating(catalogue.BridgeVolts, top*bridgeSpare)
+	amp, okAmp := catalogue.NextRating(catalogue.BridgeCurrents, r.rated.Ampere*bridgeSpare)
+	if !okVolt || !okAmp {
+		volt, amp = catalogue.BridgeVolts[len(catalogue.BridgeVolts)-1], catalogue.BridgeCurrents[len(catalogue.BridgeCurrents)-1]
+		p.block(bridge.Designation, bridge.At, catalogue.CommonPractice.String(), &sizing.BlockedError{
+			Limit: sizing.LimitLoad, Subject: "the rated current of the bridge", Value: float64(r.rated.Ampere * bridgeSpare), Bound: float64(amp), Unit: "A",
+			Frees: "take a regulated supply",
+		})
+	}
 	set(bridge, "voltage", volt.String(), float64(volt), "V", true, false)
 	set(bridge, "current", amp.String(), float64(amp), "A", true, false)
 	set(bridge, "rating", r.rated.String(), float64(r.rated.Ampere), "A", false, true)
