@@ -123,10 +123,10 @@ func (p *Plan) opens(f *facts.Fuse) {
 		p.block(f.Part.Designation, f.Part.At, "", err)
 		return
 	}
-	p.work(f.Part.Designation, "opens within", w)
 	f.Opens = !math.IsInf(float64(o.Latest), 1)
 	if f.Opens {
 		f.OpensWithin = o.Latest
+		p.work(f.Part.Designation, "opens within", w)
 	}
 	if f.CableSize.Area > 0 {
 		f.Withstand = sizing.Withstand(f.CableSize.Area, f.FarEnd, adiabaticK)
