@@ -128,9 +128,13 @@ func spread(values []xy) []xy {
 	return out
 }
 
+// leastScale is the current that the axis reaches at least, in amperes: a charger may
+// give next to nothing.
+const leastScale = 0.1
+
 func (b *book) chargePlot(p *pad, run *facts.Run, top float64) {
 	asked := b.d.Site.Duty.Recharge.Val.Hours()
-	amps := 0.0
+	amps := leastScale
 	var charge, current []xy
 	for _, s := range run.Curve {
 		charge = append(charge, xy{s.Hours, float64(s.SoC) * 100})
