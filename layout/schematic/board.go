@@ -46,6 +46,9 @@ func (b *book) drawBoard(sh *Sheet, s *boardSheet) error {
 			add(textAt(float64(s.start)-6.2, rowTerminal+textHeight/2, s.board.Strip, nameStyle, ink.Start))
 	}
 	b.foot(sh, s, xs, end)
+	if b.keySheet() == s {
+		b.key(sh, end+2)
+	}
 	if s.first {
 		pl := b.place("board " + s.board.Name)
 		pl.sheet, pl.at = sh, point{float64(s.start), rowBarPlus}
