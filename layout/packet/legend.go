@@ -24,8 +24,8 @@ const (
 	legendGap   = 4.0  // above a group
 )
 
-// legendColumns sets the groups in two columns: each goes where there is most room, and
-// a new pair of columns begins when both are full.
+// legendColumns sets the groups in two columns, left and right in turn; a new pair of
+// columns begins when one is full.
 func (b *book) legendColumns() []block {
 	type piece struct {
 		y    float64
@@ -51,10 +51,7 @@ func (b *book) legendColumns() []block {
 		pieces, high = nil, [2]float64{}
 	}
 	for i := range b.words.texts.Legend {
-		side := 0
-		if high[1] < high[0] {
-			side = 1
-		}
+		side := i % 2
 		list := b.legendGroup(&b.words.texts.Legend[i], float64(side)*legendRight)
 		h := 0.0
 		for _, x := range list {
@@ -66,8 +63,7 @@ func (b *book) legendColumns() []block {
 		}
 		if y+h > b.pg.end()-b.pg.top() {
 			flush()
-			side, y = 0, 0
-			list = b.legendGroup(&b.words.texts.Legend[i], 0)
+			y = 0
 		}
 		pieces = append(pieces, piece{y, list})
 		high[side] = y + h
@@ -154,7 +150,7 @@ func (b *book) symbolLegend() []block {
 	if len(used) == 0 {
 		return nil
 	}
-	const columns, high, scale = 4, 14.0, 0.7
+	const columns, high, scale = 4, 13.6, 0.7
 	out := []block{b.head(0, b.pg.width, "Symbols on the schematic", "IEC 60617; on "+b.sheets(keySchematic))}
 	each := b.pg.width / columns
 	var rows []block

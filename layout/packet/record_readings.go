@@ -13,8 +13,8 @@ const (
 	recordGap   = 5
 	recordRow   = 5.8 // with one line
 	recordHead  = 7.0
-	recordLead  = 3.7
-	showsAt     = 12.5
+	recordLead  = 3.4
+	showsAt     = 10.5
 	figureAt    = 44.0 // right end of the reading
 	lowAt       = 55.0 // right end of the lowest value
 	gaugeStart  = 60.3
@@ -59,7 +59,7 @@ func (b *book) recordPair(pair [][]commission.Judged, gap bool) []block {
 		h := recordRow
 		for _, g := range pair {
 			if i < len(g) {
-				h = max(h, recordRow+float64(len(recordShows(g[i]))-1)*recordLead)
+				h = max(h, recordRow+float64(len(b.recordShows(g[i]))-1)*recordLead)
 			}
 		}
 		list = append(list, block{h: h, draw: func(p *pad, y, h float64) {
@@ -92,13 +92,21 @@ func (p *pad) recordHead(dx, y float64, g []commission.Judged) {
 	p.fit(x+9.5, y+4.7, g[0].Name, groupHead, recordHalf-13-w, ink.Start)
 }
 
-// recordShows is what a reading shows, in as many lines as it takes beside the figure.
-func recordShows(j commission.Judged) []line {
-	room := 22.5
+// recordShows is what a reading shows: in full where its point stands first on the
+// record, on one line elsewhere.
+func (b *book) recordShows(j commission.Judged) []line {
+	room := 25.0
 	if j.Verdict == commission.UnitSlip || j.Verdict == commission.Swapped || j.Verdict == commission.Unreadable {
-		room = 18 // the reading stands as it was written
+		room = 20 // the reading stands as it was written
 	}
-	return wrap(j.Shows, tableText, room)
+	if j.Condition == b.record.Judged[0].Condition {
+		return wrap(j.Shows, noteText, room)
+	}
+	l, cut := cutLine(j.Shows, noteText, room)
+	if cut {
+		b.noteCut(j.Shows)
+	}
+	return []line{l}
 }
 
 // recordReading is one reading with its band as a gauge.
@@ -107,7 +115,7 @@ func (p *pad) recordReading(dx, y, h float64, j commission.Judged) {
 	small := noteText
 	p.write(x+1, base, j.Point, tableText.as(ink.Medium), ink.Start)
 	figureEnd := x + figureAt
-	shows := recordShows(j)
+	shows := p.b.recordShows(j)
 	p.lines(x+showsAt, mid+1.15-float64(len(shows)-1)*recordLead/2, shows, recordLead)
 	switch {
 	case j.Verdict == commission.Missing:
