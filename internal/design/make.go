@@ -37,11 +37,11 @@ func (d *Design) asks(more *stage.Reserve) bool {
 	const step = 1.02 // beyond what was short, so that the next attempt stands clear
 	e, duty := d.Endurance, d.Site.Duty
 	asked := false
-	if b := d.Battery; b.Part != nil && !b.Pinned && e.Held > 0 && e.Held < duty.Outage.Val && len(e.Lit) > 0 {
+	if b := d.Battery; b.Part != nil && !b.Pinned && b.Required > 0 && e.Held > 0 && e.Held < duty.Outage.Val && len(e.Lit) > 0 {
 		more.Capacity = step * float64(b.Capacity/b.Required) * max(more.Capacity, 1) * float64(duty.Outage.Val/e.Held)
 		asked = true
 	}
-	if c := d.Charger; c.Part != nil && c.Part.Kind == circuit.ChargerUnit && !c.Pinned && c.Current < c.Limit && recharged(e.Runs) && (e.Recharge == 0 || e.Recharge > duty.Recharge.Val) {
+	if c := d.Charger; c.Part != nil && c.Part.Kind == circuit.ChargerUnit && !c.Pinned && c.Required > 0 && c.Current < c.Limit && recharged(e.Runs) && (e.Recharge == 0 || e.Recharge > duty.Recharge.Val) {
 		k := 1.5 // it never filled: half as much again
 		if e.Recharge > 0 {
 			k = float64(e.Recharge / duty.Recharge.Val)
