@@ -48,7 +48,6 @@ func (x *singles) alone(n *net, left int) int {
 // tap is where a run meets a bus.
 type tap struct {
 	pin  *circuit.Pin
-	part *single
 	x, y int // of the pin's side of the line
 }
 
@@ -78,11 +77,10 @@ func (d *groupDrawing) run(r *run) {
 			below = r.links[i]
 		}
 		upper, lower := s.pin(above), s.pin(below)
-		h := d.slot[0]
+		h := s.height(d.slot)
 		mid := y + h/2
 		topY, endY, endX := mid-halfSymbol, mid+halfSymbol, col
 		if s.kind.Name == "contact" {
-			h = d.slot[1]
 			mid = y + h - h/2 + 1
 			topY, endY, endX = mid, mid, col+contactJog
 		}
@@ -97,12 +95,15 @@ func (d *groupDrawing) run(r *run) {
 				pts = append(pts, col, fromY)
 			}
 			b.line(w, append(pts, d.down(s, col, topY)...)...)
-			below := 2.6
-			if fromX != col { // clear of the contact's marks
-				below = 4.2
-			}
-			if float64(topY-fromY) > below {
-				d.number(w, s, col, float64(fromY)+below)
+			switch {
+			case d.slot[0] < roomy:
+				if len(above.points) == 0 {
+					b.number(w, float64(col)+rightNumber, float64(fromY+topY)/2+0.5)
+				}
+			case fromX != col: // clear of the contact's marks
+				b.number(w, float64(col), float64(fromY)+4.2)
+			default:
+				b.number(w, float64(col), float64(fromY)+2.6)
 			}
 			for _, t := range above.points {
 				b.point(b.TestPoint(t.Name.Val, capital(t.Name.Val), upper), float64(col), float64((fromY+topY)/2), "E")
@@ -117,18 +118,12 @@ func (d *groupDrawing) run(r *run) {
 	d.finish(r, from, fromX, fromY, col, y)
 }
 
-// number prints a wire's number left of the line at x; right of it over a coil, whose
-// mark stands left.
-func (d *groupDrawing) number(w *circuit.Conductor, s *single, x int, y float64) {
-	at := float64(x)
-	if s.kind.Name == "relay" {
-		at += coilNumber
-	}
-	d.x.b.number(w, at, y)
-}
+// lowestLabel is the level of a last pin down to which the number of its lead has room
+// on the left.
+const lowestLabel = 44
 
-// coilNumber moves a number to the right of its line.
-const coilNumber = 3.4
+// rightNumber is where a number ends that stands right of its line.
+const rightNumber = 3.4
 
 // down is the way from above to a part's upper pin: straight, or round the corner into
 // a contact.
@@ -148,7 +143,7 @@ func (d *groupDrawing) begin(r *run, pin *circuit.Pin, col, y int, s *single) {
 		way[i], way[i+1] = way[i+1], way[i]
 	}
 	if r.top.free() {
-		d.taps[r.top] = append(d.taps[r.top], tap{pin, s, col, y})
+		d.taps[r.top] = append(d.taps[r.top], tap{pin, col, y})
 		if len(way) > 2 && !r.top.loose() {
 			b.line(nil, way...)
 		}
@@ -171,14 +166,18 @@ func (d *groupDrawing) finish(r *run, pin *circuit.Pin, x, y, col, slotEnd int) 
 	local := "part/" + s.d.Name.Val + "/" + pin.Name
 	switch {
 	case r.bottom.free():
-		d.taps[r.bottom] = append(d.taps[r.bottom], tap{pin, s, col, y})
+		d.taps[r.bottom] = append(d.taps[r.bottom], tap{pin, col, y})
 		if len(way) > 2 && !r.bottom.loose() {
 			b.line(nil, way...)
 		}
 	case r.bottom.minus():
 		w := b.lead(circuit.OpDown, local, pin, Minus, append(way, col, downEnd)...)
 		w.At = s.d.Pos
-		b.number(w, float64(col), 48.5)
+		at := float64(col)
+		if y > lowestLabel { // the last part's ratings stand there
+			at += rightNumber
+		}
+		b.number(w, at, 48.5)
 	default: // back up to another plus rail
 		w := b.lead(circuit.OpUp, local, pin, r.bottom.rail, append(way, col, slotEnd, col+returnStep, slotEnd, col+returnStep, upEnd)...)
 		w.At = s.d.Pos
@@ -236,11 +235,15 @@ func (d *groupDrawing) bus(n *net) {
 			pts = append(pts, t.x, y)
 		}
 		b.line(w, append(pts, t.x, t.y)...)
-		at := float64(y) + 1.8
-		if t.y < y {
-			at = float64(y) - 0.6
+		shared := slices.ContainsFunc(taps, func(o tap) bool { return o != t && o.x == t.x })
+		switch at := float64(t.x); { // where no label stands
+		case shared:
+			b.number(w, at+rightNumber, float64(y)+1.6)
+		case t.y > y:
+			b.number(w, at, float64(y)-0.6)
+		default:
+			b.number(w, at, float64(y)+1.6)
 		}
-		d.number(w, t.part, t.x, at)
 	}
 	if len(taps) == 0 {
 		return

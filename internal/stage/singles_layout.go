@@ -10,7 +10,7 @@ import (
 // Measures of the block of single parts, in modules. Labels stand left of the parts;
 // a contact stands level and moves its run to the right.
 const (
-	labelColumn = 10  // from a column's left edge to its line
+	labelColumn = 11  // from a column's left edge to its line
 	columnGap   = 1   // from a column's right edge to the next
 	contactJog  = 10  // from a run's line to its line behind a contact
 	contactLead = 3   // from the line to the contact's pin
@@ -26,7 +26,14 @@ const (
 )
 
 // slots are the heights that a part and a contact take in a band, from roomy to tight.
-var slots = [][2]int{{9, 11}, {8, 10}, {7, 9}, {6, 8}, {5, 8}}
+var slots = [][2]int{{9, 11}, {8, 10}, {7, 9}, {6, 8}, {5, 7}}
+
+// coilSlot is the least height of a coil, whose marks stand beside its leads; roomy the
+// slot from which on wire numbers stand left of the line, under the labels.
+const (
+	coilSlot = 8
+	roomy    = 8
+)
 
 // column is an upright strip of the drawing: the runs that stand in it one under the
 // other.
@@ -278,14 +285,21 @@ func (g *group) bands() (slot [2]int, rows []int) {
 func (r *run) height(slot [2]int) int {
 	h := 0
 	for _, s := range r.list {
-		if s.kind.Name == "contact" {
-			h += slot[1]
-		} else {
-			h += slot[0]
-		}
+		h += s.height(slot)
 	}
 	if r.top.level == r.bottom.level {
 		h += 2
 	}
 	return h
+}
+
+// height is what a part takes of a band.
+func (s *single) height(slot [2]int) int {
+	switch s.kind.Name {
+	case "contact":
+		return slot[1]
+	case "relay":
+		return max(slot[0], coilSlot)
+	}
+	return slot[0]
 }
