@@ -44,7 +44,7 @@ func sizeBoard(p *Plan, _ *describe.Stage) {
 		res, err = t.full(res)
 	}
 	if err != nil {
-		p.block("cables", p.C.Boards[0].At, "", err)
+		p.block("Cables", p.C.Boards[0].At, "", err)
 		if res == nil {
 			res = t.thickest()
 		}

@@ -251,7 +251,7 @@ func (p *Plan) setResistors(s *describe.Stage, u *circuit.Part, device catalogue
 	}
 	ohm := min(max(r2-r.Fixed, 0), r.Trimmer)
 	set(trim, "resistance", r.Trimmer.String(), float64(r.Trimmer), "Ω", true, false)
-	set(trim, "setting", "about "+quantity.Format(ohm, 2), float64(ohm), "Ω", false, false)
+	set(trim, "setting", "sets near "+quantity.Format(ohm, 2), float64(ohm), "Ω", false, false)
 	trim.Note = "set " + quantity.Fixed(p.Float, 2) + " at the battery, fully charged, at " + p.Class.ChargeAt.String()
 	if r.Extreme > 0 {
 		trim.Note += "; at its end it may give " + quantity.Format(r.Extreme, 3) + ": set it before the battery is connected"
