@@ -221,7 +221,7 @@ func swapReferences(p *audit.Page, g int) bool {
 
 // Every damaged copy of the sheets is found out.
 func TestAuditFindsDamage(t *testing.T) {
-	stride := 3
+	stride := 4
 	if testing.Short() {
 		stride = 40
 	}

@@ -2,6 +2,7 @@ package schematic
 
 import (
 	"slices"
+	"strings"
 
 	"gloamwright/internal/circuit"
 	"gloamwright/layout/ink"
@@ -72,13 +73,81 @@ func (k *sketcher) symbol(it *circuit.SketchItem) {
 	}
 }
 
-// labelLines are the designation and the ratings of a part, one a line.
+// labelLines are the designation and the ratings of a part, one a line; beside a
+// symbol, a rating wider than the room to the next line or symbol is broken at its
+// spaces.
 func (k *sketcher) labelLines(it *circuit.SketchItem) []string {
-	lines := append([]string{it.Part.Designation}, valueLines(it.Part, labelRoom)...)
+	values := valueLines(it.Part, labelRoom)
 	if c := signalColour(it.Part); c != "" { // the symbol bears it
-		lines = slices.DeleteFunc(lines, func(s string) bool { return s == c })
+		values = slices.DeleteFunc(values, func(s string) bool { return s == c })
+	}
+	lines := []string{it.Part.Designation}
+	if it.Label != "L" && it.Label != "R" {
+		return append(lines, values...)
+	}
+	room := k.beside(it, len(values))
+	for _, v := range values {
+		for _, w := range strings.Split(bind(v), " ") { // words stay whole
+			room = max(room, width(w, valueStyle)+0.01)
+		}
+		for _, l := range ink.Wrap(bind(v), valueStyle.font(), room*module) {
+			lines = append(lines, strings.ReplaceAll(l, noBreak, " "))
+		}
 	}
 	return lines
+}
+
+// noBreak is the space at which no line breaks.
+const noBreak = "\u00A0"
+
+// bind keeps numbers and their units on one line.
+func bind(s string) string {
+	words := strings.Split(s, " ")
+	out := words[0]
+	for i := 1; i < len(words); i++ {
+		gap := " "
+		if w := words[i-1]; w != "" && w[len(w)-1] >= '0' && w[len(w)-1] <= '9' {
+			gap = noBreak
+		}
+		out += gap + words[i]
+	}
+	return out
+}
+
+// beside is the room for a label left or right of a symbol, to the next wire, symbol
+// or the frame, over the height of its lines.
+func (k *sketcher) beside(it *circuit.SketchItem, values int) float64 {
+	h := reach(symbolNamed(it.Symbol), turnOf(it.Turn))
+	top, bottom := it.Y-1.4, it.Y+linePitch*float64(values)+0.2
+	left, right := 0.0, float64(k.x.st.Sketch.Width)
+	from, to := it.X-h.left-labelGap, it.X+h.right+labelGap
+	block := func(x0, x1, y0, y1 float64) {
+		if y1 < top || y0 > bottom {
+			return
+		}
+		if x1 < it.X {
+			left = max(left, x1)
+		}
+		if x0 > it.X {
+			right = min(right, x0)
+		}
+	}
+	for i := range k.x.st.Sketch.Items {
+		o := &k.x.st.Sketch.Items[i]
+		for n := 1; n < len(o.Pts); n++ {
+			a, z := o.Pts[n-1], o.Pts[n]
+			block(float64(min(a[0], z[0])), float64(max(a[0], z[0])), float64(min(a[1], z[1])), float64(max(a[1], z[1])))
+		}
+		if o.Op == circuit.OpSymbol && o.Part != nil && o.Part != it.Part && o.Symbol != "converter" {
+			r := reach(symbolNamed(o.Symbol), turnOf(o.Turn))
+			block(o.X-r.left, o.X+r.right, o.Y-r.top, o.Y+r.bottom)
+		}
+	}
+	const clear = 0.35
+	if it.Label == "R" {
+		return right - to - clear
+	}
+	return from - left - clear
 }
 
 func labelStack(o *object, lines []string, x, y float64, a ink.Anchor) {
