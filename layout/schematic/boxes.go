@@ -215,7 +215,7 @@ func matchPort(boxes []*stageBox, byName map[string]*stageBox, to *stageBox, l *
 	return nil, nil
 }
 
-// rails returns the rails on which the stage has pins, with the local x of each lead.
+// leads returns the terminals by which the stage hangs on rails, with their local x.
 func (x *stageBox) leads() []lead {
 	var out []lead
 	for _, it := range x.st.Sketch.Items {

@@ -62,7 +62,6 @@ type scene struct {
 	refs    []*reference
 	rings   []ringAt
 	numbers []wireNumber
-	plan    *plan // of a stage sheet
 }
 
 // ringAt is a terminal's ring on a stage sheet, to be named when all are drawn.

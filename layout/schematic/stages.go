@@ -88,7 +88,6 @@ func stageTitle(p *plan) string {
 
 // drawStages draws one sheet of stages between their rails.
 func (b *book) drawStages(sh *Sheet, p *plan) error {
-	sh.scene.plan = p
 	for i, x := range p.boxes {
 		b.drawStage(sh, p, x, p.xs[i])
 	}

@@ -14,12 +14,10 @@ type style uint8
 
 // The styles. Lettering is 2.5 mm high, headings and way numbers 3.5 mm.
 const (
-	valueStyle  style = iota // values, types, places, lengths, terminals, targets, notes
-	nameStyle                // designations, rail names, table heads
-	wireStyle                // wire numbers and core names
-	headStyle                // stage headings, way numbers
-	tagStyle                 // test point tags, white on black
-	signalStyle              // signal words of cautions
+	valueStyle style = iota // values, types, places, lengths, terminals, targets, notes
+	nameStyle               // designations, rail names, table heads
+	wireStyle               // wire numbers and core names
+	headStyle               // stage headings, way numbers
 )
 
 const (
@@ -36,8 +34,6 @@ func (s style) font() ink.Font {
 		return ink.Lettering(ink.Mono, 2.5)
 	case headStyle:
 		return ink.Lettering(ink.Bold, 3.5)
-	case tagStyle, signalStyle:
-		return ink.Lettering(ink.Bold, 2.5)
 	}
 	return ink.Lettering(ink.Regular, 2.5)
 }
@@ -74,7 +70,6 @@ type line struct {
 	at     point
 	anchor ink.Anchor
 	runs   []run
-	white  bool
 	close  bool // little room between the pieces
 }
 
@@ -101,13 +96,9 @@ func (l *line) draw(p *painter) {
 	case ink.End:
 		x -= l.width()
 	}
-	color := ink.Black
-	if l.white {
-		color = ink.White
-	}
 	for _, r := range l.runs {
 		s := r.text()
-		p.c.Text(mm(point{x, l.at.Y}), s, r.st.font(), ink.Start, color, false)
+		p.c.Text(mm(point{x, l.at.Y}), s, r.st.font(), ink.Start, ink.Black, false)
 		w := width(s, r.st)
 		if r.to != nil {
 			p.link(point{x, l.at.Y - textHeight}, w, textHeight, r.to)
