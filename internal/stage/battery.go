@@ -234,10 +234,13 @@ func (p *Plan) trunkFor(size quantity.WireSize, iz quantity.Ampere, cable *circu
 	return size, iz
 }
 
-// largestWay estimates the largest way fuse: that of the circuit or board with the
-// greatest load, or one given.
+// largestWay estimates the largest fuse behind the main one: the charger's, a card's,
+// or that of the circuit or board with the greatest load, or one given.
 func (p *Plan) largestWay() quantity.Ampere {
 	var most quantity.Ampere
+	for _, f := range p.F.Fuses { // those of charger and cards are sized already
+		most = max(most, f.Rating)
+	}
 	list := p.fuseClass().Ratings
 	for _, b := range p.C.Boards {
 		if b.Parent != nil {

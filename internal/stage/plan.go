@@ -263,7 +263,8 @@ func (p *Plan) luminaires() {
 				for _, e := range pt.Luminaire.Elements {
 					e.Params = l.Params
 				}
-				p.Light += l.At(p.LampEnd())
+				// A driver takes most at the end, a string while the battery is fuller.
+				p.Light += max(l.At(p.LampEnd()), l.At((p.Full+p.End)/2))
 				p.F.Totals.Luminaires++
 				p.F.Totals.LoadWatt += l.Rated
 			})
