@@ -197,7 +197,11 @@ func (b *book) figures(sh *Sheet) {
 			add("Outage", "asked "+u.Outage.Val.String(), "lasts "+quantity.Format(d.Endurance.Held, 2)+" at "+u.BatteryRoom.Val.Low.String()+", aged")
 		}
 		if d.Battery.Capacity > 0 {
-			add("Battery", "needs "+quantity.Format(d.Battery.Required, 2), "has "+d.Battery.Capacity.String())
+			asked := ""
+			if d.Battery.Required > 0 { // nothing when no battery would do
+				asked = "needs " + quantity.Format(d.Battery.Required, 2)
+			}
+			add("Battery", asked, "has "+d.Battery.Capacity.String())
 		}
 		if d.Endurance.Recharge > 0 {
 			add("Recharge", "asked "+u.Recharge.Val.String(), "takes "+quantity.Format(d.Endurance.Recharge, 2))
