@@ -14,7 +14,6 @@ import (
 // can be.
 type faultBlock struct {
 	sign   string
-	remark string
 	groups []int
 	list   []*facts.Fault
 }

@@ -97,16 +97,6 @@ func degrees(r quantity.Range[quantity.Celsius]) string {
 	return fmt.Sprintf("%v to %v", r.Low, r.High)
 }
 
-// span of a quantity in one unit: "4.18 to 4.79 A".
-func between(low, high string) string {
-	ln, lu, _ := strings.Cut(low, " ")
-	hn, hu, _ := strings.Cut(high, " ")
-	if lu == hu {
-		return ln + " to " + hn + " " + hu
-	}
-	return low + " to " + high
-}
-
 // shown lists the conditions that are printed, in order of energising.
 func (b *book) shown() []*facts.Condition {
 	var out []*facts.Condition

@@ -42,7 +42,6 @@ type cell struct {
 	strong bool // face holds
 	span   int  // columns beyond its own that it covers
 	most   int  // lines at most; 0: as many as it takes
-	top    bool // tick box beside the first line
 	tail   string
 	frame  float64 // width of a blank narrower than its column, its tail after it
 }
