@@ -22,7 +22,7 @@ func TestCauses(t *testing.T) {
 	d := newDesk(t, "juniper-flat")
 	d.mustIssue()
 	d.edit("revision: A", "revision: B",
-		"recharge: 24 h", "recharge: 8 h",
+		"recharge: 24 h", "recharge: 10 h",
 		"30 ft bulkhead at saddles", "30 ft step at saddles",
 		"15 ft step at gate", "6 ft step at gate",
 		"{name: Office,", "{name: Bureau, was: Office,")
