@@ -31,6 +31,13 @@ func Documents(d *design.Design) ([]release.File, error) {
 		}
 		files = append(files, release.File{Name: fmt.Sprintf("schematic-%d.svg", i+1), Data: data})
 	}
+	curves, err := packet.TimeCurrent(d)
+	if err != nil {
+		return nil, fmt.Errorf("the time-current pictures: %w", err)
+	}
+	if curves != nil {
+		files = append(files, release.File{Name: "time-current.svg", Data: curves})
+	}
 	pdf, err := packet.Make(d, sheets)
 	if err != nil {
 		return nil, fmt.Errorf("the packet: %w", err)

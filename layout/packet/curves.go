@@ -51,11 +51,7 @@ func (b *book) fusePaths() [][]*facts.Fuse {
 		if leaf == nil {
 			continue
 		}
-		var chain []*facts.Fuse
-		for f := leaf; f != nil && len(chain) < len(curveDashes); f = f.Before {
-			chain = append(chain, f)
-		}
-		out = append(out, chain)
+		out = append(out, chainOf(leaf))
 	}
 	return out
 }
