@@ -66,16 +66,6 @@ var Emitters = []Emitter{
 	{"white", 2.8, 3.1, 3.5, -0.003, Evidence{Source: "typical datasheets"}},
 }
 
-// EmitterOf returns the class of a colour.
-func EmitterOf(colour string) (Emitter, bool) {
-	for _, e := range Emitters {
-		if e.Colour == colour {
-			return e, true
-		}
-	}
-	return Emitter{}, false
-}
-
 // Exponents of a filament lamp near its rated voltage: each quantity goes as the
 // voltage ratio to this power (lamp rerating, Standard Handbook for Electrical
 // Engineers, read in an article that cites it).

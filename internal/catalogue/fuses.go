@@ -84,13 +84,3 @@ func (c *FuseClass) BreakingCapacity(rating quantity.Ampere) quantity.Ampere {
 func FuseClasses() []*FuseClass {
 	return []*FuseClass{FuseBlade, FuseBlade58, FuseBladeHigh, FuseKnife, FuseStrip, FuseCartridgeT, FuseCartridgeF, FuseCartridgeHighT}
 }
-
-// FuseClassOf returns the class of that name, or nil.
-func FuseClassOf(name string) *FuseClass {
-	for _, c := range FuseClasses() {
-		if c.Name == name {
-			return c
-		}
-	}
-	return nil
-}

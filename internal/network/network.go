@@ -221,9 +221,6 @@ func (d *device) couples(r, c int) bool {
 // series reports whether the device is two pins and one current.
 func (d *device) series() bool { return len(d.m.Pins) == 2 && d.m.branches == 1 }
 
-// Nets returns the number of nets, net 0 included.
-func (n *Network) Nets() int { return len(n.nets) }
-
 // Rest returns the position of every element with memory at rest.
 func (n *Network) Rest() State {
 	s := State{}

@@ -6,6 +6,7 @@ import (
 	"testing"
 
 	"gloamwright/internal/catalogue"
+	"gloamwright/internal/pocket"
 	"gloamwright/internal/quantity"
 )
 
@@ -152,7 +153,7 @@ func TestWorkingsReproduce(t *testing.T) {
 		t.Errorf("only %d workings", len(all))
 	}
 	for _, w := range all {
-		got, err := calculate(w.Substituted)
+		got, err := pocket.Result(w.Substituted)
 		if err != nil {
 			t.Errorf("%s: %v", w.Name, err)
 			continue

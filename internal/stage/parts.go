@@ -24,9 +24,6 @@ type PartKind struct {
 	Size func(p *Plan, d *describe.SinglePart, part *circuit.Part)
 }
 
-// PartKinds returns the kinds of single parts by reference order.
-func PartKinds() []*PartKind { return partTable }
-
 func partKindOf(name string) *PartKind {
 	for _, k := range partTable {
 		if k.Name == name {
