@@ -47,6 +47,8 @@ var mistakes = []mistake{
 		`D020 missing unit: "4" needs a unit: write "4 h", "4 min" or "4 s".`, ""},
 	{"a bare number in a field of a stage", "along: 28 m", "along: 28", "28",
 		`D020 missing unit: "28" needs a unit: write "28 m" or "28 ft".`, ""},
+	{"a unit that no tape has", "  paper: iso", "  lengths: feet", "feet",
+		`D025 not a choice: "feet" is not a choice here. Choices: m, ft.`, ""},
 	{"a percentage without its sign", "lamp_drop: 5 %", "lamp_drop: 5", "5",
 		`D020 missing unit: "5" needs a unit: write "5 %".`, ""},
 	{"a bare number as cable", "cable: 1.5 mm²", "cable: 16", "16",

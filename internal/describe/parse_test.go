@@ -173,9 +173,32 @@ duty:`, 1)
 		t.Fatalf("diagnostics:\n%s", list.Render(s.Sources))
 	}
 	p := s.Practice
+	if p.LengthUnit() != quantity.InFeet {
+		t.Error("lengths of a job in gauges are printed in metres")
+	}
 	if len(p.Sizes.Val) != 3 || p.Sizes.Val[2].Gauge != "4/0" || p.Fuses.Val[2] != 0.5 || p.Blocks.Val[1] != 12 ||
 		p.Prices[0].Of.Val != "16 AWG" || p.Prices[0].Cost.Val != 0.40 || !p.Taper.Val || p.Grouping.Val != 3 || p.Texts.Val != "firm/texts" {
 		t.Errorf("practice: %+v", p)
+	}
+}
+
+func TestLengths(t *testing.T) {
+	for _, c := range []struct {
+		practice string
+		want     quantity.LengthUnit
+	}{
+		{"{conductors: metric}", quantity.InMetres},
+		{"{conductors: awg}", quantity.InFeet},
+		{"{conductors: awg, lengths: m}", quantity.InMetres},
+		{"{lengths: ft}", quantity.InFeet},
+	} {
+		s, list := Parse("shed.yaml", []byte(strings.Replace(least, "duty:", "practice: "+c.practice+"\nduty:", 1)), testSchema())
+		if len(list) > 0 {
+			t.Fatalf("diagnostics:\n%s", list.Render(s.Sources))
+		}
+		if got := s.Practice.LengthUnit(); got != c.want {
+			t.Errorf("%s: lengths in %s", c.practice, got.Symbol())
+		}
 	}
 }
 

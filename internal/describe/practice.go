@@ -83,6 +83,7 @@ func (d *decoder) practiceFields() []field {
 	return []field{
 		{"conductors", false, d.choice(&p.Conductors, "metric", "awg")},
 		{"paper", false, d.choice(&p.Paper, "iso", "ansi")},
+		{"lengths", false, d.choice(&p.Lengths, "m", "ft")},
 		{"lamp_drop", false, value(d, &p.LampDrop, Percent, "0.5 %", "20 %")},
 		{"clear_within", false, value(d, &p.ClearWithin, Duration, "100 ms", "60 s")},
 		{"load_factor", false, value(d, &p.LoadFactor, Percent, "30 %", "100 %")},

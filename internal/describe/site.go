@@ -50,6 +50,7 @@ type Job struct {
 type Practice struct {
 	Conductors  At[string] // "metric" or "awg"
 	Paper       At[string] // "iso" or "ansi"
+	Lengths     At[string] // "m" or "ft"; empty: by the system of the conductors
 	LampDrop    At[quantity.Ratio]
 	ClearWithin At[quantity.Second]
 	LoadFactor  At[quantity.Ratio] // continuous load as a share of the fuse rating, at most
@@ -64,6 +65,19 @@ type Practice struct {
 	Blocks      At[[]quantity.AmpereHour] // battery block capacities in stock; empty: the standard list
 	Texts       At[string]                // folder of the firm's standing texts
 	Prices      []Price
+}
+
+// LengthUnit is the unit in which the job's lengths are printed: as `lengths` says, else
+// feet where conductors are gauges and metres where they are metric.
+func (p *Practice) LengthUnit() quantity.LengthUnit {
+	feet := p.Conductors.Val == "awg"
+	if p.Lengths.Val != "" {
+		feet = p.Lengths.Val == "ft"
+	}
+	if feet {
+		return quantity.InFeet
+	}
+	return quantity.InMetres
 }
 
 // Price is what the firm pays for a thing: a conductor size per metre, or a part.

@@ -36,11 +36,15 @@ var batteryLead = &Check{
 			case !over(c.Length, mostLead):
 				continue
 			}
-			v, bound := pair(c.Length, limit)
+			unit := f.Site.Practice.LengthUnit()
+			v, bound := unit.Format(c.Length), unit.Format(limit)
+			if v == bound {
+				v, bound = pair(c.Length, limit)
+			}
 			report(Finding{
 				Severity: severity, Subject: c.Number, At: c.At,
 				Message: fmt.Sprintf("Wire %s, %s to %s: %s without a fuse, limit %s; a short draws %s", c.Number, c.From, c.To, v, bound, say(f.Battery.Prospective)),
-				Remedy:  fmt.Sprintf("The main fuse within %s of the pole.", say(mostLead)),
+				Remedy:  fmt.Sprintf("The main fuse within %s of the pole.", unit.Format(mostLead)),
 				Value:   float64(c.Length), Limit: float64(limit), Unit: "m",
 			})
 		}

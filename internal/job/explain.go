@@ -112,7 +112,7 @@ func subjectsOf(d *design.Design, what string) (subjects []string, heading strin
 			if c.Circuit != "" {
 				s = append(s, c.Circuit)
 			}
-			return s, fmt.Sprintf("%s, cable 2 × %s, %s", c.Designation, c.Size, c.Length)
+			return s, fmt.Sprintf("%s, cable 2 × %s, %s", c.Designation, c.Size, d.Site.Practice.LengthUnit().Format(c.Length))
 		}
 	}
 	for _, c := range d.Site.Circuits {

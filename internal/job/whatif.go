@@ -35,7 +35,7 @@ func figures(d *design.Design) []figure {
 		if where == "" && c.To != nil {
 			where = "to " + c.To.Name
 		}
-		add("Cable "+c.Designation+", "+where, fmt.Sprintf("2 × %s, %s", c.Size, c.Length))
+		add("Cable "+c.Designation+", "+where, fmt.Sprintf("2 × %s, %s", c.Size, d.Site.Practice.LengthUnit().Format(c.Length)))
 	}
 	add("Worst drop", fmt.Sprintf("%.2f %%", 100*float64(d.Totals.WorstDrop)))
 	add("Load at the end of discharge", quantity.Format(d.Totals.LoadA, 3))

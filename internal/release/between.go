@@ -32,7 +32,7 @@ func recordOf(d *design.Design) (*record, error) {
 func compareDesign(old *record, was *describe.Site, now *record, d *design.Design, schema *describe.Schema) *comparison {
 	values, scopes := changedValues(was, d.Site, schema)
 	nameLamps(values, scopes, now)
-	n := names{map[string]string{}, map[string]string{}, map[string]string{}}
+	n := names{map[string]string{}, map[string]string{}, map[string]string{}, d.Site.Practice.LengthUnit()}
 	for _, b := range d.Circuit.Boards {
 		n.titles[b.Name], n.strips[b.Name] = b.Title, b.Strip
 	}

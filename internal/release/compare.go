@@ -4,6 +4,7 @@ import (
 	"slices"
 
 	"gloamwright/internal/design"
+	"gloamwright/internal/quantity"
 )
 
 // comparison finds what a technician has to redo between two records. Each kind of
@@ -24,9 +25,12 @@ type home struct {
 	lamp             string
 }
 
-// names is what records do not hold: titles and strips of boards by name, and the new
-// names of circuits by the old.
-type names struct{ titles, strips, renamed map[string]string }
+// names is what records do not hold: titles and strips of boards by name, the new
+// names of circuits by the old, and the unit of lengths.
+type names struct {
+	titles, strips, renamed map[string]string
+	lengths                 quantity.LengthUnit // in which the notice is worded
+}
 
 // compareRecords finds what two records differ in. values and scopes are what changed in
 // the description.

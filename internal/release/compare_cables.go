@@ -4,6 +4,7 @@ import (
 	"fmt"
 
 	"gloamwright/internal/design"
+	"gloamwright/internal/quantity"
 )
 
 // cables finds the cables to pull, to shorten, to move at their ends and to remove.
@@ -11,14 +12,14 @@ func (c *comparison) cables() {
 	pairs(c.old.cables(), c.now.cables(), func(w *cable) string { return w.Label }, func(o, n *cable) {
 		switch {
 		case o == nil:
-			c.do(design.WorkItem{Tool: design.ReCut, Do: "Pull the new cable", Is: n.text()}, n.Label)
+			c.do(design.WorkItem{Tool: design.ReCut, Do: "Pull the new cable", Is: c.cableText(n)}, n.Label)
 		case n == nil:
-			c.do(design.WorkItem{Tool: design.ReCut, Do: "Remove the cable", Was: o.text()}, o.Label)
+			c.do(design.WorkItem{Tool: design.ReCut, Do: "Remove the cable", Was: c.cableText(o)}, o.Label)
 		case !sameMake(o, n) || n.Cores[0].Length > o.Cores[0].Length:
-			c.do(design.WorkItem{Tool: design.ReCut, Do: "Pull the new cable; remove the old", Was: o.text(), Is: n.text()}, n.Label)
+			c.do(design.WorkItem{Tool: design.ReCut, Do: "Pull the new cable; remove the old", Was: c.cableText(o), Is: c.cableText(n)}, n.Label)
 			c.touchCores(n)
 		case n.Cores[0].Length < o.Cores[0].Length:
-			c.do(design.WorkItem{Tool: design.ReCut, Do: "Shorten the cable", Was: metres(o.Cores[0].Length), Is: metres(n.Cores[0].Length)}, n.Label)
+			c.do(design.WorkItem{Tool: design.ReCut, Do: "Shorten the cable", Was: c.length(o.Cores[0].Length), Is: c.length(n.Cores[0].Length)}, n.Label)
 		}
 		if o != nil && n != nil {
 			pairs(o.Cores, n.Cores, func(w *recordWire) string { return w.Number }, func(a, b *recordWire) {
@@ -61,20 +62,28 @@ func (c *comparison) wires() {
 	pairs(c.old.wires(), c.now.wires(), func(w *recordWire) string { return w.Number }, func(o, n *recordWire) {
 		switch {
 		case o == nil:
-			c.do(design.WorkItem{Tool: design.ReCut, Do: fmt.Sprintf("Fit the new wire from %s to %s", n.From, n.To), Is: n.text()}, n.Number)
+			c.do(design.WorkItem{Tool: design.ReCut, Do: fmt.Sprintf("Fit the new wire from %s to %s", n.From, n.To), Is: c.wireText(n)}, n.Number)
 		case n == nil:
-			c.do(design.WorkItem{Tool: design.ReCut, Do: fmt.Sprintf("Remove the wire from %s to %s", o.From, o.To), Was: o.text()}, o.Number)
+			c.do(design.WorkItem{Tool: design.ReCut, Do: fmt.Sprintf("Remove the wire from %s to %s", o.From, o.To), Was: c.wireText(o)}, o.Number)
 		case o.Size != n.Size || o.Colour != n.Colour || o.Length != n.Length:
-			c.do(design.WorkItem{Tool: design.ReCut, Do: "Fit the new wire; remove the old", Was: o.text(), Is: n.text()}, n.Number)
+			c.do(design.WorkItem{Tool: design.ReCut, Do: "Fit the new wire; remove the old", Was: c.wireText(o), Is: c.wireText(n)}, n.Number)
 		default:
 			c.ends(o, n)
 		}
 	})
 }
 
-func (w *recordWire) text() string {
-	return fmt.Sprintf("%s %s, %s", w.Size, w.Colour, metres(w.Length))
+func (c *comparison) wireText(w *recordWire) string {
+	return fmt.Sprintf("%s %s, %s", w.Size, w.Colour, c.length(w.Length))
 }
+
+// cableText returns the make of a cable: "2 × 1.5 mm², 9 m".
+func (c *comparison) cableText(w *cable) string {
+	return fmt.Sprintf("%d × %s, %s", len(w.Cores), w.Cores[0].Size, c.length(w.Cores[0].Length))
+}
+
+// length prints a length of a record, m.
+func (c *comparison) length(m float64) string { return c.names.lengths.Format(quantity.Metre(m)) }
 
 // ends finds conductors that stay as they are but end elsewhere.
 func (c *comparison) ends(o, n *recordWire) {

@@ -139,6 +139,9 @@ func (f *flat) practice() {
 	p, all := &f.site.Practice, scope{}
 	value(f, "practice.conductors", "Practice, conductor sizes", p.Conductors, all)
 	value(f, "practice.paper", "Practice, paper", p.Paper, scope{paper: true})
+	lengths := p.Lengths
+	lengths.Val = p.LengthUnit().Symbol()
+	value(f, "practice.lengths", "Practice, unit of lengths on paper", lengths, scope{paper: true})
 	value(f, "practice.lamp_drop", "Practice, drop to the farthest light, at most", p.LampDrop, all)
 	value(f, "practice.clear_within", "Practice, a fuse clears a far short within", p.ClearWithin, all)
 	value(f, "practice.load_factor", "Practice, share of a fuse's rating loaded for long", p.LoadFactor, all)

@@ -3,7 +3,6 @@ package release
 import (
 	"encoding/json"
 	"fmt"
-	"math"
 	"strconv"
 )
 
@@ -149,16 +148,6 @@ func (r *record) wires() []recordWire {
 		}
 	}
 	return out
-}
-
-// text returns the make of the cable: "2 × 1.5 mm², 9 m".
-func (c cable) text() string {
-	return fmt.Sprintf("%d × %s, %s", len(c.Cores), c.Cores[0].Size, metres(c.Cores[0].Length))
-}
-
-// metres prints a length to the centimetre without padding zeros.
-func metres(m float64) string {
-	return strconv.FormatFloat(math.Round(m*100)/100, 'f', -1, 64) + " m"
 }
 
 // amperes prints a rating.

@@ -9,8 +9,9 @@ import (
 )
 
 // partsList is what must be bought: like parts in one row with their number, then the
-// metres of cable and wire by size and colour.
+// length of cable and wire by size and colour.
 func partsList(d *design.Design) *Table {
+	lengths := d.Site.Practice.LengthUnit()
 	t := &Table{Name: "parts.csv", Headings: []string{"item", "quantity", "unit", "description", "values", "requirement", "designations", "places"}}
 	type line struct {
 		quantity                         float64
@@ -52,8 +53,8 @@ func partsList(d *design.Design) *Table {
 		if len(c.Cores) == 0 {
 			continue
 		}
-		l := find("m", "Cable", strconv.Itoa(len(c.Cores))+" × "+c.Cores[0].Size.String()+", "+strings.Join(colours, " "), "")
-		l.quantity += float64(c.Length)
+		l := find(lengths.Symbol(), "Cable", strconv.Itoa(len(c.Cores))+" × "+c.Cores[0].Size.String()+", "+strings.Join(colours, " "), "")
+		l.quantity += lengths.Of(c.Length)
 		l.designations = append(l.designations, c.Designation)
 		l.places = addNew(l.places, placeText(c.From))
 		l.places = addNew(l.places, placeText(c.To))
@@ -62,8 +63,8 @@ func partsList(d *design.Design) *Table {
 		if inCable[w] {
 			continue
 		}
-		l := find("m", "Wire", w.Size.String()+", "+w.Colour, "")
-		l.quantity += float64(w.Length)
+		l := find(lengths.Symbol(), "Wire", w.Size.String()+", "+w.Colour, "")
+		l.quantity += lengths.Of(w.Length)
 		l.designations = append(l.designations, w.Number)
 		l.places = addNew(l.places, pinPlace(w.From))
 	}

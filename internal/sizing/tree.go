@@ -63,8 +63,9 @@ type Tree struct {
 	Volts   quantity.Volt // at the root in the worst condition
 	Ahead   quantity.Ohm  // resistance of the source; counts in fault loops only
 	Legs    []Leg
-	Options []Option // standard or stocked sizes, by rising area
-	Taper   bool     // legs of one circuit may get thinner down the run
+	Options []Option            // standard or stocked sizes, by rising area
+	Taper   bool                // legs of one circuit may get thinner down the run
+	Lengths quantity.LengthUnit // in which remedies are worded
 }
 
 // TreeResult is a chosen set of sizes with its electrical state.

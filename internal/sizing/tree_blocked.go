@@ -195,7 +195,8 @@ func (p *plan) shorter(i int, sizes []*Option, enough func(*Tree, []*Option) boo
 			hi = mid
 		}
 	}
-	return fmt.Sprintf("shorten the run from %v to %v, or share its lamps over two circuits", total, quantity.Metre(float64(total)*lo))
+	return fmt.Sprintf("shorten the run from %s to %s, or share its lamps over two circuits",
+		p.t.Lengths.Format(total), p.t.Lengths.Format(p.t.Lengths.Down(quantity.Metre(float64(total)*lo))))
 }
 
 // relaxed chooses sizes with the limits dropped that even the thickest cannot keep.

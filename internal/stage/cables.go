@@ -32,6 +32,7 @@ func sizeBoard(p *Plan, _ *describe.Stage) {
 	t.Volts = p.End
 	t.Ahead = p.Internal * usedBattery
 	t.Taper = p.Site.Practice.Taper.Val
+	t.Lengths = p.Site.Practice.LengthUnit()
 	t.options()
 	trunk := t.leg(sizing.Leg{Name: "trunk", Parent: -1, Extra: p.TrunkOhm, Pinned: &t.Options[len(t.Options)-1]}, nil)
 	for _, b := range p.C.Boards {

@@ -6,6 +6,7 @@ import (
 
 	"gloamwright/internal/commission"
 	"gloamwright/internal/design"
+	"gloamwright/internal/quantity"
 	"gloamwright/layout/ink"
 	"gloamwright/layout/schematic"
 )
@@ -39,6 +40,7 @@ type book struct {
 	drawings   []*schematic.Sheet
 	recordings map[*schematic.Sheet]*ink.Recorder
 	pg, sidePg page
+	lengths    quantity.LengthUnit
 	refs       *refs
 	cuts       []string
 	symbols    map[string]ink.Target // of designations on the schematic
@@ -52,6 +54,7 @@ type book struct {
 func newBook(d *design.Design, drawings []*schematic.Sheet) *book {
 	b := &book{d: d, drawings: drawings, refs: newRefs(), recordings: map[*schematic.Sheet]*ink.Recorder{}}
 	b.pg, b.sidePg = pages(d.Site.Practice.Paper.Val)
+	b.lengths = d.Site.Practice.LengthUnit()
 	return b
 }
 

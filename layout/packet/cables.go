@@ -15,8 +15,9 @@ func (b *book) cables() *section {
 	s := &section{key: keyCables, title: "Cable list", document: "Cable list", letter: "Q", label: "Before",
 		purpose: "Use this sheet to lay out the ways, to pull the cables and to write what each one took.",
 		note:    fmt.Sprintf("%s has the ends of every core. Look for gentle bends and closed glands.", b.upperSheets(keyWires))}
+	unit := b.lengths.Symbol()
 	t := &table{st: denseText, min: plainRow, cols: []column{{head: "Cable", w: 15}, {head: "Cores and size", w: 25}, {head: "From", w: 32}, {head: "To", w: 39},
-		{head: "Planned m", w: 16, a: endAnchor}, {head: "Taken m", w: 20, a: midAnchor}, {head: "Pulled", w: 11, a: midAnchor},
+		{head: "Planned " + unit, w: 16, a: endAnchor}, {head: "Taken " + unit, w: 20, a: midAnchor}, {head: "Pulled", w: 11, a: midAnchor},
 		{head: "Flags", w: 11, a: midAnchor}, {head: "Ends", w: 11, a: midAnchor}}}
 	head := t.head(0)
 	s.heads = &head
@@ -32,7 +33,7 @@ func (b *book) cables() *section {
 			from, to := b.cableEnds(c)
 			rows = append(rows, t.line(b, 0, row{changed: b.touched(c.Designation), marks: []string{"cable " + c.Designation}, cells: []cell{
 				txt(bold(c.Designation)), txt(fmt.Sprintf("%d × %v", len(c.Cores), c.Size)), txt(from), txt(to),
-				txt(wireLength(float64(c.Length))), writeIn(), tickBox(), tickBox(), tickBox()}}))
+				txt(b.lengths.Column(c.Length)), writeIn(), tickBox(), tickBox(), tickBox()}}))
 		}
 		s.blocks = append(s.blocks, together(rows)...)
 	}

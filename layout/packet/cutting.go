@@ -25,16 +25,28 @@ type cut struct {
 // no source.
 const (
 	cuttingAllowance = 0.03
-	cuttingStep      = 0.5 // m
+	cuttingStepMetre = 0.5 // m
+	cuttingStepFoot  = 1.0 // ft
 )
 
-// drawn is the length to draw for pieces of a length together.
-func drawn(length quantity.Metre) quantity.Metre {
-	return quantity.Metre(math.Ceil(float64(length)*(1+cuttingAllowance)/cuttingStep-tiny) * cuttingStep)
+// cuttingStep is the step to which the lengths of a job are rounded up, in its unit.
+func (b *book) cuttingStep() float64 {
+	if b.lengths == quantity.InFeet {
+		return cuttingStepFoot
+	}
+	return cuttingStepMetre
 }
 
-// metres prints a length with one decimal.
-func metres(m quantity.Metre) string { return strconv.FormatFloat(float64(m), 'f', 1, 64) }
+// drawn is the length to draw for pieces of a length together.
+func (b *book) drawn(length quantity.Metre) quantity.Metre {
+	step := b.cuttingStep()
+	return b.lengths.Metres(math.Ceil(b.lengths.Of(length)*(1+cuttingAllowance)/step-tiny) * step)
+}
+
+// inStore prints a length to draw, in the job's unit.
+func (b *book) inStore(m quantity.Metre) string {
+	return strconv.FormatFloat(b.lengths.Of(m), 'f', 1, 64)
+}
 
 // cuttingList adds up the conductors by size and colour: cables first, thick before
 // thin.
@@ -65,7 +77,7 @@ func (b *book) cuttingList() []cut {
 		x.names = append(x.names, c.Number)
 	}
 	for i := range out {
-		out[i].total = drawn(out[i].length)
+		out[i].total = b.drawn(out[i].length)
 	}
 	slices.SortStableFunc(out, func(a, z cut) int {
 		single := func(c cut) int { return min(1, c.cores) }
@@ -90,7 +102,7 @@ func coreColours(c *circuit.Cable) string {
 func (b *book) cuttingTable() []block {
 	const w = 87.5
 	shift := b.pg.width - w
-	cols := []column{{head: "Size", w: 34}, {head: "Colour", w: 18}, {head: "Pieces", w: 13, a: endAnchor}, {head: "Total m", w: 13, a: endAnchor}, {head: "Drawn", w: 9.5, a: midAnchor}}
+	cols := []column{{head: "Size", w: 34}, {head: "Colour", w: 18}, {head: "Pieces", w: 13, a: endAnchor}, {head: "Total " + b.lengths.Symbol(), w: 13, a: endAnchor}, {head: "Drawn", w: 9.5, a: midAnchor}}
 	t := &table{cols: cols, st: tableText, min: plainRow}
 	var left, right []cut
 	for _, c := range b.cuttingList() {
@@ -100,7 +112,7 @@ func (b *book) cuttingTable() []block {
 			right = append(right, c)
 		}
 	}
-	head := b.head(0, b.pg.width, "Cutting list, whole job", "cut long pieces first; 3 % allowed, rounded up to 0.5 m")
+	head := b.head(0, b.pg.width, "Cutting list, whole job", "cut long pieces first; 3 % allowed, rounded up to "+b.lengths.Format(b.lengths.Metres(b.cuttingStep())))
 	head.marks = []string{"cutting list"}
 	out := []block{head}
 	heads := beside(t.head(0), t.head(shift))
@@ -114,7 +126,7 @@ func (b *book) cuttingTable() []block {
 		if c.cores > 0 {
 			what = "Cable " + strconv.Itoa(c.cores) + " × " + c.size.String()
 		}
-		return t.line(b, x, row{cells: []cell{txt(what), txt(c.colour), txt(strconv.Itoa(c.pieces)), fat(metres(c.total)), tickBox()}})
+		return t.line(b, x, row{cells: []cell{txt(what), txt(c.colour), txt(strconv.Itoa(c.pieces)), fat(b.inStore(c.total)), tickBox()}})
 	}
 	var rows []block
 	for i := range max(len(left), len(right)) {

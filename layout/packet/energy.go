@@ -81,7 +81,7 @@ func (b *book) boardBoxes() []box {
 		}
 		x := box{head: bd.Title, name: bd.Strip, lines: []string{fmt.Sprintf("%s, %s", counted(circuits, "circuit"), counted(lights, "light"))}}
 		if bd.Feeder != nil {
-			x.lines = append(x.lines, fmt.Sprintf("%v of %v", bd.Feeder.Length, bd.Feeder.Size))
+			x.lines = append(x.lines, fmt.Sprintf("%s of %v", b.lengths.Format(bd.Feeder.Length), bd.Feeder.Size))
 		} else {
 			for _, w := range bd.Ways {
 				if w.Feeds != nil {

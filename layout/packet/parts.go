@@ -253,7 +253,7 @@ func (b *book) wireItems() []item {
 	var out []item
 	for _, c := range b.cuttingList() {
 		what := bold("Wire") + " " + c.size.String() + ", " + c.colour
-		it := item{qty: metres(c.total), unit: "m", names: c.names, what: what, must: "copper, stranded"}
+		it := item{qty: b.inStore(c.total), unit: b.lengths.Symbol(), names: c.names, what: what, must: "copper, stranded"}
 		if c.cores > 0 {
 			it.what = fmt.Sprintf("%s %d × %v", bold("Cable"), c.cores, c.size)
 		} else {

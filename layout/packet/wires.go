@@ -7,14 +7,17 @@ import (
 
 	"gloamwright/internal/circuit"
 	"gloamwright/internal/facts"
+	"gloamwright/internal/quantity"
 	"gloamwright/layout/ink"
 )
 
-// Columns of the wire run table, mm: cable or wire, end A, end B, core, length, cut,
+// wireColumns are the columns of the wire run table, mm: cable or wire, end A, end B, core, length, cut,
 // end A, end B, tug, note.
-var wireColumns = []column{{head: "Cable or wire", w: 26}, {head: "End A, from", w: 27}, {head: "End B, to", w: 27}, {head: "Core", w: 16},
-	{head: "Length m", w: 14, a: endAnchor}, {head: "Cut", w: 11, a: midAnchor}, {head: "End A", w: 11, a: midAnchor}, {head: "End B", w: 11, a: midAnchor},
-	{head: "Tug", w: 11, a: midAnchor}, {head: "Note", w: 26, indent: 3}}
+func wireColumns(lengths quantity.LengthUnit) []column {
+	return []column{{head: "Cable or wire", w: 26}, {head: "End A, from", w: 27}, {head: "End B, to", w: 27}, {head: "Core", w: 16},
+		{head: "Length " + lengths.Symbol(), w: 14, a: endAnchor}, {head: "Cut", w: 11, a: midAnchor}, {head: "End A", w: 11, a: midAnchor}, {head: "End B", w: 11, a: midAnchor},
+		{head: "Tug", w: 11, a: midAnchor}, {head: "Note", w: 26, indent: 3}}
+}
 
 // wireGroup is the wires between two places, or inside one.
 type wireGroup struct {
@@ -28,7 +31,7 @@ func (b *book) wires() *section {
 	s := &section{key: keyWires, title: "Wire runs", document: "Wire run table", letter: "W", label: "Before",
 		purpose: "Use this sheet to cut, pull, end and tug-test every wire, one row at a time.",
 		note:    fmt.Sprintf("%s: all parts on site. Battery not connected. All fuses out.", b.upperSheets(keyParts))}
-	t := &table{cols: wireColumns, st: denseText, min: tickRow}
+	t := &table{cols: wireColumns(b.lengths), st: denseText, min: tickRow}
 	head := t.head(0)
 	s.heads = &head
 	for i, g := range b.wireGroups() {
@@ -163,16 +166,8 @@ func (b *book) wireRow(t *table, c *circuit.Conductor) block {
 		note += ", " + c.Rail
 	}
 	return t.line(b, 0, row{changed: b.touched(c.Number), marks: []string{rowMark("wire " + c.Number), runMark(c.Number)}, cells: []cell{
-		txt(c.Number), txt(pinName(c.From)), txt(pinName(c.To)), txt(c.Colour), txt(wireLength(float64(c.Length))),
+		txt(c.Number), txt(pinName(c.From)), txt(pinName(c.To)), txt(c.Colour), txt(b.lengths.Column(c.Length)),
 		tickBox(), tickBox(), tickBox(), tickBox(), upTo(txt(note), 2)}})
-}
-
-// wireLength prints metres: two decimals below one metre.
-func wireLength(m float64) string {
-	if m < 1 {
-		return fmt.Sprintf("%.2f", m)
-	}
-	return fmt.Sprintf("%.1f", m)
 }
 
 // cableRows is a cable: one block of a row for each core, with one length and one box
@@ -214,7 +209,7 @@ func (b *book) cableRows(t *table, c *circuit.Cable) block {
 				p.rule(l+x[6], at, x[9]-x[6], hairline, ink.Rule)
 			}
 		}
-		p.write(l+x[5]-padding, base(0), wireLength(float64(c.Length)), t.st, ink.End)
+		p.write(l+x[5]-padding, base(0), b.lengths.Column(c.Length), t.st, ink.End)
 		p.tick(l+(x[5]+x[6])/2, y+high/2)
 		p.lines(l+x[9]+3, y+(high-noteText.lead)/2+rise*noteText.lead, note, noteText.lead)
 		p.rule(l, y+h, t.width(), cardLine, ink.Black)

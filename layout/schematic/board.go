@@ -164,7 +164,7 @@ func (b *book) entry(sh *Sheet, bd *circuit.Board) {
 	sc.wire(minus, m, node{terminalEntry - 1, rowBarMinus})
 	o := sc.cable(bd.Feeder)
 	o.add(&oval{at: point{14, 12}, rx: 0.45, ry: 1.7})
-	cableText(o, bd.Feeder, colText, 15.7)
+	b.cableText(o, bd.Feeder, colText, 15.7)
 	for _, t := range []struct {
 		term *circuit.Part
 		at   node
@@ -195,7 +195,7 @@ func (b *book) drawColumn(sh *Sheet, s *boardSheet, c *column, x int) {
 		b.columnOval(sh, v, x)
 	}
 	for _, l := range c.lengths {
-		sc.cable(l.cable).add(textAt(l.at.X+float64(x), l.at.Y, metres(l.cable.Length), valueStyle, ink.Middle))
+		sc.cable(l.cable).add(textAt(l.at.X+float64(x), l.at.Y, b.lengths.Format(l.cable.Length), valueStyle, ink.Middle))
 	}
 	for _, r := range c.rungs {
 		b.luminaire(sh, r, x)
@@ -295,7 +295,7 @@ func (b *book) feederWay(sh *Sheet, c *column, x int) {
 	sh.scene.wire(plus, node{x, rowTerminal + 1}, p)
 	sh.scene.wire(minus, node{x + minusCore, rowTerminal + 1}, m)
 	b.columnOval(sh, columnOval{bd.Feeder, 0, rowCable, false}, x)
-	sh.scene.cable(bd.Feeder).add(textAt(float64(x)+minusCore/2, rowLamp-2, metres(bd.Feeder.Length), valueStyle, ink.Middle))
+	sh.scene.cable(bd.Feeder).add(textAt(float64(x)+minusCore/2, rowLamp-2, b.lengths.Format(bd.Feeder.Length), valueStyle, ink.Middle))
 	names := b.railOf[bd.Plus.Pin("in")].Name + ", " + b.railOf[bd.Minus.Pin("in")].Name
 	obj, mate := b.refer(sh, "feeder "+bd.Name, names, true, 'S', p, m)
 	obj.add(textAt(float64(x)+legText, rowLamp+0.4, names, nameStyle, ink.Start),

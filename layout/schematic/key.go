@@ -96,7 +96,7 @@ func (b *book) key(sh *Sheet, left int) {
 	say(rowTerminal, minusCore+3.4, "terminal")
 	say(rowCable, minusCore+1.2, "cable: name, cores and size")
 	leg := w.Lighting.Points[0].Leg
-	o.add(textAt(fx+minusCore/2, lamp-2, metres(leg.Length), valueStyle, ink.Middle))
+	o.add(textAt(fx+minusCore/2, lamp-2, b.lengths.Format(leg.Length), valueStyle, ink.Middle))
 	say(lamp-2.5, minusCore+0.4, "length of this leg")
 	say(lamp, minusCore+0.4, "number, type, place")
 	say(lamp+farEnd, tagGap+symbols.TagBox(ink.Point{}, w.Lighting.TestPoint.Label, ink.Start).W/module+0.5, "test point, far end")

@@ -123,7 +123,7 @@ func (b *book) linkCable(sh *Sheet, p *plan, c *circuit.Cable, runs []linkRun) {
 	if runs[0].leave {
 		tx = x + 1
 	}
-	cableText(o, c, tx, float64(first.Y)-1.2-linePitch)
+	b.cableText(o, c, tx, float64(first.Y)-1.2-linePitch)
 }
 
 // nameTerminals writes strip and number at every ring, from the left; the first of

@@ -21,7 +21,7 @@ func (s *scene) conductor(b *book, c *circuit.Conductor) *object {
 	if c.Colour != "" {
 		t += " " + c.Colour
 	}
-	t += fmt.Sprintf(", %s, %s to %s", metres(c.Length), c.From, c.To)
+	t += fmt.Sprintf(", %s, %s to %s", b.lengths.Format(c.Length), c.From, c.To)
 	if f := b.current[c]; f != nil && f.Current > 0 {
 		t += ", " + f.Current.String() + " at most"
 	}
@@ -34,7 +34,7 @@ func (s *scene) conductor(b *book, c *circuit.Conductor) *object {
 
 // cable returns the object of a cable's mark.
 func (s *scene) cable(c *circuit.Cable) *object {
-	t := c.Designation + ", " + metres(c.Length)
+	t := c.Designation + ", " + s.lengths.Format(c.Length)
 	if s := coresAndSize(c); s != "" {
 		t += ", " + s
 	}

@@ -136,7 +136,7 @@ func (b *book) drawBoardBlocks(sh *Sheet, list []boardBlock) {
 			t += " " + quantity.Fixed(a.Current, 1)
 		}
 		y := (top+k.y)/2 - 0.3
-		f.add(&line{at: point{x + 1.2, y}, runs: []run{{s: c.Designation, st: nameStyle}, {s: metres(c.Length)}}},
+		f.add(&line{at: point{x + 1.2, y}, runs: []run{{s: c.Designation, st: nameStyle}, {s: b.lengths.Format(c.Length)}}},
 			textAt(x+1.2, y+linePitch, t, valueStyle, ink.Start))
 	}
 }
@@ -208,9 +208,9 @@ func (b *book) wayCells(w *circuit.Way) [6]string {
 	}
 	switch {
 	case w.Lighting != nil:
-		c = [6]string{c[0], w.Lighting.Name, fuse, watts(b.lightingWatt(w.Lighting.Name)), metres(longest(w.Lighting)), b.lowest(w.Lighting)}
+		c = [6]string{c[0], w.Lighting.Name, fuse, watts(b.lightingWatt(w.Lighting.Name)), b.lengths.Format(longest(w.Lighting)), b.lowest(w.Lighting)}
 	case w.Feeds != nil:
-		c = [6]string{c[0], w.Feeds.Title, fuse, watts(b.boardWatt(w.Feeds)), metres(w.Feeds.Feeder.Length), ""}
+		c = [6]string{c[0], w.Feeds.Title, fuse, watts(b.boardWatt(w.Feeds)), b.lengths.Format(w.Feeds.Feeder.Length), ""}
 	}
 	if c[3] == "0 W" {
 		c[3] = ""

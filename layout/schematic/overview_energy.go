@@ -137,7 +137,7 @@ func (b *book) batteryBlock(sh *Sheet, o *overview) {
 	w := b.flow(sh, "battery", "charge and discharge", true, o.charger != nil || len(o.chain) > 0,
 		point{colBus, midEnergy}, point{colBus, top + blockHeight})
 	if cable != nil {
-		cableText(w, cable, colBus+1.2, rowBattery+blockHeight+4)
+		b.cableText(w, cable, colBus+1.2, rowBattery+blockHeight+4)
 	}
 }
 
@@ -241,7 +241,7 @@ func (b *book) sensorBlock(sh *Sheet, c *control, y float64) {
 	w := b.flow(sh, c.middle.st.Name+"-sensor", "light signal", false, false, point{colSource + blockWidth, mid}, point{colChain, mid})
 	for _, k := range b.c.Cables {
 		if k.From == c.sensor || k.To == c.sensor {
-			w.add(&line{at: point{colSource + blockWidth + 3, mid - 1.1}, runs: []run{{s: k.Designation, st: nameStyle}, {s: metres(k.Length)}}})
+			w.add(&line{at: point{colSource + blockWidth + 3, mid - 1.1}, runs: []run{{s: k.Designation, st: nameStyle}, {s: b.lengths.Format(k.Length)}}})
 			break
 		}
 	}

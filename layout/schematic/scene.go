@@ -5,6 +5,7 @@ import (
 	"strings"
 
 	"gloamwright/internal/circuit"
+	"gloamwright/internal/quantity"
 	"gloamwright/layout/ink"
 	"gloamwright/symbols"
 )
@@ -62,6 +63,7 @@ type scene struct {
 	refs    []*reference
 	rings   []ringAt
 	numbers []wireNumber
+	lengths quantity.LengthUnit
 }
 
 // ringAt is a terminal's ring on a stage sheet, to be named when all are drawn.
@@ -71,7 +73,9 @@ type ringAt struct {
 	level bool // in a level wire
 }
 
-func newScene() *scene { return &scene{byKey: map[string]*object{}, ids: map[string]int{}} }
+func newScene(lengths quantity.LengthUnit) *scene {
+	return &scene{byKey: map[string]*object{}, ids: map[string]int{}, lengths: lengths}
+}
 
 // object returns the object of that class and name, making it on first use.
 func (s *scene) object(class, name, title string, data ...ink.Attr) *object {

@@ -10,6 +10,7 @@ import (
 	"gloamwright/internal/circuit"
 	"gloamwright/internal/design"
 	"gloamwright/internal/facts"
+	"gloamwright/internal/quantity"
 	"gloamwright/layout/ink"
 	"gloamwright/layout/sheet"
 )
@@ -48,6 +49,7 @@ type book struct {
 	on      map[*circuit.Rail][]int // sheet numbers that draw pins of the rail
 	reading map[*circuit.TestPoint]*facts.Reading
 	current map[*circuit.Conductor]*facts.Conductor
+	lengths quantity.LengthUnit
 
 	boardSheets []*boardSheet
 	over        *overview
@@ -70,8 +72,11 @@ func newBook(d *design.Design) *book {
 		on: map[*circuit.Rail][]int{}, reading: map[*circuit.TestPoint]*facts.Reading{},
 		current: map[*circuit.Conductor]*facts.Conductor{},
 	}
-	if d.Site != nil && d.Site.Practice.Paper.Val == "ansi" {
-		b.paper = sheet.Tabloid
+	if d.Site != nil {
+		b.lengths = d.Site.Practice.LengthUnit()
+		if d.Site.Practice.Paper.Val == "ansi" {
+			b.paper = sheet.Tabloid
+		}
 	}
 	for i, r := range b.c.Rails {
 		b.railKey[r] = fmt.Sprintf("rail%d", i+1)
@@ -90,7 +95,7 @@ func newBook(d *design.Design) *book {
 
 // sheet starts the next sheet.
 func (b *book) sheet(kind, supplement string) *Sheet {
-	s := &Sheet{Number: len(b.sheets) + 1, Kind: kind, Supplement: supplement, Paper: b.paper, scene: newScene(), book: b}
+	s := &Sheet{Number: len(b.sheets) + 1, Kind: kind, Supplement: supplement, Paper: b.paper, scene: newScene(b.lengths), book: b}
 	if b.d.Site != nil {
 		s.Title = b.d.Site.Job.Title.Val
 	}

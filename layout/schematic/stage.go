@@ -176,7 +176,7 @@ func (k *sketcher) core(it *circuit.SketchItem) {
 	if c.Size.Area > 0 {
 		o.add(textAt(p.X, p.Y+linePitch, c.Size.String(), valueStyle, ink.Start))
 	}
-	o.add(textAt(p.X, p.Y+2*linePitch, metres(c.Length), valueStyle, ink.Start))
+	o.add(textAt(p.X, p.Y+2*linePitch, k.b.lengths.Format(c.Length), valueStyle, ink.Start))
 }
 
 // pair draws the upright oval of a cable and what is written at it.
@@ -184,12 +184,12 @@ func (k *sketcher) pair(it *circuit.SketchItem) {
 	p := k.at(it.X, it.Y)
 	o := k.sc.cable(it.Cable)
 	o.add(&oval{at: p, rx: 0.45, ry: it.Y2})
-	cableText(o, it.Cable, p.X-0.8, p.Y-it.Y2-4.6)
+	k.b.cableText(o, it.Cable, p.X-0.8, p.Y-it.Y2-4.6)
 }
 
 // cableText writes a cable's name and length, and under it cores and size.
-func cableText(o *object, c *circuit.Cable, x, y float64) {
-	o.add(&line{at: point{x, y}, runs: []run{{s: c.Designation, st: nameStyle}, {s: metres(c.Length), st: valueStyle}}})
+func (b *book) cableText(o *object, c *circuit.Cable, x, y float64) {
+	o.add(&line{at: point{x, y}, runs: []run{{s: c.Designation, st: nameStyle}, {s: b.lengths.Format(c.Length), st: valueStyle}}})
 	if s := coresAndSize(c); s != "" {
 		o.add(textAt(x, y+linePitch, s, valueStyle, ink.Start))
 	}

@@ -1,11 +1,9 @@
 package schematic
 
 import (
-	"strconv"
 	"strings"
 
 	"gloamwright/internal/circuit"
-	"gloamwright/internal/quantity"
 	"gloamwright/layout/ink"
 )
 
@@ -157,14 +155,4 @@ func title(p *circuit.Part) string {
 		s += ", " + strings.Join(vals, ", ")
 	}
 	return s
-}
-
-// metres is a length as drawings print it: centimetres below a metre, decimetres
-// above.
-func metres(l quantity.Metre) string {
-	decimals := 1
-	if l < 1 {
-		decimals = 2
-	}
-	return strings.TrimRight(strings.TrimRight(strconv.FormatFloat(float64(l), 'f', decimals, 64), "0"), ".") + " m"
 }
