@@ -157,6 +157,11 @@ func (d *decoder) entries(n *yaml.Node, what string) []entry {
 // mapping hands each value of n to its field's reader in file order and reports
 // keys that are unknown or missing. owner is where a missing key is reported.
 func (d *decoder) mapping(n *yaml.Node, owner Span, what string, fields []field) {
+	d.mappingOf(n, owner, what, fields, ownRemedy)
+}
+
+// mappingOf is mapping with what is said of a missing key.
+func (d *decoder) mappingOf(n *yaml.Node, owner Span, what string, fields []field, remedy func(key string) string) {
 	if n.Kind != yaml.MappingNode {
 		d.entries(n, what)
 		return
@@ -177,7 +182,7 @@ func (d *decoder) mapping(n *yaml.Node, owner Span, what string, fields []field)
 	}
 	for _, f := range fields {
 		if f.required && !given[f.name] {
-			d.report(codeMissingKey, "missing key", owner, fmt.Sprintf("%s needs the key %s.", what, f.name))
+			d.report(codeMissingKey, "missing key", owner, fmt.Sprintf("%s needs the key %s.%s", what, f.name, remedy(f.name)))
 		}
 	}
 }

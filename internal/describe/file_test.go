@@ -84,22 +84,22 @@ func TestFiles(t *testing.T) {
 		{"a value missing everywhere", "gloamwright: 1\njob: {number: 7, title: Shed}\n", `x.yaml:1:1: error: missing key [D013]
   1 | gloamwright: 1
     | ^
-  A description needs the key circuits.
+  A description needs the key circuits. Such as circuits: [{name: Stair, board: board, lit: outage-night, points: [9 m lamp]}]
 
 x.yaml:1:1: error: missing key [D013]
   1 | gloamwright: 1
     | ^
-  A description needs the key duty.
+  A description needs the key duty. Such as duty: {nominal: 24 V, outage: 3 h}
 
 x.yaml:1:1: error: missing key [D013]
   1 | gloamwright: 1
     | ^
-  A description needs the key luminaires.
+  A description needs the key luminaires. Such as luminaires: {lamp: {kind: led-driver, power: 6 W, works: 18 V..32 V}}
 
 x.yaml:1:1: error: missing key [D013]
   1 | gloamwright: 1
     | ^
-  A description needs the key stages.
+  A description needs the key stages. Start from a ready one: gloamwright new.
 `},
 		{"a board that nothing hangs on", strings.Replace(least, "luminaires:\n", "  annex: {kind: distribution-board, from: board}\n  spare: {kind: distribution-board, from: annex}\nluminaires:\n", 1), `x.yaml:8:3: warning: board that nothing hangs on [D048]
   8 |   spare: {kind: distribution-board, from: annex}

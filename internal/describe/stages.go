@@ -69,7 +69,7 @@ func (d *decoder) kind(n *yaml.Node, owner Span, what, group string, kinds []Kin
 		f := &k.Fields[i]
 		fields = append(fields, field{f.Name, f.Required, func(e entry) { d.readField(e, f, vals, st) }})
 	}
-	d.mapping(n, owner, fmt.Sprintf("%s (%s)", what, k.Name), fields)
+	d.mappingOf(n, owner, fmt.Sprintf("%s (%s)", what, k.Name), fields, fieldRemedy(k.Fields))
 	for _, f := range k.Fields {
 		if _, given := vals.vals[f.Name]; given || f.Default == "" {
 			continue

@@ -79,8 +79,8 @@ func (m *maker) endurance() error {
 // unknownHours records that the tables do not reach far enough to state the hours.
 func (m *maker) unknownHours(err error) error {
 	m.f.Blocked = append(m.f.Blocked, &facts.Blocked{
-		Subject: m.f.Battery.Part.Designation, Limit: err.Error(), At: m.f.Battery.Part.At,
-		Remedy: "choose another battery class or another room temperature",
+		Subject: m.f.Battery.Part.Designation, Limit: err.Error(), Unknown: true, At: m.f.Battery.Part.At,
+		Remedy: "Another battery class or another room temperature.",
 	})
 	return nil
 }

@@ -334,8 +334,10 @@ type Moved struct {
 type Blocked struct {
 	Subject       string // designation or circuit name
 	Limit         string // which limit blocks
+	What          string // what Figure is, if the limit's name does not say it
 	Figure, Bound float64
 	Unit          string
+	Unknown       bool   // Limit says what is not known; there are no figures
 	Remedy        string // the smallest change that frees it
 	Source        string
 	At            describe.Span

@@ -2,6 +2,9 @@ package finding
 
 import (
 	"fmt"
+	"strings"
+	"unicode"
+	"unicode/utf8"
 
 	"gloamwright/internal/facts"
 )
@@ -14,15 +17,32 @@ var blocked = &Check{
 	Source: "the limit's own source",
 	Run: func(f *facts.Facts, report func(Finding)) {
 		for _, b := range f.Blocked {
+			found := Finding{Severity: Stop, Subject: b.Subject, At: b.At, Remedy: sentence(b.Remedy), Source: b.Source}
 			unit := ""
 			if b.Unit != "" {
 				unit = " " + b.Unit
 			}
-			report(Finding{
-				Severity: Stop, Subject: b.Subject, At: b.At,
-				Message: fmt.Sprintf("%s: nothing fits; %s %s%s, limit %s%s", b.Subject, b.Limit, number(b.Figure), unit, number(b.Bound), unit),
-				Remedy:  b.Remedy, Value: b.Figure, Limit: b.Bound, Unit: b.Unit, Source: b.Source,
-			})
+			switch {
+			case b.Unknown:
+				found.Message = fmt.Sprintf("%s: %s", b.Subject, b.Limit)
+			case b.What != "":
+				found.Message = fmt.Sprintf("%s: nothing fits (%s): %s is %s%s, limit %s%s", b.Subject, b.Limit, b.What, number(b.Figure), unit, number(b.Bound), unit)
+			default:
+				found.Message = fmt.Sprintf("%s: nothing fits; %s %s%s, limit %s%s", b.Subject, b.Limit, number(b.Figure), unit, number(b.Bound), unit)
+			}
+			if !b.Unknown {
+				found.Value, found.Limit, found.Unit = b.Figure, b.Bound, b.Unit
+			}
+			report(found)
 		}
 	},
+}
+
+// sentence gives s a capital and a full stop.
+func sentence(s string) string {
+	if s == "" {
+		return ""
+	}
+	r, n := utf8.DecodeRuneInString(s)
+	return string(unicode.ToUpper(r)) + strings.TrimSuffix(s[n:], ".") + "."
 }

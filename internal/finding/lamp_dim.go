@@ -30,7 +30,11 @@ var lampDim = &Check{
 			if worst < 0 {
 				continue
 			}
-			share := quantity.Ratio(l.Amps[worst] / l.Rated)
+			amps := max(0, l.Amps[worst]) // a dark string takes the solver's rounding
+			if amps < darkAmps {
+				amps = 0
+			}
+			share := quantity.Ratio(amps / l.Rated)
 			if !under(share, l.Dimmest) {
 				continue
 			}
@@ -40,9 +44,13 @@ var lampDim = &Check{
 				Message: fmt.Sprintf("%s: %s of its greatest current in “%s”; least %s",
 					title(l.Part.Designation, l.Circuit), v, strings.ToLower(f.Conditions[worst].Name), bound),
 				Remedy: fmt.Sprintf("It takes %s at %s and must take %s: fewer LEDs in series, or a lamp with a driver.",
-					say(l.Amps[worst]), say(l.Volts[worst]), sayUp(quantity.Ampere(float64(l.Rated)*float64(l.Dimmest)))),
+					say(amps), say(l.Volts[worst]), sayUp(quantity.Ampere(float64(l.Rated)*float64(l.Dimmest)))),
 				Value: percent(share), Limit: percent(l.Dimmest), Unit: "%", Over: true,
 			})
 		}
 	},
 }
+
+// darkAmps is a current at which no LED gives light that one can see: a hundredth of the
+// least test current of indicator LEDs (common practice, no source).
+const darkAmps quantity.Ampere = 1e-6

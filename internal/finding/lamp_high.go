@@ -5,6 +5,7 @@ import (
 	"strings"
 
 	"gloamwright/internal/facts"
+	"gloamwright/internal/quantity"
 )
 
 // lampHigh finds lamps that get more than their working voltage.
@@ -27,14 +28,22 @@ var lampHigh = &Check{
 				continue
 			}
 			v, bound := pair(l.Volts[worst], high)
+			other := fmt.Sprintf("a charging voltage lower by %s", sayUp(l.Volts[worst]-high))
+			if l.Volts[worst] > high*quantity.Volt(chargingSpan) {
+				other = fmt.Sprintf("a battery of a lower nominal voltage than %s", say(f.Site.Duty.Nominal.Val))
+			}
 			report(Finding{
 				Severity: Stop, Subject: l.Part.Designation, At: l.Part.At,
 				Message: fmt.Sprintf("%s: %s at the lamp in “%s”; it works to %s",
 					title(l.Part.Designation, l.Circuit), v, strings.ToLower(f.Conditions[worst].Name), bound),
-				Remedy: fmt.Sprintf("A lamp that works to %s, or a charging voltage lower by %s.",
-					sayUp(l.Volts[worst]), sayUp(l.Volts[worst]-high)),
-				Value: float64(l.Volts[worst]), Limit: float64(high), Unit: "V",
+				Remedy: fmt.Sprintf("A lamp that works to %s, or %s.", sayUp(l.Volts[worst]), other),
+				Value:  float64(l.Volts[worst]), Limit: float64(high), Unit: "V",
 			})
 		}
 	},
 }
+
+// chargingSpan is how far above its working range a lamp may be and still be helped by a
+// lower charging voltage: from boost down to the resting voltage of a full lead-acid
+// cell it is 2.40 V to 2.13 V (IEC 60896-22 guide values, from memory).
+const chargingSpan = 2.40 / 2.13

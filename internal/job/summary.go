@@ -14,7 +14,11 @@ import (
 // it holds, and what was judged.
 func Summary(w io.Writer, d *design.Design) {
 	j := d.Site.Job
-	fmt.Fprintf(w, "%s  %s, %s (revision %s)\n\n", j.Number.Val, j.Title.Val, j.Site.Val, j.Revision.Val)
+	head := j.Title.Val
+	if j.Site.Val != "" {
+		head += ", " + j.Site.Val
+	}
+	fmt.Fprintf(w, "%s  %s (revision %s)\n\n", j.Number.Val, head, j.Revision.Val)
 	row := func(name, format string, a ...any) { fmt.Fprintf(w, "  %-10s %s\n", name, fmt.Sprintf(format, a...)) }
 	duty := d.Site.Duty
 	b := d.Battery

@@ -2,6 +2,7 @@ package sizing
 
 import (
 	"fmt"
+	"math"
 
 	"gloamwright/internal/catalogue"
 	"gloamwright/internal/quantity"
@@ -60,10 +61,10 @@ func ChargerCurrent(in ChargerInput) (Charger, []Working, error) {
 	case rated > c.Limit*(1+slack):
 		hours := float64(k) * float64(in.Removed) / limit
 		smaller, fits := largestAtMost(stock, c.Limit)
-		free := fmt.Sprintf("allow %s for the recharge", num(hours, "h"))
+		free := fmt.Sprintf("allow %s for the recharge", upHours(hours))
 		if fits && smaller > in.Standing {
 			hours = float64(k) * float64(in.Removed) / float64(smaller-in.Standing)
-			free = fmt.Sprintf("a charger of %v needs a recharge time of %s", smaller, num(hours, "h"))
+			free = fmt.Sprintf("a charger of %v needs a recharge time of %s", smaller, upHours(hours))
 		}
 		c.Rated = rated
 		return c, ws, &BlockedError{
@@ -147,3 +148,6 @@ func SupplyCurrent(in SupplyInput) (quantity.Ampere, Working, error) {
 	w.Substituted = fmt.Sprintf("%s ÷ %s = %s → %s", num(float64(in.Load), "A"), num(float64(k), ""), num(float64(need), "A"), num(float64(rated), "A"))
 	return rated, w, nil
 }
+
+// upHours writes hours, rounded up to a tenth: a time that is allowed must suffice.
+func upHours(h float64) string { return num(math.Ceil(h*10)/10, "h") }

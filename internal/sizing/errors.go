@@ -16,6 +16,8 @@ const (
 	LimitOverload    Limit = "overload protection"
 	LimitBreaking    Limit = "breaking capacity"
 	LimitVoltage     Limit = "rated voltage"
+	LimitBattery     Limit = "voltage of the battery when full"
+	LimitReclose     Limit = "voltage at which it closes again"
 	LimitCapacity    Limit = "battery capacity"
 	LimitCharge      Limit = "charge current"
 	LimitPickUp      Limit = "relay pick-up"

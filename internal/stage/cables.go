@@ -139,7 +139,7 @@ func (t *tree) option(size quantity.WireSize) (sizing.Option, bool) {
 	if !ok {
 		return sizing.Option{}, false
 	}
-	iz := t.p.ampacity(c.Size, t.p.Site.Practice.Grouping.Val)
+	iz := t.p.ampacity(c.Size, t.p.grouping)
 	if iz == 0 {
 		return sizing.Option{}, false
 	}
@@ -154,7 +154,7 @@ func (t *tree) option(size quantity.WireSize) (sizing.Option, bool) {
 // its ampacity.
 func (p *Plan) running(size quantity.WireSize) quantity.Celsius {
 	k := quantity.Celsius(p.Site.Practice.LoadFactor.Val)
-	ambient := p.Site.Duty.CableAmbient.Val
+	ambient := p.ambient
 	hot := catalogue.AmpacityOf(systemOf(size)).Conductor
 	return ambient + max(0, hot-ambient)*k*k
 }

@@ -73,11 +73,24 @@ func sizeCutOff(p *Plan, s *describe.Stage) {
 			p.work(q.Designation, "", w, "battery: end of discharge")
 		}
 		if !givenOpens {
+			if err != nil { // the least that the class bears stands in
+				o = p.Class.LowestEnd * quantity.Volt(p.Cells)
+			}
 			opens.Val = quantity.Volt(math.Floor(float64(o)*voltStep+stepSlack) / voltStep)
 		}
 		if !givenCloses {
-			closes.Val = r
+			closes.Val = max(r, quantity.Volt(math.Ceil(float64(opens.Val)*(1+recloseGap)*voltStep-stepSlack)/voltStep))
 		}
+	}
+	// The solver needs the order that a real module has; the finding says that the
+	// given one is wrong.
+	acts := closes.Val
+	if closes.Val <= opens.Val {
+		p.block(q.Designation, q.At, "", &sizing.BlockedError{
+			Limit: sizing.LimitReclose, Value: float64(closes.Val), Bound: float64(opens.Val), Unit: "V",
+			Frees: fmt.Sprintf("It must close above the voltage at which it opens, by %v or more.", quantity.Ratio(recloseGap)),
+		})
+		acts = opens.Val * (1 + recloseGap)
 	}
 	load := p.Light + p.Standing
 	rated, given := describe.Get[quantity.Ampere](s.Fields, "rated")
@@ -89,7 +102,7 @@ func sizeCutOff(p *Plan, s *describe.Stage) {
 	set(q, "rating", rated.Val.String(), float64(rated.Val), "A", true, given)
 	params(q, "",
 		circuit.Param{Name: "opens_volt", Value: float64(opens.Val), Tol: acc},
-		circuit.Param{Name: "recloses_volt", Value: float64(closes.Val), Tol: acc},
+		circuit.Param{Name: "recloses_volt", Value: float64(acts), Tol: acc},
 		circuit.Param{Name: "own_ampere", Value: float64(must[quantity.Ampere](s, "own")), Tol: ownTol},
 		circuit.Param{Name: "ohm", Value: cutOffOhm, Tol: contactTol},
 	)
@@ -104,6 +117,11 @@ const (
 	endSpread  = 0.002
 	dropSpread = 0.3
 )
+
+// recloseGap is how far above its opening voltage a cut-off closes again, at least: a
+// battery that is relieved of its load recovers by about as much (common practice, no
+// source).
+const recloseGap = 0.05
 
 // cutOffOhm is the resistance of a closed cut-off, and ownTol the tolerance of what
 // modules draw themselves (common practice, no source).

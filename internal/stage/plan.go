@@ -57,6 +57,9 @@ type Plan struct {
 
 	TrunkSize, ChargeSize quantity.WireSize
 
+	ambient  quantity.Celsius // of the cables
+	grouping int              // loaded circuits run together
+
 	more    Reserve
 	aux     map[string]quantity.Ampere // what auxiliary supplies feed, by stage name
 	cabled  bool
@@ -81,6 +84,7 @@ func Size(site *describe.Site, c *circuit.Circuit, f *facts.Facts, more Reserve)
 	for _, part := range c.Parts {
 		p.parts[part.Key] = part
 	}
+	p.laying()
 	p.voltages()
 	for _, t := range site.Luminaires {
 		p.loads[t.Name.Val] = luminaireKindOf(t.Kind.Val).Load(p, t)
@@ -185,7 +189,7 @@ func (p *Plan) Load(luminaire string) Load { return p.loads[luminaire] }
 func (p *Plan) Ampacity(w *circuit.Conductor) quantity.Ampere {
 	grouped := 1
 	if w.Cable != nil && w.Circuit != "" {
-		grouped = p.Site.Practice.Grouping.Val
+		grouped = p.grouping
 	}
 	return p.ampacity(w.Size, grouped)
 }
@@ -208,16 +212,14 @@ func (p *Plan) block(subject string, at describe.Span, source string, err error)
 	switch {
 	case errors.As(err, &b):
 		x.Limit, x.Figure, x.Bound, x.Unit, x.Remedy = string(b.Limit), b.Value, b.Bound, b.Unit, b.Frees
-		if b.Subject != "" {
-			x.Subject += ", " + b.Subject
-		}
+		x.What = b.Subject
 	case errors.As(err, &u):
-		x.Limit, x.Remedy = u.What+" is not known", u.Ask
+		x.Unknown, x.Limit, x.Remedy = true, u.What+" is not known", u.Ask
 		if u.Source != "" {
 			x.Source = u.Source
 		}
 	default:
-		x.Limit = err.Error()
+		x.Unknown, x.Limit = true, err.Error()
 	}
 	p.F.Blocked = append(p.F.Blocked, x)
 }
@@ -332,7 +334,7 @@ func (p *Plan) leastFor(subject string, class *catalogue.FuseClass, rating quant
 		if c.Size.Area < least.Least(p.System)-areaSlack {
 			continue
 		}
-		iz, w, err := sizing.Ampacity(sizing.AmpacityInput{Table: table, Size: c.Size, Ambient: p.Site.Duty.CableAmbient.Val, Grouped: grouped})
+		iz, w, err := sizing.Ampacity(sizing.AmpacityInput{Table: table, Size: c.Size, Ambient: p.ambient, Grouped: grouped})
 		if err != nil {
 			continue
 		}
@@ -376,7 +378,7 @@ func (p *Plan) sizes() []catalogue.Conductor {
 
 // ampacity returns what a size carries in its run; 0 if the tables do not say.
 func (p *Plan) ampacity(size quantity.WireSize, grouped int) quantity.Ampere {
-	iz, _, err := sizing.Ampacity(sizing.AmpacityInput{Table: catalogue.AmpacityOf(systemOf(size)), Size: size, Ambient: p.Site.Duty.CableAmbient.Val, Grouped: grouped})
+	iz, _, err := sizing.Ampacity(sizing.AmpacityInput{Table: catalogue.AmpacityOf(systemOf(size)), Size: size, Ambient: p.ambient, Grouped: grouped})
 	if err != nil {
 		return 0
 	}

@@ -62,6 +62,7 @@ func (p *Plan) endOfDischarge() {
 	end, w := sizing.EndOfDischarge(sizing.EndInput{Class: p.Class, Cells: p.Cells, Lamp: lamp, Drop: p.permittedDrop()})
 	p.work("battery", "end of discharge", w)
 	p.End = end
+	whose, at := "which the lamps need", p.lampNeeding(lamp)
 	for _, o := range p.Site.Stages {
 		// A cut-off that is a little low must not open below the class's end, and one
 		// that is a little high not before the outage is over.
@@ -70,14 +71,31 @@ func (p *Plan) endOfDischarge() {
 		}
 	}
 	if v, ok := describe.Get[quantity.Volt](s.Fields, "end"); ok {
-		p.End = v.Val
+		p.End, whose, at = v.Val, "which is given", v.Pos
 	}
 	for _, o := range p.Site.Stages {
-		if v, ok := describe.Get[quantity.Volt](o.Fields, "opens"); ok && o.Kind.Val == "low-voltage-disconnect" {
-			p.End = max(p.End, v.Val)
+		if v, ok := describe.Get[quantity.Volt](o.Fields, "opens"); ok && o.Kind.Val == "low-voltage-disconnect" && v.Val > p.End {
+			p.End, whose, at = v.Val, "at which "+o.Name.Val+" opens", v.Pos
 		}
 	}
 	p.End = quantity.Volt(math.Ceil(float64(p.End)*voltStep-stepSlack) / voltStep)
+	if p.End >= p.Full {
+		p.block("end of discharge, "+whose, at, w.Source, &sizing.BlockedError{
+			Limit: sizing.LimitBattery, Value: float64(p.End), Bound: float64(p.Full), Unit: "V",
+			Frees: "A battery of a higher nominal voltage, lamps that work from less, or lower settings.",
+		})
+		p.End = quantity.Volt(p.Cells) * p.Class.EndVolt
+	}
+}
+
+// lampNeeding returns where the luminaire type stands that works from v only.
+func (p *Plan) lampNeeding(v quantity.Volt) describe.Span {
+	for _, t := range p.Site.Luminaires {
+		if p.usedType(t.Name.Val) && p.loads[t.Name.Val].Works.Low >= v {
+			return t.Name.Pos
+		}
+	}
+	return describe.Span{}
 }
 
 // Voltages that a technician sets are whole tenths of a volt.

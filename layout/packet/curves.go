@@ -199,6 +199,9 @@ func (g *plot) fuseName(f *facts.Fuse, i int) {
 	kind := figure(f.Rating)
 	var at []xy
 	slow := edge(f, f.Slowest, g.x.max)
+	if len(slow) == 0 {
+		return // its opening times are not known; the words below say so
+	}
 	for _, t := range []float64{3000, 1500, 700, 300, 100, 30, 10} {
 		at = append(at, xy{slowAt(slow, t), t})
 	}
@@ -271,6 +274,11 @@ func (b *book) fuseWords(chain []*facts.Fuse) string {
 			continue
 		}
 		out = append(out, fmt.Sprintf("Up to %s %s opens before %s for certain; above it both may open.", bold(figure(f.DiscriminatesTo)), f.Part.Designation, up.Part.Designation))
+	}
+	for _, f := range chain {
+		if len(f.Slowest) == 0 {
+			out = append(out, fmt.Sprintf("The opening times of %s, %s, are not in the tables: it has no strip.", bold(f.Part.Designation), figure(f.Rating)))
+		}
 	}
 	out = append(out, "A wire line is what the wire stands, up to 5 s.")
 	var sources []string
