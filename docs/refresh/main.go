@@ -100,7 +100,7 @@ func pages() ([]release.File, error) {
 		name string
 		make func() ([]byte, error)
 	}{
-		{"methods", func() ([]byte, error) { return methods(designs) }}, {"catalogue", tables}, {"checks", checks}, {"results", contract},
+		{"methods", func() ([]byte, error) { return methods(designs) }}, {"catalogue", tables}, {"checks", checks}, {"results", contract}, {"schematic", drawings},
 	} {
 		data, err := p.make()
 		if err != nil {

@@ -145,10 +145,14 @@ func (b *book) barPoint(sh *Sheet, s *boardSheet, xs []int, end int, name ink.Re
 			near = near || x-at < 3 && at-x < 3
 		}
 		if !near {
+			if x > s.start+3 {
+				sh.scene.moved++
+			}
 			b.probe(sh, s.board.TestPoint, node{x, rowBarPlus}, "N")
 			return
 		}
 	}
+	sh.scene.moved++
 	b.probe(sh, s.board.TestPoint, node{end, rowBarPlus}, "E")
 }
 

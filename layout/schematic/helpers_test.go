@@ -128,7 +128,7 @@ func drawn(tb testing.TB, d *design.Design, files bool) []audit.Sheet {
 				tb.Fatal(err)
 			}
 		}
-		out = append(out, audit.Sheet{Number: s.Number, Page: page, Format: s.Paper, Circuit: s.Kind == circuitDiagram})
+		out = append(out, audit.Sheet{Number: s.Number, Page: page, Format: s.Paper, Circuit: s.Circuit(), Moved: s.Moved()})
 	}
 	return out
 }

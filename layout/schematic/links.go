@@ -58,6 +58,7 @@ func (b *book) linkNumber(sh *Sheet, p *plan, r linkRun) {
 		x = float64(a.X) + 3
 	case !r.arrive && p.crossed(a, z):
 		x = float64(a.X) + gapFirst/2.0
+		sh.scene.moved++
 	}
 	sh.scene.number(c, textAt(x, float64(a.Y)-overTight, c.Number, wireStyle, ink.Middle))
 }
@@ -180,6 +181,9 @@ func (b *book) blackProbe(sh *Sheet, p *plan) {
 		}
 		for x := r.x1 - 3; x > r.x0+2; x-- {
 			if b.freeBelow(p, r, x) {
+				if x < r.x1-3 {
+					sh.scene.moved++
+				}
 				tp := &circuit.TestPoint{Key: "black", Label: BlackLabel, Shows: "L−, for the black probe", Red: b.c.Black}
 				b.probe(sh, tp, node{x, rowMinus}, "S")
 				return

@@ -223,7 +223,7 @@ func (b *book) railName(sh *Sheet, p *plan, r railRun) {
 	if r.after { // its reference bears the name
 		tries = tries[:1]
 	}
-	for _, t := range tries {
+	for i, t := range tries {
 		l := &line{at: point{0, y}, runs: t}
 		w := l.width()
 		for x := float64(r.x0) + 2; x+w < end; x += 0.5 {
@@ -232,6 +232,9 @@ func (b *book) railName(sh *Sheet, p *plan, r railRun) {
 				clear = clear && (float64(q) < x-0.4 || float64(q) > x+w+0.4)
 			}
 			if clear {
+				if i > 0 || x > float64(r.x0)+2 {
+					sh.scene.moved++
+				}
 				l.at.X = x
 				obj.add(l)
 				return
@@ -239,6 +242,7 @@ func (b *book) railName(sh *Sheet, p *plan, r railRun) {
 		}
 	}
 	if !r.after {
+		sh.scene.moved++
 		obj.add(&line{at: point{float64(r.x1) + 0.8, float64(r.y) + 0.5}, runs: text})
 	}
 }

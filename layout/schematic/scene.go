@@ -63,6 +63,7 @@ type scene struct {
 	refs    []*reference
 	rings   []ringAt
 	numbers []wireNumber
+	moved   int // labels that found their first place taken
 	lengths quantity.LengthUnit
 }
 

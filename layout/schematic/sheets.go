@@ -203,6 +203,12 @@ func (b *book) railRefer(sh *Sheet, r *circuit.Rail, other int, at node) (*objec
 	return b.refer(sh, fmt.Sprintf("%s-%d-%d", b.railKey[r], from, to), r.Name, out, turn, at)
 }
 
+// Circuit reports whether the sheet is a circuit diagram; the others are overviews.
+func (s *Sheet) Circuit() bool { return s.Kind == circuitDiagram }
+
+// Moved is how many labels found their first place taken and stand in another.
+func (s *Sheet) Moved() int { return s.scene.moved }
+
 // Options says how a sheet is shown.
 type Options struct {
 	// Number and Of are printed in the title block; zero means the schematic's own.

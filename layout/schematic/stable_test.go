@@ -179,21 +179,6 @@ func countLinks(t *testing.T, calls []ink.Call, sheets int) int {
 	return n
 }
 
-// TestQuality prints the quality numbers of the descriptions that come with the
-// program and holds the hard ones.
-func TestQuality(t *testing.T) {
-	for name, src := range samples(t) {
-		d := designed(t, src)
-		for _, q := range audit.Measure(drawn(t, d, false)) {
-			t.Logf("%s sheet %d: X %d (bars %d)  B %.2f  Lr %.2f  A %.2f  U %.2f  R %d  T %.0f %%  lines %d  texts %d",
-				name, q.Sheet, q.Crossings, q.InBars, q.Bends, q.Length, q.Aligned, q.Used, q.References, 100*q.Turned, q.Lines, q.Texts)
-			if q.Crossings > 3 || q.Turned > 0.05 {
-				t.Errorf("%s sheet %d: %d crossings, %.0f %% of the texts turned", name, q.Sheet, q.Crossings, 100*q.Turned)
-			}
-		}
-	}
-}
-
 // BenchmarkThousand draws a site of a thousand luminaires, and for comparison replays
 // the recorded calls into both back ends.
 func BenchmarkThousand(b *testing.B) {

@@ -103,6 +103,9 @@ func (k *sketcher) frame() {
 	o := k.sc.object(classBoundary, "stage-"+st.Name, st.Heading, ink.Attr{Name: "stage", Value: st.Name})
 	w := float64(st.Sketch.Width)
 	boundary(o, k.x0, rowFrameTop, k.x0+w, rowFrameEnd, "")
+	if k.x.head > 0 {
+		k.sc.moved++
+	}
 	o.add(textAt(k.x0+k.x.head, rowHeading, k.x.headText, k.x.headSize, ink.Start))
 	if st.Place != nil {
 		room := k.clear(rowFrameTop, rowFrameTop+2) - 0.8 - 0.5

@@ -25,6 +25,7 @@ type reader struct {
 	crossed []ink.Point  // where lines cross without a joint
 	nodes   map[spot]int // node of every place where something ends
 	parent  []int
+	framed  map[string]ink.Rect // the stages' frames, once they are asked for
 }
 
 // segment is one straight piece of a line.

@@ -10,29 +10,56 @@ import (
 // Rule is one rule of the audit.
 type Rule string
 
-// The rules, with the drawing practice that they follow.
+// The rules.
 const (
-	RuleUnknown   Rule = "G1" // every stroke is a symbol, a line, a dot, a frame or a text
-	RuleGrid      Rule = "G2" // pins, ends, bends and dots lie on the module grid
-	RuleSquare    Rule = "G3" // lines run level or upright
-	RuleWidth     Rule = "G4" // line widths are 0.18, 0.25, 0.35, 0.5 or 0.7 mm
-	RuleField     Rule = "G5" // nothing outside the frame, nothing in the title block
-	RuleOverlap   Rule = "L1" // no two lines lie on one another
-	RuleEnd       Rule = "L2" // every end is a pin, a joint, a reference or a test point
-	RuleDot       Rule = "L3" // a dot where three directions meet, and only there
-	RuleFour      Rule = "L4" // no joint of four directions
-	RuleBody      Rule = "L5" // no line through a symbol's body or past a foreign pin
-	RuleCrossing  Rule = "L6" // crossings are square, a module or more from dots, bends and pins
-	RuleLoop      Rule = "L7" // no ring of lines: one way only from pin to pin
-	RuleText      Rule = "T1" // texts clear of one another, of lines and of symbols
-	RuleHeight    Rule = "T2" // no text of the circuit under 2.5 mm
-	RuleName      Rule = "T3" // every symbol bears its designation, nearer than any other
-	RulePins      Rule = "N1" // every pin of the circuit that is drawn is drawn once
-	RuleNet       Rule = "N2" // connected on paper exactly what the circuit connects
-	RuleProbe     Rule = "N3" // test points on the potential that they stand for
-	RuleReference Rule = "R1" // references come in pairs and name one another's place
-	RuleContact   Rule = "R2" // contacts and coils name one another's place
+	RuleUnknown   Rule = "G1"
+	RuleGrid      Rule = "G2"
+	RuleSquare    Rule = "G3"
+	RuleWidth     Rule = "G4"
+	RuleField     Rule = "G5"
+	RuleOverlap   Rule = "L1"
+	RuleEnd       Rule = "L2"
+	RuleDot       Rule = "L3"
+	RuleFour      Rule = "L4"
+	RuleBody      Rule = "L5"
+	RuleCrossing  Rule = "L6"
+	RuleLoop      Rule = "L7"
+	RuleText      Rule = "T1"
+	RuleHeight    Rule = "T2"
+	RuleName      Rule = "T3"
+	RulePins      Rule = "N1"
+	RuleNet       Rule = "N2"
+	RuleProbe     Rule = "N3"
+	RuleReference Rule = "R1"
+	RuleContact   Rule = "R2"
 )
+
+// Rules says what each rule asks for (drawing practice).
+var Rules = []struct {
+	Rule Rule
+	What string
+}{
+	{RuleUnknown, "every stroke is a symbol, a line, a dot, a frame or a text"},
+	{RuleGrid, "pins, ends, bends and dots lie on the module grid"},
+	{RuleSquare, "lines run level or upright"},
+	{RuleWidth, "line widths are 0.18, 0.25, 0.35, 0.5 or 0.7 mm"},
+	{RuleField, "nothing outside the frame, nothing in the title block"},
+	{RuleOverlap, "no two lines lie on one another"},
+	{RuleEnd, "every end is a pin, a joint, a reference or a test point"},
+	{RuleDot, "a dot where three directions meet, and only there"},
+	{RuleFour, "no joint of four directions"},
+	{RuleBody, "no line through a symbol's body or past a foreign pin"},
+	{RuleCrossing, "crossings are square, a module or more from dots, bends and pins"},
+	{RuleLoop, "no ring of lines: one way only from pin to pin"},
+	{RuleText, "texts clear of one another, of lines and of symbols"},
+	{RuleHeight, "no text of the circuit under 2.5 mm"},
+	{RuleName, "every symbol bears its designation, nearer than any other"},
+	{RulePins, "every pin of the circuit that is drawn is drawn once"},
+	{RuleNet, "connected on paper exactly what the circuit connects"},
+	{RuleProbe, "test points on the potential that they stand for"},
+	{RuleReference, "references come in pairs and name one another's place"},
+	{RuleContact, "contacts and coils name one another's place"},
+}
 
 // Fault is a breach of a rule at a place.
 type Fault struct {
@@ -54,6 +81,8 @@ type Sheet struct {
 	Page    *Page
 	Format  sheet.Format
 	Circuit bool // a circuit diagram; an overview is judged for its texts only
+
+	Moved int // labels that do not stand in their first place, as the drawing says
 }
 
 // Want is what the circuit says that the set of sheets must show.

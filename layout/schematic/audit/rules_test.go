@@ -8,8 +8,13 @@ import (
 	"gloamwright/symbols"
 )
 
-// bench is a sheet drawn by hand: two resistors in a row, joined.
+// bench judges a sheet drawn by hand.
 func bench(more func(r *ink.Recorder, line func(xy ...float64), dot func(x, y float64))) []Fault {
+	return Judge([]Sheet{byHand(more)}, nil)
+}
+
+// byHand is a sheet drawn by hand: two resistors in a row, joined.
+func byHand(more func(r *ink.Recorder, line func(xy ...float64), dot func(x, y float64))) Sheet {
 	r := ink.NewRecorder(sheet.A3.W, sheet.A3.H, "")
 	line := func(xy ...float64) {
 		p := (&ink.Path{}).Move(xy[0]*module, xy[1]*module)
@@ -34,7 +39,7 @@ func bench(more func(r *ink.Recorder, line func(xy ...float64), dot func(x, y fl
 	if more != nil {
 		more(r, line, dot)
 	}
-	return Judge([]Sheet{{Number: 1, Page: FromRecorder(r), Format: sheet.A3, Circuit: true}}, nil)
+	return Sheet{Number: 1, Page: FromRecorder(r), Format: sheet.A3, Circuit: true}
 }
 
 // A sound sheet has no fault; each kind of damage is found under its own rule.
