@@ -2,6 +2,7 @@ package finding
 
 import (
 	"fmt"
+	"math"
 
 	"gloamwright/internal/facts"
 )
@@ -18,11 +19,22 @@ var collapse = &Check{
 		if c == nil || c.Share >= 1 {
 			return
 		}
+		remedy := fmt.Sprintf("Take %.0f %% of the watts off, or lay cable of at least %.1f times the section.", math.Ceil(100*(1-c.Share)-roundSlack), math.Ceil(10/c.Share-roundSlack)/10)
+		if c.Share < leastShare {
+			remedy = "No cable helps here: a higher system voltage, or lamps that work from less."
+		}
 		report(Finding{
 			Severity: Stop, Subject: c.Circuit, At: c.At,
 			Message: fmt.Sprintf("%s: the voltage collapses in “%s”; the line carries %.0f %% of the power at most", c.Circuit, c.Condition, 100*c.Share),
-			Remedy:  fmt.Sprintf("Take %.0f %% of the watts off, or lay cable of at least %.1f times the section.", 100*(1-c.Share), 1/c.Share),
+			Remedy:  remedy,
 			Value:   100 * c.Share, Limit: 100, Unit: "%", Over: true,
 		})
 	},
 }
+
+// leastShare is the share of the power below which the thickest cable of the catalogue
+// (a hundred times the section of the thinnest) does not help either.
+const leastShare = 0.01
+
+// roundSlack keeps a figure that is whole already from being rounded up.
+const roundSlack = 1e-9

@@ -57,7 +57,9 @@ type Check struct {
 	Run    func(f *facts.Facts, report func(Finding))
 }
 
-// Judge runs all checks and returns the findings, gravest first.
+// Judge runs all checks and returns the findings, gravest first; among equals what could
+// not be sized at all, because much of the rest follows from it, then by the place in the
+// file.
 func Judge(f *facts.Facts) []Finding {
 	var out []Finding
 	for _, c := range All() {
@@ -70,10 +72,18 @@ func Judge(f *facts.Facts) []Finding {
 		})
 	}
 	slices.SortStableFunc(out, func(a, b Finding) int {
-		return cmp.Or(cmp.Compare(a.Severity, b.Severity), cmp.Compare(a.At.File, b.At.File), cmp.Compare(a.At.Line, b.At.Line),
+		return cmp.Or(cmp.Compare(a.Severity, b.Severity), cmp.Compare(follows(a), follows(b)), cmp.Compare(a.At.File, b.At.File), cmp.Compare(a.At.Line, b.At.Line),
 			cmp.Compare(a.At.Col, b.At.Col), cmp.Compare(a.Check, b.Check), cmp.Compare(a.Subject, b.Subject))
 	})
 	return out
+}
+
+// follows is 0 for a step of sizing for which nothing fits, 1 for all else.
+func follows(f Finding) int {
+	if f.Check == blocked.Name {
+		return 0
+	}
+	return 1
 }
 
 // Entry is one line of the reference of checks.

@@ -66,10 +66,15 @@ func fuseLine(d *design.Design) string {
 	return strings.Join(order, ", ")
 }
 
-// Findings writes the findings, gravest first.
+// Findings writes the findings, gravest first. Of many that one check reports, the first
+// stands in full and the others by name; documents and results hold them all.
 func Findings(w io.Writer, d *design.Design) {
 	fmt.Fprintf(w, "  Findings: %d stop, %s, %s\n", d.Count(finding.Stop), plural(d.Count(finding.Caution), "caution"), plural(d.Count(finding.Note), "note"))
 	for _, f := range d.Findings {
+		alike := likewise(d.Findings, f)
+		if len(alike) > fewAlike && *alike[0] != f {
+			continue
+		}
 		fmt.Fprintf(w, "  %-8s %s\n", f.Severity, f.Message)
 		if f.Remedy != "" {
 			fmt.Fprintf(w, "           %s\n", f.Remedy)
@@ -77,7 +82,43 @@ func Findings(w io.Writer, d *design.Design) {
 		if f.At.Line > 0 {
 			fmt.Fprintf(w, "           at %s:%d:%d\n", f.At.File, f.At.Line, f.At.Col)
 		}
+		if len(alike) > fewAlike {
+			fmt.Fprintf(w, "           likewise %s\n", subjects(alike[1:]))
+		}
 	}
+}
+
+const (
+	fewAlike  = 3  // so many findings of one check are shown in full
+	mostNamed = 10 // so many others are named
+)
+
+// likewise returns the findings of f's check and severity. A step for which nothing fits
+// is always shown in full.
+func likewise(all []finding.Finding, f finding.Finding) []*finding.Finding {
+	if f.Check == "blocked" {
+		return nil
+	}
+	var out []*finding.Finding
+	for i := range all {
+		if x := &all[i]; x.Check == f.Check && x.Severity == f.Severity {
+			out = append(out, x)
+		}
+	}
+	return out
+}
+
+// subjects names what findings are about.
+func subjects(list []*finding.Finding) string {
+	var names []string
+	for _, f := range list[:min(len(list), mostNamed)] {
+		names = append(names, f.Subject)
+	}
+	s := strings.Join(names, ", ")
+	if more := len(list) - len(names); more > 0 {
+		s += fmt.Sprintf(" and %d more", more)
+	}
+	return s
 }
 
 func plural(n int, what string) string {
