@@ -215,8 +215,7 @@ func (p *plan) relaxed() *TreeResult {
 	}
 	q, err := loose.plan()
 	if err == nil {
-		s := &search{plan: q}
-		if s.run(); s.best != nil {
+		if s := q.seek(firstCap); s.best != nil {
 			return p.result(s.best.Sizes)
 		}
 	}

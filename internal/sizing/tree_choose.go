@@ -10,10 +10,10 @@ import (
 // far-end clearing, least area; one size a circuit, or legs that only get thinner
 // down the run when Taper is set. Pinned legs keep their size.
 //
-// With the currents held at values that no choice can undercut, the search over
-// labels gives a lower bound; with the currents of a solved choice it gives
-// candidates that are then solved exactly. Branch and bound closes what gap is left,
-// within a budget; the result says whether it is proven.
+// A relaxed pass over the tree gives a lower bound, a second one true choices that are
+// then solved exactly (dynamic programming: Bellman, 1957). What cannot be part of a
+// cheaper choice is left out, and the pass repeated on what remains. Branch and bound
+// closes what gap is left, within a budget; the result says whether it is proven.
 //
 // When nothing fits, the error is a *BlockedError, and the result still holds sizes
 // that keep the limits which can be kept.
@@ -22,8 +22,7 @@ func (t *Tree) Choose() (*TreeResult, error) {
 	if err != nil {
 		return nil, err
 	}
-	s := &search{plan: p}
-	s.run()
+	s := p.seek(firstCap)
 	if s.best == nil {
 		return p.relaxed(), p.blocked()
 	}
@@ -41,110 +40,140 @@ func (t *Tree) Check(sizes []*Option) (*TreeResult, error) {
 	return r, p.verdict(sizes, r)
 }
 
-// searchWork bounds branch and bound by the labels that it makes: some tenths of a
-// second. A tree of a few dozen legs is proven far within it.
-const searchWork = 2_000_000
-
-// leastAmps returns currents of all legs that no choice within limits undercuts.
-// Constant power draws least at the highest voltage, a resistor at the lowest; the
-// highest voltages follow from the least currents through the least resistances.
-func (p *plan) leastAmps(fix []int) []float64 {
-	n := len(p.t.Legs)
-	r, v, a := make([]float64, n), make([]float64, n), make([]float64, n)
-	for i := range r {
-		k := free
-		if c := p.choices(i, fix); c != nil {
-			k = largest(c)
-		}
-		r[i] = p.t.ohms(i, p.option(i, k))
-		v[i] = float64(p.t.Volts)
-	}
-	const rounds = 6
-	for range rounds {
-		for i := range a {
-			l := &p.t.Legs[i]
-			a[i] = float64(l.Load.Current)
-			if l.Load.Power > 0 {
-				a[i] += float64(l.Load.Power) / v[i]
-			}
-			if l.Load.Ohm > 0 {
-				a[i] += float64(l.MinVolt) / float64(l.Load.Ohm)
-			}
-			a[i] = max(a[i], 0)
-		}
-		for i := n - 1; i >= 0; i-- {
-			if q := p.t.Legs[i].Parent; q >= 0 {
-				a[q] += a[i]
-			}
-		}
-		for i := range v {
-			up := float64(p.t.Volts)
-			if q := p.t.Legs[i].Parent; q >= 0 {
-				up = v[q]
-			}
-			v[i] = max(up-a[i]*r[i], collapsed*float64(p.t.Volts))
-		}
-	}
-	return a
-}
-
-// mostAmps returns the currents of all legs when each load stands at the worst
-// voltage for it within limits.
-func (p *plan) mostAmps() []float64 {
-	a := make([]float64, len(p.t.Legs))
-	for i := len(a) - 1; i >= 0; i-- {
-		l := &p.t.Legs[i]
-		own := float64(l.Load.Current)
-		if l.Load.Power > 0 {
-			own += float64(l.Load.Power) / float64(l.MinVolt)
-		}
-		if l.Load.Ohm > 0 {
-			own += float64(p.t.Volts) / float64(l.Load.Ohm)
-		}
-		a[i] += own
-		if q := l.Parent; q >= 0 {
-			a[q] += a[i]
-		}
-	}
-	return a
-}
+// searchWork bounds branch and bound by the states that it makes: some hundredths of a
+// second. A tree of a dozen legs is proven far within it.
+const searchWork = 200_000
 
 // search is the state of one Choose.
 type search struct {
 	*plan
-	best *TreeResult
+	best     *TreeResult
+	open     [][]int     // by group: options that may be part of a cheaper choice
+	rests                // from the last relaxed pass over open
+	with     [][]float64 // by group and option: least cost of a choice with it
+	bound    float64
+	pass     pass
+	cap      int  // see pass
+	passWork int  // states made in the last pass
+	hopeless bool // no choice keeps all limits
 }
 
 // tieSlack is how far two costs may differ by rounding and still be equal.
 const tieSlack = 1e-9
 
-func (s *search) run() {
-	bound, _, ok := s.search(s.leastAmps(s.noFix()), s.noFix(), true)
-	if !ok {
-		return // nothing fits even with the least currents
+// seek searches with at first so many states at a point.
+func (p *plan) seek(states int) *search {
+	s := &search{plan: p, open: slices.Clone(p.allowed), cap: states}
+	for s.refine() {
+		s.cap *= finer
 	}
-	s.candidates()
-	s.lighten()
-	if s.best != nil && s.best.Cost <= bound*(1+tieSlack) {
-		s.best.Bound, s.best.Proven = bound, true
-		return
+	if before := s.work; !s.hopeless && !s.closed() && s.passWork*leastNodes < searchWork {
+		s.bound = max(s.bound, s.branch(s.open, before+searchWork))
 	}
-	done := s.branch(s.noFix(), 0)
-	if s.best == nil {
-		return
+	if s.best != nil {
+		s.best.Proven = s.closed()
+		s.best.Bound = min(s.bound, s.best.Cost)
 	}
-	s.best.Bound, s.best.Proven = bound, done
-	if done {
-		s.best.Bound = s.best.Cost
-	}
+	return s
 }
 
-// offer solves the picks and keeps them if they are the best so far.
-func (s *search) offer(picks []int) (*TreeResult, bool) {
-	sizes := s.sizes(picks)
-	v, a, ok := s.t.meets(sizes)
+// The search starts coarse, so that it soon has a good choice with which to strike out
+// what is not worth a closer look, and grows finer as less is left. All found by trial.
+const (
+	firstCap    = 16 // states at a point, for each size there
+	finer       = 3
+	lastCap     = 1000
+	refineWork  = 200_000 // states made in all, before a gap of goodGap will do
+	goodGap     = 0.005
+	refineByLeg = 8_000 // states made in all, for each leg, beyond which any gap must do
+	leastNodes  = 10    // branch and bound that cannot look at so many is of no use
+)
+
+// refine makes a relaxed pass over the open options, looks for true choices near it,
+// and strikes out what cannot be part of a cheaper one. It reports whether a finer pass
+// is of use.
+func (s *search) refine() bool {
+	before := s.work
+	cost, picks, ok := s.relax(s.open)
+	s.passWork = s.work - before
 	if !ok {
-		return nil, false
+		if s.best != nil {
+			s.bound = s.best.Cost // nothing cheaper is left
+		}
+		s.hopeless = s.best == nil // nothing fits even with every promise kept
+		return false
+	}
+	s.bound = max(s.bound, cost)
+	s.rests, s.with = s.pass.complete(cost)
+	s.repair(picks)
+	if s.best == nil {
+		s.candidates()
+	}
+	s.lighten()
+	if s.best == nil || s.closed() {
+		return false
+	}
+	if s.work > refineWork && s.best.Cost <= s.bound*(1+goodGap) || s.work > refineWork+refineByLeg*len(s.t.Legs) {
+		return false
+	}
+	return s.tighten() || s.cap < lastCap
+}
+
+// closed reports whether the best choice costs no more than the bound.
+func (s *search) closed() bool { return s.best != nil && s.best.Cost <= s.bound*(1+tieSlack) }
+
+// limit is what a choice must not cost to be of interest.
+func (s *search) limit() float64 {
+	if s.best == nil {
+		return math.Inf(1)
+	}
+	return s.best.Cost * (1 + tieSlack)
+}
+
+// relax makes a relaxed pass over the options in question. ok is false if no choice
+// among them fits, or none that is cheaper than the best.
+func (s *search) relax(open [][]int) (cost float64, picks []int, ok bool) {
+	s.pass.cap = s.cap
+	s.pass.plan, s.pass.open, s.pass.relaxed, s.pass.lift = s.plan, open, true, 0
+	s.pass.floor, s.pass.rests, s.pass.limit = s.leastAmps(open), s.rests, s.limit()
+	return s.pass.run()
+}
+
+// tighten strikes out options that no cheaper choice holds; false if there are none.
+func (s *search) tighten() bool {
+	limit, struck := s.limit(), false
+	for g, all := range s.open {
+		var keep []int
+		for _, k := range all {
+			if s.with[g][k] <= limit {
+				keep = append(keep, k)
+			}
+		}
+		if len(keep) == 0 {
+			keep = all // only rounding leaves none
+		}
+		struck = struck || len(keep) < len(all)
+		s.open[g] = keep
+	}
+	return struck
+}
+
+// offer solves the picks and keeps them if they are the best so far. short is the
+// voltage that misses most; 0 if all limits are kept or others than voltages are not.
+func (s *search) offer(picks []int) (short float64, ok bool) {
+	sizes := s.sizes(picks)
+	if !s.t.clears(sizes) {
+		return 0, false
+	}
+	v, a, ok := s.t.Solve(sizes)
+	if !ok {
+		return 0, false
+	}
+	for i := range v {
+		short = max(short, float64(s.t.Legs[i].MinVolt-v[i]))
+	}
+	if short > voltSlack {
+		return short, false
 	}
 	r := &TreeResult{Sizes: sizes, Volts: v, Amps: a}
 	for i, o := range sizes {
@@ -153,32 +182,33 @@ func (s *search) offer(picks []int) (*TreeResult, bool) {
 	if s.best == nil || r.Cost < s.best.Cost*(1-tieSlack) {
 		s.best = r
 	}
-	return r, true
+	return 0, true
 }
 
-// candidates searches with the currents of solved choices until one meets all
-// limits, and at last with the greatest currents there can be.
+// candidates looks for true choices: with a little more than the least voltages until one
+// meets all limits, else with the greatest currents there can be, else the thickest sizes.
 func (s *search) candidates() {
-	amps := s.leastAmps(s.noFix())
-	const rounds = 8
+	p := &pass{plan: s.plan, open: s.open, rests: s.rests, limit: s.limit(), floor: s.pass.floor, cap: s.cap}
+	const rounds = 5
 	for range rounds {
-		_, picks, ok := s.search(amps, s.noFix(), false)
+		_, picks, ok := p.run()
 		if !ok {
 			break
 		}
-		if _, ok := s.offer(picks); ok {
+		short, ok := s.offer(picks)
+		if ok {
 			return
 		}
-		_, solved, ok := s.t.Solve(s.sizes(picks))
-		const step = 1.0005 // so that a choice which just fails is not found again
-		for i := range amps {
-			if ok {
-				amps[i] = max(amps[i], float64(solved[i]))
-			}
-			amps[i] *= step
+		if short == 0 {
+			break // not a voltage is amiss
 		}
+		p.lift += 1.05 * short
 	}
-	if _, picks, ok := s.search(s.mostAmps(), s.noFix(), false); ok {
+	if s.best != nil {
+		return
+	}
+	p.floor, p.lift = s.mostAmps(), 0
+	if _, picks, ok := p.run(); ok {
 		s.offer(picks)
 	}
 	if s.best == nil {
@@ -190,93 +220,31 @@ func (s *search) candidates() {
 	}
 }
 
-// lightenWork bounds lighten: legs × groups.
-const lightenWork = 100_000
-
-// lighten tries each group one size down.
-func (s *search) lighten() {
-	if s.best == nil || len(s.t.Legs)*len(s.allowed) > lightenWork {
-		return
-	}
-	for changed := true; changed; {
-		changed = false
-		for g := range s.allowed {
-			picks := s.picksOf(s.best)
-			k := slices.Index(s.allowed[g], picks[g])
-			if k <= 0 {
-				continue
-			}
-			picks[g] = s.allowed[g][k-1]
-			if !s.tapers(picks) {
-				continue
-			}
-			before := s.best.Cost
-			if _, ok := s.offer(picks); ok && s.best.Cost < before {
-				changed = true
-			}
-		}
-	}
-}
-
-// picksOf reads the picks back from a result.
-func (s *search) picksOf(r *TreeResult) []int {
-	picks := make([]int, len(s.allowed))
-	for g, m := range s.members {
-		for k := range s.t.Options {
-			if &s.t.Options[k] == r.Sizes[m[0]] {
-				picks[g] = k
-			}
-		}
-	}
-	return picks
-}
-
-// tapers reports whether no free leg is thicker than the free leg of its circuit
-// that it hangs on.
-func (p *plan) tapers(picks []int) bool {
-	for i := range p.t.Legs {
-		q := p.t.Legs[i].Parent
-		if q < 0 || p.group[i] == free || p.group[q] == free || p.t.Legs[i].Circuit == "" || p.t.Legs[q].Circuit != p.t.Legs[i].Circuit {
-			continue
-		}
-		if picks[p.group[i]] > picks[p.group[q]] {
-			return false
-		}
-	}
-	return true
-}
-
-// branch is branch and bound (Land and Doig, 1960) on the groups in order. It
-// reports whether it could look at everything.
-func (s *search) branch(fix []int, from int) bool {
-	if s.work > searchWork {
-		return false
-	}
-	bound, picks, ok := s.search(s.leastAmps(fix), fix, true)
+// branch is branch and bound (Land and Doig, 1960) on the groups in order. It returns a
+// lower bound on what the open options hold.
+func (s *search) branch(open [][]int, budget int) float64 {
+	bound, picks, ok := s.relax(open)
 	if !ok || s.best != nil && bound >= s.best.Cost*(1-tieSlack) {
-		return true
+		return s.limit()
 	}
-	if r, ok := s.offer(picks); ok && r.Cost <= bound*(1+tieSlack) {
-		return true // the bound is reached: nothing cheaper hides here
+	s.offer(picks)
+	if s.best != nil && s.best.Cost <= bound*(1+tieSlack) {
+		return bound // the bound is reached: nothing cheaper hides here
 	}
-	for from < len(fix) && fix[from] != free {
-		from++
+	at := slices.IndexFunc(open, func(o []int) bool { return len(o) > 1 })
+	if at < 0 {
+		return s.limit()
 	}
-	if from == len(fix) {
-		return true
-	}
-	done := true
-	for _, k := range s.allowed[from] {
-		next := slices.Clone(fix)
-		next[from] = k
-		if !s.branch(next, from+1) {
-			done = false
-			if s.work > searchWork {
-				break
-			}
+	least := s.limit()
+	for n := range open[at] {
+		if s.work > budget {
+			return bound
 		}
+		next := slices.Clone(open)
+		next[at] = open[at][n : n+1]
+		least = min(least, s.branch(next, budget))
 	}
-	return done
+	return max(bound, least)
 }
 
 // worst returns the index of the largest value; −1 if none is above zero.

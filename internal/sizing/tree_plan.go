@@ -5,10 +5,8 @@ import (
 	"slices"
 )
 
-// plan is the search for sizes with the current of every leg held fixed: then the
-// limits add up along a path, and what costs more and gives less can be dropped.
-// Circuits are searched from the lamps to the board (tree_circuits.go), feeders from
-// the source to the boards (tree_feeders.go): dynamic programming (Bellman, 1957).
+// plan is a tree made ready for the search: which legs take one size together, and
+// which sizes they may take.
 type plan struct {
 	t        *Tree
 	kids     [][]int        // legs on the end of each leg; the root's are kids[len(Legs)]
@@ -19,7 +17,7 @@ type plan struct {
 	shared   []bool         // by leg: its circuit shares one size
 	priced   bool
 	inactive []bool // by leg: its loop limit holds for every allowed choice
-	work     int    // labels and bundles made so far
+	work     int    // states made so far
 }
 
 // free stands for "no option" and "no group".
@@ -171,18 +169,6 @@ func (p *plan) extreme(pick func(allowed []int) int) []*Option {
 func largest(a []int) int  { return a[len(a)-1] }
 func smallest(a []int) int { return a[0] }
 
-// choices lists the options of leg i under fix; nil if the leg is pinned.
-func (p *plan) choices(i int, fix []int) []int {
-	g := p.group[i]
-	switch {
-	case g == free:
-		return nil
-	case fix[g] != free:
-		return fix[g : g+1]
-	}
-	return p.allowed[g]
-}
-
 // option returns what leg i is made of when its group takes k.
 func (p *plan) option(i, k int) *Option {
 	if p.group[i] == free {
@@ -212,13 +198,4 @@ func (p *plan) result(sizes []*Option) *TreeResult {
 		r.Cost += p.cost(i, o)
 	}
 	return r
-}
-
-// noFix leaves every group open.
-func (p *plan) noFix() []int {
-	f := make([]int, len(p.allowed))
-	for i := range f {
-		f[i] = free
-	}
-	return f
 }

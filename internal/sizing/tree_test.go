@@ -172,75 +172,81 @@ func TestChooseEqualsExhaustive(t *testing.T) {
 	t.Logf("%d fit, %d blocked", fits, blocked)
 }
 
-// siteTree is a generated site: boards in a chain of two levels, circuits of ten lamps.
-func siteTree(lamps int, taper bool) *Tree {
-	t := &Tree{Volts: 21.6, Ahead: 0.02, Taper: taper, Options: metricOptions(1, 1.5, 2.5, 4, 6, 10, 16, 25, 35, 50, 70, 95, 120)}
-	for i := range t.Options {
-		t.Options[i].Ampacity *= 40 // a site as large as this has several feeders in truth
-	}
-	t.Legs = append(t.Legs, Leg{Name: "battery cable", Parent: -1, Length: 2, Extra: 0.0005, MinVolt: 20})
-	const perCircuit, perBoard = 10, 10
-	board := 0
-	for c := 0; c*perCircuit < lamps; c++ {
-		if c > 0 && c%perBoard == 0 {
-			t.Legs = append(t.Legs, Leg{Name: fmt.Sprint("feeder ", c), Parent: 0, Length: quantity.Metre(10 + c%23), Extra: 0.001})
-			board = len(t.Legs) - 1
-		}
-		at := board
-		for k := range perCircuit {
-			l := Leg{
-				Name: fmt.Sprintf("lamp %d.%d", c, k), Parent: at, Circuit: fmt.Sprint("circuit ", c),
-				Length: quantity.Metre(3 + (c*7+k*5)%9), MinVolt: 20.52, Carry: 5, Loop: 1.5,
-				Load: Load{Power: quantity.Watt(0.5 + float64((c+k)%4)/3)},
-			}
-			if k == 0 {
-				l.Extra = 0.02
-			}
-			t.Legs = append(t.Legs, l)
-			at = len(t.Legs) - 1
-		}
-	}
-	return t
-}
-
-// TestChooseLarge holds the gap to the bound under two per cent, and the labels made
-// in one search, which set its time, in proportion to the lamps.
-func TestChooseLarge(t *testing.T) {
-	for _, taper := range []bool{false, true} {
-		var per []float64
-		for _, n := range []int{200, 1000} {
-			tree := siteTree(n, taper)
-			r, err := tree.Choose()
-			if err != nil {
-				t.Fatalf("%d lamps: %v", n, err)
-			}
-			gap := r.Cost/r.Bound - 1
-			t.Logf("taper %v, %d lamps: %.0f cm³, gap %.3f %%, proven %v", taper, n, r.Cost, 100*gap, r.Proven)
-			if gap > 0.02 {
-				t.Errorf("taper %v, %d lamps: %.2f %% above the bound", taper, n, 100*gap)
-			}
-			p, err := tree.plan()
-			if err != nil {
-				t.Fatal(err)
-			}
-			p.search(p.leastAmps(p.noFix()), p.noFix(), true)
-			per = append(per, float64(p.work)/float64(n))
-		}
-		if per[1] > 1.5*per[0] {
-			t.Errorf("taper %v: labels a lamp grow from %.0f to %.0f between 200 and 1000 lamps", taper, per[0], per[1])
-		}
-	}
-}
-
-func BenchmarkChoose(b *testing.B) {
-	for _, n := range []int{10, 100, 1000} {
-		b.Run(fmt.Sprint(n), func(b *testing.B) {
-			tree := siteTree(n, false)
-			for b.Loop() {
-				if _, err := tree.Choose(); err != nil {
-					b.Fatal(err)
+// TestCoarseEqualsExhaustive does the same where a search that starts with one state at a
+// point must merge all, strike out and look again; on larger trees with fewer sizes too.
+func TestCoarseEqualsExhaustive(t *testing.T) {
+	r := rand.New(rand.NewPCG(13, 17))
+	fits := 0
+	for n := range 400 {
+		tree := randomTree(r, 2+r.IntN(5))
+		if n%8 == 0 {
+			tree = randomTree(r, 9)
+			tree.Options = metricOptions(1, 2.5, 6)
+			for i := range tree.Legs {
+				if tree.Legs[i].Pinned != nil {
+					tree.Legs[i].Pinned = &tree.Options[1]
 				}
 			}
-		})
+		}
+		want, found := exhaustive(tree)
+		p, err := tree.plan()
+		if err != nil {
+			continue // what it says is tested elsewhere
+		}
+		s := p.seek(1)
+		if s.best != nil && p.verdict(s.best.Sizes, s.best) != nil {
+			continue // a pinned size breaks its own limits
+		}
+		switch {
+		case (s.best != nil) != found:
+			t.Errorf("tree %d: found %v, exists %v", n, s.best != nil, found)
+		case found:
+			fits++
+			if s.bound > want*(1+1e-9) {
+				t.Errorf("tree %d: bound %.6f above the least %.6f", n, s.bound, want)
+			}
+			if !s.best.Proven || math.Abs(s.best.Cost-want) > 1e-6*want {
+				t.Errorf("tree %d: %.4f cm³ (proven %v), least is %.4f", n, s.best.Cost, s.best.Proven, want)
+			}
+		}
+	}
+	if fits < 200 {
+		t.Errorf("only %d trees fit", fits)
+	}
+}
+
+// TestBoundBelowExhaustive: one relaxed pass with few states at a point, before and after
+// the rests are known, promises no less than the best choice costs.
+func TestBoundBelowExhaustive(t *testing.T) {
+	r := rand.New(rand.NewPCG(19, 23))
+	fits, tight := 0, 0
+	for n := range 400 {
+		tree := randomTree(r, 4+r.IntN(4))
+		tree.Options = metricOptions(1, 2.5, 6)
+		for i := range tree.Legs {
+			if tree.Legs[i].Pinned != nil {
+				tree.Legs[i].Pinned = &tree.Options[1]
+			}
+		}
+		want, found := exhaustive(tree)
+		p, err := tree.plan()
+		if err != nil || !found {
+			continue
+		}
+		fits++
+		s := &search{plan: p, cap: 1 + n%3}
+		for range 3 {
+			cost, _, ok := s.relax(p.allowed)
+			if !ok || cost > want*(1+1e-9) {
+				t.Fatalf("tree %d: bound %.6f (%v) above the least %.6f", n, cost, ok, want)
+			}
+			if s.rests, s.with = s.pass.complete(cost); cost > want*0.999 {
+				tight++
+			}
+			s.cap += 2
+		}
+	}
+	if fits < 100 || tight < fits {
+		t.Errorf("%d trees fit, %d bounds were tight", fits, tight)
 	}
 }
