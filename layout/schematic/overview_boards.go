@@ -2,6 +2,8 @@ package schematic
 
 import (
 	"fmt"
+	"math"
+	"slices"
 	"strconv"
 
 	"gloamwright/internal/circuit"
@@ -13,12 +15,37 @@ import (
 type boardBlock struct {
 	board *circuit.Board
 	x, y  float64
-	under *circuit.Board // the board right above that feeds it
+	w     float64
+	from  feedSide
+	line  []point // of its feeder, from the way that feeds it; empty: an arrow from above says where from
 }
 
+// feedSide is how a board's feeder is drawn.
+type feedSide uint8
+
 const (
-	boardRow  = 1.92 // pitch of the list
-	boardHead = 9.2  // first row below the top
+	byStage  feedSide = iota // a stage's line leads to it
+	fromOver                 // the board right above feeds it
+	byLine                   // a line from its way
+	byName                   // an arrow with the place of what feeds it
+)
+
+// Board lists, in modules.
+const (
+	boardWidth  = 49 // beside the stages
+	boardNarrow = 46 // leaves room for feeders at the right
+	boardTree   = 44 // on a sheet of their own
+	boardRow    = 1.92
+	boardHead   = 9.2 // first row below the top
+	boardsTop   = 22
+	boardsGap   = 11 // over a board that the one above feeds: its cable's texts stand there
+	boardsClear = 5  // over another
+	boardArrive = 3  // where a feeder arrives, below the top
+	treeColumns = 3
+	treeGap     = 10
+	treeTop     = 11
+	treeTrack   = 1.25
+	sideTracks  = 2 // feeders at the right of narrow lists
 )
 
 // waysInFull is the largest board whose ways are listed one by one.
@@ -42,58 +69,194 @@ func (b *book) boardRows(bd *circuit.Board) int {
 	return max(n, 1)
 }
 
-// pageBoards places the boards' lists, each under the board that feeds it where
-// there is room, and returns the titles of the overview's sheets.
-func (b *book) pageBoards(o *overview) []string {
-	order := b.boardOrder()
-	o.beside = len(o.chain) <= chainBeside
-	place := func(bd *circuit.Board, x, y float64, page int) {
-		k := boardBlock{board: bd, x: x, y: y}
-		if bs := o.pages[page]; len(bs) > 0 && bd.Parent != nil {
-			if last := bs[len(bs)-1]; last.board == bd.Parent.Board && last.x == x {
-				k.under = last.board
+// wayLevel is the middle of the row that lists a way.
+func (b *book) wayLevel(k *boardBlock, w *circuit.Way) float64 {
+	row := w.Number - 1
+	if len(k.board.Ways) > waysInFull {
+		row = 0
+		n := 0
+		for _, s := range b.boardSheets {
+			if s.board != k.board {
+				continue
 			}
-		}
-		o.pages[page] = append(o.pages[page], k)
-	}
-	bottom := b.down(77)
-	i := 0
-	if o.beside {
-		o.pages = append(o.pages, nil)
-		y := float64(boardsTop)
-		for ; i < len(order); i++ {
-			h := b.boardHeight(order[i])
-			if y+h > bottom {
-				break
-			}
-			place(order[i], colBoards, y, 0)
-			y += h + boardsGap
-		}
-	}
-	titles := []string{"Overview"}
-	for i < len(order) {
-		o.pages = append(o.pages, nil)
-		page := len(o.pages) - 1
-		for col := 0; col < boardPages && i < len(order); col++ {
-			y := 8.0
-			for first := true; i < len(order); i++ {
-				h := b.boardHeight(order[i])
-				if !first && y+h > b.down(96) {
-					break
+			for _, c := range s.columns {
+				if c.way == w {
+					row = n
 				}
-				place(order[i], colText+float64(boardWidth+2)*float64(col), y, page)
-				y += h + boardsGap/2 + 2
-				first = false
+			}
+			n++
+		}
+	}
+	return k.y + boardHead + boardRow*float64(row) - textHeight/2
+}
+
+// boardsBeside places all boards at the right of the stages, one under the other, and
+// reports whether there is room for them.
+func (b *book) boardsBeside(o *overview, all []*vertex) bool {
+	order := b.boardOrder()
+	if len(order) == 0 {
+		return false
+	}
+	sides := 0
+	for i, bd := range order {
+		if bd.Parent != nil && bd.Parent.Board != order[i-1] {
+			sides++
+		}
+	}
+	w := float64(boardWidth)
+	if sides > 0 {
+		w = boardNarrow
+	}
+	y := float64(boardsTop)
+	o.beside = nil
+	for i, bd := range order {
+		k := boardBlock{board: bd, x: colBoards, y: y, w: w}
+		if i > 0 {
+			gap := float64(boardsClear)
+			if bd.Parent != nil {
+				k.from = byLine
+				if bd.Parent.Board == order[i-1] {
+					k.from, gap = fromOver, boardsGap
+				}
+			}
+			k.y += gap
+		}
+		y = k.y + b.boardHeight(bd)
+		o.beside = append(o.beside, k)
+	}
+	if sides > sideTracks || y > b.down(77) {
+		o.beside = nil
+		return false
+	}
+	track := 0
+	for i := range o.beside {
+		k := &o.beside[i]
+		if k.from != byLine {
+			continue
+		}
+		x := k.x + w + 2 + 2*float64(sideTracks-1-track) // the outer ones begin higher
+		track++
+		for j := range o.beside {
+			if up := &o.beside[j]; up.board == k.board.Parent.Board {
+				k.line = []point{{up.x + w, b.wayLevel(up, k.board.Parent)}, {x, b.wayLevel(up, k.board.Parent)}, {x, k.y + boardArrive}, {k.x + w, k.y + boardArrive}}
 			}
 		}
-		titles = append(titles, "Overview, boards")
 	}
-	if n := len(titles) - 1; n > 1 {
-		for k := 1; k <= n; k++ {
-			titles[k] = fmt.Sprintf("Overview, boards %d", k)
+	return true
+}
+
+// pageBoards places the boards' lists on sheets of their own, each right of the board
+// that feeds it, and returns the titles of the sheets.
+func (b *book) pageBoards(o *overview, tables bool) []string {
+	var waiting []*circuit.Board
+	for _, bd := range b.c.Boards {
+		if bd.Parent == nil {
+			waiting = append(waiting, bd)
 		}
+	}
+	for len(waiting) > 0 {
+		bottom := b.down(96)
+		if tables && len(o.pages) == 0 {
+			bottom = b.down(77)
+		}
+		t := &boardTreePage{b: b, bottom: bottom}
+		var later []*circuit.Board
+		for _, bd := range waiting {
+			if !t.add(bd, nil, 0) {
+				later = append(later, bd)
+			}
+		}
+		waiting = append(later, t.later...)
+		t.lines()
+		o.pages = append(o.pages, t.list)
+	}
+	var titles []string
+	for k := range o.pages {
+		title := "Overview, boards"
+		if len(o.pages) > 1 {
+			title += " " + strconv.Itoa(k+1)
+		}
+		titles = append(titles, title)
 	}
 	return titles
+}
+
+// boardTreePage is one sheet of boards in columns after their distance from the first.
+type boardTreePage struct {
+	b      *book
+	bottom float64
+	list   []boardBlock
+	next   [treeColumns]float64
+	later  []*circuit.Board // of boards that stand here, without room for themselves
+}
+
+// add places a board and those that it feeds. It reports whether the board itself found
+// room.
+func (t *boardTreePage) add(bd *circuit.Board, parent *boardBlock, col int) bool {
+	if col == treeColumns {
+		return false
+	}
+	h := t.b.boardHeight(bd)
+	y := max(t.next[col], treeTop)
+	from := byName
+	if parent != nil {
+		from = byLine
+		y = max(y, t.b.wayLevel(parent, bd.Parent)-boardArrive) // the feeder straight, where there is room
+		if y+h > t.bottom && max(t.next[col], treeTop)+h <= t.bottom {
+			y = t.bottom - h
+		}
+	}
+	if y+h > t.bottom && t.next[col] > 0 {
+		return false
+	}
+	t.list = append(t.list, boardBlock{board: bd, x: colText + (boardTree+treeGap)*float64(col), y: y, w: boardTree, from: from})
+	here := t.list[len(t.list)-1]
+	t.next[col] = y + h + boardsClear
+	for _, w := range bd.Ways {
+		if w.Feeds != nil && !t.add(w.Feeds, &here, col+1) {
+			t.later = append(t.later, w.Feeds)
+		}
+	}
+	return true
+}
+
+// lines finds the feeders in the gaps: those that run down take tracks from the right,
+// those that run up from the left, so that none crosses another.
+func (t *boardTreePage) lines() {
+	for col := 1; col < treeColumns; col++ {
+		x := colText + (boardTree+treeGap)*float64(col)
+		var down, up []*boardBlock
+		for i := range t.list {
+			k := &t.list[i]
+			if k.from != byLine || k.x != x {
+				continue
+			}
+			j := slices.IndexFunc(t.list, func(o boardBlock) bool { return o.board == k.board.Parent.Board })
+			p := &t.list[j]
+			from, to := point{p.x + p.w, t.b.wayLevel(p, k.board.Parent)}, point{k.x, k.y + boardArrive}
+			switch {
+			case math.Abs(from.Y-to.Y) < 0.05:
+				k.line = []point{from, {to.X, from.Y}}
+				continue
+			case to.Y > from.Y:
+				down = append(down, k)
+			default:
+				up = append(up, k)
+			}
+			k.line = []point{from, to}
+		}
+		for i, list := range [][]*boardBlock{down, up} {
+			pitch := min(treeTrack, (treeGap-3.5)/float64(max(1, len(list)-1)))
+			for n, k := range list {
+				at := x - treeGap + 1.5 + pitch*float64(n)
+				if i == 0 {
+					at = x - 2 - pitch*float64(n)
+				}
+				a, z := k.line[0], k.line[1]
+				k.line = []point{a, {at, a.Y}, {at, z.Y}, z}
+			}
+		}
+	}
 }
 
 // boardOrder is the boards in depth: each is followed by those that it feeds.
@@ -117,51 +280,73 @@ func (b *book) boardOrder() []*circuit.Board {
 }
 
 func (b *book) drawBoardBlocks(sh *Sheet, list []boardBlock) {
-	for _, k := range list {
+	for i, k := range list {
 		b.boardBlock(sh, k)
-		if k.under == nil {
-			continue
+		key := "feeder-" + k.board.Name
+		switch k.from {
+		case byLine:
+			b.flow(sh, key, k.board.Parent.Board.Title+" to "+k.board.Title, true, false, k.line...)
+		case byName:
+			b.boardFrom(sh, k, key)
+		case fromOver:
+			x, top := k.x+boardWidth/2, list[i-1].y+b.boardHeight(list[i-1].board)
+			f := b.flow(sh, key, k.board.Parent.Board.Title+" to "+k.board.Title, true, false, point{x, top}, point{x, k.y})
+			c := k.board.Feeder
+			t := coresAndSize(c)
+			if a := b.current[c.Cores[0]]; a != nil && a.Current > 0 {
+				t += " " + quantity.Fixed(a.Current, 1)
+			}
+			y := (top+k.y)/2 - 0.3
+			f.add(&line{at: point{x + 1.2, y}, runs: []run{{s: c.Designation, st: nameStyle}, {s: b.lengths.Format(c.Length)}}},
+				textAt(x+1.2, y+linePitch, t, valueStyle, ink.Start))
 		}
-		top := 0.0
-		for _, other := range list {
-			if other.board == k.under {
-				top = other.y + b.boardHeight(other.board)
+	}
+}
+
+// boardFrom draws the arrow of what feeds a board from elsewhere: a stage, or a board
+// on another sheet.
+func (b *book) boardFrom(sh *Sheet, k boardBlock, key string) {
+	name, at := "", (*place)(nil)
+	if up := k.board.Parent; up != nil {
+		name, at = fmt.Sprintf("from %s, way %d", up.Board.Title, up.Number), b.place("list "+up.Board.Name)
+	} else {
+		for _, s := range b.over.sheets {
+			for _, v := range s.list {
+				if v.board != k.board || v.energyFrom() == nil {
+					continue
+				}
+				up := v.energyFrom()
+				name, at = "from "+up.heading(), b.place("block "+up.name)
 			}
 		}
-		x := k.x + boardWidth/2
-		f := b.flow(sh, "feeder-"+k.board.Name, "energy", true, false, point{x, top}, point{x, k.y})
-		c := k.board.Feeder
-		t := coresAndSize(c)
-		if a := b.current[c.Cores[0]]; a != nil && a.Current > 0 {
-			t += " " + quantity.Fixed(a.Current, 1)
-		}
-		y := (top+k.y)/2 - 0.3
-		f.add(&line{at: point{x + 1.2, y}, runs: []run{{s: c.Designation, st: nameStyle}, {s: b.lengths.Format(c.Length)}}},
-			textAt(x+1.2, y+linePitch, t, valueStyle, ink.Start))
 	}
+	if name == "" {
+		return
+	}
+	const x = 3.0
+	f := b.flow(sh, key, name, true, false, point{k.x + x, k.y - 2.6}, point{k.x + x, k.y})
+	f.add(&line{at: point{k.x + x + 1, k.y - 1}, runs: []run{{s: fit(name, valueStyle, k.w-x-8)}, {to: at}}})
 }
 
 // boardBlock draws a board as a list of its ways.
 func (b *book) boardBlock(sh *Sheet, k boardBlock) {
 	bd := k.board
 	o := sh.scene.object(classBlock, "board-"+bd.Name, bd.Title, ink.Attr{Name: "board", Value: bd.Name})
-	right, h := k.x+boardWidth, b.boardHeight(bd)
+	right, h := k.x+k.w, b.boardHeight(bd)
 	o.add(box(normalPen, k.x, k.y, right, k.y+h))
-	name := fit(bd.Title, headStyle, boardWidth-12)
+	here := b.place("list " + bd.Name)
+	here.sheet, here.at, here.anchor = sh, point{k.x, k.y}, o.ID
+	name := fit(bd.Title, headStyle, k.w-12)
 	o.add(textAt(k.x+1, k.y+2.2, name, headStyle, ink.Start))
 	o.add(textAt(k.x+1+width(name, headStyle)+1, k.y+2.2, bd.Place.Designation, valueStyle, ink.Start))
 	o.add(&line{at: point{right - 0.8, k.y + 2}, anchor: ink.End, runs: []run{{to: b.place("board " + bd.Name), short: true}}})
-	first, last := bd.Ways[0].Fuse, bd.Ways[len(bd.Ways)-1].Fuse
-	sub := first.Designation + " to " + last.Designation
-	if first == last {
-		sub = first.Designation
-	}
-	if bd.Parent != nil && k.under == nil {
+	sub := fuseRange(bd)
+	if bd.Parent != nil && k.from != fromOver {
 		sub += fmt.Sprintf(", fed by %s, way %d, cable %s", bd.Parent.Board.Title, bd.Parent.Number, bd.Feeder.Designation)
 	}
-	o.add(textAt(k.x+1, k.y+4.6, fit(sub, valueStyle, boardWidth-2), valueStyle, ink.Start))
+	o.add(textAt(k.x+1, k.y+4.6, fit(sub, valueStyle, k.w-2), valueStyle, ink.Start))
 	y := k.y + 7.3
-	column := []float64{1, 3.4, 21, 31.5, 38.5, boardWidth - 0.8} // way, name, fuse, load, run, far end
+	column := boardColumns(k.w)
 	head := func(i int, s string, a ink.Anchor) { o.add(textAt(k.x+column[i], y, s, valueStyle, a)) }
 	if len(bd.Ways) > waysInFull {
 		head(0, "Ways", ink.Start)
@@ -178,7 +363,7 @@ func (b *book) boardBlock(sh *Sheet, k boardBlock) {
 	if len(bd.Ways) > waysInFull {
 		for _, s := range b.boardSheets {
 			if s.board == bd {
-				b.boardSheetRow(o, k.x, y, s)
+				b.boardSheetRow(o, k, y, s)
 				y += boardRow
 			}
 		}
@@ -197,6 +382,12 @@ func (b *book) boardBlock(sh *Sheet, k boardBlock) {
 		}
 		y += boardRow
 	}
+}
+
+// boardColumns are the columns of a list: way, name, fuse, load, run, far end.
+func boardColumns(w float64) []float64 {
+	shift := w - boardWidth
+	return []float64{1, 3.4, 21 + 0.7*shift, 31.5 + 0.8*shift, 38.5 + 0.8*shift, w - 0.8}
 }
 
 // wayCells are way, name, fuse, load, run and far end of one way.
@@ -244,7 +435,8 @@ func (b *book) lowest(l *circuit.Lighting) string {
 }
 
 // boardSheetRow sums up the ways of one sheet: "1–8 /5 31 luminaires 143 W".
-func (b *book) boardSheetRow(o *object, x, y float64, s *boardSheet) {
+func (b *book) boardSheetRow(o *object, k boardBlock, y float64, s *boardSheet) {
+	x := k.x
 	var w quantity.Watt
 	n := 0
 	for _, c := range s.columns {
@@ -260,8 +452,8 @@ func (b *book) boardSheetRow(o *object, x, y float64, s *boardSheet) {
 	}
 	o.add(textAt(x+1, y, t, valueStyle, ink.Start))
 	o.add(&line{at: point{x + 16, y}, runs: []run{{s: fmt.Sprintf("/%d", s.number)}}})
-	o.add(textAt(x+38.5, y, fmt.Sprintf("%d luminaires", n), valueStyle, ink.End))
+	o.add(textAt(x+k.w-10.5, y, fmt.Sprintf("%d luminaires", n), valueStyle, ink.End))
 	if w > 0 {
-		o.add(textAt(x+boardWidth-0.8, y, watts(w), valueStyle, ink.End))
+		o.add(textAt(x+k.w-0.8, y, watts(w), valueStyle, ink.End))
 	}
 }
