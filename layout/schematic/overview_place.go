@@ -277,7 +277,9 @@ func (b *book) placeControls(s *blockSheet, todo []*vertex, waiting func(*vertex
 					continue
 				}
 				if mains {
-					s.row(list, 0, cell{0, 1}, true)
+					if !s.clearRow(list, relay) {
+						s.row(list, 0, cell{0, 1}, true)
+					}
 					continue
 				}
 				want := cell{1, 1}
@@ -291,6 +293,24 @@ func (b *book) placeControls(s *blockSheet, todo []*vertex, waiting func(*vertex
 			}
 		}
 	}
+}
+
+// clearRow places what mains feeds in the first row where nothing stands between it and
+// the relay's column, so that its arrow runs straight.
+func (s *blockSheet) clearRow(list []*vertex, relay *vertex) bool {
+	if relay.on != s {
+		return false
+	}
+rows:
+	for r := max(1, relay.row+1); r <= s.way.lastRow(); r++ {
+		for c := range max(len(list), relay.col) {
+			if !s.free(cell{c, r}) {
+				continue rows
+			}
+		}
+		return s.put(cell{0, r}, list...)
+	}
+	return false
 }
 
 // feeder is what feeds a stage of a coil's feed.

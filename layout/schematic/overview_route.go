@@ -20,7 +20,7 @@ const (
 	costBend  = 40
 	costCross = 160 // another line
 	costFrame = 20  // the frame of a place
-	costNear  = 4   // a module beside another line
+	costNear  = 4   // a module beside another line or a frame
 )
 
 // portLead is how far a line runs straight from a block, in modules: the length of an
@@ -273,7 +273,7 @@ func (r *router) move(v *visit, d int) *visit {
 		cost += costFrame
 	}
 	for _, side := range []int{(d + 1) % 4, (d + 3) % 4} {
-		if n := to.add(side, 1); r.inside(n) && r.grid[r.index(n)]&passing(d) != 0 {
+		if n := to.add(side, 1); r.inside(n) && r.grid[r.index(n)]&(passing(d)|follow) != 0 {
 			cost += costNear
 		}
 	}
