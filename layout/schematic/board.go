@@ -217,13 +217,18 @@ func (b *book) drawColumn(sh *Sheet, s *boardSheet, c *column, x int) {
 }
 
 // drawCut draws the arrows of a leg that goes on on another sheet. Cores that end
-// side by side share one text, the left being L+; cores that end one over the other
-// are named each.
+// side by side share one text, the left being L+, and so do those of a comb; other
+// cores that end one over the other are named each.
 func (b *book) drawCut(sh *Sheet, k cut, x int) {
 	plus, minus := shift([]node{k.plus}, x)[0], shift([]node{k.minus}, x)[0]
-	obj, mate := b.refer(sh, "leg "+k.cable.Key, k.cable.Designation, true, k.turn, plus, minus)
+	obj, mate := b.refer(sh, k.key, k.name, true, k.turn, plus, minus)
 	if k.turn != 'E' {
-		obj.add(&line{at: point{float64(minus.X) + 1.1, float64(minus.Y) + 0.9}, runs: []run{{s: k.cable.Designation, st: nameStyle}, {to: mate}}})
+		obj.add(&line{at: point{float64(minus.X) + 1.1, float64(minus.Y) + 0.9}, runs: []run{{s: k.name, st: nameStyle}, {to: mate}}})
+		return
+	}
+	if k.comb {
+		obj.add(&line{at: point{float64(minus.X) + arrowLead, float64(plus.Y) - overLine}, anchor: ink.End,
+			runs: []run{{s: k.name, st: nameStyle}, {to: mate}}})
 		return
 	}
 	cp, cm := cores(k.cable)
@@ -279,17 +284,13 @@ func (b *book) wayHead(sh *Sheet, c *column, x int) {
 
 // restHead draws the head of a column whose cores come from another sheet.
 func (b *book) restHead(sh *Sheet, c *column, x int) {
-	leg := c.legOf()
 	fx := float64(x)
-	obj, mate := b.refer(sh, "leg "+leg.Key, leg.Designation, false, 'N', node{x, rowRest}, node{x + minusCore, rowRest})
-	obj.add(&line{at: point{fx + legText, rowRest - 0.4}, runs: []run{{s: leg.Designation, st: nameStyle}, {to: mate}}})
-	o := sh.scene.object(classNote, "way-"+strconv.Itoa(c.way.Number)+"-"+leg.Key, "Way "+strconv.Itoa(c.way.Number)+", continued")
+	obj, mate := b.refer(sh, c.key, c.name, false, 'N', node{x, rowRest}, node{x + minusCore, rowRest})
+	obj.add(&line{at: point{fx + legText, rowRest - 0.4}, runs: []run{{s: c.name, st: nameStyle}, {to: mate}}})
+	o := sh.scene.object(classNote, "way-"+strconv.Itoa(c.way.Number)+"-"+c.key, "Way "+strconv.Itoa(c.way.Number)+", continued")
 	o.add(textAt(fx, rowFuse+0.7, strconv.Itoa(c.way.Number), headStyle, ink.Start))
 	o.add(textAt(fx, rowFuse+2.9, "continued", valueStyle, ink.Start))
 }
-
-// legOf is the first leg of a column that goes on from another sheet.
-func (c *column) legOf() *circuit.Cable { return c.ovals[0].cable }
 
 // feederWay draws the cable that feeds another board.
 func (b *book) feederWay(sh *Sheet, c *column, x int) {

@@ -34,10 +34,7 @@ type boardSheet struct {
 func (b *book) planBoards() ([]*boardSheet, error) {
 	var out []*boardSheet
 	for _, bd := range b.c.Boards {
-		ways, rests, err := b.columns(bd)
-		if err != nil {
-			return nil, err
-		}
+		ways, rests := b.columns(bd)
 		sheets := b.breakColumns(bd, ways, false)
 		if sheets == nil {
 			return nil, fmt.Errorf("board %s cannot be laid out on sheets", bd.Title)
@@ -77,15 +74,13 @@ func (b *book) rows() int {
 }
 
 // columns lays out the ways of a board, and what does not fit below their heads.
-func (b *book) columns(bd *circuit.Board) (ways, rests []*column, err error) {
+func (b *book) columns(bd *circuit.Board) (ways, rests []*column) {
 	room := lanesEnd - b.start(bd) + 1
 	for _, w := range bd.Ways {
 		c := &column{way: w}
 		switch {
 		case w.Lighting != nil && len(w.Lighting.Points) > 0:
-			if err := lightingWay(c, w.Lighting.Points, w.Lighting, b.rows(), room, rowTerminal+1); err != nil {
-				return nil, nil, fmt.Errorf("board %s, way %d: %w", bd.Title, w.Number, err)
-			}
+			lightingWay(c, rest{points: w.Lighting.Points}, w.Lighting, b.rows(), room, rowTerminal+1)
 		case w.Feeds != nil:
 			c.kind, c.width, c.minus = feederColumn, feederWidth, minusCore
 		default:
@@ -102,14 +97,12 @@ func (b *book) columns(bd *circuit.Board) (ways, rests []*column, err error) {
 		queue = queue[1:]
 		for _, rest := range c.rests {
 			d := &column{kind: restColumn, way: c.way, before: c}
-			if err := lightingWay(d, rest.points, c.way.Lighting, b.rows(), lanesEnd-firstCore+1, rowRest); err != nil {
-				return nil, nil, fmt.Errorf("board %s, way %d: %w", bd.Title, c.way.Number, err)
-			}
+			lightingWay(d, rest, c.way.Lighting, b.rows(), lanesEnd-firstCore+1, rowRest)
 			rests = append(rests, d)
 			queue = append(queue, d)
 		}
 	}
-	return ways, rests, nil
+	return ways, rests
 }
 
 // start is the place of the first L+ core on the first sheet of a board.

@@ -2,6 +2,7 @@ package schematic
 
 import (
 	"fmt"
+	"slices"
 
 	"gloamwright/internal/circuit"
 )
@@ -30,6 +31,7 @@ const (
 	lampRoom     = 9.9
 	branchLength = 12.0 // where the length of a branch's first leg stands
 	branchOval   = 8.5
+	combReach    = 2 // of the cores of a comb behind its last run, to the reference
 )
 
 // Rows of a board sheet.
@@ -43,6 +45,8 @@ const (
 	rowPitch     = 5
 	rowFoldMinus = 27 // folded cores run level up there
 	rowFoldPlus  = 29
+	rowCombPlus  = 27 // those of a comb: L+ is the upper one
+	rowCombMinus = 29
 	rowRest      = 24 // cores that come from another sheet begin here
 	rowsA3       = 12
 	rowsTabloid  = 10
@@ -56,6 +60,8 @@ type column struct {
 	kind   columnKind
 	way    *circuit.Way
 	before *column // for a rest: where it comes from
+	key    string  // for a rest: of the reference by which its cores come
+	name   string  // for a rest: what its cores are called there
 	width  int
 	minus  int // place of the L− core
 
@@ -95,15 +101,24 @@ type columnLength struct {
 	at    point
 }
 
-// cut is a place where both cores of a leg go on to another sheet.
+// cut is a place where both cores of a leg, or those that pass a luminaire, go on to
+// another sheet.
 type cut struct {
 	cable       *circuit.Cable
+	key, name   string // of the reference
 	plus, minus node
 	turn        byte
+	comb        bool // the cores pass a luminaire
 }
 
-// rest is what hangs behind a cut.
-type rest struct{ points []*circuit.Point }
+// rest is what hangs behind a cut: a run, or the runs that hang on a luminaire which
+// has more of them than a sheet has rows.
+type rest struct {
+	key, name string
+	points    []*circuit.Point
+	node      *circuit.Point
+	runs      [][]*circuit.Point // on the node
+}
 
 // cores returns the plus and the minus core of a two-core cable.
 func cores(c *circuit.Cable) (plus, minus *circuit.Conductor) {
@@ -125,12 +140,11 @@ type runner struct {
 	free  []int // last used row by lane, -1 for none
 	wide  int   // lanes in use
 	far   *circuit.Part
-	err   error
 }
 
 // lightingWay lays out the points of a circuit, or of the rest of one, below a
 // column's head. The cores begin at row top.
-func lightingWay(c *column, points []*circuit.Point, l *circuit.Lighting, rows, room, top int) error {
+func lightingWay(c *column, what rest, l *circuit.Lighting, rows, room, top int) {
 	r := &runner{c: c, rows: rows, lanes: room / laneWidth, wide: 1}
 	if l.TestPoint != nil {
 		r.far = l.TestPoint.Red.Part
@@ -138,16 +152,21 @@ func lightingWay(c *column, points []*circuit.Point, l *circuit.Lighting, rows, 
 	for range r.lanes + 1 {
 		r.free = append(r.free, -1)
 	}
-	c.minus = minusCore
+	c.minus, c.key, c.name = minusCore, what.key, what.name
 	plus, minus := []node{{0, top}}, []node{{minusCore, top}}
+	if what.node != nil {
+		r.comb(what.node, what.runs, plus, minus)
+		c.width = laneWidth * r.wide
+		return
+	}
+	points := what.points
 	c.ovals = append(c.ovals, columnOval{points[0].Leg, 0, rowCable, false})
 	if !branches(points) && rungRows(points) > rows {
 		r.fold(points, plus, minus, (room-laneWidth)/foldWidth+1)
-		return r.err
+		return
 	}
 	r.run(points, 0, 0, plus, minus, false)
 	c.width = laneWidth * r.wide
-	return r.err
 }
 
 func branches(points []*circuit.Point) bool {
@@ -189,16 +208,16 @@ func (r *runner) run(points []*circuit.Point, row, lane int, plus, minus []node,
 			at++
 		}
 		after := len(p.Branches) + next
-		if len(p.Branches) > 0 && lane+1 < r.lanes {
+		many := 1+after > r.rows // no sheet has rows for them: they hang on a comb of their own
+		if many {
+			after = 1
+		}
+		if !many && len(p.Branches) > 0 && lane+1 < r.lanes {
 			if wait := max(at, r.free[lane+1]); wait+after <= last {
 				at = wait
 			}
 		}
 		if at+after > last {
-			if i == 0 && row == 0 && lane == 0 && r.err == nil {
-				r.err = fmt.Errorf("luminaire %s has %d side runs; a sheet has rows for %d", p.Luminaire.Designation, len(p.Branches), last-1)
-				return row
-			}
 			r.cutDown(points[i:], row, x, plus, minus)
 			r.free[lane] = row
 			return row
@@ -216,6 +235,16 @@ func (r *runner) run(points []*circuit.Point, row, lane int, plus, minus []node,
 			used++
 		}
 		row = at + 1
+		if many {
+			runs := slices.Clone(p.Branches)
+			if next > 0 {
+				runs = append(runs, points[i+1:])
+			}
+			end := lampRow(row) - 1
+			r.cutNode(p, runs, []node{{x, y}, {x, end}}, []node{{x + minusCore, y}, {x + minusCore, end}}, 'S')
+			r.free[lane] = row
+			return row
+		}
 		for k, b := range p.Branches {
 			row = r.branch(p, b, row, lane, y, len(p.Branches)-k-1+next, k == len(p.Branches)-1 && next == 0)
 			used = row - 1
@@ -283,10 +312,50 @@ func (r *runner) cutDown(points []*circuit.Point, row, x int, plus, minus []node
 }
 
 func (r *runner) cut(points []*circuit.Point, plus, minus []node, turn byte) {
-	cp, cm := cores(points[0].Leg)
+	leg := points[0].Leg
+	r.end(leg, plus, minus, turn, rest{key: "leg " + leg.Key, name: leg.Designation, points: points})
+}
+
+// cutNode ends the cores that pass a luminaire; the runs that hang on it go on
+// elsewhere. The cores are those of the last run's leg, on which the others are joined.
+func (r *runner) cutNode(p *circuit.Point, runs [][]*circuit.Point, plus, minus []node, turn byte) {
+	r.end(runs[len(runs)-1][0].Leg, plus, minus, turn, rest{
+		key: fmt.Sprintf("node %s, %d more", p.Luminaire.Key, len(runs)), name: "at " + p.Luminaire.Designation, node: p, runs: runs})
+}
+
+func (r *runner) end(leg *circuit.Cable, plus, minus []node, turn byte, behind rest) {
+	cp, cm := cores(leg)
 	r.c.cores = append(r.c.cores, corePiece{cp, plus}, corePiece{cm, minus})
-	r.c.cuts = append(r.c.cuts, cut{points[0].Leg, plus[len(plus)-1], minus[len(minus)-1], turn})
-	r.c.rests = append(r.c.rests, rest{points})
+	r.c.cuts = append(r.c.cuts, cut{leg, behind.key, behind.name, plus[len(plus)-1], minus[len(minus)-1], turn, behind.node != nil})
+	r.c.rests = append(r.c.rests, behind)
+}
+
+// comb hangs the runs of one luminaire side by side on its cores, which run level over
+// them. What finds no lane goes on elsewhere.
+func (r *runner) comb(p *circuit.Point, runs [][]*circuit.Point, plus, minus []node) {
+	for i, run := range runs {
+		lane := r.wide
+		if i == 0 {
+			lane = 0
+		}
+		x := lane * laneWidth
+		if lane >= r.lanes {
+			to := x - laneWidth + minusCore + combReach
+			r.cutNode(p, runs[i:], append(plus, node{0, rowCombPlus}, node{to, rowCombPlus}),
+				append(minus, node{minusCore, rowCombMinus}, node{to, rowCombMinus}), 'E')
+			return
+		}
+		from, back := []node{{x, rowCombPlus}}, []node{{x + minusCore, rowCombMinus}}
+		if i == len(runs)-1 {
+			from, back = plus, minus
+			if lane > 0 {
+				from = append(plus, node{0, rowCombPlus}, node{x, rowCombPlus})
+				back = append(minus, node{minusCore, rowCombMinus}, node{x + minusCore, rowCombMinus})
+			}
+		}
+		r.c.ovals = append(r.c.ovals, columnOval{run[0].Leg, x, float64(lampRow(0)) + 0.5, false})
+		r.run(run, 1, lane, from, back, false)
+	}
 }
 
 // fold lays a long run without branches into ladders side by side. The cores go
