@@ -53,6 +53,7 @@ const (
 
 	codeShared  = "D050"
 	codeColours = "D051"
+	codePrice   = "D052"
 )
 
 // Codes lists every code a diagnostic can bear, for the reference.
@@ -100,4 +101,5 @@ var Codes = []Code{
 	{codeBareBoard, "board that nothing hangs on"},
 	{codeShared, "shared file that cannot be read"},
 	{codeColours, "conductor colour that cannot be used"},
+	{codePrice, "price of something that is not known"},
 }

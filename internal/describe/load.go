@@ -23,7 +23,8 @@ const (
 	maxTypes   = 1000 // luminaire types
 	maxWays    = 5000 // circuits
 	maxSingles = 2000 // single parts, test points
-	maxList    = 200  // entries of a list of sizes, ratings or prices
+	maxList    = 200  // entries of a list of sizes or ratings
+	maxPrices  = 1000 // prices of a firm
 	maxReports = 500  // diagnostics
 
 	maxCompared = 50_000 // names that misspelt ones are held against

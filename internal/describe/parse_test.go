@@ -165,7 +165,8 @@ func TestPracticeLists(t *testing.T) {
   sizes: [16 AWG, 14 AWG, 4/0 AWG]
   fuses: [1 A, 2 A, 500 mA]
   blocks: [7 Ah, 12 Ah]
-  prices: {16 AWG: 0.40, fuse: 1}
+  prices: {16 AWG: 0.40, "wire AWG 14": 0.2, "fuse  cartridge-t 500 mA": 0}
+  currency: EUR
   texts: firm/texts
 duty:`, 1)
 	s, list := Parse("shed.yaml", []byte(src), testSchema())
@@ -177,7 +178,7 @@ duty:`, 1)
 		t.Error("lengths of a job in gauges are printed in metres")
 	}
 	if len(p.Sizes.Val) != 3 || p.Sizes.Val[2].Gauge != "4/0" || p.Fuses.Val[2] != 0.5 || p.Blocks.Val[1] != 12 ||
-		p.Prices[0].Of.Val != "16 AWG" || p.Prices[0].Cost.Val != 0.40 || !p.Taper.Val || p.Grouping.Val != 3 || p.Texts.Val != "firm/texts" {
+		p.Prices[0].Of.Val != "16 AWG" || p.Prices[0].Cost.Val != 0.40 || p.Prices[1].Of.Val != "wire 14 AWG" || p.Prices[2].Of.Val != "fuse cartridge-t 500 mA" || p.Currency.Val != "EUR" || !p.Taper.Val || p.Grouping.Val != 3 || p.Texts.Val != "firm/texts" {
 		t.Errorf("practice: %+v", p)
 	}
 }

@@ -4,7 +4,6 @@ import (
 	"fmt"
 	"path"
 	"slices"
-	"strconv"
 	"strings"
 
 	"gopkg.in/yaml.v3"
@@ -92,13 +91,17 @@ func (d *decoder) practiceFields() []field {
 		{"margin", false, value(d, &p.Margin, Percent, "0 %", "100 %")},
 		{"ageing", false, value(d, &p.Ageing, Percent, "50 %", "100 %")},
 		{"colours", false, d.readColours},
-		{"sizes", false, func(e entry) { values(d, &p.Sizes, e, Size, "0.05 mm²", "400 mm²") }},
+		{"sizes", false, func(e entry) { values(d, &p.Sizes, e, Size, leastSize, mostSize) }},
 		{"fuses", false, func(e entry) { values(d, &p.Fuses, e, Current, "30 mA", "1000 A") }},
 		{"blocks", false, func(e entry) { values(d, &p.Blocks, e, Capacity, "0.5 Ah", "5000 Ah") }},
 		{"prices", false, d.readPrices},
+		{"currency", false, d.text(&p.Currency, checkCurrency)},
 		{"texts", false, d.text(&p.Texts, checkPath)},
 	}
 }
+
+// leastSize and mostSize bound the conductor sizes that a firm can state.
+const leastSize, mostSize = "0.05 mm²", "400 mm²"
 
 // checkSizes refuses stocked sizes of the other system.
 func (d *decoder) checkSizes() {
@@ -206,31 +209,6 @@ func checkColour(s string) error {
 		detail += fmt.Sprintf("Did you mean %s (%s)? ", colourCodes[i].code, colourCodes[i].word)
 	}
 	return &valueError{codeColours, "unknown colour", detail + "Codes: " + strings.Join(codes, ", ") + "."}
-}
-
-// readPrices reads what the firm pays, in its own currency: a conductor size per
-// metre, or a part.
-func (d *decoder) readPrices(e entry) {
-	list := d.entries(e.val, "prices")
-	for _, p := range list[:d.few(len(list), maxList, e.at, "prices")] {
-		s, ok := d.scalar(p.val, "A price")
-		if !ok {
-			continue
-		}
-		cost, err := strconv.ParseFloat(s, 64)
-		if err != nil || strings.Trim(s, "0123456789.") != "" || cost <= 0 {
-			d.report(codeCount, "bad price", d.src.of(p.val), fmt.Sprintf("%q is not a price: write a number above zero in your currency, with a decimal point and without its sign, such as 0.85.", clip(s)))
-			continue
-		}
-		if err := checkText(p.key, MaxName); err != nil {
-			d.fail(p.at, err)
-			continue
-		}
-		d.site.Practice.Prices = append(d.site.Practice.Prices, Price{
-			Of:   At[string]{Val: p.key, Pos: p.at, Given: true},
-			Cost: At[float64]{Val: cost, Pos: d.src.of(p.val), Given: true},
-		})
-	}
 }
 
 func (d *decoder) readDuty(e entry) { d.mapping(e.val, e.at, "duty", d.dutyFields()) }

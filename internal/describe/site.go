@@ -65,6 +65,7 @@ type Practice struct {
 	Blocks      At[[]quantity.AmpereHour] // battery block capacities in stock; empty: the standard list
 	Texts       At[string]                // folder of the firm's standing texts
 	Prices      []Price
+	Currency    At[string] // name of the currency of the prices, as it is printed; empty: none
 }
 
 // LengthUnit is the unit in which the job's lengths are printed: as `lengths` says, else
@@ -78,12 +79,6 @@ func (p *Practice) LengthUnit() quantity.LengthUnit {
 		return quantity.InFeet
 	}
 	return quantity.InMetres
-}
-
-// Price is what the firm pays for a thing: a conductor size per metre, or a part.
-type Price struct {
-	Of   At[string]
-	Cost At[float64]
 }
 
 // Duty is what is asked of the system.

@@ -36,6 +36,8 @@ type Facts struct {
 	Blocked    []*Blocked
 	Collapse   *Collapse // nil: every lamp gets its power where it must
 	Totals     Totals
+	Bill       *Bill      // nil: the firm gives no prices
+	Unpriced   []Unpriced // things that were chosen without looking at prices, for theirs is missing
 }
 
 // Condition is one operating condition, solved.

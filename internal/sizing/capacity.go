@@ -63,9 +63,55 @@ func NextCapacity(in BankInput) (Bank, Working, error) {
 			Frees: fmt.Sprintf("lower the load or the hours to what %v holds, or split the site over two batteries", largest),
 		}
 	}
-	w.Value = float64(best.Capacity)
-	w.Substituted = fmt.Sprintf("%s needed → %s × %d = %s", num(float64(in.Required), "Ah"), num(float64(best.Block.Capacity), "Ah"), best.Parallel, num(float64(best.Capacity), "Ah"))
-	return best, w, nil
+	return best, best.fitted(w, in), nil
+}
+
+// fitted completes the working of the capacity that a battery of blocks has.
+func (b Bank) fitted(w Working, in BankInput) Working {
+	w.Value = float64(b.Capacity)
+	w.Substituted = fmt.Sprintf("%s needed → %s × %d = %s", num(float64(in.Required), "Ah"), num(float64(b.Block.Capacity), "Ah"), b.Parallel, num(float64(b.Capacity), "Ah"))
+	return w
+}
+
+// CheapestBank returns the battery of the least price that has the required capacity:
+// of all blocks in stock and of any number of strings up to the pinned or the greatest
+// one. What NextCapacity returns comes first: it is kept among equals, and where its
+// block has no price (priced false).
+func CheapestBank(in BankInput, currency string, price func(catalogue.Block) (float64, bool)) (bank Bank, ws []Working, priced bool, err error) {
+	next, w, err := NextCapacity(in)
+	if err != nil {
+		return next, []Working{w}, false, err
+	}
+	banks := []Bank{next}
+	first, most := max(in.Parallel, 1), in.Parallel
+	if most == 0 {
+		most = mostParallel
+	}
+	for n := first; n <= most; n++ {
+		for _, b := range in.Class.Blocks {
+			if in.Cells%b.Cells != 0 || len(in.Stock) > 0 && !slices.Contains(in.Stock, b.Capacity) {
+				continue
+			}
+			x := Bank{Block: b, Series: in.Cells / b.Cells, Parallel: n, Capacity: b.Capacity * quantity.AmpereHour(n)}
+			if x.Capacity >= in.Required && x != next {
+				banks = append(banks, x)
+			}
+		}
+	}
+	list := make([]Candidate, len(banks))
+	for i, b := range banks {
+		each, ok := price(b.Block)
+		n := b.Series * b.Parallel
+		list[i] = Candidate{
+			Name: fmt.Sprintf("%d of %v", n, b.Block.Capacity), Sum: fmt.Sprintf("%d × %s", n, num(each, "")), Price: float64(n) * each, Known: ok,
+		}
+	}
+	pick, reason, known := Cheapest(list, currency)
+	if !known {
+		return next, []Working{w}, false, nil
+	}
+	w.Formula = "C_n ≥ C, blocks × strings in parallel of the least price"
+	return banks[pick], []Working{banks[pick].fitted(w, in), reason}, true, nil
 }
 
 // Internal returns the resistance of a battery of n cells in series with a capacity

@@ -55,6 +55,10 @@ type Leg struct {
 	Loop    quantity.Ohm // greatest loop from the source to its end for far-end clearing; 0: no limit
 	Least   quantity.SquareMM
 	Pinned  *Option // given by the user: checked, not chosen
+
+	// Ends is the price of what follows the leg's size besides its cable: terminals,
+	// wires of its way. It counts where the options have prices; nil: nothing follows.
+	Ends func(*Option) float64
 }
 
 // Tree is a source with everything that hangs on it. A leg's index is above its

@@ -26,7 +26,10 @@ const free = -1
 // cost of leg i with option o.
 func (p *plan) cost(i int, o *Option) float64 {
 	l := float64(p.t.Legs[i].Length)
-	if p.priced {
+	switch ends := p.t.Legs[i].Ends; {
+	case p.priced && ends != nil:
+		return l*o.Price + ends(o)
+	case p.priced:
 		return l * o.Price
 	}
 	return 2 * l * float64(o.Size.Area)

@@ -200,7 +200,7 @@ func sizeMainFuse(p *Plan, s *describe.Stage) {
 	c, _ := catalogue.ConductorOf(size)
 	p.run(cable, size, sizing.PerMetre(c, p.running(size)))
 	if q := p.part(s, "isolator"); q != nil {
-		p.isolator(q, p.nextRating(q, "rated current", catalogue.IsolatorCurrents, load), false)
+		p.isolator(q, p.pricedRating(q, "isolator", catalogue.IsolatorCurrents, load), false)
 	}
 	p.TrunkOhm += 2 * quantity.Ohm(cable.Length) * sizing.PerMetre(c, p.running(size))
 	p.CutOffOhm = p.TrunkOhm
@@ -318,19 +318,21 @@ func sizeBattery(p *Plan, s *describe.Stage) {
 	}
 	given, pinned := describe.Get[quantity.AmpereHour](s.Fields, "capacity")
 	parallel, _ := describe.Get[int](s.Fields, "parallel")
-	bank, w, err := sizing.NextCapacity(sizing.BankInput{Class: p.Class, Required: need, Cells: p.Cells, Stock: practice.Blocks.Val, Parallel: parallel.Val})
+	var bank sizing.Bank
 	if pinned {
 		bank.Capacity = given.Val
 		bank.Parallel = max(1, parallel.Val)
 		bank.Block = p.blockOf(given.Val / quantity.AmpereHour(bank.Parallel))
 		bank.Series = p.Cells / bank.Block.Cells
 	} else {
+		bank, err = p.bank(g, sizing.BankInput{Class: p.Class, Required: need, Cells: p.Cells, Stock: practice.Blocks.Val, Parallel: parallel.Val})
 		if err != nil {
 			p.block(g.Designation, g.At, "", err)
 			bank = sizing.Bank{Block: p.Class.Blocks[len(p.Class.Blocks)-1], Series: 1, Parallel: 1, Capacity: max(need, 1)}
 		}
-		p.work(g.Designation, "", w, g.Designation+": required capacity")
 	}
+	p.Block = bank.Block
+	var w sizing.Working
 	p.Internal, w = sizing.Internal(p.Class.OhmAh.Typical, p.Cells, bank.Capacity)
 	p.work(g.Designation, "", w, g.Designation+": capacity fitted")
 	set(g, "capacity", p.Site.Duty.Nominal.Val.String()+" "+bank.Capacity.String(), float64(bank.Capacity), "Ah", true, pinned)

@@ -40,7 +40,7 @@ func sizeBoard(p *Plan, _ *describe.Stage) {
 			t.board(b, trunk)
 		}
 	}
-	res, err := t.Choose()
+	res, err := t.choose()
 	if err == nil && t.drawsMore() {
 		res, err = t.full(res)
 	}
@@ -113,6 +113,10 @@ type tree struct {
 	class  *catalogue.FuseClass
 	cables []*circuit.Cable // by leg; nil for the trunk
 	ways   []*circuit.Way   // the way whose fuse protects the leg
+	fused  []fusedWay       // ways with a fuse, those behind a feeder before it
+
+	thinnest quantity.Ohm // per metre, of the thinnest option
+	paid     float64      // for the fuses of all ways, where they were chosen by price
 }
 
 func (t *tree) leg(l sizing.Leg, c *circuit.Cable) int {
@@ -129,6 +133,7 @@ func (t *tree) options() {
 			t.Options = append(t.Options, o)
 		}
 	}
+	t.thinnest = t.Options[0].PerMetre
 }
 
 // option returns the figures of one size as laid. Its resistance is that at the
@@ -146,7 +151,7 @@ func (t *tree) option(size quantity.WireSize) (sizing.Option, bool) {
 	return sizing.Option{
 		Size: c.Size, PerMetre: sizing.PerMetre(c, t.p.running(size)),
 		Fault:    sizing.PerMetre(c, catalogue.AmpacityOf(systemOf(size)).Conductor),
-		Ampacity: iz, Price: t.p.price(c.Size),
+		Ampacity: iz,
 	}, true
 }
 
@@ -157,17 +162,6 @@ func (p *Plan) running(size quantity.WireSize) quantity.Celsius {
 	ambient := p.ambient
 	hot := catalogue.AmpacityOf(systemOf(size)).Conductor
 	return ambient + max(0, hot-ambient)*k*k
-}
-
-// price returns what the firm pays for a metre of cable of that size; 0 if it does
-// not say.
-func (p *Plan) price(size quantity.WireSize) float64 {
-	for _, x := range p.Site.Practice.Prices {
-		if x.Of.Val == size.String() {
-			return x.Cost.Val
-		}
-	}
-	return 0
 }
 
 // board adds the ways of a board below leg at.
@@ -193,7 +187,7 @@ func (t *tree) spare(w *circuit.Way) {
 // wayExtra is the resistance of a way before its cable: fuse and the two leads to
 // its terminals in the thinnest size that a fixed cable may have.
 func (t *tree) wayExtra(rating quantity.Ampere) quantity.Ohm {
-	return quantity.Ohm(fuseOhm(rating)) + 2*quantity.Ohm(boardLead)*t.Options[0].PerMetre
+	return quantity.Ohm(fuseOhm(rating)) + 2*quantity.Ohm(boardLead)*t.thinnest
 }
 
 func (t *tree) lighting(w *circuit.Way, at int) {
@@ -204,6 +198,7 @@ func (t *tree) lighting(w *circuit.Way, at int) {
 	p.loadWorking(w.Lighting, ib)
 	f := p.wayFuse(w, w.Lighting.Name, ib, d.Fuse, 0)
 	legs := map[*circuit.Point]int{}
+	protects := []int{}
 	w.Lighting.Walk(func(pt, before *circuit.Point) {
 		l := p.loads[pt.Type]
 		leg := t.protected(f, sizing.Leg{
@@ -222,7 +217,9 @@ func (t *tree) lighting(w *circuit.Way, at int) {
 		}
 		legs[pt] = t.leg(leg, pt.Leg)
 		t.ways[legs[pt]] = w
+		protects = append(protects, legs[pt])
 	})
+	t.fused = append(t.fused, fusedWay{fuse: f, legs: protects, given: d.Fuse.Given})
 }
 
 func (t *tree) feeder(w *circuit.Way, at int) {
@@ -233,7 +230,7 @@ func (t *tree) feeder(w *circuit.Way, at int) {
 	// Their legs need the feeder's leg as parent: it is filled in afterwards.
 	i := t.leg(sizing.Leg{}, w.Feeds.Feeder)
 	t.ways[i] = w
-	before := len(p.F.Fuses)
+	before, first := len(p.F.Fuses), len(t.fused)
 	t.board(w.Feeds, i)
 	for _, f := range p.F.Fuses[before:] {
 		largest = max(largest, f.Rating)
@@ -248,20 +245,34 @@ func (t *tree) feeder(w *circuit.Way, at int) {
 		}
 	}
 	t.Legs[i] = leg
+	x := fusedWay{fuse: f, legs: []int{i}, given: given.Given}
+	for k := first; k < len(t.fused); k++ {
+		x.behind = append(x.behind, k)
+		if m := &t.fused[k].most; given.Given && (*m == 0 || given.Val/discriminationRatio < *m) {
+			*m = given.Val / discriminationRatio
+		}
+	}
+	t.fused = append(t.fused, x)
 }
 
 // protected fills in what the fuse asks of a leg.
 func (t *tree) protected(f *facts.Fuse, l sizing.Leg) sizing.Leg {
-	p := t.p
-	l.Carry = sizing.CableFor(f.Class, f.Rating)
-	l.Least = catalogue.LeastFixed.Least(p.System)
-	need, _, err := sizing.CurrentToOpen(f.Class, f.Rating, p.Site.Practice.ClearWithin.Val)
+	asks, err := t.asks(f.Class, f.Rating)
 	if err != nil {
-		p.block(f.Part.Designation, f.Part.At, "", err)
-		return l
+		t.p.block(f.Part.Designation, f.Part.At, "", err)
 	}
-	l.Loop = sizing.MostLoop(p.Empty, need)
+	l.Carry, l.Loop, l.Least = asks.Carry, asks.Loop, catalogue.LeastFixed.Least(t.p.System)
 	return l
+}
+
+// asks returns what a fuse asks of every leg that it protects.
+func (t *tree) asks(class *catalogue.FuseClass, rating quantity.Ampere) (sizing.FuseOption, error) {
+	o := sizing.FuseOption{Rating: rating, Carry: sizing.CableFor(class, rating), Extra: t.wayExtra(rating)}
+	need, _, err := sizing.CurrentToOpen(class, rating, t.p.Site.Practice.ClearWithin.Val)
+	if err == nil {
+		o.Loop = sizing.MostLoop(t.p.Empty, need)
+	}
+	return o, err
 }
 
 // wayFuse chooses or checks the fuse of a way. Behind stands the largest fuse behind
@@ -372,7 +383,9 @@ func (t *tree) assign(r *sizing.TreeResult) {
 		if th := thinnest[w]; th == nil || o.Ampacity < th.Ampacity {
 			thinnest[w] = o
 		}
-		w.WirePlus.Size, w.WireMinus.Size = p.thicker(w.WirePlus.Size, o.Size), p.thicker(w.WireMinus.Size, o.Size)
+		if w.WirePlus.Size.Area == 0 { // the first leg: what its terminals hold
+			w.WirePlus.Size, w.WireMinus.Size = o.Size, o.Size
+		}
 	}
 	for _, f := range p.F.Fuses {
 		if o := thinnest[f.Way]; f.Way != nil && o != nil {
@@ -380,15 +393,8 @@ func (t *tree) assign(r *sizing.TreeResult) {
 		}
 	}
 	if r.Cost > 0 {
-		p.F.Totals.Bound, p.F.Totals.Proven = quantity.Ratio(r.Bound/r.Cost), r.Proven
+		p.F.Totals.Bound, p.F.Totals.Proven = quantity.Ratio((r.Bound+t.paid)/(r.Cost+t.paid)), r.Proven
 	}
-}
-
-func (p *Plan) thicker(a, b quantity.WireSize) quantity.WireSize {
-	if a.Area > b.Area {
-		return a
-	}
-	return b
 }
 
 // run gives a cable its size and its cores their resistance.

@@ -83,8 +83,10 @@ func sizeCharger(p *Plan, s *describe.Stage) {
 	t, fuse := p.part(s, "charger"), p.part(s, "fuse")
 	b := &p.F.Battery
 	given, pinned := describe.Get[quantity.Ampere](s.Fields, "current")
+	nominal := p.Site.Duty.Nominal.Val
+	stock := p.ratings(s.Kind.Val, nominal, catalogue.ChargerCurrents)
 	in := sizing.ChargerInput{
-		Class: p.Class, Capacity: b.Capacity, Removed: b.Removed, In: p.Site.Duty.Recharge.Val, Standing: p.Standing + p.Held,
+		Stock: stock, Class: p.Class, Capacity: b.Capacity, Removed: b.Removed, In: p.Site.Duty.Recharge.Val, Standing: p.Standing + p.Held,
 	}
 	c, ws, err := sizing.ChargerCurrent(in)
 	if err != nil && !pinned {
@@ -95,12 +97,12 @@ func sizeCharger(p *Plan, s *describe.Stage) {
 	}
 	rated := given.Val
 	if !pinned {
-		rated = max(c.Rated, catalogue.ChargerCurrents[0])
+		rated = max(c.Rated, stock[0])
 	}
 	need := c.Needed
 	if k := p.more.Charge; k > 1 && !pinned {
 		asked := need * quantity.Ampere(k)
-		if r, ok := catalogue.NextRating(catalogue.ChargerCurrents, asked); ok && r <= c.Limit {
+		if r, ok := catalogue.NextRating(stock, asked); ok && r <= c.Limit {
 			rated = r
 		}
 		p.work(t.Designation, "current that the simulated recharge asks", sizing.Working{
@@ -109,12 +111,15 @@ func sizeCharger(p *Plan, s *describe.Stage) {
 		}, t.Designation+": charger current needed")
 		need = asked
 	}
+	if !pinned && err == nil {
+		rated = p.cheapestRating(t, s.Kind.Val, nominal, rated, c.Limit)
+	}
 	limit := quantity.Ampere(float64(p.Class.MaxCharge) * float64(b.Capacity))
 	mains := must[quantity.Toleranced[quantity.Volt]](s, "mains")
 	_, pinnedFloat := describe.Get[quantity.Volt](s.Fields, "float")
 	_, pinnedBoost := describe.Get[quantity.Volt](s.Fields, "boost")
 	acc := float64(must[quantity.Ratio](s, "accuracy"))
-	set(t, "rating", p.Site.Duty.Nominal.Val.String()+" "+rated.String(), float64(rated), "A", true, pinned)
+	set(t, "rating", nominal.String()+" "+rated.String(), float64(rated), "A", true, pinned)
 	set(t, "float", "float "+quantity.Format(p.Float, 3), float64(p.Float), "V", true, pinnedFloat)
 	set(t, "boost", "boost "+quantity.Format(p.Boost, 3), float64(p.Boost), "V", true, pinnedBoost)
 	set(t, "mains", mains.String(), float64(mains.Nominal), "V", false, true)

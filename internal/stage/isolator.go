@@ -42,7 +42,7 @@ func sizeIsolator(p *Plan, s *describe.Stage) {
 	q := p.part(s, "isolator")
 	rated, given := describe.Get[quantity.Ampere](s.Fields, "rated")
 	if !given {
-		rated.Val = p.nextRating(q, "rated current", catalogue.IsolatorCurrents, p.Light+p.Standing)
+		rated.Val = p.pricedRating(q, "isolator", catalogue.IsolatorCurrents, p.Light+p.Standing)
 	}
 	p.isolator(q, rated.Val, given)
 }

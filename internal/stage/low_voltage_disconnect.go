@@ -95,7 +95,7 @@ func sizeCutOff(p *Plan, s *describe.Stage) {
 	load := p.Light + p.Standing
 	rated, given := describe.Get[quantity.Ampere](s.Fields, "rated")
 	if !given {
-		rated.Val = p.nextRating(q, "rated current", catalogue.CutOffCurrents, load)
+		rated.Val = p.pricedRating(q, s.Kind.Val, catalogue.CutOffCurrents, load)
 	}
 	set(q, "opens", "opens "+quantity.Format(opens.Val, 3), float64(opens.Val), "V", true, givenOpens)
 	set(q, "recloses", "closes "+quantity.Format(closes.Val, 3), float64(closes.Val), "V", true, givenCloses)
@@ -131,8 +131,8 @@ const (
 )
 
 // nextRating chooses the next standard rating for a load, used at most to the
-// practice's load factor.
-func (p *Plan) nextRating(part *circuit.Part, name string, list []quantity.Ampere, load quantity.Ampere) quantity.Ampere {
+// practice's load factor; ok is false if the list ends below it.
+func (p *Plan) nextRating(part *circuit.Part, name string, list []quantity.Ampere, load quantity.Ampere) (rating quantity.Ampere, ok bool) {
 	k := p.Site.Practice.LoadFactor.Val
 	need := load / quantity.Ampere(k)
 	r, ok := catalogue.NextRating(list, need)
@@ -148,5 +148,5 @@ func (p *Plan) nextRating(part *circuit.Part, name string, list []quantity.Amper
 		})
 	}
 	p.work(part.Designation, name, w)
-	return r
+	return r, ok
 }

@@ -101,7 +101,7 @@ func sizeMeter(p *Plan, s *describe.Stage) {
 	load := max(p.Light+p.Standing, p.F.Charger.Current)
 	full, given := describe.Get[quantity.Ampere](s.Fields, "range")
 	if !given {
-		full.Val = p.nextRating(m, "range", catalogue.MeterRanges, load)
+		full.Val, _ = p.nextRating(m, "range", catalogue.MeterRanges, load)
 	}
 	sh := p.part(s, "shunt")
 	ohm := quantity.Ohm(float64(catalogue.ShuntVolt) / float64(full.Val))

@@ -60,7 +60,12 @@ type Plan struct {
 	ambient  quantity.Celsius // of the cables
 	grouping int              // loaded circuits run together
 
+	// Block is what the battery is built of.
+	Block catalogue.Block
+
 	more    Reserve
+	prices  map[string]float64         // by the name of the thing
+	sells   map[string]bool            // first words of the names that have a price
 	aux     map[string]quantity.Ampere // what auxiliary supplies feed, by stage name
 	cabled  bool
 	loads   map[string]Load
@@ -85,6 +90,7 @@ func Size(site *describe.Site, c *circuit.Circuit, f *facts.Facts, more Reserve)
 		p.parts[part.Key] = part
 	}
 	p.laying()
+	p.readPrices()
 	p.voltages()
 	for _, t := range site.Luminaires {
 		p.loads[t.Name.Val] = luminaireKindOf(t.Kind.Val).Load(p, t)
@@ -105,6 +111,7 @@ func Size(site *describe.Site, c *circuit.Circuit, f *facts.Facts, more Reserve)
 	p.singles()
 	p.wires()
 	p.protect()
+	p.bill()
 	return p
 }
 

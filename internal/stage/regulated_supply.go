@@ -62,13 +62,16 @@ func sizeSupply(p *Plan, s *describe.Stage) {
 	load := p.drawn(s.Name.Val)
 	if !given {
 		rated.Val.Volt = p.Site.Duty.Nominal.Val
-		c, w, err := sizing.SupplyCurrent(sizing.SupplyInput{Load: load})
+		stock := p.ratings(s.Kind.Val, rated.Val.Volt, catalogue.SupplyCurrents)
+		c, w, err := sizing.SupplyCurrent(sizing.SupplyInput{Load: load, Stock: stock})
 		if err != nil {
 			p.block(t.Designation, t.At, w.Source, err)
-			c = catalogue.SupplyCurrents[len(catalogue.SupplyCurrents)-1]
+			c = stock[len(stock)-1]
 		}
 		p.work(t.Designation, "", w)
-		rated.Val.Ampere = c
+		if rated.Val.Ampere = c; err == nil {
+			rated.Val.Ampere = p.cheapestRating(t, s.Kind.Val, rated.Val.Volt, c, 0)
+		}
 	}
 	acc := must[quantity.Ratio](s, "accuracy")
 	mains := must[quantity.Toleranced[quantity.Volt]](s, "mains")

@@ -2,12 +2,12 @@ package packet
 
 import (
 	"cmp"
-	"math"
 	"slices"
 	"strconv"
 
 	"gloamwright/internal/circuit"
 	"gloamwright/internal/quantity"
+	"gloamwright/internal/sizing"
 )
 
 // cut is one line of the cutting list: a size of cable or of wire in one colour.
@@ -19,28 +19,6 @@ type cut struct {
 	length quantity.Metre // of the pieces together
 	total  quantity.Metre // to draw from the store
 	names  []string
-}
-
-// Allowance for cutting, and the step to which lengths are rounded up; common practice,
-// no source.
-const (
-	cuttingAllowance = 0.03
-	cuttingStepMetre = 0.5 // m
-	cuttingStepFoot  = 1.0 // ft
-)
-
-// cuttingStep is the step to which the lengths of a job are rounded up, in its unit.
-func (b *book) cuttingStep() float64 {
-	if b.lengths == quantity.InFeet {
-		return cuttingStepFoot
-	}
-	return cuttingStepMetre
-}
-
-// drawn is the length to draw for pieces of a length together.
-func (b *book) drawn(length quantity.Metre) quantity.Metre {
-	step := b.cuttingStep()
-	return b.lengths.Metres(math.Ceil(b.lengths.Of(length)*(1+cuttingAllowance)/step-tiny) * step)
 }
 
 // inStore prints a length to draw, in the job's unit.
@@ -77,7 +55,7 @@ func (b *book) cuttingList() []cut {
 		x.names = append(x.names, c.Number)
 	}
 	for i := range out {
-		out[i].total = b.drawn(out[i].length)
+		out[i].total = sizing.Drawn(out[i].length, b.lengths)
 	}
 	slices.SortStableFunc(out, func(a, z cut) int {
 		single := func(c cut) int { return min(1, c.cores) }
@@ -112,7 +90,7 @@ func (b *book) cuttingTable() []block {
 			right = append(right, c)
 		}
 	}
-	head := b.head(0, b.pg.width, "Cutting list, whole job", "cut long pieces first; 3 % allowed, rounded up to "+b.lengths.Format(b.lengths.Metres(b.cuttingStep())))
+	head := b.head(0, b.pg.width, "Cutting list, whole job", "cut long pieces first; 3 % allowed, rounded up to "+b.lengths.Format(b.lengths.Metres(sizing.CuttingStep(b.lengths))))
 	head.marks = []string{"cutting list"}
 	out := []block{head}
 	heads := beside(t.head(0), t.head(shift))

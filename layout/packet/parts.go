@@ -9,6 +9,7 @@ import (
 	"gloamwright/internal/circuit"
 	"gloamwright/internal/facts"
 	"gloamwright/internal/quantity"
+	"gloamwright/internal/sizing"
 )
 
 // item is one row of the parts list.
@@ -271,10 +272,6 @@ func (b *book) conductorStandard() string {
 	return "IEC 60228"
 }
 
-// sparePerRating is how many spare fuse-links of each rating are kept; common practice,
-// no source.
-const sparePerRating = 2
-
 // spareItems are two fuse-links of each rating and class.
 func (b *book) spareItems() []item {
 	var out []item
@@ -288,7 +285,7 @@ func (b *book) spareItems() []item {
 			continue
 		}
 		at[what] = len(out)
-		out = append(out, item{qty: fmt.Sprint(sparePerRating), unit: "pc", label: "spares", what: what, must: "as the fitted ones", spare: true})
+		out = append(out, item{qty: fmt.Sprint(sizing.SpareLinks), unit: "pc", label: "spares", what: what, must: "as the fitted ones", spare: true})
 	}
 	return out
 }
