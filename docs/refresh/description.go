@@ -17,7 +17,10 @@ var descriptionHead string
 // then every stage and luminaire kind as the program knows it.
 func description() []byte {
 	var b bytes.Buffer
-	b.WriteString(descriptionHead)
+	before, after, _ := strings.Cut(descriptionHead, "PRICED THINGS\n")
+	b.WriteString(before)
+	priced(&b)
+	b.WriteString(after)
 	s := stage.Schema()
 	b.WriteString("\n## Stage kinds\n")
 	for _, k := range s.Stages {
@@ -34,6 +37,21 @@ func description() []byte {
 		}
 	}
 	return b.Bytes()
+}
+
+// priced writes the table of what can have a price.
+func priced(b *bytes.Buffer) {
+	b.WriteString("| such as | what stands behind the word | what it is | takes part in a choice |\n|---|---|---|---|\n")
+	for _, t := range describe.PricedThings() {
+		follows, chooses := t.Follows, "–"
+		if follows == "" {
+			follows = "–"
+		}
+		if t.Chooses {
+			chooses = "yes"
+		}
+		fmt.Fprintf(b, "| `%s` | %s | %s | %s |\n", t.Example, follows, t.Doc, chooses)
+	}
 }
 
 func kind(b *bytes.Buffer, k describe.Kind) {

@@ -74,6 +74,12 @@ func distance(a, b []rune, limit int) int {
 	return min(last[len(b)], limit+1)
 }
 
+// DidYouMean returns a sentence with the name among candidates that word was probably
+// meant to be, else one that lists them, else "". What names them: "Names here".
+func DidYouMean(word, what string, candidates []string) string {
+	return didYouMean(word, what, candidates)
+}
+
 // didYouMean returns a sentence with the nearest candidate, else one that lists
 // them, else "". what names them: "keys here".
 func didYouMean(word, what string, candidates []string) string {

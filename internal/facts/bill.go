@@ -1,6 +1,9 @@
 package facts
 
 import (
+	"strconv"
+	"strings"
+
 	"gloamwright/internal/circuit"
 	"gloamwright/internal/describe"
 	"gloamwright/internal/quantity"
@@ -10,7 +13,7 @@ import (
 type Bill struct {
 	Currency string      // as the firm names it; may be empty
 	Lines    []*BillLine // parts in their order, enclosures, cables, wires, spares
-	Total    float64     // of the lines that have a price
+	Total    float64     // of the lines that have a price, rounded once
 	Without  []string    // names of what has none, each once
 	// ByPart finds the line of a part.
 	ByPart map[*circuit.Part]*BillLine
@@ -31,6 +34,28 @@ type BillLine struct {
 	Priced   bool
 	Cost     float64 // rounded to a hundredth; 0 without a price
 }
+
+// Conductor finds the line of a cable or wire; nil if there is none.
+func (b *Bill) Conductor(cores int, size quantity.WireSize, colour string) *BillLine {
+	for _, l := range b.Lines {
+		if l.Unit == "m" && l.Cores == cores && l.Size == size && l.Colour == colour {
+			return l
+		}
+	}
+	return nil
+}
+
+// Money prints an amount with two decimals, or more if it has more.
+func Money(v float64) string {
+	s := strconv.FormatFloat(v, 'f', -1, 64)
+	if _, decimals, _ := strings.Cut(s, "."); len(decimals) > 2 {
+		return s
+	}
+	return strconv.FormatFloat(v, 'f', 2, 64)
+}
+
+// Sum prints an amount of the bill with its currency.
+func (b *Bill) Sum(v float64) string { return strings.TrimSpace(Money(v) + " " + b.Currency) }
 
 // Unpriced is a thing that the firm gives no price for and that was therefore chosen as
 // without prices.

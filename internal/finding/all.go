@@ -61,6 +61,8 @@ func All() []*Check {
 		outageAsked,
 		outageHeld,
 		pinned,
+		priceMissing,
+		priceUnmatched,
 		rechargeAsked,
 		rechargeTime,
 		relayContact,

@@ -6,6 +6,7 @@ import (
 	"strings"
 
 	"gloamwright/internal/design"
+	"gloamwright/internal/facts"
 	"gloamwright/internal/finding"
 	"gloamwright/internal/quantity"
 )
@@ -38,6 +39,9 @@ func Summary(w io.Writer, d *design.Design) {
 	row("Lights", "%d on %d circuits, %s, %s at the end of discharge", d.Totals.Luminaires, len(d.Site.Circuits), d.Totals.LoadWatt, quantity.Format(d.Totals.LoadA, 3))
 	row("Cables", "%d runs, %s; worst drop %.2f %% at %s, limit %v", len(d.Circuit.Cables), d.Totals.CableM, 100*float64(d.Totals.WorstDrop), d.Totals.WorstLamp, d.Site.Practice.LampDrop.Val)
 	row("Fuses", "%s", fuseLine(d))
+	if b := d.Bill; b != nil {
+		row("Cost", "%s%s", b.Sum(b.Total), without(b))
+	}
 	fmt.Fprintln(w)
 	for _, x := range d.Warnings {
 		fmt.Fprintf(w, "  look at %s: %s. %s\n", x.At, x.Summary, x.Detail)
@@ -46,6 +50,14 @@ func Summary(w io.Writer, d *design.Design) {
 }
 
 func hours(s quantity.Second) string { return fmt.Sprintf("%.1f h", s.Hours()) }
+
+// without says how much of the bill has no price.
+func without(b *facts.Bill) string {
+	if len(b.Without) == 0 {
+		return ""
+	}
+	return "; without a price: " + strings.Join(b.Without, ", ")
+}
 
 func fuseLine(d *design.Design) string {
 	var order []string

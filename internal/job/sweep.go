@@ -9,6 +9,7 @@ import (
 	"strings"
 	"text/tabwriter"
 
+	"gloamwright/internal/facts"
 	"gloamwright/internal/finding"
 	"gloamwright/internal/quantity"
 )
@@ -47,6 +48,14 @@ func sweepValues(text string) ([]string, error) {
 	return out, nil
 }
 
+// unpriced tells a cost that leaves something out from one that does not.
+func unpriced(b *facts.Bill) string {
+	if len(b.Without) == 0 {
+		return ""
+	}
+	return fmt.Sprintf(", %d unpriced", len(b.Without))
+}
+
 // Sweep designs the site once for each value of a range and writes a table.
 func Sweep(w io.Writer, path string, set []string, sweep string) error {
 	key, span, ok := strings.Cut(sweep, "=")
@@ -58,14 +67,20 @@ func Sweep(w io.Writer, path string, set []string, sweep string) error {
 		return err
 	}
 	t := tabwriter.NewWriter(w, 0, 0, 2, ' ', 0)
-	fmt.Fprintf(t, "%s\tbattery\tneeds\tcharger\theld\tcopper\tworst drop\tstop\tcautions\t\n", key)
-	for _, v := range values {
+	for i, v := range values {
 		d, err := Load(path, append(set[:len(set):len(set)], key+"="+v))
 		if err != nil {
 			return fmt.Errorf("%s = %s: %w", key, v, err)
 		}
-		fmt.Fprintf(t, "%s\t%s\t%s\t%s\t%s\t%.2f kg\t%.2f %%\t%d\t%d\t\n", v, d.Battery.Capacity, quantity.Format(d.Battery.Required, 3), d.Charger.Current,
-			hours(d.Endurance.Held), d.Totals.CopperKg, 100*float64(d.Totals.WorstDrop), d.Count(finding.Stop), d.Count(finding.Caution))
+		cost := []string{"", ""} // head and figure of its column, where there are prices
+		if b := d.Bill; b != nil {
+			cost = []string{"cost\t", b.Sum(b.Total) + unpriced(b) + "\t"}
+		}
+		if i == 0 {
+			fmt.Fprintf(t, "%s\tbattery\tneeds\tcharger\theld\tcopper\t%sworst drop\tstop\tcautions\t\n", key, cost[0])
+		}
+		fmt.Fprintf(t, "%s\t%s\t%s\t%s\t%s\t%.2f kg\t%s%.2f %%\t%d\t%d\t\n", v, d.Battery.Capacity, quantity.Format(d.Battery.Required, 3), d.Charger.Current,
+			hours(d.Endurance.Held), d.Totals.CopperKg, cost[1], 100*float64(d.Totals.WorstDrop), d.Count(finding.Stop), d.Count(finding.Caution))
 	}
 	return t.Flush()
 }

@@ -40,6 +40,9 @@ func figures(d *design.Design) []figure {
 	add("Worst drop", fmt.Sprintf("%.2f %%", 100*float64(d.Totals.WorstDrop)))
 	add("Load at the end of discharge", quantity.Format(d.Totals.LoadA, 3))
 	add("Copper", fmt.Sprintf("%.2f kg", d.Totals.CopperKg))
+	if b := d.Bill; b != nil {
+		add("Cost", b.Sum(b.Total)+unpriced(b))
+	}
 	return out
 }
 

@@ -155,8 +155,9 @@ func (f *flat) practice() {
 	f.add(leaf{path: "practice.fuses", what: "Practice, fuses in stock", text: textOf(p.Fuses.Val), at: p.Fuses.Pos, absent: allStandard})
 	f.add(leaf{path: "practice.blocks", what: "Practice, battery blocks in stock", text: textOf(p.Blocks.Val), at: p.Blocks.Pos, absent: allStandard})
 	value(f, "practice.texts", "Practice, folder of standing texts", p.Texts, scope{paper: true})
-	for _, c := range p.Prices {
-		value(f, "practice.prices."+c.Of.Val, "Practice, price of "+c.Of.Val, c.Cost, scope{paper: true})
+	value(f, "practice.currency", "Practice, currency", p.Currency, scope{paper: true})
+	for _, c := range p.Prices { // one that takes part in a choice can move what is chosen, anywhere
+		value(f, "practice.prices."+c.Of.Val, "Practice, price of "+c.Of.Val, c.Cost, scope{paper: !c.Thing().Chooses})
 	}
 }
 

@@ -42,6 +42,7 @@ type document struct {
 	Thresholds  []threshold    `json:"thresholds"`
 	Faults      []faultEntry   `json:"faults"`
 	Totals      totalsEntry    `json:"totals"`
+	Cost        *costEntry     `json:"cost"`
 	Workings    []workingEntry `json:"workings"`
 }
 
@@ -86,7 +87,7 @@ func JSON(d *design.Design) ([]byte, error) {
 		TestPoints: testPoints(d, nets, conds), Luminaires: luminaires(d, conds),
 		Battery: battery(d), Charger: charger(d), CutOff: cutOff(d), Relay: relay(d), Supply: supply(d),
 		Endurance: endurance(d), Function: function(d, conds), Thresholds: thresholds(d), Faults: faults(d),
-		Totals: totals(d), Workings: workings(d),
+		Totals: totals(d), Cost: cost(d), Workings: workings(d),
 	}
 	if len(nets) > 0 {
 		out.Reference = nets[0]

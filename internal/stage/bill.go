@@ -28,9 +28,12 @@ func (p *Plan) bill() {
 	}
 	b.conductors()
 	b.spares()
+	exact := 0.0
 	for _, l := range b.bill.Lines {
 		b.settle(l)
+		exact += l.Each * l.Quantity
 	}
+	b.bill.Total = sizing.LineCost(1, exact)
 	p.F.Bill = b.bill
 }
 
@@ -48,7 +51,7 @@ func (b *biller) line(l *facts.BillLine) *facts.BillLine {
 	return l
 }
 
-// settle looks up the price of a line and adds it up.
+// settle looks up the price of a line.
 func (b *biller) settle(l *facts.BillLine) {
 	l.Each, l.Priced = b.p.price(l.Name)
 	if !l.Priced {
@@ -58,7 +61,6 @@ func (b *biller) settle(l *facts.BillLine) {
 		return
 	}
 	l.Cost = sizing.LineCost(l.Each, l.Quantity)
-	b.bill.Total = sizing.LineCost(1, b.bill.Total+l.Cost)
 }
 
 // part adds a part to the line of its name.

@@ -21,6 +21,8 @@ type item struct {
 	must      string
 	spare     bool
 	count     int
+	each      string // price of one; empty: it has none
+	cost      string
 }
 
 // partGroup is a heading of the parts list with the kinds that stand below it.
@@ -45,6 +47,9 @@ var partGroups = []partGroup{
 	{"Control", func(p *circuit.Part) bool { return true }},
 }
 
+// boardGroup is the place of boards and fuses among the groups.
+const boardGroup = 2
+
 // partOrder is how the groups are printed.
 var partOrder = []int{0, 3, 2, 1}
 
@@ -60,9 +65,10 @@ func (b *book) parts() *section {
 	if b.d.Changes != nil {
 		s.note = fmt.Sprintf("If you hold parts for revision %s, read %s first.", b.d.Changes.From, b.sheets(keyChange))
 	}
-	t := &table{st: tableText, min: plainRow, cols: []column{
-		{head: "Pos", w: 8}, {head: "Qty", w: 12, a: endAnchor}, {head: "Unit", w: 8}, {head: "Designation", w: 39},
-		{head: "What it is", w: 54}, {head: "A substitute must", w: 38, indent: 2}, {head: "Arrived", w: 11, a: midAnchor}, {head: "Fitted", w: 10, a: midAnchor}}}
+	t := &table{st: tableText, min: plainRow, cols: partColumns}
+	if b.d.Bill != nil {
+		t.cols = pricedColumns
+	}
 	head := t.head(0)
 	s.heads = &head
 	pos := 0
@@ -85,6 +91,9 @@ func (b *book) parts() *section {
 				fitted = none()
 			}
 			r := row{cells: []cell{txt(fmt.Sprint(pos)), fat(it.qty), txt(it.unit), txt(name), txt(it.what), txt(it.must), tickBox(), fitted}}
+			if b.d.Bill != nil {
+				r.cells = slices.Insert(r.cells, 6, txt(it.each), txt(it.cost))
+			}
 			for _, n := range it.names {
 				if !strings.Contains(n, ":") { // terminals stand on their plans
 					r.marks = append(r.marks, rowMark(n))
@@ -96,11 +105,13 @@ func (b *book) parts() *section {
 		s.blocks = append(s.blocks, together(rows)...)
 	}
 	items := b.partItems()
+	items[boardGroup] = append(items[boardGroup], b.enclosures()...)
 	for _, g := range partOrder {
 		group(partGroups[g].title, "", items[g])
 	}
 	group("Wire", b.conductorStandard()+"; cut lengths on "+b.on("cutting list"), b.wireItems())
 	group("Spares", "keep in the cabinet", b.spareItems())
+	s.blocks = append(s.blocks, b.costBlocks(t)...)
 	s.blocks = append(s.blocks, b.paragraph("Ratings include the margin. “A substitute must” lists what the calculation needs; anything that meets it may be fitted: write it on "+b.sheets(keyRedLine)+".", remarkText, 1))
 	return s
 }
@@ -125,6 +136,13 @@ func (b *book) partItems() map[int][]item {
 			strip, _, _ := strings.Cut(p.Designation, ":")
 			key, strips[strip] = "terminals "+strip, true
 		}
+		line := b.billed(p)
+		if line != nil {
+			key += "|" + line.Name
+			if p.Kind == circuit.Terminal {
+				what += ", to " + strings.TrimPrefix(line.Name, "terminal ")
+			}
+		}
 		i, ok := at[key]
 		if !ok {
 			i = len(out[g])
@@ -136,7 +154,12 @@ func (b *book) partItems() map[int][]item {
 		it.count++
 		it.qty = fmt.Sprint(it.count)
 		if p == b.d.Battery.Part {
-			it.qty = fmt.Sprint(max(1, b.d.Battery.Blocks*b.d.Battery.Parallel))
+			it.count = max(1, b.d.Battery.Blocks*b.d.Battery.Parallel)
+			it.qty = fmt.Sprint(it.count)
+		}
+		it.price(line, float64(it.count))
+		if line == nil && p.Kind == circuit.BusBar && b.d.Bill != nil {
+			it.cost = "with L+" // a board has one price
 		}
 	}
 	return out
@@ -260,6 +283,9 @@ func (b *book) wireItems() []item {
 		} else {
 			it.names, it.label = nil, counted(c.pieces, "wire")
 		}
+		if b.d.Bill != nil {
+			it.price(b.d.Bill.Conductor(c.cores, c.size, c.colour), float64(c.total))
+		}
 		out = append(out, it)
 	}
 	return out
@@ -285,7 +311,9 @@ func (b *book) spareItems() []item {
 			continue
 		}
 		at[what] = len(out)
-		out = append(out, item{qty: fmt.Sprint(sizing.SpareLinks), unit: "pc", label: "spares", what: what, must: "as the fitted ones", spare: true})
+		it := item{qty: fmt.Sprint(sizing.SpareLinks), unit: "pc", label: "spares", what: what, must: "as the fitted ones", spare: true}
+		it.price(b.spare(f), sizing.SpareLinks)
+		out = append(out, it)
 	}
 	return out
 }
