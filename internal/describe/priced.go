@@ -10,7 +10,7 @@ import (
 	"gloamwright/internal/quantity"
 )
 
-// Price is what the firm pays for one thing: a metre of conductor, or a piece.
+// Price is what the firm pays for one thing: a metre or foot of conductor, or a piece.
 type Price struct {
 	Of   At[string] // name of the thing, as PriceName writes it
 	Cost At[float64]
@@ -35,8 +35,8 @@ type PricedThing struct {
 func PricedThings() []PricedThing { return slices.Clone(pricedThings) }
 
 var pricedThings = []PricedThing{
-	{"", "a conductor size", "1.5 mm²", "A metre of two-core cable.", true, priceOfSize},
-	{"wire", "a conductor size", "wire 1.5 mm²", "A metre of single wire in an enclosure.", true, priceOfSize},
+	{"", "a conductor size", "1.5 mm²", "A metre of two-core cable, a foot where the job's lengths are in feet.", true, priceOfSize},
+	{"wire", "a conductor size", "wire 1.5 mm²", "A metre or foot of single wire in an enclosure.", true, priceOfSize},
 	{"terminal", "a conductor size", "terminal 4 mm²", "One terminal that takes conductors up to that size. A conductor gets the cheapest that takes it.", true, priceOfSize},
 	{"fuse", "a class and a rating", "fuse blade 2 A", "A fuse-link with its holder.", true, priceOfFuse},
 	{"fuse-holder", "a class", "fuse-holder blade", "The holder of a spare way.", false, priceOfClass},

@@ -155,3 +155,31 @@ func TestBill(t *testing.T) {
 		t.Errorf("printed as %s", got)
 	}
 }
+
+// TestBillInFeet: on a job in feet conductors are priced and drawn by the foot.
+func TestBillInFeet(t *testing.T) {
+	src := strings.Replace(fmt.Sprintf(shop, "18 AWG: 0.20, 14 AWG: 0.15"), "  currency: EUR", "  currency: EUR\n  conductors: awg", 1)
+	site, list := describe.Parse("shop.yaml", []byte(src), stage.Schema())
+	if list.HasErrors() {
+		t.Fatal(list.Render(site.Sources))
+	}
+	d, err := design.Make(site, nil)
+	if err != nil {
+		t.Fatal(err)
+	}
+	checkWorkings(t, d)
+	feet := 0.0
+	for _, c := range d.Circuit.Cables {
+		if c.Circuit != "" && c.Size.String() != "14 AWG" {
+			t.Errorf("%s has %v, 14 AWG is cheaper", c.Designation, c.Size)
+		}
+		if c.Size.String() == "14 AWG" {
+			feet += float64(c.Length) / 0.3048 // ISO 80000-3: 1 ft = 0.3048 m
+		}
+	}
+	for _, l := range d.Bill.Lines {
+		if l.Name == "14 AWG" && (l.Unit != "ft" || l.Quantity != math.Ceil(feet*1.03) || math.Abs(l.Cost-0.15*l.Quantity) > 0.005001) {
+			t.Errorf("%v %s for %v, by hand %v ft", l.Quantity, l.Unit, l.Cost, math.Ceil(feet*1.03))
+		}
+	}
+}

@@ -28,8 +28,8 @@ type BillLine struct {
 	Size     quantity.WireSize // of a cable or wire
 	Colour   string            // of its cores
 	Spare    *Fuse             // one of the fuses that a spare link is for
-	Quantity float64           // to buy: pieces, battery blocks, or metres to draw
-	Unit     string            // "pc" or "m"
+	Quantity float64           // to buy: pieces, battery blocks, or length to draw
+	Unit     string            // "pc", or that of the job's lengths, "m" or "ft"
 	Each     float64           // price of one
 	Priced   bool
 	Cost     float64 // rounded to a hundredth; 0 without a price
@@ -38,7 +38,7 @@ type BillLine struct {
 // Conductor finds the line of a cable or wire; nil if there is none.
 func (b *Bill) Conductor(cores int, size quantity.WireSize, colour string) *BillLine {
 	for _, l := range b.Lines {
-		if l.Unit == "m" && l.Cores == cores && l.Size == size && l.Colour == colour {
+		if l.Size.Area > 0 && l.Cores == cores && l.Size == size && l.Colour == colour {
 			return l
 		}
 	}

@@ -106,7 +106,7 @@ func partsList(d *design.Design) *Table {
 		}
 		if b := l.bill; b != nil {
 			buy := l.quantity
-			if b.Unit == "m" || len(b.Parts) == 1 { // metres to draw, blocks of a battery
+			if b.Cores > 0 || b.Size.Area > 0 || len(b.Parts) == 1 { // length to draw, blocks of a battery
 				buy = b.Quantity
 			}
 			row[8] = cell(figure(buy))

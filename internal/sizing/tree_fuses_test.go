@@ -224,7 +224,11 @@ func TestLineCost(t *testing.T) {
 		{0.25, 0.5, 0.17, 0.09}, // 0.2575 m; 0.085
 		{50 / 1.03, 50, 1, 50},
 	} {
-		if d := float64(Drawn(quantity.Metre(c.length))); d != c.drawn || LineCost(c.each, d) != c.cost {
+		// 40 ft with 3 % are 41.2 ft, drawn as 42 ft
+		if d := quantity.InFeet.Of(Drawn(quantity.InFeet.Metres(40), quantity.InFeet)); math.Abs(d-42) > 1e-9 {
+			t.Errorf("draws %v ft, want 42", d)
+		}
+		if d := float64(Drawn(quantity.Metre(c.length), quantity.InMetres)); d != c.drawn || LineCost(c.each, d) != c.cost {
 			t.Errorf("%v m: draws %v for %v, want %v for %v", c.length, d, LineCost(c.each, d), c.drawn, c.cost)
 		}
 	}

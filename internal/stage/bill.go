@@ -182,7 +182,7 @@ func (p *Plan) heldSizes() map[*circuit.Part]quantity.WireSize {
 	return out
 }
 
-// conductors adds the cables and wires by size and colours, in the metres to draw.
+// conductors adds the cables and wires by size and colours, in the length to draw.
 func (b *biller) conductors() {
 	type cut struct {
 		line   *facts.BillLine
@@ -193,7 +193,7 @@ func (b *biller) conductors() {
 		i := slices.IndexFunc(cuts, func(c *cut) bool { return c.line.Cores == cores && c.line.Size == size && c.line.Colour == colour })
 		if i < 0 {
 			i = len(cuts)
-			cuts = append(cuts, &cut{line: b.line(&facts.BillLine{Name: name, Cores: cores, Size: size, Colour: colour, Unit: "m"})})
+			cuts = append(cuts, &cut{line: b.line(&facts.BillLine{Name: name, Cores: cores, Size: size, Colour: colour, Unit: b.p.lengths().Symbol()})})
 		}
 		cuts[i].length += length
 	}
@@ -217,7 +217,7 @@ func (b *biller) conductors() {
 		}
 	}
 	for _, c := range cuts {
-		c.line.Quantity = float64(sizing.Drawn(c.length))
+		c.line.Quantity = b.p.lengths().Of(sizing.Drawn(c.length, b.p.lengths()))
 	}
 }
 

@@ -102,10 +102,11 @@ func (t *tree) pricedOptions(e ends) {
 	p := t.p
 	var out []sizing.Option
 	for _, o := range t.Options {
-		var ok bool
-		if o.Price, ok = p.price(o.Size.String()); !ok {
+		each, ok := p.price(o.Size.String())
+		if !ok {
 			continue
 		}
+		o.Price, _ = p.lengthAt(1, each)
 		if _, _, ok := p.terminalFor(o.Size); e.terminals && !ok {
 			continue
 		}
@@ -125,7 +126,8 @@ func (t *tree) pricedOptions(e ends) {
 			}
 			if e.wires {
 				each, _ := p.price(describe.PriceName("wire", o.Size))
-				sum += float64(wire) * each
+				cost, _ := p.lengthAt(wire, each)
+				sum += cost
 			}
 			return sum
 		}
@@ -247,8 +249,9 @@ func (t *tree) costOf(f *fusedWay, r *sizing.TreeResult, e ends, rating quantity
 			w.Formula = "Σ L × p of what has a price"
 			continue
 		}
-		terms = append(terms, metresAt(length[size], each))
-		w.Value += float64(length[size]) * each
+		cost, term := p.lengthAt(length[size], each)
+		terms = append(terms, term)
+		w.Value += cost
 	}
 	first := r.Sizes[f.legs[0]].Size
 	n, wire := endsOf(f.fuse.Way)
@@ -257,8 +260,9 @@ func (t *tree) costOf(f *fusedWay, r *sizing.TreeResult, e ends, rating quantity
 		w.Value += float64(n) * each
 	}
 	if each, ok := p.price(describe.PriceName("wire", first)); e.wires && ok {
-		terms, with = append(terms, metresAt(wire, each)), append(with, describe.PriceName("wire", first))
-		w.Value += float64(wire) * each
+		cost, term := p.lengthAt(wire, each)
+		terms, with = append(terms, term), append(with, describe.PriceName("wire", first))
+		w.Value += cost
 	}
 	if each, ok := p.price(fuseName(t.class, rating)); ok {
 		terms, with = append(terms, money(each)), append(with, fuseName(t.class, rating))

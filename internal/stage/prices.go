@@ -147,7 +147,11 @@ func fuseName(class *catalogue.FuseClass, rating quantity.Ampere) string {
 // money prints an amount in a working.
 func money(v float64) string { return sizing.Digits(v) }
 
-// metresAt prints the price of a length in a working.
-func metresAt(l quantity.Metre, each float64) string {
-	return fmt.Sprintf("%s m × %s", sizing.Digits(float64(l)), money(each))
+// lengths is the unit that conductors are priced by: that of the job's lengths.
+func (p *Plan) lengths() quantity.LengthUnit { return p.Site.Practice.LengthUnit() }
+
+// lengthAt returns what a length costs at a price, and prints it for a working.
+func (p *Plan) lengthAt(l quantity.Metre, each float64) (cost float64, text string) {
+	n := p.lengths().Of(l)
+	return n * each, fmt.Sprintf("%s %s × %s", sizing.Digits(n), p.lengths().Symbol(), money(each))
 }

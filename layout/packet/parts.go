@@ -152,12 +152,12 @@ func (b *book) partItems() map[int][]item {
 		it := &out[g][i]
 		it.names = append(it.names, name)
 		it.count++
-		it.qty = fmt.Sprint(it.count)
+		buy := it.count
 		if p == b.d.Battery.Part {
-			it.count = max(1, b.d.Battery.Blocks*b.d.Battery.Parallel)
-			it.qty = fmt.Sprint(it.count)
+			buy = max(1, b.d.Battery.Blocks*b.d.Battery.Parallel)
 		}
-		it.price(line, float64(it.count))
+		it.qty = fmt.Sprint(buy)
+		it.price(line, float64(buy))
 		if line == nil && p.Kind == circuit.BusBar && b.d.Bill != nil {
 			it.cost = "with L+" // a board has one price
 		}
@@ -284,7 +284,7 @@ func (b *book) wireItems() []item {
 			it.names, it.label = nil, counted(c.pieces, "wire")
 		}
 		if b.d.Bill != nil {
-			it.price(b.d.Bill.Conductor(c.cores, c.size, c.colour), float64(c.total))
+			it.price(b.d.Bill.Conductor(c.cores, c.size, c.colour), b.lengths.Of(c.total))
 		}
 		out = append(out, it)
 	}
