@@ -157,10 +157,17 @@ func Clean(text string) string {
 	return b.String()
 }
 
-// plain reports whether text is printable ASCII, which Clean leaves as it is.
+// plain reports whether text holds nothing but runes that Clean leaves as they are,
+// as most texts do: printable ASCII, Latin letters and signs that are whole in Unicode
+// normal form C, and the signs of formulas.
 func plain(text string) bool {
-	for i := range len(text) {
-		if text[i] < ' ' || text[i] > '~' {
+	for _, r := range text {
+		switch {
+		case r >= ' ' && r <= '~':
+		case r >= '\u00A0' && r < '\u0300' && r != '\u00AD':
+		case r == 'Ω', r == 'Δ', r == 'Σ', r == 'η', r == 'θ', r == 'ρ', r == 'τ':
+		case r == '–', r == '—', r == '…', r == '−', r == '≤', r == '≥', r == '√', r == '₀', r == '₁', r == '₂':
+		default:
 			return false
 		}
 	}

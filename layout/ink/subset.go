@@ -32,13 +32,19 @@ const (
 // renumbered, without hinting. Line metrics and the licence notice stay.
 // The file is only read.
 func subsetFont(file []byte, cmap *[0x10000]uint16, runes []rune) ([]byte, error) {
+	out, _, err := subsetGlyphs(file, cmap, runes)
+	return out, err
+}
+
+// subsetGlyphs is subsetFont with the new numbers of glyphs by the old.
+func subsetGlyphs(file []byte, cmap *[0x10000]uint16, runes []rune) ([]byte, map[uint16]uint16, error) {
 	in, err := readTables(file)
 	if err != nil {
-		return nil, err
+		return nil, nil, err
 	}
 	g, err := newGlyphTable(in)
 	if err != nil {
-		return nil, err
+		return nil, nil, err
 	}
 	runes = slices.Clone(runes)
 	slices.Sort(runes)
@@ -46,12 +52,12 @@ func subsetFont(file []byte, cmap *[0x10000]uint16, runes []rune) ([]byte, error
 	old := []uint16{0} // glyph 0 is the one for missing signs
 	for _, r := range runes {
 		if r < 0 || r > 0xFFFE || cmap[r] == 0 {
-			return nil, fmt.Errorf("the font has no glyph for %U", r)
+			return nil, nil, fmt.Errorf("the font has no glyph for %U", r)
 		}
 		old = append(old, cmap[r])
 	}
 	if old, err = g.closure(old); err != nil {
-		return nil, err
+		return nil, nil, err
 	}
 	number := map[uint16]uint16{}
 	for i, o := range old {
@@ -64,7 +70,7 @@ func subsetFont(file []byte, cmap *[0x10000]uint16, runes []rune) ([]byte, error
 		loca = be.AppendUint32(loca, uint32(len(glyf)))
 		data, err := g.rewritten(o, number)
 		if err != nil {
-			return nil, err
+			return nil, nil, err
 		}
 		glyf = append(glyf, data...)
 		for len(glyf)%4 != 0 {
@@ -83,12 +89,12 @@ func subsetFont(file []byte, cmap *[0x10000]uint16, runes []rune) ([]byte, error
 	be.PutUint32(post, postNoNames)
 	names, err := keptNames(in["name"])
 	if err != nil {
-		return nil, err
+		return nil, nil, err
 	}
 	return writeTables(map[string][]byte{
 		"OS/2": in["OS/2"], "cmap": characterMap(runes, cmap, number), "glyf": glyf, "head": head, "hhea": hhea,
 		"hmtx": hmtx, "loca": loca, "maxp": maxp, "name": names, "post": post,
-	}), nil
+	}), number, nil
 }
 
 // readTables cuts a font file into its tables and sees that those needed here are

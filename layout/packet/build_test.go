@@ -18,7 +18,7 @@ var (
 )
 
 // example designs an example site; each is made once.
-func example(t *testing.T, name string) *design.Design {
+func example(t testing.TB, name string) *design.Design {
 	t.Helper()
 	designsLock.Lock()
 	defer designsLock.Unlock()
@@ -38,7 +38,7 @@ func example(t *testing.T, name string) *design.Design {
 }
 
 // made designs a description.
-func made(t *testing.T, path string, src []byte) *design.Design {
+func made(t testing.TB, path string, src []byte) *design.Design {
 	t.Helper()
 	site, list := describe.Options{}.Parse(path, src, stage.Schema())
 	if list.HasErrors() {

@@ -101,6 +101,12 @@ func TestGlue(t *testing.T) {
 		"1 379 A":                 "1~379~A",
 		"5 lights on 2 boards":    "5 lights on 2 boards",
 		"Hold point 1 on sheet 7": "Hold point~1 on sheet~7",
+		"at point 1":              "at point 1",
+		"0.03 m³/h of air":        "0.03~m³/h of air",
+		"3 K/W, 4 K/h":            "3~K/W, 4~K/h",
+		"12 345 A, 12 3456":       "12~345~A, 12 3456",
+		"revision B. Revision Be": "revision~B. Revision Be",
+		"30 ft, 5 for 2 mA.":      "30~ft, 5 for 2~mA.",
 	} {
 		if got := strings.ReplaceAll(glue(in), noBreak, "~"); got != want {
 			t.Errorf("glue(%q) = %q, want %q", in, got, want)
