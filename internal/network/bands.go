@@ -140,6 +140,7 @@ func (s *Solution) Bands(outputs []Output, method Method) ([]Band, error) {
 // and factorises the matrix there.
 func (r *run) influences() ([]influence, error) {
 	r.known = false
+	r.rule()
 	r.assemble()
 	r.n.lu.ready = false
 	if r.n.lu.factor(r.n.matrix) >= 0 {
@@ -281,6 +282,7 @@ func turned(a, b []float64) bool {
 func (r *run) atCorner(inf []influence, slopes []float64, side float64) *run {
 	q := *r
 	q.p = slices.Clone(r.p)
+	q.rules = nil
 	q.x, q.f, q.old = slices.Clone(r.x), slices.Clone(r.f), slices.Clone(r.old)
 	for j, in := range inf {
 		if slopes[j] == 0 {

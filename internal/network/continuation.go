@@ -41,6 +41,7 @@ func (r *run) converge(warm bool) error {
 	}
 	r.shunt, r.drive = 0, 1
 	r.known = false
+	r.rule()
 	r.assemble()
 	return r.notConverged()
 }

@@ -38,7 +38,7 @@ func (d *device) broken(c *cell, o *Override) {
 			c.j[own+b][own+b] = -1
 		}
 	default:
-		d.m.eval(c)
+		d.m.evaluate(c)
 		a, b := d.pin(o.Short[0]), d.pin(o.Short[1])
 		c.flow(a, b, c.across(a, b)/ShortOhm, 1/ShortOhm)
 	}

@@ -32,8 +32,10 @@ type lu struct {
 	ui    []int32
 	ux    []float64
 	diag  []float64
-	ready bool // pattern and pivots are there
-	fresh int  // how often the pivots were chosen
+	was   []float64 // entries of the matrix that was factorised
+	anew  []bool    // by pivot: its column had to be eliminated again
+	ready bool      // pattern and pivots are there
+	fresh int       // how often the pivots were chosen
 
 	x     []float64 // work space of one column
 	seen  []int32
@@ -52,7 +54,7 @@ func orderedLU(order []int32, first []bool) *lu {
 	n := len(order)
 	f := &lu{
 		n: n, order: order, first: first, step: make([]int32, n), lp: make([]int32, n+1), up: make([]int32, n+1),
-		diag: make([]float64, n), x: make([]float64, n), seen: make([]int32, n), child: make([]int32, n),
+		diag: make([]float64, n), x: make([]float64, n), anew: make([]bool, n), seen: make([]int32, n), child: make([]int32, n),
 	}
 	return f
 }
@@ -138,6 +140,7 @@ func (f *lu) choose(a *matrix) int {
 		f.li[p] = f.step[r]
 	}
 	f.ready = true
+	f.was = append(f.was[:0], a.val...)
 	return -1
 }
 
@@ -186,11 +189,25 @@ func (f *lu) below(r int32) int32 {
 }
 
 // again factorises a with the pivots and the pattern of before; it reports false
-// when a pivot is too small for that.
+// when a pivot is too small for that. A column that has not changed, nor any that it is
+// eliminated with, stays as it is.
 func (f *lu) again(a *matrix) bool {
-	x, step := f.x, f.step
+	x, step, was, anew := f.x, f.step, f.was, f.anew
 	for k := range f.n {
 		col := f.order[k]
+		changed := false
+		for p := a.ptr[col]; p < a.ptr[col+1]; p++ {
+			if v := a.val[p]; v != was[p] {
+				was[p], changed = v, true
+			}
+		}
+		for p := f.up[k]; !changed && p < f.up[k+1]; p++ {
+			changed = anew[f.ui[p]]
+		}
+		anew[k] = changed
+		if !changed {
+			continue
+		}
 		for p := a.ptr[col]; p < a.ptr[col+1]; p++ {
 			x[step[a.row[p]]] = a.val[p]
 		}

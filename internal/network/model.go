@@ -16,10 +16,11 @@ type Model struct {
 	Source string
 	Memory string // names of the two positions, "on/off" in that order; "" without memory
 
-	branches int           // unknown currents of its own
-	moved    bool          // its position is another element's (Control)
-	rest     bool          // position when the state says nothing
-	eval     func(c *cell) // fills f and j at v
+	branches int                // unknown currents of its own
+	moved    bool               // its position is another element's (Control)
+	rest     bool               // position when the state says nothing
+	eval     func(c *cell)      // fills f and j at v; not needed where straight is there
+	straight func(c *cell) line // instead of eval: a law that is a line whatever the voltages are
 	limit    func(c *cell, old []float64) bool
 	next     func(c *cell) bool              // position that the voltages at v call for
 	check    func(p []float64) string        // what is wrong with the parameters together
@@ -79,9 +80,19 @@ type cell struct {
 	at *Environment // the condition
 }
 
-func (c *cell) clear() {
+// clear makes room for an element of k unknowns.
+func (c *cell) clear(k int) {
 	c.f = [maxLocal]float64{}
-	c.j = [maxLocal][maxLocal]float64{}
+	clear(c.j[:k])
+}
+
+// evaluate fills f and j at v.
+func (m *Model) evaluate(c *cell) {
+	if m.straight != nil {
+		c.along(m.straight(c))
+		return
+	}
+	m.eval(c)
 }
 
 // flow adds a current i from pin a through the element to pin b that depends on
@@ -105,25 +116,16 @@ func (c *cell) flowBy(a, b, k int, slope float64) {
 func (c *cell) across(a, b int) float64 { return c.v[a] - c.v[b] }
 
 // series writes the law of an electromotive force and a resistance between pins 0
-// and 1, the current being the element's own unknown number 2:
-// v0 − v1 = emf + ohm·i. From 1 Ω up it is written as a current.
-func (c *cell) series(emf, ohm float64) {
-	i := c.v[2]
-	c.through(i)
-	if ohm < 1 {
-		c.f[2] = c.v[0] - c.v[1] - emf - ohm*i
-		c.j[2][0], c.j[2][1], c.j[2][2] = 1, -1, -ohm
-		return
-	}
-	c.f[2] = (c.v[0]-c.v[1]-emf)/ohm - i
-	c.j[2][0], c.j[2][1], c.j[2][2] = 1/ohm, -1/ohm, -1
-}
+// and 1, the current being the element's own unknown number 2.
+func (c *cell) series(emf, ohm float64) { c.along(line{emf: emf, ohm: ohm}) }
 
 // open says that no current flows through the own unknown number 2.
-func (c *cell) open() {
+func (c *cell) open() { c.along(line{open: true}) }
+
+func (c *cell) along(l line) {
 	c.through(c.v[2])
-	c.f[2] = -c.v[2]
-	c.j[2][2] = -1
+	c.f[2] = l.off(c.v[0]-c.v[1], c.v[2])
+	c.j[2][0], c.j[2][1], c.j[2][2] = l.slopes()
 }
 
 func (c *cell) through(i float64) {

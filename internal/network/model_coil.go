@@ -39,7 +39,7 @@ var coilModel = &Model{
 		}
 		return ""
 	},
-	eval: func(c *cell) { c.series(0, c.p[coilOhm]*warmth(c.p)) },
+	straight: func(c *cell) line { return line{ohm: c.p[coilOhm] * warmth(c.p)} },
 	next: func(c *cell) bool {
 		v, k := math.Abs(c.across(0, 1)), warmth(c.p)
 		if c.on {

@@ -31,12 +31,12 @@ var ldrModel = &Model{
 		}
 		return ""
 	},
-	eval: func(c *cell) {
+	straight: func(c *cell) line {
 		lux := c.p[ldrLux]
 		if lux < 0 {
 			lux = c.at.Lux
 		}
-		c.series(0, ldrOhm(c.p, lux))
+		return line{ohm: ldrOhm(c.p, lux)}
 	},
 }
 

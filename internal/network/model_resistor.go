@@ -1,7 +1,7 @@
 package network
 
-// resistive is the eval of every plain resistance; parameter 0 is its value.
-func resistive(c *cell) { c.series(0, c.p[0]) }
+// resistive is the law of every plain resistance; parameter 0 is its value.
+func resistive(c *cell) line { return line{ohm: c.p[0]} }
 
 func directIfZero(p []float64, _ bool) bool { return p[0] == 0 }
 
@@ -11,7 +11,7 @@ func resistorLike(name, doc string, ohm ParamSpec) *Model {
 		Name: name, Doc: doc, Pins: pins("1", "2"), Params: []ParamSpec{ohm},
 		Law:      "i(1→2) = (v1 − v2)/ohm",
 		Source:   "Ohm's law",
-		branches: 1, eval: resistive, direct: directIfZero, joined: [][2]int{{0, 1}},
+		branches: 1, straight: resistive, direct: directIfZero, joined: [][2]int{{0, 1}},
 	}
 }
 

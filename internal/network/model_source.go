@@ -10,8 +10,8 @@ var sourceModel = &Model{
 	Law:      "v(+) − v(−) = volt + ohm·i, i into +",
 	Source:   "Thévenin's theorem",
 	branches: 1, drives: []int{0}, joined: [][2]int{{0, 1}},
-	eval:   func(c *cell) { c.series(c.p[0], c.p[1]) },
-	direct: func(p []float64, _ bool) bool { return p[1] == 0 },
+	straight: func(c *cell) line { return line{emf: c.p[0], ohm: c.p[1]} },
+	direct:   func(p []float64, _ bool) bool { return p[1] == 0 },
 }
 
 // Parameter positions of the battery.

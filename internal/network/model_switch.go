@@ -14,14 +14,8 @@ var switchModel = &Model{
 	Law:      "closed: i(1→2) = (v1 − v2)/ohm; open: i = 0",
 	Source:   "Ohm's law",
 	branches: 1, joined: [][2]int{{0, 1}},
-	eval: func(c *cell) {
-		if c.p[1] >= 0.5 {
-			c.series(0, c.p[0])
-		} else {
-			c.open()
-		}
-	},
-	direct: func(p []float64, _ bool) bool { return p[1] >= 0.5 && p[0] == 0 },
+	straight: func(c *cell) line { return line{ohm: c.p[0], open: c.p[1] < 0.5} },
+	direct:   func(p []float64, _ bool) bool { return p[1] >= 0.5 && p[0] == 0 },
 }
 
 // contactModel is a contact that another element moves.
@@ -34,14 +28,8 @@ var contactModel = &Model{
 	Law:      "closed when the control's position differs from rest_closed: i(1→2) = (v1 − v2)/ohm; else i = 0",
 	Source:   "Ohm's law",
 	branches: 1, moved: true, joined: [][2]int{{0, 1}},
-	eval: func(c *cell) {
-		if contactClosed(c.p, c.on) {
-			c.series(0, c.p[0])
-		} else {
-			c.open()
-		}
-	},
-	direct: func(p []float64, on bool) bool { return contactClosed(p, on) && p[0] == 0 },
+	straight: func(c *cell) line { return line{ohm: c.p[0], open: !contactClosed(c.p, c.on)} },
+	direct:   func(p []float64, on bool) bool { return contactClosed(p, on) && p[0] == 0 },
 }
 
 func contactClosed(p []float64, on bool) bool { return on != (p[1] >= 0.5) }

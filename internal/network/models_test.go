@@ -53,7 +53,7 @@ func TestSlopesMatchLaws(t *testing.T) {
 				c.v[k] = span * (2*rng.Float64() - 1)
 			}
 			base := c
-			m.eval(&base)
+			m.evaluate(&base)
 			sum, size := 0.0, 1e-12
 			for k := range m.Pins {
 				sum += base.f[k]
@@ -66,8 +66,8 @@ func TestSlopesMatchLaws(t *testing.T) {
 				up, down := c, c
 				up.v[k] += h
 				down.v[k] -= h
-				m.eval(&up)
-				m.eval(&down)
+				m.evaluate(&up)
+				m.evaluate(&down)
 				for r := range n {
 					got := base.j[r][k]
 					left, right := (base.f[r]-down.f[r])/h, (up.f[r]-base.f[r])/h
@@ -90,12 +90,12 @@ func TestLoadsTakePower(t *testing.T) {
 		powerModel, currentModel, ledStringModel, filamentModel} {
 		c := cell{p: lawful(t, m), at: &Environment{Lux: 10}}
 		for v := -30.0; v <= 30; v += 0.37 {
-			c.clear()
+			c.clear(maxLocal)
 			c.v = [maxLocal]float64{v, 0}
 			if m.branches == 1 {
 				continue
 			}
-			m.eval(&c)
+			m.evaluate(&c)
 			if c.f[0]*v < 0 {
 				t.Errorf("%s at %g V takes %g A", m.Name, v, c.f[0])
 			}

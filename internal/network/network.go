@@ -20,6 +20,7 @@ type Network struct {
 	byID    map[string]int
 	memory  []int // devices with memory
 	matrix  *matrix
+	base    []float64 // what the straight laws of the run at hand put into the matrix
 	lu      *lu
 	size    int     // unknowns
 	self    []int32 // place of the diagonal of each net's row
@@ -190,6 +191,7 @@ func (n *Network) layOut() {
 		}
 	}
 	n.matrix = newMatrix(n.size, entries)
+	n.base = make([]float64, len(n.matrix.val))
 	n.lu = newLU(n.matrix, first)
 	n.self = make([]int32, max(len(n.nets)-1, 0))
 	for i := range n.self {

@@ -45,6 +45,7 @@ type run struct {
 	anchor []float64   // continuation: voltages of the nets a moment before; nil: zero
 	drive  float64     // continuation: factor of all sources
 	steps  int
+	rules  []rule // lines that devices follow, by device
 	cell   cell
 }
 
@@ -124,38 +125,58 @@ func (r *run) position(d *device) bool { return d.memory >= 0 && r.on[d.memory] 
 // load evaluates device i into r.cell at the pin voltages that are there already.
 func (r *run) load(i int, d *device) {
 	c := &r.cell
-	c.clear()
+	c.clear(len(d.at))
 	c.at, c.on, c.p = r.at, r.position(d), r.p[i]
 	if o := r.faults[i]; o != nil {
 		d.broken(c, o)
 		return
 	}
+	c.p = r.driven(i, d)
+	d.m.evaluate(c)
+}
+
+// driven are the parameters of device i, its sources turned down while they are being
+// brought up.
+func (r *run) driven(i int, d *device) []float64 {
+	p := r.p[i]
 	if r.drive != 1 && d.m.drives != nil {
-		p := append([]float64(nil), c.p...)
+		p = slices.Clone(p)
 		for _, k := range d.m.drives {
 			p[k] *= r.drive
 		}
-		c.p = p
 	}
-	d.m.eval(c)
+	return p
 }
 
-// assemble fills f and the matrix with the tangents at x. It reports whether some
-// device took its tangent elsewhere.
+// assemble fills f and the matrix with the tangents at x, the lines being ruled. It
+// reports whether some device took its tangent elsewhere.
 func (r *run) assemble() (limited bool) {
 	n, c := r.n, &r.cell
 	val := n.matrix.val
-	clear(val)
+	copy(val, n.base)
 	clear(r.f)
 	g := insulation + r.shunt
-	for i, p := range n.self {
-		val[p] += g
+	for i := range n.self {
 		r.f[i] += g * r.x[i]
 		if r.anchor != nil {
 			r.f[i] -= r.shunt * r.anchor[i]
 		}
 	}
 	for i, d := range n.devices {
+		if u := &r.rules[i]; u.follows {
+			red, black, own := d.at[0], d.at[1], d.at[2]
+			v, current := 0.0, r.x[own]
+			if red >= 0 {
+				v = r.x[red]
+				r.f[red] += current
+			}
+			if black >= 0 {
+				v -= r.x[black]
+				r.f[black] -= current
+			}
+			r.f[own] += u.off(v, current)
+			continue
+		}
 		k := len(d.at)
 		for l, u := range d.at {
 			c.v[l] = 0
@@ -219,6 +240,7 @@ func (r *run) worst() (float64, int) {
 // newton iterates from x. damped limits the step of voltages.
 func (r *run) newton(steps int, damped bool) bool {
 	r.known = false
+	r.rule()
 	idle := 0
 	for s := range steps {
 		limited := r.assemble()
@@ -273,7 +295,10 @@ func (r *run) polish() bool {
 		} else {
 			break
 		}
-		if w <= goodResidual || r.n.lu.factor(r.n.matrix) >= 0 {
+		if w <= goodResidual {
+			return true
+		}
+		if r.n.lu.factor(r.n.matrix) >= 0 {
 			break
 		}
 		r.n.lu.solve(r.f)
