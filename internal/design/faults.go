@@ -52,7 +52,7 @@ func (m *maker) faults() error {
 			if c.From != "" && m.solved[c.From] != nil {
 				from = m.solved[c.From].State
 			}
-			sol, err := m.net.Solve(env, from)
+			sol, err := m.net.SolveNear(env, from, m.solved[c.Key])
 			if err != nil {
 				f.Unsettled = append(f.Unsettled, c.Key)
 				continue
@@ -80,12 +80,18 @@ func (m *maker) compare(f *facts.Fault, i int, c *facts.Condition, sol *network.
 	}
 	for k, r := range m.f.Readings {
 		v := quantity.Volt(sol.Across(r.Point.Red.Net, r.Point.Black.Net))
+		if math.Abs(float64(v)) < noVolt {
+			v = 0
+		}
 		b := m.f.Readings[k].Bands[i]
 		if v < b.Low-deadVolt || v > b.High+deadVolt {
 			f.Moved = append(f.Moved, facts.Moved{Point: r.Point.Label, Condition: c.Key, Volt: v})
 		}
 	}
 }
+
+// noVolt is the voltage, V, below which a dead wire's is what rounding leaves of it.
+const noVolt = 1e-6
 
 // litIn returns which circuits are lit in a solution.
 func (m *maker) litIn(sol *network.Solution) map[string]bool {

@@ -61,9 +61,6 @@ const (
 // effectsKept is the number of effects that a Band lists.
 const effectsKept = 24
 
-// cornerTurns bounds how often the signs are followed to another corner.
-const cornerTurns = 3
-
 // paramStep is the relative step of a parameter for the slope of a law.
 const paramStep = 1e-6
 
@@ -89,14 +86,18 @@ func (s *Solution) Bands(outputs []Output, method Method) ([]Band, error) {
 			return nil, fmt.Errorf("a band is asked between nets %d and %d, which are not both there", o.Red, o.Black)
 		}
 	}
-	inf, err := r.influences()
-	if err != nil {
-		return nil, err
+	r.known = false
+	r.rule()
+	r.assemble()
+	r.n.lu.ready = false
+	if r.n.lu.factor(r.n.matrix) >= 0 {
+		return nil, r.notConverged()
 	}
+	inf := r.influences(nil)
 	bands := make([]Band, len(outputs))
 	slopes := make([][]float64, len(outputs))
 	for k, o := range outputs {
-		slopes[k] = r.slopes(o, inf)
+		slopes[k] = r.slopes(o, inf, nil)
 		b := Band{Output: o, Typical: r.value(o)}
 		var most []int // of inf, the strongest first
 		change := func(j int) float64 { return math.Abs(slopes[k][j]) * inf[j].half }
@@ -127,45 +128,38 @@ func (s *Solution) Bands(outputs []Output, method Method) ([]Band, error) {
 		bands[k] = b
 	}
 	if method == Corners {
-		for k := range bands {
-			if err := r.corners(&bands[k], inf, slopes[k]); err != nil {
-				return nil, err
-			}
+		if err := r.corners(bands, inf, slopes); err != nil {
+			return nil, err
 		}
 	}
 	return bands, nil
 }
 
-// influences evaluates what every toleranced parameter does to the equations at x,
-// and factorises the matrix there.
-func (r *run) influences() ([]influence, error) {
-	r.known = false
-	r.rule()
-	r.assemble()
-	r.n.lu.ready = false
-	if r.n.lu.factor(r.n.matrix) >= 0 {
-		return nil, r.notConverged()
-	}
-	var out []influence
+// influences evaluates at x what every toleranced parameter does to the equations. The
+// room of a list that is no longer needed may be given.
+func (r *run) influences(room []influence) []influence {
+	out := room[:0]
 	for i, d := range r.n.devices {
 		for k, tol := range r.tol[i] {
 			half := math.Abs(r.p[i][k]) * tol
 			if half == 0 {
 				continue
 			}
-			in := influence{device: i, param: k, half: half}
-			in.f = r.paramSlope(i, d, k)
-			out = append(out, in)
+			out = append(out, influence{device: i, param: k, half: half, f: r.paramSlope(i, d, k)})
 		}
 	}
-	return out, nil
+	return out
 }
 
 // paramSlope is the slope of the local equations of device i to its parameter k.
 func (r *run) paramSlope(i int, d *device, k int) [maxLocal]float64 {
 	keep := r.p[i]
-	defer func() { r.p[i] = keep }()
 	h := paramStep * math.Abs(keep[k])
+	if r.plain(i, k) { // the resistance of a line
+		v, current := r.through(d)
+		up, down := line{ohm: keep[k] + h}, line{ohm: keep[k] - h}
+		return [maxLocal]float64{2: (up.off(v, current) - down.off(v, current)) / (2 * h)}
+	}
 	side := func(v float64) [maxLocal]float64 {
 		p := slices.Clone(keep)
 		p[k] = v
@@ -177,6 +171,7 @@ func (r *run) paramSlope(i int, d *device, k int) [maxLocal]float64 {
 		return r.cell.f
 	}
 	up, down := side(keep[k]+h), side(keep[k]-h)
+	r.p[i] = keep
 	for a := range up {
 		up[a] = (up[a] - down[a]) / (2 * h)
 	}
@@ -184,8 +179,8 @@ func (r *run) paramSlope(i int, d *device, k int) [maxLocal]float64 {
 }
 
 // slopes returns the slope of an output to every parameter, the matrix being
-// factorised at x.
-func (r *run) slopes(o Output, inf []influence) []float64 {
+// factorised at x. The room of slopes that are no longer needed may be given.
+func (r *run) slopes(o Output, inf []influence, room []float64) []float64 {
 	c := make([]float64, r.n.size)
 	direct := -1
 	if o.Element == "" {
@@ -206,16 +201,19 @@ func (r *run) slopes(o Output, inf []influence) []float64 {
 		}
 	}
 	r.n.lu.solveTransposed(c)
-	out := make([]float64, len(inf))
-	for j, in := range inf {
+	out := slices.Grow(room[:0], len(inf))
+	for j := range inf {
+		in := &inf[j]
+		s := 0.0
 		for l, u := range r.n.devices[in.device].at {
 			if u >= 0 {
-				out[j] -= c[u] * in.f[l]
+				s -= c[u] * in.f[l]
 			}
 		}
 		if in.device == direct {
-			out[j] += in.f[0]
+			s += in.f[0]
 		}
+		out = append(out, s)
 	}
 	return out
 }
@@ -234,69 +232,4 @@ func (r *run) value(o Output) float64 {
 		v -= r.x[o.Black-1]
 	}
 	return v
-}
-
-// corners replaces the linear limits of b by solutions at its worst corners.
-func (r *run) corners(b *Band, inf []influence, slopes []float64) error {
-	b.Corners = true
-	b.Low, b.High = b.Typical, b.Typical
-	for _, side := range []float64{-1, 1} {
-		at := slopes
-		for range cornerTurns {
-			q := r.atCorner(inf, at, side)
-			if err := q.converge(true); err != nil {
-				return err
-			}
-			v := q.value(b.Output)
-			b.Low, b.High = min(b.Low, v), max(b.High, v)
-			for _, k := range q.wants() {
-				if id := r.n.devices[r.n.memory[k]].el.ID; !slices.Contains(b.Doubtful, id) {
-					b.Doubtful = append(b.Doubtful, id)
-				}
-			}
-			there, err := q.influences()
-			if err != nil {
-				return err
-			}
-			next := q.slopes(b.Output, there)
-			if len(next) != len(at) || !turned(at, next) {
-				break
-			}
-			at = next
-		}
-	}
-	return nil
-}
-
-// turned reports whether a slope has changed its sign.
-func turned(a, b []float64) bool {
-	for k := range a {
-		if a[k]*b[k] < 0 {
-			return true
-		}
-	}
-	return false
-}
-
-// atCorner is r with every parameter at the end that its slope points to.
-func (r *run) atCorner(inf []influence, slopes []float64, side float64) *run {
-	q := *r
-	q.p = slices.Clone(r.p)
-	q.rules = nil
-	q.x, q.f, q.old = slices.Clone(r.x), slices.Clone(r.f), slices.Clone(r.old)
-	for j, in := range inf {
-		if slopes[j] == 0 {
-			continue
-		}
-		if &q.p[in.device][0] == &r.p[in.device][0] {
-			q.p[in.device] = slices.Clone(r.p[in.device])
-		}
-		q.p[in.device][in.param] += math.Copysign(in.half, side*slopes[j])
-	}
-	for i, d := range r.n.devices {
-		if d.m.derive != nil && &q.p[i][0] != &r.p[i][0] {
-			d.m.derive(q.p[i], r.given[i])
-		}
-	}
-	return &q
 }

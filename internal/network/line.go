@@ -68,3 +68,20 @@ func (r *run) rule() {
 		}
 	}
 }
+
+// plain reports whether parameter k of device i is the resistance of the line that it
+// follows.
+func (r *run) plain(i, k int) bool {
+	return k == 0 && r.rules[i].follows && !r.rules[i].open && r.rules[i].emf == 0 && r.rules[i].ohm == r.p[i][0]
+}
+
+// through is the voltage between pins 0 and 1 of a device and its current.
+func (r *run) through(d *device) (v, current float64) {
+	if u := d.at[0]; u >= 0 {
+		v = r.x[u]
+	}
+	if u := d.at[1]; u >= 0 {
+		v -= r.x[u]
+	}
+	return v, r.x[d.at[2]]
+}

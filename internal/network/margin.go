@@ -38,7 +38,7 @@ func (n *Network) LoadMargin(at Environment, from State) (Margin, error) {
 	if err != nil {
 		return Margin{}, err
 	}
-	idle, err := r.settle(false)
+	idle, err := r.settle(false, nil)
 	if err != nil {
 		return Margin{}, err
 	}

@@ -23,7 +23,7 @@ var photoswitchModel = &Model{
 		{Name: "lux", Unit: "lx", Doc: "illuminance on its eye; below zero that of the condition", Default: -1},
 	},
 	Law: "light: i(13→14) = (v13 − v14)/ohm; dark: i = 0; i(+→−) = own_ampere·fade(v(+) − v(−), 3 V); " +
-		"light from light_above_lx on, dark below dark_below_lx, and dark without min_volt of supply",
+		"light from light_above_lx on, dark below dark_below_lx, and dark without min_volt of supply, at least 0.5 V",
 	Source: "definition",
 	Memory: "light/dark",
 	joined: [][2]int{{0, 1}, {2, 3}}, branches: 1,
@@ -52,7 +52,8 @@ var photoswitchModel = &Model{
 		if lux < 0 {
 			lux = c.at.Lux
 		}
-		if c.across(0, 1) < c.p[photoMin] {
+		// Where its supply is cut the sign of what rounding leaves there decides nothing.
+		if c.across(0, 1) < max(c.p[photoMin], liveVolt) {
 			return false
 		}
 		if c.on {

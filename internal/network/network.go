@@ -13,7 +13,8 @@ import (
 const insulation = 1e-12
 
 // Network is a circuit made ready to be solved in any number of conditions. It
-// keeps work space between solutions: one goroutine at a time.
+// keeps work space between solutions: one goroutine at a time. Apart gives another its
+// own.
 type Network struct {
 	nets    []string
 	devices []*device
@@ -212,6 +213,16 @@ func (n *Network) layOut() {
 		d.old = old
 		old += len(d.m.Pins)
 	}
+}
+
+// Apart is n with a work space of its own, for another goroutine. What it finds is the
+// same to the last digit.
+func (n *Network) Apart() *Network {
+	c := *n
+	c.matrix = &matrix{n: n.matrix.n, ptr: n.matrix.ptr, row: n.matrix.row, val: make([]float64, len(n.matrix.val))}
+	c.base = make([]float64, len(n.base))
+	c.lu = orderedLU(n.lu.order, n.lu.first)
+	return &c
 }
 
 // couples reports whether local equation r can depend on local unknown c. Pins of a

@@ -17,25 +17,51 @@ func (n *Network) Solve(at Environment, from State) (*Solution, error) {
 	if err != nil {
 		return nil, err
 	}
-	return r.settle(false)
+	return r.settle(false, nil)
 }
 
-// settle moves the elements with memory until all are at rest.
-func (r *run) settle(warm bool) (*Solution, error) {
-	seen := map[string]bool{r.positions(): true}
+// SolveNear is Solve for a condition that differs little from that of another solution,
+// as one with a fault or with other values does from the sound one: for every set of
+// positions the search begins at the voltages that it had there.
+func (n *Network) SolveNear(at Environment, from State, near *Solution) (*Solution, error) {
+	r, err := n.start(&at, from)
+	if err != nil {
+		return nil, err
+	}
+	return r.settle(false, near)
+}
+
+// settle moves the elements with memory until all are at rest. With warm it begins at
+// x, else where near had these positions, and goes on where near had the next ones;
+// near may be nil.
+func (r *run) settle(warm bool, near *Solution) (*Solution, error) {
+	var stops []stop
+	key := r.positions()
+	seen := map[string]bool{key: true}
 	oneByOne := false
 	var moving []int // since the circle began
 	for {
 		if err := r.checkLoops(); err != nil {
 			return nil, err
 		}
+		if !warm || len(stops) > 0 {
+			if x := near.at(key); x != nil {
+				copy(r.x, x)
+				warm = true
+			}
+		}
 		if err := r.converge(warm); err != nil {
 			return nil, err
 		}
+		stops = append(stops, stop{key, slices.Clone(r.x)})
 		warm = true
 		wants := r.wants()
 		if len(wants) == 0 {
-			return r.finish()
+			s, err := r.finish()
+			if err == nil {
+				s.stops = stops
+			}
+			return s, err
 		}
 		if oneByOne {
 			wants = wants[:1]
@@ -46,7 +72,7 @@ func (r *run) settle(warm bool) (*Solution, error) {
 				moving = append(moving, k)
 			}
 		}
-		key := r.positions()
+		key = r.positions()
 		if !seen[key] {
 			seen[key] = true
 			continue
@@ -59,6 +85,20 @@ func (r *run) settle(warm bool) (*Solution, error) {
 		clear(seen)
 		seen[key] = true
 	}
+}
+
+// at returns the operating point that a set of positions had on the way to s; nil if
+// there was none.
+func (s *Solution) at(positions string) []float64 {
+	if s == nil {
+		return nil
+	}
+	for _, p := range slices.Backward(s.stops) {
+		if p.positions == positions {
+			return p.x
+		}
+	}
+	return nil
 }
 
 // wants returns the elements with memory that are not where they should be.

@@ -19,7 +19,14 @@ type Solution struct {
 	// working range: they get less than their power.
 	Starved []string
 
-	run *run
+	run   *run
+	stops []stop // operating points on the way, one for each set of positions
+}
+
+// stop is an operating point for a set of positions.
+type stop struct {
+	positions string
+	x         []float64
 }
 
 // finish checks Kirchhoff's law independently of Newton's bookkeeping and returns
@@ -51,6 +58,15 @@ func (r *run) finish() (*Solution, error) {
 		return nil, r.notConverged()
 	}
 	return s, nil
+}
+
+// Apart is s with the work space of n, which must be the network that found it or one
+// apart from it.
+func (s *Solution) Apart(n *Network) *Solution {
+	c, r := *s, *s.run
+	r.n, r.rules = n, nil
+	c.run = &r
+	return &c
 }
 
 // liveVolt is the voltage above which a load counts as connected.

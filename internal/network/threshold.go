@@ -43,15 +43,21 @@ func (n *Network) Threshold(s Sweep, from State) (Threshold, error) {
 		}
 		return s.From + (s.To-s.From)*t
 	}
-	// Every solution starts from the voltages of the one before it on the sweep.
-	solve := func(t float64, before *Solution) (*Solution, error) {
+	// Every solution starts from the voltages of the one before it on the sweep; halfway
+	// between two, from halfway between what they had before anything moved.
+	solve := func(t float64, before, after *Solution) (*Solution, error) {
 		at := s.Set(place(t))
 		r, err := n.start(&at, before.State)
 		if err != nil {
 			return nil, err
 		}
 		copy(r.x, before.run.x)
-		return r.settle(true)
+		if x := after.at(r.positions()); x != nil {
+			for i := range r.x {
+				r.x[i] = (r.x[i] + x[i]) / 2
+			}
+		}
+		return r.settle(true, after)
 	}
 	before, err := n.Solve(s.Set(place(0)), from)
 	if err != nil {
@@ -60,7 +66,7 @@ func (n *Network) Threshold(s Sweep, from State) (Threshold, error) {
 	low := 0.0
 	for k := 1; k <= steps; k++ {
 		high := float64(k) / float64(steps)
-		after, err := solve(high, before)
+		after, err := solve(high, before, nil)
 		if err != nil {
 			return Threshold{}, err
 		}
@@ -71,7 +77,7 @@ func (n *Network) Threshold(s Sweep, from State) (Threshold, error) {
 		}
 		for high-low > sweepFine {
 			mid := (low + high) / 2
-			at, err := solve(mid, before)
+			at, err := solve(mid, before, after)
 			if err != nil {
 				return Threshold{}, err
 			}
