@@ -25,44 +25,64 @@ type trial struct {
 	like            string // key of an earlier trial that leaves the circuit the same
 }
 
-// faults solves the circuit with one thing wrong at a time, and records what is then
-// to be seen and which readings leave their bands.
-func (m *maker) faults() error {
+// faultsBeside solves the circuit with one thing wrong at a time, the longest part of a
+// design, on the processors that rest leaves free, and on its own once rest is done. It
+// records what is then to be seen and which readings leave their bands. Both read what
+// was found before; the study writes the faults only, rest everything else.
+func (m *maker) faultsBeside(rest func() error) error {
+	trials := m.trials()
 	tried := map[string]*facts.Fault{}
-	for _, t := range m.trials() {
+	var own []trial
+	for _, t := range trials {
 		f := &facts.Fault{Key: t.key, Part: t.part, What: t.what, Within: t.within}
-		tried[t.key] = f
 		if t.opens != nil {
 			f.Opens = t.opens.Part.Designation
 		}
+		if tried[t.like] == nil {
+			own = append(own, t)
+		}
+		tried[t.key] = f
 		m.f.Faults = append(m.f.Faults, f)
-		if same := tried[t.like]; same != nil {
-			f.Dark, f.Lit, f.Moved, f.Unsettled, f.Sign = same.Dark, same.Lit, same.Moved, same.Unsettled, same.Sign
-			continue
-		}
-		for i, c := range m.f.Conditions {
-			if !c.Shown || t.night && c.Key != "outage-night" {
-				continue
-			}
-			env := m.envs[i]
-			for _, o := range t.overrides {
-				env = env.With(o)
-			}
-			from := m.solved[c.Key].State
-			if c.From != "" && m.solved[c.From] != nil {
-				from = m.solved[c.From].State
-			}
-			sol, err := m.net.SolveNear(env, from, m.solved[c.Key])
-			if err != nil {
-				f.Unsettled = append(f.Unsettled, c.Key)
-				continue
-			}
-			m.compare(f, i, c, sol)
-		}
+	}
+	if err := m.sideBySide(len(own), rest, func(n *network.Network, i int) error {
+		f := tried[own[i].key]
+		m.try(n, own[i], f)
 		f.Sign = m.sign(f)
+		return nil
+	}); err != nil {
+		return err
+	}
+	for i, t := range trials {
+		if same := tried[t.like]; same != nil {
+			f := m.f.Faults[i]
+			f.Dark, f.Lit, f.Moved, f.Unsettled, f.Sign = same.Dark, same.Lit, same.Moved, same.Unsettled, same.Sign
+		}
 	}
 	m.group()
 	return nil
+}
+
+// try solves one fault in every condition that it is tried in.
+func (m *maker) try(n *network.Network, t trial, f *facts.Fault) {
+	for i, c := range m.f.Conditions {
+		if !c.Shown || t.night && c.Key != "outage-night" {
+			continue
+		}
+		env := m.envs[i]
+		for _, o := range t.overrides {
+			env = env.With(o)
+		}
+		from := m.solved[c.Key].State
+		if c.From != "" && m.solved[c.From] != nil {
+			from = m.solved[c.From].State
+		}
+		sol, err := n.SolveNear(env, from, m.solved[c.Key])
+		if err != nil {
+			f.Unsettled = append(f.Unsettled, c.Key)
+			continue
+		}
+		m.compare(f, i, c, sol)
+	}
 }
 
 // compare records which circuits and readings differ from the sound circuit.

@@ -1,7 +1,6 @@
 package design
 
 import (
-	"errors"
 	"slices"
 
 	"gloamwright/internal/circuit"
@@ -91,7 +90,7 @@ func attempt(site *describe.Site, kept circuit.Labels, more stage.Reserve) (*Des
 	}
 	m.dropWorkings()
 	m.relay()
-	if err := m.besideFaults(func() error {
+	if err := m.faultsBeside(func() error {
 		if err := m.thresholds(); err != nil {
 			return err
 		}
@@ -100,22 +99,6 @@ func attempt(site *describe.Site, kept circuit.Labels, more stage.Reserve) (*Des
 		return nil, err
 	}
 	return &Design{Facts: f, Findings: finding.Judge(f), Labels: labels}, nil
-}
-
-// besideFaults runs rest while the fault study, the longest part of a design, runs on
-// a network of its own. Both read what was found so far; the study writes the faults
-// only, rest everything else.
-func (m *maker) besideFaults(rest func() error) error {
-	n, err := network.New(m.f.Netlist)
-	if err != nil {
-		return err
-	}
-	study := *m
-	study.net = n
-	done := make(chan error, 1)
-	go func() { done <- study.faults() }()
-	err = rest()
-	return errors.Join(err, <-done)
 }
 
 // maker is a design in the making.

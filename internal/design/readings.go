@@ -4,6 +4,7 @@ import (
 	"fmt"
 	"math"
 
+	"gloamwright/internal/circuit"
 	"gloamwright/internal/facts"
 	"gloamwright/internal/network"
 	"gloamwright/internal/quantity"
@@ -27,38 +28,54 @@ func (m *maker) readings() error {
 		}
 		m.f.Readings = append(m.f.Readings, &facts.Reading{Point: tp})
 	}
-	for _, c := range m.f.Conditions {
-		sol := m.solved[c.Key]
-		var control, field []network.Output
-		for _, tp := range points {
-			o := network.Between(tp.Red.Net, tp.Black.Net)
-			if tp.Stage != "" && c.Shown {
-				control = append(control, o)
-			} else {
-				field = append(field, o)
-			}
-		}
-		// Cards bend their laws: their bands are solved at the corners. Behind the
-		// boards all is nearly linear.
-		corners, err := sol.Bands(control, network.Corners)
+	bands := make([][]network.Band, len(m.f.Conditions))
+	if err := m.sideBySide(len(bands), nil, func(n *network.Network, i int) (err error) {
+		c := m.f.Conditions[i]
+		bands[i], err = pointBands(m.solved[c.Key].Apart(n), points)
 		if err != nil {
 			return fmt.Errorf("bands in condition %q: %w", c.Name, err)
 		}
-		linear, err := sol.Bands(field, network.Linear)
-		if err != nil {
-			return fmt.Errorf("bands in condition %q: %w", c.Name, err)
-		}
-		for i, tp := range points {
-			var b network.Band
-			if tp.Stage != "" && c.Shown {
-				b, corners = corners[0], corners[1:]
-			} else {
-				b, linear = linear[0], linear[1:]
-			}
-			m.f.Readings[i].Bands = append(m.f.Readings[i].Bands, band(b))
+		return nil
+	}); err != nil {
+		return err
+	}
+	for i := range points {
+		for k := range bands {
+			m.f.Readings[i].Bands = append(m.f.Readings[i].Bands, band(bands[k][i]))
 		}
 	}
 	return m.fuseLoads()
+}
+
+// pointBands are the bands of all test points in a solution. The cards of the stages
+// bend their laws: their bands are solved at the corners. Behind the boards all is
+// nearly linear.
+func pointBands(sol *network.Solution, points []*circuit.TestPoint) ([]network.Band, error) {
+	var control, field []network.Output
+	for _, tp := range points {
+		if o := network.Between(tp.Red.Net, tp.Black.Net); tp.Stage != "" {
+			control = append(control, o)
+		} else {
+			field = append(field, o)
+		}
+	}
+	corners, err := sol.Bands(control, network.Corners)
+	if err != nil {
+		return nil, err
+	}
+	linear, err := sol.Bands(field, network.Linear)
+	if err != nil {
+		return nil, err
+	}
+	var out []network.Band
+	for _, tp := range points {
+		if tp.Stage != "" {
+			out, corners = append(out, corners[0]), corners[1:]
+		} else {
+			out, linear = append(out, linear[0]), linear[1:]
+		}
+	}
+	return out, nil
 }
 
 // band adds the meter's error to a band of the network.
