@@ -9,6 +9,7 @@ import (
 	"gloamwright/internal/commission"
 	"gloamwright/internal/describe"
 	"gloamwright/internal/design"
+	"gloamwright/internal/sitegen"
 	"gloamwright/internal/stage"
 )
 
@@ -226,5 +227,54 @@ func TestBrokenSheets(t *testing.T) {
 		if !list.HasErrors() || !strings.Contains(list[0].Summary, c.want) {
 			t.Errorf("%s: %v, want %q", c.name, list, c.want)
 		}
+	}
+}
+
+// A relay that may stand either way: readings in either position pass, one between the
+// two does not, and the sheet says both.
+func TestEitherWayPasses(t *testing.T) {
+	src := sitegen.Site(10, sitegen.Options{Control: sitegen.Follower})
+	site, list := describe.Parse("site.yaml", src, stage.Schema())
+	if list.HasErrors() {
+		t.Fatal(list)
+	}
+	d, err := design.Make(site, nil)
+	if err != nil {
+		t.Fatal(err)
+	}
+	both := 0
+	for _, l := range commission.Lines(d) {
+		both += len(l.Or)
+	}
+	if both == 0 {
+		t.Fatal("no line has two bands")
+	}
+	if text := string(commission.YAML(d)); strings.Count(text, " V with -K1 let go") != both {
+		t.Errorf("the sheet does not say %d times what -K1 let go gives", both)
+	}
+	in := func(pick func(l commission.Line) float64) int {
+		r := accept(t, d, fill(d, func(l commission.Line) string { return fmt.Sprintf("%.2f V", pick(l)) }))
+		return r.Open
+	}
+	if n := in(func(l commission.Line) float64 { return l.Typical }); n != 0 {
+		t.Errorf("held in: %d open", n)
+	}
+	other := func(l commission.Line) float64 {
+		if len(l.Or) > 0 {
+			return (l.Or[0].Low + l.Or[0].High) / 2
+		}
+		return l.Typical
+	}
+	if n := in(other); n != 0 {
+		t.Errorf("let go: %d open", n)
+	}
+	middle := func(l commission.Line) float64 {
+		if len(l.Or) > 0 {
+			return (l.High + l.Or[0].Low) / 2
+		}
+		return l.Typical
+	}
+	if n := in(middle); n != both {
+		t.Errorf("between the two: %d open, want %d", n, both)
 	}
 }

@@ -3,6 +3,7 @@ package commission
 import (
 	"fmt"
 	"math"
+	"slices"
 
 	"gloamwright/internal/describe"
 	"gloamwright/internal/design"
@@ -92,6 +93,14 @@ var slips = []struct {
 	{0.001, "it would be inside as millivolts: was it read in mV and written with V?"},
 }
 
+// holds reports whether a reading lies in a band of the line.
+func (l Line) holds(v float64) bool {
+	if l.Low-hair <= v && v <= l.High+hair {
+		return true
+	}
+	return slices.ContainsFunc(l.Or, func(o Or) bool { return o.Low-hair <= v && v <= o.High+hair })
+}
+
 // judge compares one reading with its band.
 func judge(l Line, x Reading) Judged {
 	out := Judged{Line: l, Text: x.Text, At: x.At}
@@ -105,7 +114,7 @@ func judge(l Line, x Reading) Judged {
 		return out
 	}
 	out.Measured = v
-	in := func(v float64) bool { return l.Low-hair <= v && v <= l.High+hair }
+	in := l.holds
 	switch {
 	case in(v):
 		out.Verdict = Inside

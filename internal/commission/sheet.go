@@ -29,6 +29,22 @@ type Line struct {
 	Low       float64 // V
 	Typical   float64
 	High      float64
+	Or        []Or // bands beside that one, where a relay may stand either way
+}
+
+// Or is a band beside that of a line.
+type Or struct {
+	Low, High float64
+	With      string // "-K1 let go"
+}
+
+// beside says in words what a line may show instead.
+func (l Line) beside() string {
+	s := ""
+	for _, o := range l.Or {
+		s += fmt.Sprintf("; or %.1f V to %.1f V with %s", o.Low, o.High, o.With)
+	}
+	return s
 }
 
 // Lines lists every measurement of a design: the conditions in the order of
@@ -42,7 +58,12 @@ func Lines(d *design.Design) []Line {
 		}
 		for _, r := range d.Readings {
 			b := r.Bands[i]
+			var or []Or
+			for _, o := range r.OrAt(i) {
+				or = append(or, Or{Low: down(float64(o.Low)), High: up(float64(o.High)), With: o.With})
+			}
 			out = append(out, Line{
+				Or:        or,
 				Condition: c.Key, Name: c.Name, Number: c.Number, Point: r.Point.Label, Shows: r.Point.Shows,
 				Red: r.Point.Red.String(), Black: r.Point.Black.String(),
 				Low: down(float64(b.Low)), Typical: math.Round(float64(b.Typical)*10) / 10, High: up(float64(b.High)),
@@ -67,6 +88,9 @@ func Fingerprint(lines []Line) string {
 	h := sha256.New()
 	for _, l := range lines {
 		fmt.Fprintf(h, "%s|%s|%s|%s|%.1f|%.1f\n", l.Condition, l.Point, l.Red, l.Black, l.Low, l.High)
+		if len(l.Or) > 0 {
+			fmt.Fprintln(h, l.beside())
+		}
 	}
 	return hex.EncodeToString(h.Sum(nil))[:12]
 }
@@ -87,7 +111,7 @@ func YAML(d *design.Design) []byte {
 			last = l.Condition
 		}
 		fmt.Fprintf(&b, "  %s: {red: %s, black: %s, low: %.1f V, typical: %.1f V, high: %.1f V, measured: }   # %s\n",
-			l.Point, quote(l.Red), quote(l.Black), l.Low, l.Typical, l.High, l.Shows)
+			l.Point, quote(l.Red), quote(l.Black), l.Low, l.Typical, l.High, l.Shows+l.beside())
 	}
 	return b.Bytes()
 }
@@ -120,7 +144,7 @@ func CSV(d *design.Design) ([]byte, error) {
 	}
 	f := func(v float64) string { return strconv.FormatFloat(v, 'f', 1, 64) }
 	for _, l := range lines {
-		rows = append(rows, []string{l.Condition, l.Point, l.Shows, l.Red, l.Black, f(l.Low), f(l.Typical), f(l.High), ""})
+		rows = append(rows, []string{l.Condition, l.Point, l.Shows + l.beside(), l.Red, l.Black, f(l.Low), f(l.Typical), f(l.High), ""})
 	}
 	if err := w.WriteAll(rows); err != nil {
 		return nil, fmt.Errorf("readings sheet: %w", err)

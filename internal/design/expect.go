@@ -15,18 +15,19 @@ import (
 // battery's current with its band.
 func (m *maker) expect() error {
 	for _, c := range m.f.Conditions {
-		parts := []string{m.lights(c)}
+		parts := []string{m.lights(c.Lit)}
 		for _, s := range c.State {
 			p := m.partOf(s.Element)
 			switch {
 			case p == nil:
-			case p.Kind == circuit.Relay && s.Position == "picked up":
-				parts = append(parts, p.Designation+" held in.")
 			case p.Kind == circuit.Relay:
-				parts = append(parts, p.Designation+" let go.")
+				parts = append(parts, p.Designation+" "+relayWord(s.Position == "picked up")+".")
 			case p.Kind == circuit.CutOff:
 				parts = append(parts, p.Designation+" "+s.Position+".")
 			}
+		}
+		for _, e := range c.Either {
+			parts = append(parts, "Or "+stateWords(e.Parts)+", with "+lower(m.lights(e.Lit)))
 		}
 		current, err := m.batteryCurrent(c)
 		if err != nil {
@@ -40,8 +41,8 @@ func (m *maker) expect() error {
 	return nil
 }
 
-func (m *maker) lights(c *facts.Condition) string {
-	switch n := len(m.site.Circuits); len(c.Lit) {
+func (m *maker) lights(lit []string) string {
+	switch n := len(m.site.Circuits); len(lit) {
 	case 0:
 		return "None lit."
 	case n:
@@ -50,9 +51,12 @@ func (m *maker) lights(c *facts.Condition) string {
 		}
 		return fmt.Sprintf("All %d circuits lit.", n)
 	default:
-		return fmt.Sprintf("%d of %d circuits lit.", len(c.Lit), n)
+		return fmt.Sprintf("%d of %d circuits lit.", len(lit), n)
 	}
 }
+
+// lower is a sentence as it goes on in the middle of another.
+func lower(s string) string { return strings.ToLower(s[:1]) + s[1:] }
 
 func (m *maker) partOf(element string) *circuit.Part {
 	for _, p := range m.f.Circuit.Parts {

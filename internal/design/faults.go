@@ -103,8 +103,7 @@ func (m *maker) compare(f *facts.Fault, i int, c *facts.Condition, sol *network.
 		if math.Abs(float64(v)) < noVolt {
 			v = 0
 		}
-		b := m.f.Readings[k].Bands[i]
-		if v < b.Low-deadVolt || v > b.High+deadVolt {
+		if !slices.ContainsFunc(m.f.Readings[k].At(i), func(b facts.Band) bool { return v >= b.Low-deadVolt && v <= b.High+deadVolt }) {
 			f.Moved = append(f.Moved, facts.Moved{Point: r.Point.Label, Condition: c.Key, Volt: v})
 		}
 	}

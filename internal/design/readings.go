@@ -29,9 +29,15 @@ func (m *maker) readings() error {
 		m.f.Readings = append(m.f.Readings, &facts.Reading{Point: tp})
 	}
 	bands := make([][]network.Band, len(m.f.Conditions))
+	others := make([][]otherState, len(m.f.Conditions))
 	if err := m.sideBySide(len(bands), nil, func(n *network.Network, i int) (err error) {
 		c := m.f.Conditions[i]
-		bands[i], err = pointBands(m.solved[c.Key].Apart(n), points)
+		sol := m.solved[c.Key].Apart(n)
+		var doubtful []string
+		bands[i], doubtful, err = m.pointBands(sol)
+		if err == nil {
+			others[i], err = m.others(n, sol, i, doubtful)
+		}
 		if err != nil {
 			return fmt.Errorf("bands in condition %q: %w", c.Name, err)
 		}
@@ -39,43 +45,54 @@ func (m *maker) readings() error {
 	}); err != nil {
 		return err
 	}
-	for i := range points {
-		for k := range bands {
-			m.f.Readings[i].Bands = append(m.f.Readings[i].Bands, band(bands[k][i]))
+	for k, c := range m.f.Conditions {
+		for _, o := range others[k] {
+			c.Either = append(c.Either, o.Either)
+		}
+		for i, r := range m.f.Readings {
+			b, or := withOthers(band(bands[k][i]), others[k], i)
+			r.Bands, r.Or = append(r.Bands, b), append(r.Or, or)
 		}
 	}
 	return m.fuseLoads()
 }
 
-// pointBands are the bands of all test points in a solution. The cards of the stages
-// bend their laws: their bands are solved at the corners. Behind the boards all is
-// nearly linear.
-func pointBands(sol *network.Solution, points []*circuit.TestPoint) ([]network.Band, error) {
+// pointBands are the bands of all test points in a solution, and what may stand
+// elsewhere within the tolerances. The cards of the stages bend their laws: their bands
+// are solved at the corners, and so are the coils. Behind the boards all is nearly linear.
+func (m *maker) pointBands(sol *network.Solution) (out []network.Band, doubtful []string, err error) {
 	var control, field []network.Output
-	for _, tp := range points {
-		if o := network.Between(tp.Red.Net, tp.Black.Net); tp.Stage != "" {
+	for _, r := range m.f.Readings {
+		if o := network.Between(r.Point.Red.Net, r.Point.Black.Net); r.Point.Stage != "" {
 			control = append(control, o)
 		} else {
 			field = append(field, o)
 		}
 	}
+	for _, p := range m.f.Circuit.Parts {
+		if p.Kind == circuit.Relay {
+			control = append(control, network.Between(p.Pin("A1").Net, p.Pin("A2").Net))
+		}
+	}
 	corners, err := sol.Bands(control, network.Corners)
 	if err != nil {
-		return nil, err
+		return nil, nil, err
+	}
+	for _, b := range corners {
+		doubtful = append(doubtful, b.Doubtful...)
 	}
 	linear, err := sol.Bands(field, network.Linear)
 	if err != nil {
-		return nil, err
+		return nil, nil, err
 	}
-	var out []network.Band
-	for _, tp := range points {
-		if tp.Stage != "" {
+	for _, r := range m.f.Readings {
+		if r.Point.Stage != "" {
 			out, corners = append(out, corners[0]), corners[1:]
 		} else {
 			out, linear = append(out, linear[0]), linear[1:]
 		}
 	}
-	return out, nil
+	return out, doubtful, nil
 }
 
 // band adds the meter's error to a band of the network.

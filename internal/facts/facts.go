@@ -65,8 +65,21 @@ type Condition struct {
 	Volts      []quantity.Volt // by net
 	Residual   float64         // largest current imbalance at a node, A
 	Shown      bool            // printed in the packet's six conditions
+	// Either are the other ways in which the condition may stand: a relay within its
+	// hysteresis, or moved by the tolerances.
+	Either []Either
 	// BatteryBand is the band of the current's magnitude; zero while floating.
 	BatteryBand quantity.Range[quantity.Ampere]
+}
+
+// Either is another state in which a condition may be found.
+type Either struct {
+	// Parts stand elsewhere: "-K1 let go".
+	Parts []State
+	// Tolerance is set when it takes the tolerances of the parts; else it depends on
+	// what was before.
+	Tolerance bool
+	Lit       []string // the circuits that are then lit
 }
 
 // Loop is the resistance of a run of two cores with its far end joined, as it is
@@ -99,6 +112,32 @@ type State struct{ Element, Position string }
 type Reading struct {
 	Point *circuit.TestPoint
 	Bands []Band // one a condition, same order
+	// Or is what it shows instead in another state of the condition, where a meter tells
+	// the two apart; no more than one a state.
+	Or [][]Or
+}
+
+// Or is a band apart from the first one, in another state of the condition.
+type Or struct {
+	Band
+	With string // the state in words: "-K1 let go"
+}
+
+// At returns the band in a condition and those beside it.
+func (r *Reading) At(condition int) []Band {
+	out := []Band{r.Bands[condition]}
+	for _, o := range r.OrAt(condition) {
+		out = append(out, o.Band)
+	}
+	return out
+}
+
+// OrAt returns the bands beside that of a condition, most often none.
+func (r *Reading) OrAt(condition int) []Or {
+	if condition >= len(r.Or) {
+		return nil
+	}
+	return r.Or[condition]
 }
 
 // Band is the lowest, typical and highest voltage to expect. Root is the half-width

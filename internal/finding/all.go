@@ -32,6 +32,7 @@ func All() []*Check {
 		dateMissing,
 		dusk,
 		duskHysteresis,
+		eitherWay,
 		escapeRoute,
 		extraLowVoltage,
 		feederDrop,

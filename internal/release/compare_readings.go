@@ -83,11 +83,19 @@ const (
 	bandSlack = 1e-6
 )
 
-// String prints a band: "23.9 to 24.6 V, typical 24.2 V".
+// String prints a band: "23.9 to 24.6 V, typical 24.2 V", and what may stand beside it.
 func (b recordBand) String() string {
-	low := math.Floor(b.Low/bandStep+bandSlack) * bandStep
-	high := math.Ceil(b.High/bandStep-bandSlack) * bandStep
-	return fmt.Sprintf("%s to %s V, typical %s V", volts(low), volts(high), volts(b.Typical))
+	s := bandText(b.Low, b.Typical, b.High)
+	for _, o := range b.Or {
+		s += "; or with " + o.With + " " + bandText(o.Low, o.Typical, o.High)
+	}
+	return s
+}
+
+func bandText(low, typical, high float64) string {
+	low = math.Floor(low/bandStep+bandSlack) * bandStep
+	high = math.Ceil(high/bandStep-bandSlack) * bandStep
+	return fmt.Sprintf("%s to %s V, typical %s V", volts(low), volts(high), volts(typical))
 }
 
 // volts prints a voltage with one decimal, never as a negative zero.

@@ -66,6 +66,12 @@ type recordBand struct {
 	Low     float64 `json:"low_v"`
 	Typical float64 `json:"typical_v"`
 	High    float64 `json:"high_v"`
+	Or      []struct {
+		With    string
+		Low     float64 `json:"low_v"`
+		Typical float64 `json:"typical_v"`
+		High    float64 `json:"high_v"`
+	}
 }
 
 type recordLamp struct {

@@ -24,6 +24,14 @@ type condEntry struct {
 	// Values holds the parameters that stand in place of those under network.
 	Values map[string]map[string]*float64 `json:"values"`
 	Volts  map[string]*float64            `json:"volts"`
+	// Either lists the other states in which the condition may be found.
+	Either []eitherEntry `json:"either,omitempty"`
+}
+
+type eitherEntry struct {
+	State map[string]string `json:"state"` // by designation, of the parts that stand elsewhere
+	By    string            `json:"by"`    // "history" or "tolerance"
+	Lit   []string          `json:"lit"`
 }
 
 func conditions(d *design.Design, nets []string) []condEntry {
@@ -46,6 +54,16 @@ func conditions(d *design.Design, nets []string) []condEntry {
 		}
 		for i, v := range c.Volts {
 			e.Volts[nets[i]] = to(v, networkDigits)
+		}
+		for _, x := range c.Either {
+			o := eitherEntry{State: map[string]string{}, By: "history", Lit: list(x.Lit)}
+			if x.Tolerance {
+				o.By = "tolerance"
+			}
+			for _, s := range x.Parts {
+				o.State[s.Element] = s.Position
+			}
+			e.Either = append(e.Either, o)
 		}
 		out = append(out, e)
 	}

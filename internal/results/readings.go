@@ -19,6 +19,16 @@ type bandEntry struct {
 	TypicalV *float64 `json:"typical_v"`
 	HighV    *float64 `json:"high_v"`
 	RootV    *float64 `json:"root_v"`
+	// Or is what it shows instead while the condition stands otherwise.
+	Or []orEntry `json:"or,omitempty"`
+}
+
+// orEntry is the reading in another state of the condition.
+type orEntry struct {
+	With     string   `json:"with"`
+	LowV     *float64 `json:"low_v"`
+	TypicalV *float64 `json:"typical_v"`
+	HighV    *float64 `json:"high_v"`
 }
 
 func testPoints(d *design.Design, nets, conds []string) []pointEntry {
@@ -33,9 +43,13 @@ func testPoints(d *design.Design, nets, conds []string) []pointEntry {
 			e.Net = nets[n]
 		}
 		for i, b := range r.Bands {
-			e.Readings[conds[i]] = bandEntry{
+			x := bandEntry{
 				LowV: to(b.Low, readingDigits), TypicalV: to(b.Typical, readingDigits), HighV: to(b.High, readingDigits), RootV: figure(b.Root),
 			}
+			for _, o := range r.OrAt(i) {
+				x.Or = append(x.Or, orEntry{With: o.With, LowV: to(o.Low, readingDigits), TypicalV: to(o.Typical, readingDigits), HighV: to(o.High, readingDigits)})
+			}
+			e.Readings[conds[i]] = x
 		}
 		out = append(out, e)
 	}

@@ -22,6 +22,12 @@ func testPointTable(d *design.Design) *Table {
 				r.Point.Label, r.Point.Shows, r.Point.Red.String(), black, strconv.Itoa(c.Number), c.Name,
 				cell(figure(b.Low)), cell(figure(b.Typical)), cell(figure(b.High)),
 			})
+			for _, o := range r.OrAt(i) {
+				t.Rows = append(t.Rows, []string{
+					r.Point.Label, r.Point.Shows, r.Point.Red.String(), black, strconv.Itoa(c.Number), c.Name + ", or with " + o.With,
+					cell(figure(o.Low)), cell(figure(o.Typical)), cell(figure(o.High)),
+				})
+			}
 		}
 	}
 	return t

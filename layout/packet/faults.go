@@ -240,8 +240,11 @@ func (b *book) measureText(m facts.Moved) (measure, shows string) {
 		measure = bold(r.Point.Label) + " " + r.Point.Shows
 		shows = typicalVolt(m.Volt) + " V"
 		if c != nil {
-			band := r.Bands[b.conditionIndex(c)]
-			shows += fmt.Sprintf(", not %s to %s", lowVolt(band.Low), highVolt(band.High))
+			i := b.conditionIndex(c)
+			shows += ", not " + pairText(r.Bands[i])
+			for _, o := range r.OrAt(i) {
+				shows += " nor " + pairText(o.Band)
+			}
 		}
 	}
 	return measure, shows

@@ -61,7 +61,9 @@ func tenths(n float64) string {
 }
 
 // bandText is "24.3 to 25.6 V".
-func bandText(b facts.Band) string { return lowVolt(b.Low) + " to " + highVolt(b.High) + " V" }
+func pairText(b facts.Band) string { return lowVolt(b.Low) + " to " + highVolt(b.High) }
+
+func bandText(b facts.Band) string { return pairText(b) + " V" }
 
 // counted is "1 light", "22 lights".
 func counted(n int, one string) string {

@@ -2,6 +2,7 @@ package packet
 
 import (
 	"fmt"
+	"slices"
 
 	"gloamwright/internal/facts"
 	"gloamwright/layout/ink"
@@ -40,6 +41,12 @@ func (b *book) testPoints() *section {
 			x := t.line(b, 0, rw)
 			x.next = true
 			rows = append(rows, x)
+			for _, o := range r.OrAt(i) {
+				x := t.line(b, 0, row{topic: topic, cells: []cell{
+					fat("or"), over(txt("with "+o.With), 2), txt(lowVolt(o.Low)), half(typicalVolt(o.Typical)), txt(highVolt(o.High)), none(), none(), none()}})
+				x.next = true
+				rows = append(rows, x)
+			}
 		}
 		if n := len(rows); n > 0 {
 			rows[n-1].next = false
@@ -149,7 +156,10 @@ func (b *book) matrix() *section {
 			for i, c := range shown {
 				band := r.Bands[p.b.conditionIndex(c)]
 				x := l + first + float64(i)*each + 1.5
-				if highVolt(band.High) == "0.1" {
+				if or := r.OrAt(p.b.conditionIndex(c)); len(or) > 0 {
+					p.write(x+value-1.5, y+3.9, typicalVolt(band.Typical), tableText, ink.End)
+					p.write(x+value-1.5, y+7.9, "or "+typicalVolt(or[0].Typical), tableText, ink.End)
+				} else if highVolt(band.High) == "0.1" {
 					p.write(x+value-1.5, y+5.8, "0.0", tableText, ink.End)
 				} else {
 					p.write(x+value-1.5, y+3.9, highVolt(band.High), tableText, ink.End)
@@ -173,6 +183,11 @@ func (b *book) matrix() *section {
 	}
 	s.blocks = append(s.blocks, together(rows)...)
 	note := fmt.Sprintf("Each pair of figures is the highest and the lowest reading to expect, in volts DC; 0.0 stands for 0.0 to 0.1. A reading outside its pair: %s.", b.sheets(keyFaults))
+	if slices.ContainsFunc(b.d.Readings, func(r *facts.Reading) bool {
+		return slices.ContainsFunc(shown, func(c *facts.Condition) bool { return len(r.OrAt(b.conditionIndex(c))) > 0 })
+	}) {
+		note += fmt.Sprintf(" A figure with or: a relay may stand either way; typical readings, their bands are on %s.", b.sheets(keyTestPoints))
+	}
 	s.blocks = append(s.blocks, b.paragraphIn(note, noteText, 0.5, pg.width))
 	return s
 }

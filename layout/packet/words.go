@@ -210,7 +210,12 @@ func (b *book) bandIn(r *facts.Reading, condition string) string {
 	if c == nil {
 		return ""
 	}
-	return bandText(r.Bands[b.conditionIndex(c)])
+	i := b.conditionIndex(c)
+	out := bandText(r.Bands[i])
+	for _, o := range r.OrAt(i) {
+		out += fmt.Sprintf(", or %s with %s", bandText(o.Band), o.With)
+	}
+	return out
 }
 
 // readingAt is the test point whose red probe rests on a part.

@@ -86,7 +86,7 @@ func (b *book) readingsTable(sh *Sheet, p *plan) {
 		}
 		for i, c := range columns {
 			if c < len(r.Bands) {
-				bandText(o, readingFirst+readingColumn*float64(i), y, r.Bands[c])
+				bandText(o, readingFirst+readingColumn*float64(i), y, r.Bands[c], r.OrAt(c))
 			}
 		}
 	}
@@ -96,9 +96,15 @@ func (b *book) readingsTable(sh *Sheet, p *plan) {
 // nothing is a voltage that a meter's own error may show on a dead conductor, V.
 const nothing = 0.12
 
-// bandText prints the typical value and the band of one reading.
-func bandText(o *object, x, y float64, v facts.Band) {
+// bandText prints the typical value and the band of one reading, or the typical values
+// of both ways in which it may stand.
+func bandText(o *object, x, y float64, v facts.Band, or []facts.Or) {
 	typical := volts(v.Typical)
+	if len(or) > 0 {
+		o.add(textAt(x+4.4, y, typical, nameStyle, ink.End))
+		o.add(textAt(x+5.4, y, "or "+volts(or[0].Typical), valueStyle, ink.Start))
+		return
+	}
 	if v.High < nothing && v.Low > -nothing {
 		o.add(textAt(x+4.4, y, "0 V", nameStyle, ink.End))
 		return
