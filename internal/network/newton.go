@@ -15,9 +15,12 @@ const (
 	goodStep     = 1e-9  // last step of an unknown, relative to 1 V or 1 A or itself
 	// A part of the circuit that only insulation ties to net 0 has its voltage
 	// against it to rounding over insulation: steps up to idleStep volts there are
-	// accepted when idleTurns steps in a row have left all laws fulfilled.
+	// accepted when idleTurns steps in a row have left all laws fulfilled and were not
+	// the smaller ones of a way that still leads somewhere: where a law begins flat, as
+	// the current of a module without supply, each is half of the one before.
 	idleStep    = 1e-2
 	idleTurns   = 4
+	shrinks     = 0.7
 	warmSteps   = 16 // from a solution nearby; a cold start is better than many more
 	plainSteps  = 60
 	dampedSteps = 200
@@ -241,7 +244,7 @@ func (r *run) worst() (float64, int) {
 func (r *run) newton(steps int, damped bool) bool {
 	r.known = false
 	r.rule()
-	idle := 0
+	idle, last := 0, 0.0
 	for s := range steps {
 		limited := r.assemble()
 		r.steps++
@@ -268,11 +271,12 @@ func (r *run) newton(steps int, damped bool) bool {
 		for i, dx := range r.f {
 			r.x[i] -= scale * dx
 		}
-		if limited || scale < 1 || w > goodResidual || biggest > idleStep {
+		if limited || scale < 1 || w > goodResidual || biggest > idleStep || biggest < shrinks*last {
 			idle = 0
 		} else {
 			idle++
 		}
+		last = biggest
 		if !limited && settled && scale == 1 || idle == idleTurns {
 			return r.polish()
 		}
