@@ -55,7 +55,7 @@ more than 2 %. Targets and weights are common practice; crossings weigh most, as
 - **Lr** For up to three ends half the perimeter of their box is the least length that joins them; for more, where nothing is that short, the shortest tree from end to end
   stands in its place. Nets of rails and bars are left out: their length would hide the rest.
 - **A** Symbols that have a peer on the sheet: one of the same class letter that stands the same way. A symbol is in line if it is on the level of another that stands the same
-  way, or in series with another of its stage on one upright; not if it misses the row of a peer of its stage by less than a symbol's height.
+  way, or over or under another on one upright; not if it misses the row of a peer of its stage by less than a symbol's height.
 - **F** References from stage to stage in the description, as the energy or the signal goes, to the stages of the sheet.
 - **U** The box around circuit and tables. Rails and leads that go on elsewhere reach the edge wherever the rest stands: their width does not count, nor do notes and title
   block. A board of one way, or the rest of a circuit, does not fill a sheet. The shape is width over height, against the same of the field.

@@ -92,26 +92,36 @@ func expandChangeover(b *Build, s *describe.Stage) {
 	feeds := b.coilFeeds(s)
 	levels := []int{coilLevel1, coilLevel2, coilLevel3}
 	for i, f := range feeds {
-		y := levels[i]
-		n := strconv.Itoa(i + 1)
+		local := "coil" + strconv.Itoa(i+1)
 		end := k.Pin("A1")
+		var r *circuit.Part
 		if len(feeds) > 1 {
-			r := b.Part("feed"+n, circuit.Schottky, "Schottky diode in the coil feed", "A", "K")
+			r = b.Part("feed"+strconv.Itoa(i+1), circuit.Schottky, "Schottky diode in the coil feed", "A", "K")
 			b.Element(r, "", "schottky", "A", "A", "K", "K")
 			b.Join(r.Pin("K"), k.Pin("A1"))
 			end = r.Pin("A")
-			b.symbol("schottky", r, 8, float64(y), "H", "A")
-			if i == 0 {
-				b.line(nil, 10, y, 15, y, 15, 38)
-			} else {
-				b.line(nil, 10, y, 15, y)
+		}
+		if i == 0 && f.rail != "" { // straight down from its rail to the coil
+			y := 38
+			if r != nil {
+				b.symbol("schottky", r, 15, feedRow, "V", "L")
+				b.line(nil, 15, feedRow+2, 15, 38)
+				y = feedRow - 2
 			}
+			b.number(b.coilRail(f, end, local, 15, y), 15, 9)
+			continue
 		}
-		if len(feeds) > 1 {
-			b.coilFeed(f, end, "coil"+n, y, 0, y, 6, y)
-		} else {
-			b.coilFeed(f, end, "coil"+n, y, 0, y, 15, y, 15, 38)
+		y := levels[i]
+		way := []int{15, y}
+		if i == 0 {
+			way = append(way, 15, 38)
 		}
+		if r != nil {
+			b.symbol("schottky", r, 8, float64(y), "H", "A")
+			b.line(nil, append([]int{10, y}, way...)...)
+			way = []int{6, y}
+		}
+		b.coilFeed(f, end, local, y, append([]int{0, y}, way...)...)
 	}
 	b.symbol("coil", k, 15, 40, "V", "L")
 	b.line(nil, 15, 36, 21, 36, 21, 38)

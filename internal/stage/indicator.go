@@ -26,14 +26,14 @@ func indicator() *Kind {
 			p := b.Part("lamp", circuit.SignalLamp, "Signal lamp, LED", "1", "2")
 			b.Element(p, "", "led", "A", "1", "K", "2")
 			from, _ := b.ref(s, "from")
-			b.sketch(12, "shows that", "it is live")
-			up := b.lead(circuit.OpUp, "plus", r.Pin("1"), from, 6, 12, 6, upEnd)
-			b.symbol("resistor", r, 6, 14, "V", "L")
-			b.line(b.Wire(r.Pin("2"), p.Pin("1"), true, bridgeLength), 6, 16, 6, 24)
-			b.symbol("signal_lamp", p, 6, 26, "V", "L")
-			down := b.lead(circuit.OpDown, "minus", p.Pin("2"), Minus, 6, 28, 6, downEnd)
-			b.number(up, 6, 9)
-			b.number(down, 6, 42)
+			b.sketch(16, "shows that", "it is live")
+			up := b.lead(circuit.OpUp, "plus", r.Pin("1"), from, 12, 12, 12, upEnd)
+			b.symbol("resistor", r, 12, 14, "V", "L")
+			b.line(b.Wire(r.Pin("2"), p.Pin("1"), true, bridgeLength), 12, 16, 12, 24)
+			b.symbol("signal_lamp", p, 12, 26, "V", "L")
+			down := b.lead(circuit.OpDown, "minus", p.Pin("2"), Minus, 12, 28, 12, downEnd)
+			b.number(up, 12, 9)
+			b.number(down, 12, 42)
 		},
 		Steps: []Step{{Control, sizeIndicator}},
 	}

@@ -26,12 +26,12 @@ func isolator() *Kind {
 			q := b.Part("isolator", circuit.SwitchIsolator, "Isolator, DC rated", "1", "2")
 			b.Element(q, "", "switch", "1", "1", "2", "2")
 			from, _ := b.ref(s, "from")
-			b.sketch(16, "opens by hand")
-			in := b.lead(circuit.OpIn, "in", q.Pin("1"), from, 4, upEnd, 4, 17, 6, 17)
-			b.symbol("switch_disc", q, 8, 17, "H", "B")
-			out := b.lead(circuit.OpUp, "out", q.Pin("2"), b.outRail(s, "out"), 10, 17, 12, 17, 12, upEnd)
-			b.number(in, 4, 11)
-			b.number(out, 12, 11)
+			b.sketch(21, "opens by hand")
+			in := b.lead(circuit.OpIn, "in", q.Pin("1"), from, 10, upEnd, 10, 17, 12, 17)
+			b.symbol("switch_disc", q, 14, 17, "H", "B")
+			out := b.lead(circuit.OpUp, "out", q.Pin("2"), b.outRail(s, "out"), 16, 17, 18, 17, 18, upEnd)
+			b.number(in, 10, 11)
+			b.number(out, 18, 11)
 		},
 		Steps: []Step{{Trunk, sizeIsolator}},
 	}

@@ -33,21 +33,21 @@ func shuntRegulator() *Kind {
 			b.Element(z, "", "zener", "A", "A", "K", "K")
 			b.Join(r.Pin("2"), z.Pin("K"))
 			from, _ := b.ref(s, "from")
-			b.sketch(22, "steadies the", "coil's feed")
+			b.sketch(27, "steadies the", "coil's feed")
 			f := b.feedOf(from)
 			if f.rail != "" {
-				up := b.lead(circuit.OpUp, "plus", r.Pin("1"), f.rail, 8, 14, 8, upEnd)
-				b.number(up, 8, 11)
+				up := b.lead(circuit.OpUp, "plus", r.Pin("1"), f.rail, 17, 14, 17, upEnd)
+				b.number(up, 17, 11)
 			} else {
-				b.coilFeed(f, r.Pin("1"), "raw", 10, 0, 10, 8, 10, 8, 14)
+				b.coilFeed(f, r.Pin("1"), "raw", 10, 0, 10, 17, 10, 17, 14)
 			}
-			b.symbol("resistor", r, 8, 16, "V", "L")
-			b.line(nil, 8, 18, 8, 30)
-			b.output(s, "out", z.Pin("K"), coilLevel1, 8, 19)
-			b.symbol("zener", z, 8, 32, "U", "L")
-			down := b.lead(circuit.OpDown, "minus", z.Pin("A"), Minus, 8, 34, 8, downEnd)
-			b.point(b.TestPoint("out", "Steadied coil feed", z.Pin("K")), 11, coilLevel1, "N")
-			b.number(down, 8, 42)
+			b.symbol("resistor", r, 17, 16, "V", "L")
+			b.line(nil, 17, 18, 17, 30)
+			b.output(s, "out", z.Pin("K"), coilLevel1, 17, 24)
+			b.symbol("zener", z, 17, 32, "U", "L")
+			down := b.lead(circuit.OpDown, "minus", z.Pin("A"), Minus, 17, 34, 17, downEnd)
+			b.point(b.TestPoint("out", "Steadied coil feed", z.Pin("K")), 20, coilLevel1, "N")
+			b.number(down, 17, 42)
 		},
 		Steps: []Step{{Storage, sizeShunt}},
 	}

@@ -12,6 +12,7 @@ const (
 	coilLevel1 = 24 // first coil feed
 	coilLevel2 = 34 // second coil feed, output of a photocell
 	coilLevel3 = 14 // third coil feed
+	feedRow    = 20 // diode of a coil feed that comes down from a rail
 	pairLevel  = 27 // sensor pair of a charger, and 31
 	upEnd      = 3  // an upward lead ends here
 	downEnd    = 52 // a downward lead ends here

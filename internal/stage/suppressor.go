@@ -24,12 +24,12 @@ func suppressor() *Kind {
 			f := b.Part("suppressor", circuit.Suppressor, "Suppressor diode, bidirectional", "1", "2")
 			b.Element(f, "", "suppressor", "1", "1", "2", "2")
 			from, _ := b.ref(s, "from")
-			b.sketch(12, "clips surges")
-			up := b.lead(circuit.OpUp, "plus", f.Pin("1"), from, 6, 24, 6, upEnd)
-			b.symbol("tvs_bi", f, 6, 26, "V", "L")
-			down := b.lead(circuit.OpDown, "minus", f.Pin("2"), Minus, 6, 28, 6, downEnd)
-			b.number(up, 6, 11)
-			b.number(down, 6, 42)
+			b.sketch(15, "clips surges")
+			up := b.lead(circuit.OpUp, "plus", f.Pin("1"), from, 12, 24, 12, upEnd)
+			b.symbol("tvs_bi", f, 12, 26, "V", "L")
+			down := b.lead(circuit.OpDown, "minus", f.Pin("2"), Minus, 12, 28, 12, downEnd)
+			b.number(up, 12, 11)
+			b.number(down, 12, 42)
 		},
 		Steps: []Step{{Trunk, sizeSuppressor}},
 	}

@@ -72,3 +72,13 @@ func (b *Build) coilFeed(f feed, pin *circuit.Pin, local string, y int, xy ...in
 	b.add(it)
 	return it.Wire
 }
+
+// coilRail joins a rail to a pin of the current stage by a lead that comes straight
+// down to level y at x.
+func (b *Build) coilRail(f feed, pin *circuit.Pin, local string, x, y int) *circuit.Conductor {
+	t := b.Terminal(cabinet, local)
+	b.onRail(b.rails[f.rail], t.Pin("out"))
+	w := b.Wire(t.Pin("in"), pin, true, leadLength)
+	b.add(circuit.SketchItem{Op: circuit.OpUp, Part: t, Wire: w, Rail: b.rails[f.rail].Name, Pts: [][2]int{{x, y}, {x, upEnd}}})
+	return w
+}

@@ -121,10 +121,9 @@ func (b *book) arrangeFrom(boxes []*stageBox, alone bool, shift int) (*plan, boo
 	if p.end > colLast && !alone {
 		return nil, false
 	}
-	if !p.place(index, tracks) && !alone {
-		return nil, false
-	}
-	return p, b.layRails(p) || alone
+	at := p.placeTracks(tracks)
+	ok := b.layRails(p)
+	return p, p.placeLinks(index, at) && ok || alone
 }
 
 // track is one upright lead in a gap.
@@ -195,11 +194,12 @@ func (p *plan) arrives(index map[*stageBox]int, x *stageBox) bool {
 	return false
 }
 
-// place gives every track its column and every link and drop its way. It reports
-// false when the rows below L− do not suffice.
-func (p *plan) place(index map[*stageBox]int, tracks [][]*track) bool {
-	ups, downs := map[*link]int{}, map[*link]int{}
-	turns := map[*link]int{}
+// trackColumns says where the upright pieces of links stand.
+type trackColumns struct{ ups, downs, turns map[*link]int }
+
+// placeTracks gives every track its column and every drop its way.
+func (p *plan) placeTracks(tracks [][]*track) trackColumns {
+	at := trackColumns{map[*link]int{}, map[*link]int{}, map[*link]int{}}
 	for i, list := range tracks {
 		for j, t := range list {
 			if i < len(p.boxes) {
@@ -219,14 +219,21 @@ func (p *plan) place(index map[*stageBox]int, tracks [][]*track) bool {
 				y := rowRail + t.drop.y
 				p.drops = append(p.drops, dropRun{t.drop, t.x, []node{{t.x, rowRingUpper + 1}, {t.x, y}, {p.xs[i], y}}})
 			case t.up:
-				ups[t.link] = t.x
+				at.ups[t.link] = t.x
 			case t.down:
-				downs[t.link] = t.x
+				at.downs[t.link] = t.x
 			default:
-				turns[t.link] = t.x
+				at.turns[t.link] = t.x
 			}
 		}
 	}
+	return at
+}
+
+// placeLinks gives every link its way. It reports false when the rows over and under
+// the rails do not suffice.
+func (p *plan) placeLinks(index map[*stageBox]int, at trackColumns) bool {
+	high := p.freeAbove()
 	var low []taken
 	ok := true
 	seen := map[*link]bool{}
@@ -249,16 +256,22 @@ func (p *plan) place(index map[*stageBox]int, tracks [][]*track) bool {
 			case level && from.Y == to.Y:
 				r.pts = []node{from, to}
 			case level:
-				r.pts = []node{from, {turns[k], from.Y}, {turns[k], to.Y}, to}
+				r.pts = []node{from, {at.turns[k], from.Y}, {at.turns[k], to.Y}, to}
 			default:
 				x0, x1 := colArrive, colLeave
 				if f >= 0 {
-					x0 = downs[k]
+					x0 = at.downs[k]
 				}
 				if t < len(p.boxes) {
-					x1 = ups[k]
+					x1 = at.ups[k]
 				}
-				y, free := freeRow(&low, rowsLow, min(x0, x1), max(x0, x1))
+				y, free := 0, false
+				if max(from.Y, to.Y) <= rowRail+highest { // nearer to the upper rows
+					y, free = freeRow(&high.in, high.rows, min(x0, x1), max(x0, x1))
+				}
+				if !free {
+					y, free = freeRow(&low, rowsLow, min(x0, x1), max(x0, x1))
+				}
 				ok = ok && free
 				if f >= 0 {
 					r.pts = append(r.pts, from, node{x0, from.Y})
@@ -274,23 +287,46 @@ func (p *plan) place(index map[*stageBox]int, tracks [][]*track) bool {
 	return ok
 }
 
+// highest is the level under the L+ rail down to which a link between stages that are
+// no neighbours runs over the rails: the first coil feed. What is lower runs under L−,
+// so as to pass no other coil feed.
+const highest = 24
+
+// rowsUsed are rows and the stretches of them that are in use.
+type rowsUsed struct {
+	rows []int
+	in   []taken
+}
+
+// freeAbove are the rows of the auxiliary rails, with the rails in them.
+func (p *plan) freeAbove() rowsUsed {
+	u := rowsUsed{rows: rowsTwo[1:]}
+	if p.tight {
+		u.rows = rowsThree[1:]
+	}
+	for _, r := range p.rails {
+		if r.rail.Positive {
+			u.in = append(u.in, taken{r.y, r.x0, r.x1})
+		}
+	}
+	return u
+}
+
 // taken is a stretch of a row that is in use.
 type taken struct{ y, x0, x1 int }
 
 // freeRow takes the first row that is free between two columns. With none free it
-// takes the last and reports false.
+// returns the last, takes nothing and reports false.
 func freeRow(in *[]taken, rows []int, x0, x1 int) (int, bool) {
-	y, ok := rows[len(rows)-1], false
 	for _, r := range rows {
 		free := true
 		for _, t := range *in {
 			free = free && (t.y != r || x1+2 < t.x0 || t.x1+2 < x0)
 		}
 		if free {
-			y, ok = r, true
-			break
+			*in = append(*in, taken{r, x0, x1})
+			return r, true
 		}
 	}
-	*in = append(*in, taken{y, x0, x1})
-	return y, ok
+	return rows[len(rows)-1], false
 }

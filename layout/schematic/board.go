@@ -60,7 +60,7 @@ func (b *book) drawBoard(sh *Sheet, s *boardSheet) error {
 func (b *book) guides(sh *Sheet, s *boardSheet, xs []int, end int) {
 	o := sh.scene.object(classGuide, "lanes", "")
 	for _, x := range append(append([]int{}, xs...), end+1) {
-		o.add(segment(guidePen, float64(x-1), rowGuideTop, float64(x-1), b.footTop()-1))
+		o.add(segment(guidePen, float64(x-1), rowGuideTop, float64(x-1), b.footTop(s)-1))
 	}
 }
 
@@ -313,7 +313,7 @@ func (b *book) columnOval(sh *Sheet, v columnOval, x int) {
 	fx := float64(x + v.x)
 	if v.upright {
 		o.add(&oval{at: point{fx + branchOval, v.y}, rx: 0.45, ry: 1.7})
-		o.add(textAt(fx+branchOval+0.8, v.y-1.5, coresAndSize(v.cable), valueStyle, ink.Start))
+		o.add(textAt(fx+branchOval+0.8, v.y+2.5, coresAndSize(v.cable), valueStyle, ink.Start))
 		return
 	}
 	o.add(&oval{at: point{fx + minusCore/2, v.y}, rx: 3.7, ry: 0.45})

@@ -10,14 +10,15 @@ import (
 
 // Rows of a supply sheet, in modules.
 const (
-	rowRail      = 11 // L+
-	rowRingUpper = 13
-	rowHeading   = 16.1
-	rowFrameTop  = 17
-	rowFrameEnd  = 61
-	rowRingLower = 64
-	rowMinus     = 67
-	rowTables    = 75
+	rowRail       = 11 // L+
+	rowRingUpper  = 13
+	rowHeading    = 16.1
+	rowFrameTop   = 17
+	rowFrameEnd   = 61
+	rowRingLower  = 64
+	rowDropNumber = 26 // wire number at a lead that comes down in a gap
+	rowMinus      = 67
+	rowTables     = 75
 )
 
 // rowsTwo and rowsThree are the rows of plus rails where two suffice and where three

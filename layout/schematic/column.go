@@ -32,6 +32,7 @@ const (
 	branchLength = 12.0 // where the length of a branch's first leg stands
 	branchOval   = 8.5
 	combReach    = 2 // of the cores of a comb behind its last run, to the reference
+	sideApart    = 2 // between the level cores of a side run
 )
 
 // Rows of a board sheet.
@@ -257,35 +258,36 @@ func (r *runner) run(points []*circuit.Point, row, lane int, plus, minus []node,
 
 // branch lays a side run of p, whose rung is at y, at row or below, and returns the
 // next row of the parent's run. The cores of the last branch of a last luminaire
-// begin at its rung, the others on the passing cores.
+// begin at its rung, the others on the passing cores. The L+ core runs level into the
+// first luminaire, the L− core sideApart above it.
 func (r *runner) branch(p *circuit.Point, b []*circuit.Point, row, lane, y, after int, ends bool) int {
 	x := lane * laneWidth
 	side := false
 	if lane+1 < r.lanes {
 		at := max(row, r.free[lane+1]+1)
-		if side = at+1 <= r.rows-1 && at+after <= r.rows-1; side {
+		if side = at <= r.rows-1 && at+after <= r.rows-1; side {
 			row = at
 		}
 	}
 	yb := lampRow(row)
-	plus, minus := []node{{x, yb + 1}}, []node{{x + minusCore, yb - 1}}
+	plus, minus := []node{{x, yb}}, []node{{x + minusCore, yb - sideApart}}
 	if ends {
-		plus, minus = []node{{x, y}, {x, yb + 1}}, []node{{x + minusCore, y}, {x + minusCore, yb - 1}}
+		plus, minus = []node{{x, y}, {x, yb}}, []node{{x + minusCore, y}, {x + minusCore, yb - sideApart}}
 	}
 	leg := b[0].Leg
 	if !side {
 		to := x + minusCore + 1
-		plus, minus = append(plus, node{to, yb + 1}), append(minus, node{to, yb - 1})
+		plus, minus = append(plus, node{to, yb}), append(minus, node{to, yb - sideApart})
 		r.cut(b, plus, minus, 'E')
 		return row + 1
 	}
 	to := x + laneWidth
-	plus, minus = append(plus, node{to, yb + 1}), append(minus, node{to + minusCore, yb - 1})
+	plus, minus = append(plus, node{to, yb}), append(minus, node{to + minusCore, yb - sideApart})
 	if leg.Size != p.Leg.Size {
-		r.c.ovals = append(r.c.ovals, columnOval{leg, x, float64(yb), true})
+		r.c.ovals = append(r.c.ovals, columnOval{leg, x, float64(yb) - sideApart/2, true})
 	}
-	r.length(leg, float64(x)+branchLength, float64(yb)+textHeight/2)
-	r.run(b, row+1, lane+1, plus, minus, true)
+	r.length(leg, float64(x)+branchLength, float64(yb)-sideApart/2+textHeight/2)
+	r.run(b, row, lane+1, plus, minus, true)
 	return row + 1
 }
 

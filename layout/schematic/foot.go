@@ -13,10 +13,32 @@ import (
 // Rows of a board's foot below its top, in modules.
 var footRows = [4]float64{2.1, 3.9, 5.7, 7.5}
 
+// rowsShort is the number of rows of a sheet whose ways are short, three quarters of
+// all: its foot stands higher, nearer to what it tells of. It stands in one of two
+// places only, so that a luminaire more moves it rarely.
+func (b *book) rowsShort() int { return (3*b.rows() + 3) / 4 }
+
+// footTop is the upper edge of the foot of a board's sheet: under the last row.
+func (b *book) footTop(s *boardSheet) float64 {
+	for _, c := range s.columns {
+		for _, p := range c.cores {
+			for _, n := range p.pts {
+				if n.Y > lampRow(b.rowsShort()-1) {
+					return b.down(rowFoot)
+				}
+			}
+		}
+	}
+	return float64(lampRow(b.rowsShort()))
+}
+
+// rowFoot is the foot's upper edge on a full sheet.
+const rowFoot = 91
+
 // foot prints what every way feeds.
 func (b *book) foot(sh *Sheet, s *boardSheet, xs []int, end int) {
 	o := sh.scene.object(classTable, "foot", "Ways of "+s.board.Title)
-	top := b.footTop()
+	top := b.footTop(s)
 	o.add(segment(middlePen, colText, top, float64(end), top))
 	for i, h := range []string{"Circuit", "Luminaires", "Lit when", "Far end"} {
 		pen := thinPen

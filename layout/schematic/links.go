@@ -16,7 +16,7 @@ func (b *book) drawLinks(sh *Sheet, p *plan) {
 		sc.wire(d.drop.wire, d.pts...)
 		sc.ring(d.drop.term, node{d.x, rowRingUpper}, false)
 		if c := d.drop.wire; c != nil {
-			sc.number(c, textAt(float64(d.x)-0.5, 26, c.Number, wireStyle, ink.End))
+			sc.number(c, textAt(float64(d.x)-0.5, rowDropNumber, c.Number, wireStyle, ink.End))
 		}
 	}
 	pairs := map[*circuit.Cable][]linkRun{}
@@ -53,6 +53,14 @@ func (b *book) linkNumber(sh *Sheet, p *plan, r linkRun) {
 		sh.scene.number(c, textAt(float64(r.pts[1].X)-0.5, float64(r.pts[1].Y+r.pts[2].Y)/2+0.5, c.Number, wireStyle, ink.End))
 		return
 	case r.arrive && len(r.pts) == 2: // the reference says it
+		return
+	case r.arrive: // beside the piece that comes to the stage
+		up, down := r.pts[1], r.pts[2]
+		y := float64(up.Y+down.Y)/2 + textHeight/2
+		if between(up.Y, rowDropNumber, down.Y) {
+			y = rowDropNumber
+		}
+		sh.scene.number(c, textAt(float64(up.X)-0.5, y, c.Number, wireStyle, ink.End))
 		return
 	case r.leave:
 		x = float64(a.X) + 3

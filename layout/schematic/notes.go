@@ -27,7 +27,6 @@ func (b *book) down(y float64) float64 {
 }
 
 func (b *book) notesTop() float64 { return b.down(103) }
-func (b *book) footTop() float64  { return b.down(91) }
 
 // note gives a sheet its cautions and notes. Where they need more room than there
 // is, notes are left out from the last on.

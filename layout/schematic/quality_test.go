@@ -124,4 +124,4 @@ func TestGeneratedQuality(t *testing.T) {
 }
 
 // farOut is a score that is worth a look.
-const farOut = 3
+const farOut = 1

@@ -139,6 +139,13 @@ func (p *plan) over(y int) float64 {
 			return overTight
 		}
 	}
+	for _, k := range p.runs {
+		for _, n := range k.pts {
+			if n.Y == y-2 && y < rowMinus {
+				return overTight
+			}
+		}
+	}
 	return overLine
 }
 
@@ -207,8 +214,9 @@ func (b *book) railName(sh *Sheet, p *plan, r railRun) {
 	}
 	for _, k := range p.runs {
 		for i := 1; i < len(k.pts); i++ {
-			if k.pts[i].X == k.pts[i-1].X && max(k.pts[i].Y, k.pts[i-1].Y) > rowMinus {
-				posts = append(posts, k.pts[i].X)
+			a, z := k.pts[i-1], k.pts[i]
+			if a.X == z.X && (r.y == rowMinus && max(a.Y, z.Y) > rowMinus || r.y < rowMinus && min(a.Y, z.Y) < r.y) {
+				posts = append(posts, a.X)
 			}
 		}
 	}

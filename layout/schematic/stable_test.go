@@ -218,3 +218,29 @@ func BenchmarkThousand(b *testing.B) {
 		}
 	})
 }
+
+// The foot of a board stands in one of two places: a luminaire more moves it only when
+// a way outgrows the short sheet.
+func TestFootHasTwoPlaces(t *testing.T) {
+	at := func(luminaires int) float64 {
+		src := sitegen.Site(luminaires, sitegen.Options{Shape: sitegen.OneWay, Control: sitegen.Direct, Lamps: sitegen.Drivers})
+		for _, s := range drawn(t, dressed(t, parsed(t, src)), false) {
+			for _, x := range s.Page.Texts {
+				if x.S == "Circuit" && x.Group.In(classTable) && s.Circuit {
+					return x.At.Y
+				}
+			}
+		}
+		t.Fatal("no foot")
+		return 0
+	}
+	short := at(1)
+	for n := 2; n <= 4; n++ {
+		if y := at(n); y != short {
+			t.Errorf("%d luminaires: the foot stands at %.1f mm, with one at %.1f mm", n, y, short)
+		}
+	}
+	if long := at(12); long <= short {
+		t.Errorf("12 luminaires: the foot stands at %.1f mm, with one at %.1f mm", long, short)
+	}
+}

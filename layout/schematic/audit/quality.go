@@ -296,7 +296,7 @@ func (r *reader) rows(q *Quality) {
 			}
 			dx, dy := math.Abs(float64(a.at.x-b.at.x))/50, math.Abs(float64(a.at.y-b.at.y))/50
 			peer = peer || a.up == b.up && a.class == b.class
-			in = in || dy == 0 && a.up == b.up || dx == 0 && a.block == b.block
+			in = in || dy == 0 && a.up == b.up || dx == 0
 			miss = miss || a.up && b.up && a.class == b.class && a.block == b.block && dx > 0 && dy > 0 && dy < symbolHeight-near
 		}
 		if !peer {
