@@ -86,8 +86,16 @@ func TestQualityIsKept(t *testing.T) {
 	}
 }
 
-// The numbers of the generated sites, stages and boards apart: how many sheets are
-// within each target, and how far out the others are.
+// mostWithin is the share of the generated sites' sheets that are within each target.
+const mostWithin = 0.95
+
+// On boards the sites ask for what a target forbids: a run folded into ladders takes
+// longer lines than the shortest tree, and one way, or the rest of a circuit, does not
+// fill a sheet.
+var boardsWithin = map[string]float64{"B": 0.9, "Lr": 0.85, "U": 0.4}
+
+// The numbers of the generated sites, stages and boards apart: most sheets are within
+// each target. Printed are least, median and greatest.
 func TestGeneratedQuality(t *testing.T) {
 	var sheets [2][]audit.Quality
 	for i := range varied {
@@ -104,7 +112,7 @@ func TestGeneratedQuality(t *testing.T) {
 		}
 	}
 	for k, kind := range []string{"stages", "boards"} {
-		report := func(name string, value func(q audit.Quality) float64, met func(q audit.Quality) bool) {
+		report := func(name string, value func(q audit.Quality) float64, met func(q audit.Quality) bool) (share float64) {
 			var list []float64
 			within := 0
 			for _, q := range sheets[k] {
@@ -115,13 +123,20 @@ func TestGeneratedQuality(t *testing.T) {
 			}
 			slices.Sort(list)
 			t.Logf("%s, %s: %.2f, %.2f, %.2f; %d of %d within", kind, name, list[0], list[len(list)/2], list[len(list)-1], within, len(list))
+			return float64(within) / float64(len(list))
 		}
 		for _, x := range audit.Targets {
-			report(x.Symbol, x.Value, func(q audit.Quality) bool { return x.Distance(q) == 0 })
+			need := mostWithin
+			if v, ok := boardsWithin[x.Symbol]; ok && kind == "boards" {
+				need = v
+			}
+			if share := report(x.Symbol, x.Value, func(q audit.Quality) bool { return x.Distance(q) == 0 }); share < need {
+				t.Errorf("%s: %.0f %% of the sheets are within the target of %s, not %.0f %%", kind, 100*share, x.Symbol, 100*need)
+			}
 		}
 		report("score", audit.Quality.Score, func(q audit.Quality) bool { return q.Score() < 1 })
 	}
 }
 
 // farOut is a score that is worth a look.
-const farOut = 1
+const farOut = 5
