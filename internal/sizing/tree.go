@@ -91,7 +91,8 @@ func (t *Tree) Copper(sizes []*Option) float64 {
 	return v
 }
 
-func (t *Tree) priced() bool {
+// Priced reports whether the options have prices, so that cost is minimised and not copper.
+func (t *Tree) Priced() bool {
 	for i := range t.Options {
 		if t.Options[i].Price > 0 {
 			return true

@@ -40,7 +40,7 @@ func (t *Tree) plan() (*plan, error) {
 	n := len(t.Legs)
 	p := &plan{
 		t: t, kids: make([][]int, n+1), group: make([]int, n), common: map[string]int{},
-		shared: make([]bool, n), inactive: make([]bool, n), priced: t.priced(),
+		shared: make([]bool, n), inactive: make([]bool, n), priced: t.Priced(),
 	}
 	heads := map[string]bool{}
 	for i := range t.Legs {

@@ -22,6 +22,12 @@ func everyWorking(t *testing.T) []Working {
 			t.Error(err)
 		}
 	}
+	tree := plainTree()
+	chosen, err := tree.Choose()
+	ok(err)
+	keep(tree.CopperWorking(chosen.Sizes), BoundWorking(chosen.Cost, chosen.Bound, "cm³", chosen.Proven), BoundWorking(40317, 40178, "cm³", false))
+	tree.Lengths = quantity.InFeet
+	keep(tree.CopperWorking(chosen.Sizes))
 	c15, _ := catalogue.ConductorOf(quantity.WireSize{Area: 1.5})
 	_, w := ResistanceAt(2.5, 20, 55, catalogue.CopperZero)
 	keep(w)
@@ -29,7 +35,7 @@ func everyWorking(t *testing.T) []Working {
 	keep(w)
 	_, w = LeastArea(LeastAreaInput{Resistivity: 0.0205, Moment: 37.5, Drop: 1.2})
 	keep(w)
-	_, w, err := Ampacity(AmpacityInput{Table: catalogue.AmpacityB2, Size: c15.Size, Ambient: 35, Grouped: 3})
+	_, w, err = Ampacity(AmpacityInput{Table: catalogue.AmpacityB2, Size: c15.Size, Ambient: 35, Grouped: 3})
 	ok(err)
 	keep(w)
 	_, w, err = ChooseFuse(FuseInput{Class: catalogue.FuseBlade, Load: 1.7, LoadFactor: 0.8, Cable: 11})

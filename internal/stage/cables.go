@@ -395,6 +395,7 @@ func (t *tree) assign(r *sizing.TreeResult) {
 	if r.Cost > 0 {
 		p.F.Totals.Bound, p.F.Totals.Proven = quantity.Ratio((r.Bound+t.paid)/(r.Cost+t.paid)), r.Proven
 	}
+	t.workings(r)
 }
 
 // run gives a cable its size and its cores their resistance.
