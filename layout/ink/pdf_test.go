@@ -5,8 +5,6 @@ import (
 	"compress/zlib"
 	"fmt"
 	"io"
-	"regexp"
-	"strconv"
 	"strings"
 	"sync"
 	"testing"
@@ -60,8 +58,8 @@ func inflated(t *testing.T, file []byte) []byte {
 	return out
 }
 
-// TestSameBytesAfterOtherDocuments fails when documents share what one of them writes
-// into.
+// TestSameBytesAfterOtherDocuments fails when the font bytes are shared between
+// documents: gofpdf overwrites part of them.
 func TestSameBytesAfterOtherDocuments(t *testing.T) {
 	want := testBook(t, "x")
 	for i := range 50 {
@@ -149,41 +147,5 @@ func TestNoClock(t *testing.T) {
 	out, err := p.Output()
 	if err != nil || bytes.Count(out, []byte("D:19700101000000")) != 2 {
 		t.Errorf("dates of an undated document: %v", err)
-	}
-}
-
-// TestPDFTable reads the cross-reference table as ISO 32000-1, 7.5.4, has it: entries of
-// 20 bytes, each the place of its object, and every object that is named is there.
-func TestPDFTable(t *testing.T) {
-	file := testBook(t, "x")
-	var start, count int
-	tail := string(file[bytes.LastIndex(file, []byte("startxref")):])
-	if _, err := fmt.Sscanf(tail, "startxref\n%d\n%%%%EOF", &start); err != nil {
-		t.Fatal(err)
-	}
-	if _, err := fmt.Sscanf(string(file[start:start+20]), "xref\n0 %d\n", &count); err != nil {
-		t.Fatal(err)
-	}
-	entries := file[start+len(fmt.Sprintf("xref\n0 %d\n", count)):]
-	for n := 1; n < count; n++ {
-		var at, generation int
-		var kind string
-		if _, err := fmt.Sscanf(string(entries[20*n:20*n+20]), "%d %d %s", &at, &generation, &kind); err != nil || kind != "n" {
-			t.Fatalf("entry %d: %q", n, entries[20*n:20*n+20])
-		}
-		if want := fmt.Sprintf("%d 0 obj\n", n); !bytes.HasPrefix(file[at:], []byte(want)) {
-			t.Errorf("entry %d leads to %q", n, file[at:at+12])
-		}
-	}
-	for _, m := range regexp.MustCompile(`\b(\d+) 0 R\b`).FindAllSubmatch(inflated(t, file), -1) {
-		if n, err := strconv.Atoi(string(m[1])); err != nil || n < 1 || n >= count {
-			t.Errorf("object %s is named and not there", m[1])
-		}
-	}
-	for _, m := range regexp.MustCompile(`/Length (\d+)>>\nstream\n`).FindAllSubmatchIndex(file, -1) {
-		n, _ := strconv.Atoi(string(file[m[2]:m[3]]))
-		if !bytes.HasPrefix(file[m[1]+n:], []byte("\nendstream")) {
-			t.Errorf("a stream at %d is not %d bytes long", m[1], n)
-		}
 	}
 }

@@ -194,15 +194,10 @@ func pdfMarks(t *testing.T, file []byte, n int, height float64) (list []mark) {
 			cur = mark{}
 		case "Tf":
 			size = stack[len(stack)-1] / k
-		case "cm", "Tm":
+		case "cm":
 			matrix = append([]float64(nil), stack...)
-		}
-		switch word {
-		case "Td", "Tm":
-			x, y := 0.0, 0.0
-			if word == "Td" {
-				x, y = stack[0], stack[1]
-			}
+		case "Td":
+			x, y := stack[0], stack[1]
 			m := mark{kind: "text", size: size, color: fill, turned: matrix != nil}
 			if matrix != nil {
 				x, y = matrix[0]*x+matrix[2]*y+matrix[4], matrix[1]*x+matrix[3]*y+matrix[5]

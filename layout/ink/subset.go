@@ -32,19 +32,13 @@ const (
 // renumbered, without hinting. Line metrics and the licence notice stay.
 // The file is only read.
 func subsetFont(file []byte, cmap *[0x10000]uint16, runes []rune) ([]byte, error) {
-	out, _, err := subsetGlyphs(file, cmap, runes)
-	return out, err
-}
-
-// subsetGlyphs is subsetFont with the new numbers of glyphs by the old.
-func subsetGlyphs(file []byte, cmap *[0x10000]uint16, runes []rune) ([]byte, map[uint16]uint16, error) {
 	in, err := readTables(file)
 	if err != nil {
-		return nil, nil, err
+		return nil, err
 	}
 	g, err := newGlyphTable(in)
 	if err != nil {
-		return nil, nil, err
+		return nil, err
 	}
 	runes = slices.Clone(runes)
 	slices.Sort(runes)
@@ -52,12 +46,12 @@ func subsetGlyphs(file []byte, cmap *[0x10000]uint16, runes []rune) ([]byte, map
 	old := []uint16{0} // glyph 0 is the one for missing signs
 	for _, r := range runes {
 		if r < 0 || r > 0xFFFE || cmap[r] == 0 {
-			return nil, nil, fmt.Errorf("the font has no glyph for %U", r)
+			return nil, fmt.Errorf("the font has no glyph for %U", r)
 		}
 		old = append(old, cmap[r])
 	}
 	if old, err = g.closure(old); err != nil {
-		return nil, nil, err
+		return nil, err
 	}
 	number := map[uint16]uint16{}
 	for i, o := range old {
@@ -70,7 +64,7 @@ func subsetGlyphs(file []byte, cmap *[0x10000]uint16, runes []rune) ([]byte, map
 		loca = be.AppendUint32(loca, uint32(len(glyf)))
 		data, err := g.rewritten(o, number)
 		if err != nil {
-			return nil, nil, err
+			return nil, err
 		}
 		glyf = append(glyf, data...)
 		for len(glyf)%4 != 0 {
@@ -89,12 +83,12 @@ func subsetGlyphs(file []byte, cmap *[0x10000]uint16, runes []rune) ([]byte, map
 	be.PutUint32(post, postNoNames)
 	names, err := keptNames(in["name"])
 	if err != nil {
-		return nil, nil, err
+		return nil, err
 	}
 	return writeTables(map[string][]byte{
 		"OS/2": in["OS/2"], "cmap": characterMap(runes, cmap, number), "glyf": glyf, "head": head, "hhea": hhea,
 		"hmtx": hmtx, "loca": loca, "maxp": maxp, "name": names, "post": post,
-	}), number, nil
+	}), nil
 }
 
 // readTables cuts a font file into its tables and sees that those needed here are
