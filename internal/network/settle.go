@@ -22,7 +22,8 @@ func (n *Network) Solve(at Environment, from State) (*Solution, error) {
 
 // SolveNear is Solve for a condition that differs little from that of another solution,
 // as one with a fault or with other values does from the sound one: for every set of
-// positions the search begins at the voltages that it had there.
+// positions the search begins at the voltages that it had there, and for positions that
+// it never had, at its last.
 func (n *Network) SolveNear(at Environment, from State, near *Solution) (*Solution, error) {
 	r, err := n.start(&at, from)
 	if err != nil {
@@ -32,8 +33,8 @@ func (n *Network) SolveNear(at Environment, from State, near *Solution) (*Soluti
 }
 
 // settle moves the elements with memory until all are at rest. With warm it begins at
-// x, else where near had these positions, and goes on where near had the next ones;
-// near may be nil.
+// x, else where near had these positions or came to rest, and goes on where near had the
+// next ones; near may be nil.
 func (r *run) settle(warm bool, near *Solution) (*Solution, error) {
 	var stops []stop
 	key := r.positions()
@@ -45,7 +46,11 @@ func (r *run) settle(warm bool, near *Solution) (*Solution, error) {
 			return nil, err
 		}
 		if !warm || len(stops) > 0 {
-			if x := near.at(key); x != nil {
+			x := near.at(key)
+			if x == nil && near != nil && !warm {
+				x = near.run.x
+			}
+			if x != nil {
 				copy(r.x, x)
 				warm = true
 			}
