@@ -80,13 +80,13 @@ func (p *plan) seek(states int) *search {
 // The search starts coarse, so that it soon has a good choice with which to strike out
 // what is not worth a closer look, and grows finer as less is left. All found by trial.
 const (
-	firstCap    = 16 // states at a point, for each size there
-	finer       = 3
+	firstCap    = 32 // states at a point, for each size there
+	finer       = 2
 	lastCap     = 1000
 	refineWork  = 200_000 // states made in all, before a gap of goodGap will do
 	goodGap     = 0.005
-	refineByLeg = 8_000 // states made in all, for each leg, beyond which any gap must do
-	leastNodes  = 10    // branch and bound that cannot look at so many is of no use
+	refineByLeg = 10_000 // states made in all, for each leg, beyond which any gap must do
+	leastNodes  = 10     // branch and bound that cannot look at so many is of no use
 )
 
 // refine makes a relaxed pass over the open options, looks for true choices near it,
