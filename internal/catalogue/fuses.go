@@ -2,6 +2,7 @@ package catalogue
 
 import (
 	"math"
+	"slices"
 
 	"gloamwright/internal/quantity"
 )
@@ -47,10 +48,11 @@ type FuseClass struct {
 	// that holds.
 	Breaking         quantity.Ampere
 	BreakingMultiple float64
-	// DC says that the voltage and breaking capacity are DC ratings.
-	DC       bool
-	Colours  []string // in words, parallel to Ratings; nil: no colour code
-	Capacity Evidence // of Volt and Breaking
+	// DC says that the voltage and breaking capacity are DC ratings; Sheet that they are
+	// not the standard's own for every link: the link's sheet must state them.
+	DC, Sheet bool
+	Colours   []string // in words, parallel to Ratings; nil: no colour code
+	Capacity  Evidence // of Volt and Breaking
 }
 
 // Gates returns the limits of one rating and their source; unknown gates if the
@@ -79,8 +81,23 @@ func (c *FuseClass) BreakingCapacity(rating quantity.Ampere) quantity.Ampere {
 	return max(c.Breaking, quantity.Ampere(c.BreakingMultiple)*rating)
 }
 
-// FuseClasses lists the classes in the order in which they are tried for a battery's
-// main fuse: the first whose voltage and breaking capacity suffice.
+// FuseClasses lists the classes in the order in which they are tried.
 func FuseClasses() []*FuseClass {
-	return []*FuseClass{FuseBlade, FuseBlade58, FuseBladeHigh, FuseKnife, FuseStrip, FuseCartridgeT, FuseCartridgeF, FuseCartridgeHighT}
+	return []*FuseClass{
+		FuseBlade, FuseBlade58, FuseBladeHigh, FuseCylinder10, FuseCylinder14, FuseKnife, FuseStrip,
+		FuseCartridgeT, FuseCartridgeF, FuseCartridgeHighT,
+	}
 }
+
+// FuseClassOf returns the class of that name; nil if there is none.
+func FuseClassOf(name string) *FuseClass {
+	for _, c := range FuseClasses() {
+		if c.Name == name {
+			return c
+		}
+	}
+	return nil
+}
+
+// Makes reports whether the class has a link of exactly that rating.
+func (c *FuseClass) Makes(rating quantity.Ampere) bool { return slices.Contains(c.Ratings, rating) }

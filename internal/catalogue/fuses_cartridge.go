@@ -22,7 +22,7 @@ var FuseCartridgeT = &FuseClass{
 		Slowest: []GatePoint{{2.1, 120}, {2.75, 10}, {4, 3}, {10, 0.3}},
 	}, Evidence: Evidence{Source: "IEC 60127-2 sheet 3", Seen: true}}},
 	Conventional: 2.1,
-	Volt:         cartridgeDC, Breaking: 35, BreakingMultiple: 10,
+	Volt:         cartridgeDC, Breaking: 35, BreakingMultiple: 10, Sheet: true,
 	Capacity: Evidence{Source: "IEC 60127-2 sheet 3", Seen: true, Note: "rated for 250 V AC"},
 }
 
@@ -36,7 +36,7 @@ var FuseCartridgeF = &FuseClass{
 		Slowest: []GatePoint{{2.1, 1800}, {2.75, 2}, {4, 0.3}, {10, 0.02}},
 	}, Evidence: Evidence{Source: "IEC 60127-2 sheet 2"}}},
 	Conventional: 2.1,
-	Volt:         cartridgeDC, Breaking: 35, BreakingMultiple: 10,
+	Volt:         cartridgeDC, Breaking: 35, BreakingMultiple: 10, Sheet: true,
 	Capacity: Evidence{Source: "IEC 60127-2 sheet 2", Note: "rated for 250 V AC"},
 }
 
@@ -56,6 +56,6 @@ var FuseCartridgeHighT = &FuseClass{
 		}, Evidence: Evidence{Source: "IEC 60127-2 sheet 5", Seen: true}},
 	},
 	Conventional: 2.1,
-	Volt:         cartridgeDC, Breaking: 1500,
+	Volt:         cartridgeDC, Breaking: 1500, Sheet: true,
 	Capacity: Evidence{Source: "IEC 60127-2 sheet 5", Seen: true, Note: "rated for 250 V AC"},
 }

@@ -8,6 +8,7 @@ import (
 
 	"gopkg.in/yaml.v3"
 
+	"gloamwright/internal/catalogue"
 	"gloamwright/internal/quantity"
 )
 
@@ -93,6 +94,7 @@ func (d *decoder) practiceFields() []field {
 		{"colours", false, d.readColours},
 		{"sizes", false, func(e entry) { values(d, &p.Sizes, e, Size, leastSize, mostSize) }},
 		{"fuses", false, func(e entry) { values(d, &p.Fuses, e, Current, "30 mA", "1000 A") }},
+		{"fuse_class", false, d.choice(&p.FuseClass, fuseClasses()...)},
 		{"blocks", false, func(e entry) { values(d, &p.Blocks, e, Capacity, "0.5 Ah", "5000 Ah") }},
 		{"prices", false, d.readPrices},
 		{"currency", false, d.text(&p.Currency, checkCurrency)},
@@ -102,6 +104,15 @@ func (d *decoder) practiceFields() []field {
 
 // leastSize and mostSize bound the conductor sizes that a firm can state.
 const leastSize, mostSize = "0.05 mm²", "400 mm²"
+
+// fuseClasses are the names of the fuse classes.
+func fuseClasses() []string {
+	var out []string
+	for _, c := range catalogue.FuseClasses() {
+		out = append(out, c.Name)
+	}
+	return out
+}
 
 // checkSizes refuses stocked sizes of the other system.
 func (d *decoder) checkSizes() {

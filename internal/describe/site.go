@@ -62,6 +62,7 @@ type Practice struct {
 	Negative    At[string]
 	Sizes       At[[]quantity.WireSize]   // sizes in stock; empty: all standard sizes
 	Fuses       At[[]quantity.Ampere]     // fuse ratings in stock; empty: all standard ratings
+	FuseClass   At[string]                // class of all fuses but the battery's main fuse; empty: the first that fits
 	Blocks      At[[]quantity.AmpereHour] // battery block capacities in stock; empty: the standard list
 	Texts       At[string]                // folder of the firm's standing texts
 	Prices      []Price

@@ -12,6 +12,6 @@ func TestFuseBreaking(t *testing.T) {
 		{"just over", func(f *facts.Facts) { f.Fuses[0].Prospective = 1010 }, []string{
 			"stop -F1: -F1, battery: short-circuit current 1010 A, breaks 1000 A | A fuse that breaks at least 1010 A DC; this kind (blade, medium) breaks 1000 A.",
 		}},
-		{"capacity unknown", func(f *facts.Facts) { f.Fuses[0].Breaking, f.Fuses[0].Prospective = 0, 1010 }, nil},
+		{"class unknown", func(f *facts.Facts) { f.Fuses[0].Class, f.Fuses[0].Prospective = nil, 1010 }, nil},
 	})
 }

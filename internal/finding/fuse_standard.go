@@ -13,7 +13,7 @@ import (
 var fuseStandard = &Check{
 	Name:   "fuse-standard",
 	Title:  "fuse rating that is not made",
-	Doc:    "A rating that no class of fuse lists cannot be bought. Take the next one down where the load allows it, else the next one up and a cable that it protects.",
+	Doc:    "A rating that the class of fuse does not list cannot be bought. Take the next one down where the load allows it, else the next one up and a cable that it protects.",
 	Source: "ratings of ISO 8820-3, IEC 60127 and the other classes of fuse",
 	Run: func(f *facts.Facts, report func(Finding)) {
 		var all []quantity.Ampere
@@ -27,7 +27,11 @@ var fuseStandard = &Check{
 			}
 			below, above := quantity.Ampere(0), quantity.Ampere(0)
 			made := false
-			for _, r := range all {
+			list := all
+			if x.Class != nil {
+				list = x.Class.Ratings
+			}
+			for _, r := range list {
 				switch {
 				case !under(r, x.Rating) && !over(r, x.Rating):
 					made = true

@@ -153,6 +153,7 @@ func (f *flat) practice() {
 	value(f, "practice.colours.negative", "Practice, colour of minus", p.Negative, all)
 	f.add(leaf{path: "practice.sizes", what: "Practice, conductor sizes in stock", text: textOf(p.Sizes.Val), at: p.Sizes.Pos, absent: allStandard})
 	f.add(leaf{path: "practice.fuses", what: "Practice, fuses in stock", text: textOf(p.Fuses.Val), at: p.Fuses.Pos, absent: allStandard})
+	value(f, "practice.fuse_class", "Practice, class of fuse", p.FuseClass, all)
 	f.add(leaf{path: "practice.blocks", what: "Practice, battery blocks in stock", text: textOf(p.Blocks.Val), at: p.Blocks.Pos, absent: allStandard})
 	value(f, "practice.texts", "Practice, folder of standing texts", p.Texts, scope{paper: true})
 	value(f, "practice.currency", "Practice, currency", p.Currency, scope{paper: true})

@@ -1,6 +1,7 @@
 package sizing
 
 import (
+	"fmt"
 	"strings"
 
 	"gloamwright/internal/catalogue"
@@ -97,8 +98,9 @@ func Breaking(in BreakingInput) (Working, error) {
 	cap := in.Class.BreakingCapacity(in.Rating)
 	w := Working{
 		Name: "breaking capacity", Formula: "I_cn ≥ i_p",
-		Substituted: in.Class.Title + " → " + num(float64(cap), "A"),
-		Value:       float64(cap), Unit: "A", Source: in.Class.Capacity.String(),
+		Substituted: fmt.Sprintf("%s of %s, %s at up to %s DC, for %s at %s → %s", in.Class.Title, num(float64(in.Rating), "A"),
+			num(float64(cap), "A"), num(float64(in.Class.Volt), "V"), num(float64(in.Prospective), "A"), num(float64(in.System), "V"), num(float64(cap), "A")),
+		Value: float64(cap), Unit: "A", Source: in.Class.Capacity.String(),
 	}
 	switch {
 	case in.System > in.Class.Volt:
@@ -113,24 +115,4 @@ func Breaking(in BreakingInput) (Working, error) {
 		}
 	}
 	return w, nil
-}
-
-// MainFuseClass returns the first class, in the catalogue's order for battery
-// fuses, that has a rating of at least need and breaks the prospective current at
-// the system's voltage, and that has published opening times.
-func MainFuseClass(need quantity.Ampere, system quantity.Volt, prospective quantity.Ampere) (*catalogue.FuseClass, error) {
-	for _, c := range catalogue.FuseClasses() {
-		rating, ok := catalogue.NextRating(c.Ratings, need)
-		if !ok || !c.DC || c.Volt < system || c.BreakingCapacity(rating) < prospective {
-			continue
-		}
-		if g, _ := c.Gates(rating); g.Known() {
-			return c, nil
-		}
-	}
-	return nil, &BlockedError{
-		Limit: LimitBreaking, Subject: "the prospective current at the battery", Value: float64(prospective),
-		Bound: float64(catalogue.FuseKnife.Breaking), Unit: "A",
-		Frees: "use smaller battery blocks, each with its own fuse",
-	}
 }

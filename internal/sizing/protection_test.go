@@ -195,22 +195,6 @@ func TestBreaking(t *testing.T) {
 	}
 	blocked(t, b(32.1, 900), LimitVoltage)
 	blocked(t, b(30, 1001), LimitBreaking)
-	for _, c := range []struct {
-		need quantity.Ampere
-		volt quantity.Volt
-		i    quantity.Ampere
-		want *catalogue.FuseClass
-	}{
-		{10, 29, 800, catalogue.FuseBlade}, {10, 57, 800, catalogue.FuseBlade58}, {45, 29, 800, catalogue.FuseBladeHigh},
-		{10, 29, 2500, catalogue.FuseKnife}, {200, 29, 900, catalogue.FuseKnife},
-	} {
-		got, err := MainFuseClass(c.need, c.volt, c.i)
-		if err != nil || got != c.want {
-			t.Errorf("%v at %v, %v: %v %v, want %s", c.need, c.volt, c.i, got, err, c.want.Name)
-		}
-	}
-	_, err := MainFuseClass(10, 29, 30000)
-	blocked(t, err, LimitBreaking)
 }
 
 // TestAdiabaticLimit: it holds up to five seconds.

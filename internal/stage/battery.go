@@ -34,6 +34,7 @@ func battery() *Kind {
 				describe.Field{Name: "along", Type: describe.Length, Default: "2 m", Min: "0.1 m", Max: "100 m", Doc: "Length of the battery cable, battery to cabinet."},
 				describe.Field{Name: "cable", Type: describe.Size, Doc: "Size of the battery cable; without it sized."},
 				describe.Field{Name: "fuse", Type: describe.Current, Min: "0.5 A", Max: "500 A", Doc: "Main fuse; without it sized."},
+				describe.Field{Name: "fuse_class", Type: describe.Choice, Choices: fuseChoices(), Doc: "Class of the main fuse; without it the first that fits."},
 				describe.Field{Name: "isolator", Type: describe.Bool, Default: "yes", Doc: "Isolator between main fuse and cabinet."},
 				describe.Field{Name: "end", Type: describe.Voltage, Min: "1 V", Max: "60 V", Doc: "End-of-discharge voltage of the whole battery; without it from the class, the lamps and the cut-off."},
 				describe.Field{Name: "table", Type: describe.Curve, Doc: "Capacity against discharge time of the battery at hand; without it the class's table."},
@@ -118,6 +119,15 @@ func cellChoices() []string {
 	return out
 }
 
+// fuseChoices are the fuse classes of the catalogue.
+func fuseChoices() []string {
+	var out []string
+	for _, c := range catalogue.FuseClasses() {
+		out = append(out, c.Name)
+	}
+	return out
+}
+
 // probe adds the charger's temperature probe at the battery and its cable.
 func (b *Build) probe(s, c *describe.Stage, along quantity.Metre) {
 	n := b.Part("probe", circuit.NTC, "Temperature probe, on the battery", "1", "2")
@@ -158,125 +168,6 @@ func must[T any](s *describe.Stage, name string) T {
 		panic("stage: " + s.Kind.Val + " has no " + name + "; the decoder must supply it")
 	}
 	return v.Val
-}
-
-// sizeMainFuse chooses the main fuse for the greater of load and charge current, the
-// class by the short-circuit current of the battery, and the size of the trunk:
-// battery cable, rails and leads in the energy's way.
-func sizeMainFuse(p *Plan, s *describe.Stage) {
-	part := p.part(s, "fuse")
-	load := max(p.Light+p.Standing, p.F.Charger.Current)
-	prospective, w := sizing.Prospective(sizing.FaultInput{Source: p.Full, Internal: p.Internal})
-	p.work(p.part(s, "battery").Designation, "prospective short-circuit current", w)
-	p.F.Battery.Prospective = prospective
-	given, _ := describe.Get[quantity.Ampere](s.Fields, "fuse")
-	need := load / quantity.Ampere(p.Site.Practice.LoadFactor.Val)
-	if largest := p.largestWay(); !given.Given {
-		need = max(need, largest*discriminationRatio)
-	} else {
-		need = given.Val
-	}
-	class, err := sizing.MainFuseClass(need, p.Highest, prospective)
-	if err != nil {
-		p.block(part.Designation, part.At, "", err)
-		class = catalogue.FuseKnife
-	}
-	rating := given.Val
-	if !given.Given {
-		rating = p.chooseFuse(part, class, "everything", load, p.largestWay())
-	}
-	f := p.fit(part, class, rating, "everything", load, given.Given)
-	part.Description = class.Title + " and holder, at the plus pole"
-	p.TrunkOhm += quantity.Ohm(fuseOhm(rating))
-
-	size, iz := p.leastFor(part.Designation, class, rating, catalogue.LeastFixed, 1)
-	size, iz = p.trunkFor(size, iz, p.cable(s, "cable"), quantity.Ohm(fuseOhm(rating))+isolatorOhm+cutOffOhm)
-	p.TrunkSize = size
-	cable := p.cable(s, "cable")
-	if v, ok := describe.Get[quantity.WireSize](s.Fields, "cable"); ok {
-		size, iz = v.Val, p.ampacity(v.Val, 1)
-	}
-	f.CableAmpacity, f.CableSize = iz, size
-	c, _ := catalogue.ConductorOf(size)
-	p.run(cable, size, sizing.PerMetre(c, p.running(size)))
-	if q := p.part(s, "isolator"); q != nil {
-		p.isolator(q, p.pricedRating(q, "isolator", catalogue.IsolatorCurrents, load), false)
-	}
-	p.TrunkOhm += 2 * quantity.Ohm(cable.Length) * sizing.PerMetre(c, p.running(size))
-	p.CutOffOhm = p.TrunkOhm
-	t, _ := catalogue.ConductorOf(p.TrunkSize)
-	p.TrunkOhm += quantity.Ohm(p.trunkLength()) * sizing.PerMetre(t, p.running(p.TrunkSize))
-}
-
-// trunkShare is the part of the permitted drop that the way from the battery to the
-// boards may take, so that enough is left for feeders and legs (common practice, no
-// source).
-const trunkShare = 0.25
-
-// trunkFor returns the thinnest size from size up with which the way from the
-// battery to the boards keeps within its share of the drop.
-func (p *Plan) trunkFor(size quantity.WireSize, iz quantity.Ampere, cable *circuit.Cable, fixed quantity.Ohm) (quantity.WireSize, quantity.Ampere) {
-	most := float64(p.permittedDrop()) * trunkShare
-	metres := quantity.Ohm(2*cable.Length + p.trunkLength())
-	for _, c := range p.sizes() {
-		if c.Size.Area < size.Area-areaSlack {
-			continue
-		}
-		z := p.ampacity(c.Size, 1)
-		if z == 0 {
-			continue
-		}
-		size, iz = c.Size, z
-		if float64(p.Light)*float64(fixed+metres*sizing.PerMetre(c, p.running(c.Size))) <= most {
-			break
-		}
-	}
-	return size, iz
-}
-
-// largestWay estimates the largest fuse behind the main one: the charger's, a card's,
-// or that of the circuit or board with the greatest load, or one given.
-func (p *Plan) largestWay() quantity.Ampere {
-	var most quantity.Ampere
-	for _, f := range p.F.Fuses { // those of charger and cards are sized already
-		most = max(most, f.Rating)
-	}
-	list := p.fuseClass().Ratings
-	for _, b := range p.C.Boards {
-		if b.Parent != nil {
-			continue
-		}
-		for _, w := range b.Ways {
-			var ib quantity.Ampere
-			add := func(pt *circuit.Point) { ib += p.LampDesign(p.loads[pt.Type]) }
-			given := describe.At[quantity.Ampere]{}
-			switch {
-			case w.Lighting != nil:
-				w.Lighting.Walk(func(pt, _ *circuit.Point) { add(pt) })
-				given = p.circuitOf(w.Lighting.Name).Fuse
-			case w.Feeds != nil:
-				p.below(w.Feeds, add)
-				given, _ = describe.Get[quantity.Ampere](p.stageOf(w.Feeds.Name).Fields, "fuse")
-			}
-			r := given.Val
-			if !given.Given {
-				r, _ = catalogue.NextRating(list, ib/quantity.Ampere(p.Site.Practice.LoadFactor.Val))
-			}
-			most = max(most, r)
-		}
-	}
-	return most
-}
-
-// trunkLength is the length of all single wires in the energy's way, both poles.
-func (p *Plan) trunkLength() quantity.Metre {
-	var sum quantity.Metre
-	for _, w := range p.C.Conductors {
-		if w.Cable == nil && p.onTrunk(w) {
-			sum += w.Length
-		}
-	}
-	return sum
 }
 
 // cable returns a cable of stage s by its local key.

@@ -148,7 +148,7 @@ func (b *biller) fuse(part *circuit.Part) string {
 			return fuseName(f.Class, f.Rating)
 		}
 	}
-	class := b.p.fuseClass()
+	class := b.p.wayClass
 	if v := valueOf(part, "rating"); v.Num > 0 { // a single part on a rail of control
 		return fuseName(class, quantity.Ampere(v.Num))
 	}

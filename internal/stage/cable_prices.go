@@ -14,11 +14,12 @@ import (
 
 // fusedWay is a way with its fuse and the legs that the fuse protects.
 type fusedWay struct {
-	fuse   *facts.Fuse
-	legs   []int
-	behind []int // of a feeder: ways behind it, by their place in the list
-	given  bool
-	most   quantity.Ampere // rating that a given fuse before it allows; 0: none is given
+	proposed *wayFuse
+	fuse     *facts.Fuse // what was made of it
+	legs     []int
+	behind   []int // of a feeder: ways behind it, by their place in the list
+	given    bool
+	most     quantity.Ampere // rating that a given fuse before it allows; 0: none is given
 }
 
 // choose returns the sizes of the least copper. Where the firm prices conductors and
@@ -156,33 +157,29 @@ func (t *tree) fuseOptions() []sizing.FusedWay {
 		}
 	}
 	for _, f := range t.fused {
-		name := fuseName(t.class, f.fuse.Rating)
+		name := fuseName(f.fuse.Class, f.fuse.Rating)
 		if _, ok := p.price(name); !ok && !f.given && p.sells["fuse"] {
 			p.lacks(name, f.fuse.Part.At)
 			weighed = false
 		}
 	}
-	stock := p.stocked(t.class)
-	if len(stock) == 0 {
-		stock = t.class.Ratings
-	}
 	var out []sizing.FusedWay
 	for _, f := range t.fused {
 		w := sizing.FusedWay{Legs: f.legs, Behind: f.behind, Given: f.given || f.outgrown(t)}
-		first, _ := p.price(fuseName(t.class, f.fuse.Rating))
-		least, _ := t.asks(t.class, f.fuse.Rating) // an error is reported already
+		first, _ := p.price(fuseName(f.fuse.Class, f.fuse.Rating))
+		least, _ := t.asks(f.fuse.Class, f.fuse.Rating) // an error is reported already
 		least.Price = first
 		w.Fuses = append(w.Fuses, least)
 		most := main / discriminationRatio
 		if f.most > 0 {
 			most = min(most, f.most)
 		}
-		for _, r := range stock {
-			v, ok := p.price(fuseName(t.class, r))
+		for _, r := range p.stocked(f.fuse.Class) {
+			v, ok := p.price(fuseName(f.fuse.Class, r))
 			if !weighed || w.Given || r <= f.fuse.Rating || r > most || !ok {
 				continue
 			}
-			if larger, err := t.asks(t.class, r); err == nil {
+			if larger, err := t.asks(f.fuse.Class, r); err == nil {
 				larger.Price = v
 				w.Fuses = append(w.Fuses, larger)
 			}
@@ -204,16 +201,7 @@ func (f *fusedWay) outgrown(t *tree) bool {
 // refuse puts the last of the options in place of a chosen fuse, for its price.
 func (p *Plan) refuse(f *facts.Fuse, options []sizing.FuseOption) {
 	last := options[len(options)-1]
-	f.Rating = last.Rating
-	f.Colour, f.Breaking = f.Class.Colour(f.Rating), f.Class.BreakingCapacity(f.Rating)
-	gates, _ := f.Class.Gates(f.Rating)
-	f.Fastest, f.Slowest = gates.Fastest, gates.Slowest
-	for i := range f.Part.Values {
-		if v := &f.Part.Values[i]; v.Name == "rating" {
-			v.Text, v.Num = f.Rating.String(), float64(f.Rating)
-		}
-	}
-	f.Part.Elements[0].Params[0].Value = fuseOhm(f.Rating)
+	p.link(f, f.Class, last.Rating)
 	var names, prices []string
 	for _, o := range options {
 		names, prices = append(names, o.Rating.String()), append(prices, money(o.Price))
@@ -264,8 +252,8 @@ func (t *tree) costOf(f *fusedWay, r *sizing.TreeResult, e ends, rating quantity
 		terms, with = append(terms, term), append(with, describe.PriceName("wire", first))
 		w.Value += cost
 	}
-	if each, ok := p.price(fuseName(t.class, rating)); ok {
-		terms, with = append(terms, money(each)), append(with, fuseName(t.class, rating))
+	if each, ok := p.price(fuseName(f.fuse.Class, rating)); ok {
+		terms, with = append(terms, money(each)), append(with, fuseName(f.fuse.Class, rating))
 		w.Value += each
 	}
 	for _, name := range with {

@@ -8,7 +8,6 @@ import (
 	"gloamwright/internal/catalogue"
 	"gloamwright/internal/circuit"
 	"gloamwright/internal/describe"
-	"gloamwright/internal/facts"
 	"gloamwright/internal/quantity"
 	"gloamwright/internal/sizing"
 )
@@ -22,13 +21,33 @@ const discriminationRatio = 1.6
 // that when new (common practice, no source).
 const usedBattery = 1.5
 
-// sizeBoard sizes feeders, legs and way fuses of all boards together, once.
+// sizeBoard sizes feeders, legs and way fuses of all boards together, once: with the
+// first classes of fuse with which everything fits.
 func sizeBoard(p *Plan, _ *describe.Stage) {
 	if p.cabled || len(p.C.Boards) == 0 {
 		return
 	}
 	p.cabled = true
-	t := &tree{p: p, class: p.fuseClass()}
+	best := p.bestTree()
+	best.commit()
+	if best.err == nil && p.sells[""] {
+		if best.res, best.err = best.choose(); best.err == nil && best.drawsMore() {
+			best.res, best.err = best.full(best.res)
+		}
+	}
+	if best.err != nil {
+		p.block("Cables", p.C.Boards[0].At, "", best.err)
+		if best.res == nil {
+			best.res = best.thickest()
+		}
+	}
+	best.assign(best.res)
+}
+
+// grow builds the tree of feeders and legs with the given classes of fuse and chooses its
+// sizes.
+func (p *Plan) grow(lights, feeders *catalogue.FuseClass, above bool) *tree {
+	t := &tree{p: p, lights: lights, feeders: feeders, above: above}
 	t.Volts = p.End
 	t.Ahead = p.Internal * usedBattery
 	t.Taper = p.Site.Practice.Taper.Val
@@ -40,17 +59,11 @@ func sizeBoard(p *Plan, _ *describe.Stage) {
 			t.board(b, trunk)
 		}
 	}
-	res, err := t.choose()
-	if err == nil && t.drawsMore() {
-		res, err = t.full(res)
+	t.res, t.err = t.Choose()
+	if t.err == nil && t.drawsMore() {
+		t.res, t.err = t.full(t.res)
 	}
-	if err != nil {
-		p.block("Cables", p.C.Boards[0].At, "", err)
-		if res == nil {
-			res = t.thickest()
-		}
-	}
-	t.assign(res)
+	return t
 }
 
 // drawsMore reports whether some lamp draws more at a higher voltage, so that it loses
@@ -109,11 +122,15 @@ func (t *tree) full(end *sizing.TreeResult) (*sizing.TreeResult, error) {
 // tree is the tree of feeders and legs with what belongs to each leg.
 type tree struct {
 	sizing.Tree
-	p      *Plan
-	class  *catalogue.FuseClass
-	cables []*circuit.Cable // by leg; nil for the trunk
-	ways   []*circuit.Way   // the way whose fuse protects the leg
-	fused  []fusedWay       // ways with a fuse, those behind a feeder before it
+	p               *Plan
+	lights, feeders *catalogue.FuseClass // of the ways of circuits and of feeders
+	above           bool                 // feeder fuses stand above those behind them
+	fuses           []*wayFuse           // in printing order
+	cables          []*circuit.Cable     // by leg; nil for the trunk
+	ways            []*circuit.Way       // the way whose fuse protects the leg
+	res             *sizing.TreeResult
+	err             error
+	fused           []fusedWay // ways with a fuse, those behind a feeder before it
 
 	thinnest quantity.Ohm // per metre, of the thinnest option
 	paid     float64      // for the fuses of all ways, where they were chosen by price
@@ -179,10 +196,7 @@ func (t *tree) board(b *circuit.Board, at int) {
 }
 
 // spare leaves a way without a fuse-link.
-func (t *tree) spare(w *circuit.Way) {
-	w.Fuse.Description = t.class.Title + " holder, spare"
-	params(w.Fuse, "", circuit.Param{Name: "ohm", Value: fuseOhm(t.class.Ratings[0])})
-}
+func (t *tree) spare(w *circuit.Way) { t.fuses = append(t.fuses, &wayFuse{way: w, class: t.lights}) }
 
 // wayExtra is the resistance of a way before its cable: fuse and the two leads to
 // its terminals in the thinnest size that a fixed cable may have.
@@ -195,8 +209,7 @@ func (t *tree) lighting(w *circuit.Way, at int) {
 	var ib quantity.Ampere
 	w.Lighting.Walk(func(pt, _ *circuit.Point) { ib += p.LampDesign(p.loads[pt.Type]) })
 	d := p.circuitOf(w.Lighting.Name)
-	p.loadWorking(w.Lighting, ib)
-	f := p.wayFuse(w, w.Lighting.Name, ib, d.Fuse, 0)
+	f := t.fuse(w, w.Lighting.Name, ib, d.Fuse, 0)
 	legs := map[*circuit.Point]int{}
 	protects := []int{}
 	w.Lighting.Walk(func(pt, before *circuit.Point) {
@@ -208,7 +221,7 @@ func (t *tree) lighting(w *circuit.Way, at int) {
 		if before != nil {
 			leg.Parent = legs[before]
 		} else {
-			leg.Extra = t.wayExtra(f.Rating)
+			leg.Extra = t.wayExtra(f.rating)
 		}
 		if size, ok := p.pinnedLeg(d, pt.Leg); ok {
 			if o, ok := t.option(size); ok {
@@ -219,7 +232,7 @@ func (t *tree) lighting(w *circuit.Way, at int) {
 		t.ways[legs[pt]] = w
 		protects = append(protects, legs[pt])
 	})
-	t.fused = append(t.fused, fusedWay{fuse: f, legs: protects, given: d.Fuse.Given})
+	t.fused = append(t.fused, fusedWay{proposed: f, legs: protects, given: d.Fuse.Given})
 }
 
 func (t *tree) feeder(w *circuit.Way, at int) {
@@ -230,22 +243,25 @@ func (t *tree) feeder(w *circuit.Way, at int) {
 	// Their legs need the feeder's leg as parent: it is filled in afterwards.
 	i := t.leg(sizing.Leg{}, w.Feeds.Feeder)
 	t.ways[i] = w
-	before, first := len(p.F.Fuses), len(t.fused)
+	before, first := len(t.fuses), len(t.fused)
 	t.board(w.Feeds, i)
-	for _, f := range p.F.Fuses[before:] {
-		largest = max(largest, f.Rating)
+	for _, f := range t.fuses[before:] {
+		largest = max(largest, f.rating)
+	}
+	if !t.above {
+		largest = 0
 	}
 	s := p.stageOf(w.Feeds.Name)
 	given, _ := describe.Get[quantity.Ampere](s.Fields, "fuse")
-	f := p.wayFuse(w, w.Feeds.Title, ib, given, largest)
-	leg := t.protected(f, sizing.Leg{Name: w.Feeds.Feeder.Designation, Parent: at, Length: w.Feeds.Feeder.Length, Extra: t.wayExtra(f.Rating)})
+	f := t.fuse(w, w.Feeds.Title, ib, given, largest)
+	leg := t.protected(f, sizing.Leg{Name: w.Feeds.Feeder.Designation, Parent: at, Length: w.Feeds.Feeder.Length, Extra: t.wayExtra(f.rating)})
 	if v, ok := describe.Get[quantity.WireSize](s.Fields, "cable"); ok {
 		if o, ok := t.option(v.Val); ok {
 			leg.Pinned = &o
 		}
 	}
 	t.Legs[i] = leg
-	x := fusedWay{fuse: f, legs: []int{i}, given: given.Given}
+	x := fusedWay{proposed: f, legs: []int{i}, given: given.Given}
 	for k := first; k < len(t.fused); k++ {
 		x.behind = append(x.behind, k)
 		if m := &t.fused[k].most; given.Given && (*m == 0 || given.Val/discriminationRatio < *m) {
@@ -256,10 +272,10 @@ func (t *tree) feeder(w *circuit.Way, at int) {
 }
 
 // protected fills in what the fuse asks of a leg.
-func (t *tree) protected(f *facts.Fuse, l sizing.Leg) sizing.Leg {
-	asks, err := t.asks(f.Class, f.Rating)
+func (t *tree) protected(f *wayFuse, l sizing.Leg) sizing.Leg {
+	asks, err := t.asks(f.class, f.rating)
 	if err != nil {
-		t.p.block(f.Part.Designation, f.Part.At, "", err)
+		f.errs = append(f.errs, err)
 	}
 	l.Carry, l.Loop, l.Least = asks.Carry, asks.Loop, catalogue.LeastFixed.Least(t.p.System)
 	return l
@@ -273,14 +289,6 @@ func (t *tree) asks(class *catalogue.FuseClass, rating quantity.Ampere) (sizing.
 		o.Loop = sizing.MostLoop(t.p.Empty, need)
 	}
 	return o, err
-}
-
-// wayFuse chooses or checks the fuse of a way. Behind stands the largest fuse behind
-// it, 0 if there is none.
-func (p *Plan) wayFuse(w *circuit.Way, feeds string, load quantity.Ampere, given describe.At[quantity.Ampere], behind quantity.Ampere) *facts.Fuse {
-	f := p.systemFuse(w.Fuse, feeds, load, behind, given)
-	f.Board, f.Way = w.Board, w
-	return f
 }
 
 // loadWorking records the design current of a circuit, lamp type by lamp type.

@@ -138,7 +138,7 @@ func sizeCharger(p *Plan, s *describe.Stage) {
 		p.work(t.Designation, "", w)
 	}
 	fuseGiven, _ := describe.Get[quantity.Ampere](s.Fields, "fuse")
-	f := p.systemFuse(fuse, "charger", rated, 0, fuseGiven)
+	f := p.systemFuse(fuse, "charger", rated, fuseGiven)
 	p.ChargeSize, f.CableAmpacity = p.leastFor(fuse.Designation, f.Class, f.Rating, catalogue.LeastFixed, 1)
 	f.CableSize = p.ChargeSize
 }

@@ -166,7 +166,7 @@ func sizeLinearCharger(p *Plan, s *describe.Stage) {
 	_, wf := sizing.ChargeVoltage(sizing.ChargeInput{Class: p.Class, Cells: p.Cells, At: p.Class.ChargeAt})
 	p.work(u.Designation, "", wf)
 	fuseGiven, _ := describe.Get[quantity.Ampere](s.Fields, "fuse")
-	f := p.systemFuse(p.part(s, "fuse"), "charger", start, 0, fuseGiven)
+	f := p.systemFuse(p.part(s, "fuse"), "charger", start, fuseGiven)
 	p.ChargeSize, f.CableAmpacity = p.leastFor(f.Part.Designation, f.Class, f.Rating, catalogue.LeastFixed, 1)
 	f.CableSize = p.ChargeSize
 }

@@ -99,12 +99,12 @@ func sizeMeter(p *Plan, s *describe.Stage) {
 		return
 	}
 	load := max(p.Light+p.Standing, p.F.Charger.Current)
+	sh := p.part(s, "shunt")
 	full, given := describe.Get[quantity.Ampere](s.Fields, "range")
 	if !given {
 		full.Val, _ = p.nextRating(m, "range", catalogue.MeterRanges, load)
 	}
-	sh := p.part(s, "shunt")
-	ohm := quantity.Ohm(float64(catalogue.ShuntVolt) / float64(full.Val))
+	ohm := shuntOhm(full.Val)
 	set(sh, "rating", full.Val.String(), float64(full.Val), "A", true, given)
 	set(sh, "drop", catalogue.ShuntVolt.String(), float64(catalogue.ShuntVolt), "V", true, false)
 	set(m, "range", full.Val.String(), float64(full.Val), "A", true, given)
@@ -122,6 +122,11 @@ func sizeMeter(p *Plan, s *describe.Stage) {
 			Limit: sizing.LimitLoad, Subject: "the current of the ammeter", Value: float64(load), Bound: float64(full.Val), Unit: "A", Frees: "take a range of at least " + load.String(),
 		})
 	}
+}
+
+// shuntOhm is the resistance of a shunt for a range.
+func shuntOhm(full quantity.Ampere) quantity.Ohm {
+	return quantity.Ohm(float64(catalogue.ShuntVolt) / float64(full))
 }
 
 // meterVolts are full scales of voltmeters: IEC 60051-2, from memory.

@@ -200,7 +200,7 @@ func partFuse() *PartKind {
 		Size: func(p *Plan, d *describe.SinglePart, f *circuit.Part) {
 			rating := partField[quantity.Ampere](d, "rating")
 			if p.onBattery(f) {
-				x := p.fit(f, p.fuseClass(), rating, "part "+d.Name.Val, 0, true)
+				x := p.fit(f, p.classOf(rating, p.fuseClasses()[0]), rating, "part "+d.Name.Val, 0, true)
 				x.CableSize = controlWire[p.System]
 				x.CableAmpacity = p.ampacity(x.CableSize, 1)
 				return

@@ -200,7 +200,11 @@ const twilightRatio = 1.4
 
 // controlFuse sizes the fuse of a card or a meter.
 func (p *Plan) controlFuse(f *circuit.Part, feeds string) {
-	x := p.fit(f, p.fuseClass(), controlFuse, feeds, controlFuse*controlShare, false)
+	class, rating, ok := p.nextFuse(controlFuse, 0)
+	if !ok {
+		rating = class.Ratings[len(class.Ratings)-1]
+	}
+	x := p.fit(f, class, rating, feeds, controlFuse*controlShare, false)
 	x.CableSize = controlWire[p.System]
 	x.CableAmpacity = p.ampacity(x.CableSize, 1)
 }

@@ -3,7 +3,6 @@ package stage
 import (
 	"errors"
 	"fmt"
-	"slices"
 
 	"gloamwright/internal/catalogue"
 	"gloamwright/internal/circuit"
@@ -52,6 +51,9 @@ type Plan struct {
 	// TrunkOhm is the resistance from the battery's terminals to the boards' bars.
 	// CutOffOhm is the part of it up to the cabinet's terminals.
 	TrunkOhm, CutOffOhm quantity.Ohm
+	// CabinetOhm is the resistance from the battery's terminals to the cabinet's, fuse and
+	// battery cable alone; ContactOhm that of the changeover's contact.
+	CabinetOhm, ContactOhm quantity.Ohm
 	// Internal is the battery's resistance when full and new.
 	Internal quantity.Ohm
 
@@ -63,14 +65,15 @@ type Plan struct {
 	// Block is what the battery is built of.
 	Block catalogue.Block
 
-	more    Reserve
-	prices  map[string]float64         // by the name of the thing
-	sells   map[string]bool            // first words of the names that have a price
-	aux     map[string]quantity.Ampere // what auxiliary supplies feed, by stage name
-	cabled  bool
-	loads   map[string]Load
-	parts   map[string]*circuit.Part
-	sources map[*circuit.Part]raw // fuses that a transformer supply feeds, not the battery
+	more     Reserve
+	prices   map[string]float64         // by the name of the thing
+	sells    map[string]bool            // first words of the names that have a price
+	aux      map[string]quantity.Ampere // what auxiliary supplies feed, by stage name
+	cabled   bool
+	wayClass *catalogue.FuseClass // of the ways of circuits
+	loads    map[string]Load
+	parts    map[string]*circuit.Part
+	sources  map[*circuit.Part]raw // fuses that a transformer supply feeds, not the battery
 }
 
 // Reserve is what the simulated outage and recharge ask beyond the sizing formulas, as
@@ -92,6 +95,7 @@ func Size(site *describe.Site, c *circuit.Circuit, f *facts.Facts, more Reserve)
 	p.laying()
 	p.readPrices()
 	p.voltages()
+	p.wayClass = p.fuseClasses()[0]
 	for _, t := range site.Luminaires {
 		p.loads[t.Name.Val] = luminaireKindOf(t.Kind.Val).Load(p, t)
 	}
@@ -106,6 +110,9 @@ func Size(site *describe.Site, c *circuit.Circuit, f *facts.Facts, more Reserve)
 					st.Run(p, s)
 				}
 			}
+		}
+		if ph == Trunk {
+			p.settleFuses()
 		}
 	}
 	p.singles()
@@ -257,79 +264,6 @@ const (
 	contactTol  = 0.5
 	powerTol    = 0.05
 )
-
-// fuseOhm estimates the cold resistance of a fuse with its holder: the link drops
-// about 0.1 V at its rating, the holder adds 2 mΩ (common practice, no source).
-func fuseOhm(rating quantity.Ampere) float64 { return 0.1/float64(rating) + 0.002 }
-
-// systemFuse sizes a fuse for a load; behind is the largest fuse behind it, 0 if
-// there is none.
-func (p *Plan) systemFuse(part *circuit.Part, feeds string, load, behind quantity.Ampere, given describe.At[quantity.Ampere]) *facts.Fuse {
-	class := p.fuseClass()
-	rating := given.Val
-	if !given.Given {
-		rating = p.chooseFuse(part, class, feeds, load, behind)
-	}
-	return p.fit(part, class, rating, feeds, load, given.Given)
-}
-
-// chooseFuse chooses a rating for the load, or above the largest fuse behind.
-func (p *Plan) chooseFuse(part *circuit.Part, class *catalogue.FuseClass, feeds string, load, behind quantity.Ampere) quantity.Ampere {
-	k := p.Site.Practice.LoadFactor.Val
-	in := sizing.FuseInput{Class: class, Stock: p.stocked(class), Load: load, LoadFactor: k}
-	least := behind * discriminationRatio
-	if least > load/quantity.Ampere(k) {
-		in.Load, in.LoadFactor = least, 1
-	}
-	r, w, err := sizing.ChooseFuse(in)
-	if err != nil {
-		p.block(part.Designation, part.At, w.Source, err)
-		r = class.Ratings[len(class.Ratings)-1]
-	}
-	if in.LoadFactor == 1 && least > 0 {
-		w.Formula = "I_n ≥ 1.6 × largest fuse behind it, next standard rating"
-		w.Substituted = fmt.Sprintf("1.6 × %s A = %s A → %s A", sizing.Digits(float64(behind)), sizing.Digits(float64(least)), sizing.Digits(float64(r)))
-		w.Source = "discrimination ratio of IEC 60269-1 (from memory)"
-	}
-	p.work(part.Designation, "fuse rating", w, feeds+": design current")
-	return r
-}
-
-// stocked returns the ratings that the firm stocks of a class; empty: all.
-func (p *Plan) stocked(class *catalogue.FuseClass) []quantity.Ampere {
-	var out []quantity.Ampere
-	for _, r := range p.Site.Practice.Fuses.Val {
-		if slices.Contains(class.Ratings, r) {
-			out = append(out, r)
-		}
-	}
-	slices.Sort(out)
-	return out
-}
-
-// fit records a chosen fuse.
-func (p *Plan) fit(part *circuit.Part, class *catalogue.FuseClass, rating quantity.Ampere, feeds string, load quantity.Ampere, pinned bool) *facts.Fuse {
-	part.Description = class.Title + " and holder"
-	set(part, "rating", rating.String(), float64(rating), "A", true, pinned)
-	params(part, "", circuit.Param{Name: "ohm", Value: fuseOhm(rating), Tol: fuseTol})
-	f := &facts.Fuse{
-		Part: part, Rating: rating, Style: class.Title, Colour: class.Colour(rating), Feeds: feeds, Pinned: pinned,
-		Design: load, Breaking: class.BreakingCapacity(rating), BreakingVolt: class.Volt, Class: class,
-	}
-	gates, _ := class.Gates(rating)
-	f.Fastest, f.Slowest = gates.Fastest, gates.Slowest
-	p.F.Fuses = append(p.F.Fuses, f)
-	return f
-}
-
-// fuseClass is the class of the fuses of ways and control: the first blade class
-// whose DC voltage suffices.
-func (p *Plan) fuseClass() *catalogue.FuseClass {
-	if p.Highest > catalogue.FuseBlade.Volt {
-		return catalogue.FuseBlade58
-	}
-	return catalogue.FuseBlade
-}
 
 // leastFor returns the thinnest standard size whose ampacity in the cabinet or in
 // its run bears a fuse of that rating, not thinner than least.

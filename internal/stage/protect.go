@@ -96,7 +96,14 @@ func (p *Plan) clear(f *facts.Fuse, near, far float64) {
 	}
 	f.FarEnd, w = sizing.LeastFault(sizing.FaultInput{Source: p.Empty, Internal: p.Internal * usedBattery, Loop: []sizing.Series{{Name: "loop", Ohm: quantity.Ohm(far)}}})
 	p.work(f.Part.Designation, "current of a short at the far end", w)
+	p.breaking(f, p.Highest)
 	p.opens(f)
+}
+
+// breaking records what a fuse breaks; the finding on it judges.
+func (p *Plan) breaking(f *facts.Fuse, highest quantity.Volt) {
+	w, _ := sizing.Breaking(sizing.BreakingInput{Class: f.Class, Rating: f.Rating, System: highest, Prospective: f.Prospective})
+	p.work(f.Part.Designation, "", w, f.Part.Designation+": prospective current at the fuse", p.F.Battery.Part.Designation+": prospective short-circuit current")
 }
 
 // clearRaw fills in what a short circuit does at the fuse of a transformer supply: the
@@ -112,6 +119,7 @@ func (p *Plan) clearRaw(f *facts.Fuse, r raw) {
 	}
 	f.Prospective = short("prospective current at the fuse", 1+r.mains.Plus, 0)
 	f.FarEnd = short("current of a short at the far end", 1-r.mains.Plus, quantity.Ohm(fuseOhm(f.Rating)+leadOhm(p)))
+	p.breaking(f, r.high(0))
 	p.opens(f)
 }
 

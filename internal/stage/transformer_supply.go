@@ -192,7 +192,7 @@ func sizeTransformer(p *Plan, s *describe.Stage) {
 	p.sizeReservoir(c, bleeder, r, top)
 
 	given, _ := describe.Get[quantity.Ampere](s.Fields, "fuse")
-	f := p.systemFuse(p.part(s, "fuse"), "raw supply", load, 0, given)
+	f := p.systemFuse(p.part(s, "fuse"), "raw supply", load, given)
 	f.CableSize = controlWire[p.System]
 	f.CableAmpacity = p.ampacity(f.CableSize, 1)
 	p.sources[f.Part] = r
