@@ -110,6 +110,10 @@ func (c *BatteryClass) CellsFor(nominal quantity.Volt) int {
 	return max(1, int(n))
 }
 
+// ExtraLow is the highest DC voltage of the whole system: parts of it can be touched, so
+// the 60 V limit of IEC 61140 for dry places is kept.
+const ExtraLow quantity.Volt = 60
+
 // leadTwelve is the system voltage that the trade counts in.
 const leadTwelve = 12
 

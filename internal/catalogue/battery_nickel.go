@@ -45,6 +45,10 @@ var NiMH = &BatteryClass{
 	Rates: []RatePoint{
 		{hours / 2, 0.80, 1.00}, {1 * hours, 0.90, 1.00}, {2 * hours, 0.95, 1.00}, {5 * hours, 1, 1.00}, {10 * hours, 1, 1.00},
 	},
+	Ends: []EndPoint{
+		{1 * hours, []EndPart{{1.00, 1}, {1.05, 0.95}, {1.10, 0.86}, {1.14, 0.74}}},
+		{5 * hours, []EndPart{{1.00, 1}, {1.05, 0.98}, {1.10, 0.94}, {1.14, 0.87}}},
+	},
 	EndVolt: 1.05, LowestEnd: 1.00,
 	Size: nickelSize, SizeEvi: nickelSizeEvi,
 	Float: 1.40, Boost: 1.45, ChargeAt: 20, Slope: -0.003,

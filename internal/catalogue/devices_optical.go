@@ -26,6 +26,14 @@ var CadmiumSulphide5 = LightResistor{
 	Evidence: Evidence{Source: "photoresistor summary and law R = a·E^−γ", Seen: true},
 }
 
+// CadmiumSulphideHigh is the class of high resistance and steeper law: 50 kΩ to 100 kΩ at
+// 10 lx, at least 5 MΩ dark, exponent 0.8 (typical datasheets of 5 mm cells, from memory).
+var CadmiumSulphideHigh = LightResistor{
+	Name: "cadmium sulphide, 5 mm, high resistance", At10Low: 50e3, At10: 75e3, At10Hi: 100e3, Dark: 5e6,
+	GammaLow: 0.7, Gamma: 0.8, GammaHigh: 0.9, Power: 0.1,
+	Evidence: Evidence{Source: "typical datasheets, high-resistance cells"},
+}
+
 // tenLux is the illuminance at which light resistors are listed.
 const tenLux = 10
 

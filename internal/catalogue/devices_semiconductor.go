@@ -124,11 +124,16 @@ type Transistor struct {
 }
 
 // Small transistors. 2N2222A read in datasheets (the lower of the limits printed for
-// TO-18 and TO-92); 2N2907A, its complement, from memory.
+// TO-18 and TO-92); 2N2907A, its complement, and 2N3019, for more voltage and heat, from
+// memory.
 var (
 	NPNSmall = Transistor{
 		Type: "2N2222A", Volt: 40, Current: 0.6, Power: 0.4, GainLow: 75, Gain: 150, GainHigh: 300, Saturation: 0.3, Base: 0.7, Forced: 10,
 		Evidence: Evidence{Source: "2N2222A datasheets", Seen: true},
+	}
+	NPNMedium = Transistor{
+		Type: "2N3019", Volt: 80, Current: 1, Power: 0.8, GainLow: 90, Gain: 150, GainHigh: 300, Saturation: 0.2, Base: 0.7, Forced: 10,
+		Evidence: Evidence{Source: "JEDEC registration 2N3019"},
 	}
 	PNPSmall = Transistor{
 		Type: "2N2907A", PNP: true, Volt: 60, Current: 0.6, Power: 0.4, GainLow: 100, Gain: 180, GainHigh: 300, Saturation: 0.4, Base: 0.7, Forced: 10,

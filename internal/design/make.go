@@ -40,6 +40,11 @@ func (d *Design) asks(more *stage.Reserve) bool {
 		more.Capacity = step * float64(b.Capacity/b.Required) * max(more.Capacity, 1) * float64(duty.Outage.Val/e.Held)
 		asked = true
 	}
+	if b, c := d.Battery, d.Charger; c.Part != nil && c.Part.Kind == circuit.ChargerUnit && !b.Pinned && !c.Pinned && b.Required > 0 && c.Limit > 0 && c.Current > c.Limit {
+		// The smallest charger that returns the charge in time is too strong for it.
+		more.Capacity = max(more.Capacity, step*float64(b.Capacity/b.Required)*max(more.Capacity, 1)*float64(c.Current/c.Limit))
+		asked = true
+	}
 	if c := d.Charger; c.Part != nil && c.Part.Kind == circuit.ChargerUnit && !c.Pinned && c.Required > 0 && c.Current < c.Limit && recharged(e.Runs) && (e.Recharge == 0 || e.Recharge > duty.Recharge.Val) {
 		k := 1.5 // it never filled: half as much again
 		if e.Recharge > 0 {

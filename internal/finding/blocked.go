@@ -22,13 +22,14 @@ var blocked = &Check{
 			if b.Unit != "" {
 				unit = " " + b.Unit
 			}
+			figure, bound := apart(b.Figure, b.Bound)
 			switch {
 			case b.Unknown:
 				found.Message = fmt.Sprintf("%s: %s", b.Subject, b.Limit)
 			case b.What != "":
-				found.Message = fmt.Sprintf("%s: nothing fits (%s): %s is %s%s, limit %s%s", b.Subject, b.Limit, b.What, number(b.Figure), unit, number(b.Bound), unit)
+				found.Message = fmt.Sprintf("%s: nothing fits (%s): %s is %s%s, limit %s%s", b.Subject, b.Limit, b.What, figure, unit, bound, unit)
 			default:
-				found.Message = fmt.Sprintf("%s: nothing fits; %s %s%s, limit %s%s", b.Subject, b.Limit, number(b.Figure), unit, number(b.Bound), unit)
+				found.Message = fmt.Sprintf("%s: nothing fits; %s %s%s, limit %s%s", b.Subject, b.Limit, figure, unit, bound, unit)
 			}
 			if !b.Unknown {
 				found.Value, found.Limit, found.Unit = b.Figure, b.Bound, b.Unit

@@ -3,13 +3,9 @@ package finding
 import (
 	"fmt"
 
+	"gloamwright/internal/catalogue"
 	"gloamwright/internal/facts"
-	"gloamwright/internal/quantity"
 )
-
-// mostVoltage is the highest DC voltage of the whole system: parts of it can be
-// touched, so the 60 V limit of IEC 61140 for dry places is kept.
-const mostVoltage quantity.Volt = 60
 
 // extraLowVoltage keeps the highest voltage of the system below the extra-low limit.
 var extraLowVoltage = &Check{
@@ -19,18 +15,18 @@ var extraLowVoltage = &Check{
 	Source: "IEC 61140 (60 V DC, ripple-free)",
 	Run: func(f *facts.Facts, report func(Finding)) {
 		top, when := highest(f)
-		if !over(top, mostVoltage) {
+		if !over(top, catalogue.ExtraLow) {
 			return
 		}
-		v, bound := pair(top, mostVoltage)
+		v, bound := pair(top, catalogue.ExtraLow)
 		x := Finding{
 			Severity: Stop, Subject: designation(f.Battery.Part, "duty.nominal"), At: f.Site.Duty.Nominal.Pos,
 			Message: fmt.Sprintf("%s: %s in %s, limit %s", designation(f.Battery.Part, "System"), v, when, bound),
-			Remedy:  fmt.Sprintf("A nominal voltage of at most %s.", sayDown(f.Site.Duty.Nominal.Val*mostVoltage/top)),
-			Value:   float64(top), Limit: float64(mostVoltage), Unit: "V",
+			Remedy:  fmt.Sprintf("A nominal voltage of at most %s.", sayDown(f.Site.Duty.Nominal.Val*catalogue.ExtraLow/top)),
+			Value:   float64(top), Limit: float64(catalogue.ExtraLow), Unit: "V",
 		}
 		if n := f.Battery.Series; n > 0 {
-			x.Remedy = fmt.Sprintf("At most %d cells in series.", int(float64(mostVoltage/top)*float64(n)))
+			x.Remedy = fmt.Sprintf("At most %d cells in series.", int(float64(catalogue.ExtraLow/top)*float64(n)))
 		}
 		report(x)
 	},

@@ -163,3 +163,12 @@ func boostAtColdest(f *facts.Facts) quantity.Volt {
 
 // number prints a figure without a type, as findings about any unit need it.
 func number(v float64) string { return strconv.FormatFloat(v, 'g', usualDigits, 64) }
+
+// apart prints two bare numbers with as many digits as tell them apart.
+func apart(v, limit float64) (figure, bound string) {
+	figure, bound = number(v), number(limit)
+	for d := usualDigits + 1; figure == bound && d < mostDigits; d++ {
+		figure, bound = strconv.FormatFloat(v, 'g', d, 64), strconv.FormatFloat(limit, 'g', d, 64)
+	}
+	return figure, bound
+}

@@ -88,8 +88,8 @@ func impedanceVerdict(in ImpedanceInput, least, most, first, mean float64) error
 	switch r := float64(in.Pinned); {
 	case first <= 0 || mean <= 0:
 		return &BlockedError{
-			Limit: LimitCharge, Subject: "the setting over the battery's own voltage", Value: float64(in.Set - in.Diode), Bound: float64(max(in.Empty, in.Full)), Unit: "V",
-			Frees: "set a higher float voltage",
+			Limit: LimitChargeVolt, Subject: "what the setting gives behind the diode, over the battery at rest", Value: float64(in.Set - in.Diode), Bound: float64(max(in.Empty, in.Full)), Unit: "V",
+			Frees: fmt.Sprintf("set the float voltage more than %s higher", num(float64(max(in.Empty, in.Full)-in.Set+in.Diode), "V")),
 		}
 	case r > 0 && r < least:
 		return &BlockedError{

@@ -21,6 +21,8 @@ type EmitterFollowerInput struct {
 	Coil       quantity.Ohm    // at 20 °C
 	PickUp     quantity.Volt   // at the coil
 	DropOut    quantity.Volt   // at the coil
+	Low        quantity.Volt   // lowest supply by day, on which it must still pick up; 0: not asked
+	Warm       quantity.Volt   // pick-up voltage at the coil in the hottest ambient
 	Feed       catalogue.Diode // in the coil feed; zero: none
 	Ambient    quantity.Celsius
 }
@@ -30,6 +32,7 @@ type EmitterFollower struct {
 	Load, Base quantity.Ohm
 	Dark       quantity.Lux // at which the relay lets go, with Load fitted
 	Bright     quantity.Lux // at which it picks up again; +Inf: never
+	Least      quantity.Lux // at which it picks up on the lowest supply; +Inf: never
 	Heat       quantity.Watt
 	Slow       quantity.Farad
 }
@@ -40,6 +43,15 @@ type EmitterFollower struct {
 // current over the gain (emitter follower, electronics textbooks). At half voltage
 // the transistor gives off most, U² ÷ (4 R_coil).
 func FollowerPhotocell(in EmitterFollowerInput) (EmitterFollower, []Working, error) {
+	f, ws, err := in.size()
+	if err == nil {
+		err = in.verdict(f)
+	}
+	return f, ws, err
+}
+
+// size chooses the resistors.
+func (in *EmitterFollowerInput) size() (EmitterFollower, []Working, error) {
 	q := in.Transistor
 	var f EmitterFollower
 	most := float64(in.High) / float64(in.Coil)
@@ -73,16 +85,20 @@ func FollowerPhotocell(in EmitterFollowerInput) (EmitterFollower, []Working, err
 	}
 	f.Load = quantity.Ohm(catalogue.E24.Nearest(load))
 	f.Slow = quantity.Farad(catalogue.E6.AtLeast(slowTime / float64(f.Load)))
-	light := func(v quantity.Volt, base quantity.Ampere) quantity.Lux {
-		if v >= in.Supply {
+	light := func(supply, v quantity.Volt, base quantity.Ampere) quantity.Lux {
+		if v >= supply {
 			return quantity.Lux(math.Inf(1))
 		}
-		r := float64(in.Supply-v) / (float64(v)/float64(f.Load) + float64(base))
+		r := float64(supply-v) / (float64(v)/float64(f.Load) + float64(base))
 		return quantity.Lux(cellReference * math.Pow(r/float64(in.Cell.At10), -1/in.Cell.Gamma))
 	}
-	f.Dark = light(vd, id)
+	f.Dark = light(in.Supply, vd, id)
 	vp, ip := node(in.PickUp)
-	f.Bright = light(vp, ip)
+	f.Bright = light(in.Supply, vp, ip)
+	vw, iw := node(in.Warm)
+	if in.Low > 0 {
+		f.Least = light(in.Low, vw, iw)
+	}
 	f.Heat = quantity.Watt(float64(in.High) * float64(in.High) / (4 * float64(in.Coil)))
 	ws = append(ws, Working{
 		Name: "resistor of the light divider", Formula: "R = U_node ÷ ((U − U_node) ÷ R_cell − I_base), nearest E24 value",
@@ -93,15 +109,20 @@ func FollowerPhotocell(in EmitterFollowerInput) (EmitterFollower, []Working, err
 		Substituted: fmt.Sprintf("%s ^2 ÷ (4 × %s)", num(float64(in.High), "V"), num(float64(in.Coil), "Ω")),
 		Value:       float64(f.Heat), Unit: "W", Source: "greatest power at half voltage (electronics textbooks)",
 	})
-	if !math.IsInf(float64(f.Bright), 1) {
+	again := func(name string, e quantity.Lux, supply, v quantity.Volt, base quantity.Ampere) {
+		if math.IsInf(float64(e), 1) || e == 0 {
+			return
+		}
 		ws = append(ws, Working{
-			Name: "light again above", Formula: "E = 10 lx × ((U − U_node) ÷ (U_node ÷ R_load + I_base) ÷ R_10)^(−1 ÷ γ)",
-			Substituted: fmt.Sprintf("10 lx × ((%s − %s) ÷ (%s ÷ %s + %s) ÷ %s)^(−1 ÷ %s)", num(float64(in.Supply), "V"), num(float64(vp), "V"), num(float64(vp), "V"),
-				num(float64(f.Load), "Ω"), num(float64(ip), "A"), num(float64(in.Cell.At10), "Ω"), num(in.Cell.Gamma, "")),
-			Value: float64(f.Bright), Unit: "lx", Source: in.Cell.Evidence.String(), Uses: []string{"resistor of the light divider"},
+			Name: name, Formula: "E = 10 lx × ((U − U_node) ÷ (U_node ÷ R_load + I_base) ÷ R_10)^(−1 ÷ γ)",
+			Substituted: fmt.Sprintf("10 lx × ((%s − %s) ÷ (%s ÷ %s + %s) ÷ %s)^(−1 ÷ %s)", num(float64(supply), "V"), num(float64(v), "V"), num(float64(v), "V"),
+				num(float64(f.Load), "Ω"), num(float64(base), "A"), num(float64(in.Cell.At10), "Ω"), num(in.Cell.Gamma, "")),
+			Value: float64(e), Unit: "lx", Source: in.Cell.Evidence.String(), Uses: []string{"resistor of the light divider"},
 		})
 	}
-	return f, ws, in.verdict(f)
+	again("light again above", f.Bright, in.Supply, vp, ip)
+	again("picks up on the empty battery above", f.Least, in.Low, vw, iw)
+	return f, ws, nil
 }
 
 // verdict holds the transistor and the cell against what they bear.
@@ -130,8 +151,32 @@ func (in *EmitterFollowerInput) verdict(f EmitterFollower) error {
 			Limit: LimitRange, Subject: "the illuminance at which the relay picks up again", Value: math.Min(float64(f.Bright), daylight), Bound: overcast, Unit: "lx",
 			Frees: "set a lower illuminance, take a relay that picks up at less, or a comparator (built: comparator)",
 		}
+	case float64(f.Least) > overcast:
+		return &BlockedError{
+			Limit: LimitPickUp, Subject: "the illuminance at which the relay picks up on the nearly empty battery", Value: math.Min(float64(f.Least), daylight), Bound: overcast, Unit: "lx",
+			Frees: in.darker() + "take a comparator (built: comparator)",
+		}
 	}
 	return nil
+}
+
+// darker says at which dark threshold the relay would pick up on the nearly empty battery
+// under an overcast sky, if any does.
+func (in EmitterFollowerInput) darker() string {
+	const step, least = 0.9, 0.5
+	for in.Dark *= step; in.Dark > least; in.Dark *= step {
+		if f, _, err := in.size(); err == nil && float64(f.Least) <= overcast {
+			const shown = 2
+			return "set dark_below to at most " + quantity.Format(quantity.Lux(floor(float64(f.Dark), shown)), shown) + ", or "
+		}
+	}
+	return ""
+}
+
+// floor rounds down to so many digits.
+func floor(v float64, digits int) float64 {
+	k := math.Pow(10, float64(digits)-1-math.Floor(math.Log10(v)))
+	return math.Floor(v*k) / k
 }
 
 // Figures of the follower. The base resistor drops at most half a volt with the coil's

@@ -20,6 +20,7 @@ const (
 	LimitReclose     Limit = "voltage at which it closes again"
 	LimitCapacity    Limit = "battery capacity"
 	LimitCharge      Limit = "charge current"
+	LimitChargeVolt  Limit = "charging voltage"
 	LimitPickUp      Limit = "relay pick-up"
 	LimitCoilHeat    Limit = "coil voltage"
 	LimitContact     Limit = "contact rating"

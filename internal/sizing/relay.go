@@ -78,6 +78,7 @@ type ContactInput struct {
 	Volt    quantity.Volt   // highest voltage across the open contact
 	Current quantity.Ampere // steady
 	Lamps   bool            // filament lamps with their inrush
+	Series  bool            // two poles in series
 }
 
 // ContactLoad checks a contact against the class's DC ratings and returns the
@@ -85,8 +86,12 @@ type ContactInput struct {
 // rule I₂ × U₂ = ⅔ × I₁ × U₁ between listed voltages says so (relay application note).
 func ContactLoad(in ContactInput) (quantity.Ampere, Working, error) {
 	var below, row *catalogue.ContactRating
-	for i := range in.Class.ContactRows {
-		r := &in.Class.ContactRows[i]
+	rows := in.Class.ContactRows
+	if in.Series {
+		rows = in.Class.SeriesRows
+	}
+	for i := range rows {
+		r := &rows[i]
 		if r.Volt >= in.Volt {
 			row = r
 			break

@@ -5,6 +5,7 @@ import (
 	"gloamwright/internal/facts"
 	"gloamwright/internal/quantity"
 	"gloamwright/internal/sizing"
+	"math"
 	"strconv"
 
 	"gloamwright/internal/circuit"
@@ -27,6 +28,7 @@ func changeoverRelay() *Kind {
 				describe.Field{Name: "coil", Type: describe.StageRef, Doc: "The supply that holds the coil in while mains is on."},
 				describe.Field{Name: "from", Type: describe.StageRef, Required: true, Doc: "The stage that it takes the plus from."},
 				describe.Field{Name: "rated", Type: describe.Current, Min: "0.1 A", Max: "200 A", Doc: "Contact rating for direct current at the nominal voltage; without it the next standard rating."},
+				describe.Field{Name: "class", Type: describe.Choice, Choices: relayChoices(), Doc: "Class of the relay; without it the first whose contact breaks the load and whose coil its photocell can work."},
 				describe.Field{Name: "coil_resistance", Type: describe.Resistance, Min: "1 Ω", Max: "100 kΩ", Doc: "Coil resistance at 20 °C; without it from the relay class."},
 			),
 		},
@@ -34,6 +36,15 @@ func changeoverRelay() *Kind {
 		Expand: expandChangeover,
 		Steps:  []Step{{Control, sizeRelay}, {Trunk, sizeContact}},
 	}
+}
+
+// relayChoices are the relay classes of the catalogue.
+func relayChoices() []string {
+	var out []string
+	for _, c := range catalogue.RelayClasses() {
+		out = append(out, c.Name)
+	}
+	return out
 }
 
 // feed is one source that holds a coil.
@@ -69,23 +80,34 @@ func (b *Build) feedOf(key string) feed {
 }
 
 func expandChangeover(b *Build, s *describe.Stage) {
-	k := b.Part("relay", circuit.Relay, "Changeover relay, two poles", "A1", "A2", "11", "12", "14", "21", "22", "24")
+	brk, mk := changeoverPoles(inSeries(b.Site), b.used(s.Name.Val+".make"))
+	pins := []string{"A1", "A2"}
+	for _, t := range []string{"1", "2", "3", "4"}[:max(2, len(brk)+len(mk))] {
+		pins = append(pins, t+"1", t+"2", t+"4")
+	}
+	k := b.Part("relay", circuit.Relay, "Changeover relay", pins...)
 	coil := b.Element(k, "coil", "coil", "A1", "A1", "A2", "A2")
 	contact := func(name, a, z, rest string) {
 		e := b.Element(k, name, "contact", "1", a, "2", z)
 		e.Control = coil.ID
 		e.Params = []circuit.Param{{Name: "rest_closed", Value: map[string]float64{"break": 1, "make": 0}[rest]}}
 	}
-	contact("11-12", "11", "12", "break")
+	for _, t := range brk {
+		contact(t+"1-"+t+"2", t+"1", t+"2", "break")
+	}
 	d := b.Part("suppressor", circuit.Diode, "Diode across the coil", "A", "K")
 	b.Element(d, "", "diode", "A", "A", "K", "K")
 	b.Join(k.Pin("A1"), d.Pin("K"))
 	b.Join(k.Pin("A2"), d.Pin("A"))
-	makeUsed := b.used(s.Name.Val + ".make")
-	width := 40
-	if makeUsed {
-		width = 58
-		contact("21-24", "21", "24", "make")
+	for _, t := range mk {
+		contact(t+"1-"+t+"4", t+"1", t+"4", "make")
+	}
+	const coilWidth, poleWidth, seriesWidth = 22, 18, 8
+	width := coilWidth
+	for _, poles := range [][]string{brk, mk} {
+		if len(poles) > 0 {
+			width += poleWidth + seriesWidth*(len(poles)-1)
+		}
 	}
 	b.sketch(width, "lights the board", "without mains", "in the dark")
 
@@ -129,32 +151,57 @@ func expandChangeover(b *Build, s *describe.Stage) {
 	b.line(nil, 21, 42, 21, 44, 15, 44)
 	down := b.lead(circuit.OpDown, "minus", k.Pin("A2"), Minus, 15, 42, 15, downEnd)
 	from, _ := b.ref(s, "from")
-	in := b.lead(circuit.OpIn, "in", k.Pin("11"), from, 26, upEnd, 26, 17, 29, 17)
-	b.symbol("break", k, 31, 17, "H", "C", "1", "11", "2", "12")
-	out := b.lead(circuit.OpUp, "break", k.Pin("12"), b.outRail(s, "break"), 33, 17, 36, 17, 36, upEnd)
-	if makeUsed {
-		in2 := b.lead(circuit.OpIn, "in2", k.Pin("21"), from, 44, upEnd, 44, 17, 47, 17)
-		b.symbol("make", k, 49, 17, "H", "C", "1", "21", "2", "24")
-		out2 := b.lead(circuit.OpUp, "make", k.Pin("24"), b.outRail(s, "make"), 51, 17, 54, 17, 54, upEnd)
-		b.number(in2, 44, 11)
-		b.number(out2, 54, 11)
-	}
+	x := 26
+	x = b.poles(k, "break", brk, "2", from, b.outRail(s, "break"), "in", x)
+	b.poles(k, "make", mk, "4", from, b.outRail(s, "make"), "in2", x)
 	b.point(b.TestPoint("coil", "Coil of the changeover", k.Pin("A1")), 15, 29, "E")
-	b.number(in, 26, 11)
-	b.number(out, 36, 11)
 	b.number(down, 15, 48.5)
+}
+
+// changeoverPoles are the poles of a changeover that break and make: one each, or two in
+// series; none make where nothing hangs on that port.
+func changeoverPoles(series, makeUsed bool) (brk, mk []string) {
+	brk, mk = []string{"1"}, []string{"2"}
+	if series {
+		brk, mk = []string{"1", "2"}, []string{"3", "4"}
+	}
+	if !makeUsed {
+		mk = nil
+	}
+	return brk, mk
+}
+
+// poles draws the contacts of one port in series from x on, with the leads before and
+// behind them, and returns where the next port's begin.
+func (b *Build) poles(k *circuit.Part, symbol string, poles []string, end, from, to, in string, x int) int {
+	if len(poles) == 0 {
+		return x
+	}
+	const level, half, step, next = 17, 2, 8, 8
+	at := x + half + 3 // of the first contact
+	up := b.lead(circuit.OpIn, in, k.Pin(poles[0]+"1"), from, x, upEnd, x, level, at-half, level)
+	b.number(up, float64(x), 11)
+	for i, t := range poles {
+		b.symbol(symbol, k, float64(at), level, "H", "C", "1", t+"1", "2", t+end)
+		if i > 0 {
+			b.Join(k.Pin(poles[i-1]+end), k.Pin(t+"1")) // a link on the relay itself
+			b.line(nil, at-step+half, level, at-half, level)
+		}
+		at += step
+	}
+	at -= step
+	out := b.lead(circuit.OpUp, symbol, k.Pin(poles[len(poles)-1]+end), to, at+half, level, at+half+3, level, at+half+3, upEnd)
+	b.number(out, float64(at+half+3), 11)
+	return at + half + 3 + next
 }
 
 // sizeRelay takes the coil from the relay class, and sums what it draws.
 func sizeRelay(p *Plan, s *describe.Stage) {
 	k := p.part(s, "relay")
 	nominal := p.Site.Duty.Nominal.Val
-	class := relayClass(nominal)
-	ohm := class.CoilResistance(nominal)
-	given, pinned := describe.Get[quantity.Ohm](s.Fields, "coil_resistance")
-	if pinned {
-		ohm = given.Val
-	}
+	class := p.relayFor(s)
+	ohm := p.coilOhm(s, class)
+	_, pinned := describe.Get[quantity.Ohm](s.Fields, "coil_resistance")
 	i := quantity.Ampere(float64(nominal) / float64(ohm))
 	// Low and High at the coil are judged on the solved circuit; here the class's own
 	// limits say what the coil needs.
@@ -166,10 +213,21 @@ func sizeRelay(p *Plan, s *describe.Stage) {
 	for _, w := range ws {
 		p.work(k.Designation, "", w)
 	}
-	in.Class.CoilRise = 0 // dead all night: at ambient temperature
-	dawn, _, err := sizing.CoilPickUp(in)
+	dawn, err := p.warmPickUp(class)
 	if err != nil {
 		p.block(k.Designation, k.At, "", err)
+	}
+	poles := quantity.Ohm(1)
+	if inSeries(p.Site) {
+		poles = 2
+	}
+	k.Description = class.Title
+	if poles > 1 {
+		k.Description += ", two poles in series"
+		k.Note = "link 12 to 21 on the relay"
+		if k.Pin("41") != nil {
+			k.Note += " and 34 to 41"
+		}
 	}
 	set(k, "coil", nominal.String()+" "+quantity.Format(ohm, 3), float64(ohm), "Ω", true, pinned)
 	params(k, "coil",
@@ -187,25 +245,18 @@ func sizeRelay(p *Plan, s *describe.Stage) {
 		case d.Stage != s.Name.Val:
 		case d.Kind == circuit.Diode:
 			p.diode(d)
+			p.suppress(d, k, ohm, class)
 		case d.Kind == circuit.Schottky:
 			p.schottky(d)
 		}
 	}
-	p.TrunkOhm += class.ContactTyp
+	p.ContactOhm = poles * class.ContactTyp
+	p.TrunkOhm += p.ContactOhm
 	p.Held += i
 	if r, ok := describe.Get[describe.Ref](s.Fields, "coil"); ok {
 		p.aux[r.Val.Stage] += i
 	}
-	p.F.Relay = &facts.Relay{Part: k, Coil: ohm, CoilA: i, PickUp: pick.Needs, PickUpCold: dawn.Needs, DropOut: quantity.Volt(float64(nominal) * float64(class.DropOut))}
-}
-
-// relayClass is the class of relay for a nominal voltage: at 12 V the automotive
-// style, which picks up early; else the general-purpose one.
-func relayClass(nominal quantity.Volt) catalogue.RelayClass {
-	if nominal <= 12 {
-		return catalogue.RelayAutomotive
-	}
-	return catalogue.RelayGeneral
+	p.F.Relay = &facts.Relay{Part: k, Coil: ohm, CoilA: i, PickUp: pick.Needs, PickUpCold: dawn, DropOut: quantity.Volt(float64(nominal) * float64(class.DropOut))}
 }
 
 // diode records a small rectifier diode: 1N4004 class, 1 A.
@@ -213,6 +264,22 @@ func (p *Plan) diode(d *circuit.Part) {
 	set(d, "type", "1 A, 100 V", 1, "A", true, false)
 	d.Note = "1N4002 to 1N4007 class, 1 A, at least 100 V"
 	params(d, "", circuit.Param{Name: "is", Value: diodeIS}, circuit.Param{Name: "n", Value: diodeN})
+}
+
+// suppress records what the diode across a coil does: what switches the coil bears no
+// more than the supply and the diode's drop, and the relay lets go later. A Zener diode
+// in series would shorten the delay and load the driving transistor with its voltage; the
+// lamps do not mind some tens of milliseconds, so the diode stands alone.
+func (p *Plan) suppress(d, k *circuit.Part, coil quantity.Ohm, class catalogue.RelayClass) {
+	in := sizing.SuppressionInput{Supply: p.Highest, Coil: coil, Forward: catalogue.Diode1N4004.Drop(quantity.Ampere(float64(p.Highest) / float64(coil)))}
+	across, times, w := sizing.Suppression(in, class.DropOut)
+	p.work(d.Designation, "", w)
+	p.work(d.Designation, "voltage across what switches the coil", sizing.Working{
+		Formula: "U = U_max + U_F", Value: float64(across), Unit: "V", Source: "inductive discharge into a clamp (circuit textbooks)",
+		Substituted: sizing.Digits(float64(in.Supply)) + " V + " + sizing.Digits(float64(in.Forward)) + " V",
+	})
+	const tenths = 10
+	d.Note += "; " + k.Designation + " lets go " + sizing.Digits(math.Round(times*tenths)/tenths) + " L/R of its coil later"
 }
 
 // schottky records a small Schottky diode, 60 V 1 A. Its law is the model's own.
@@ -234,7 +301,7 @@ func sizeContact(p *Plan, s *describe.Stage) {
 	load := p.Light
 	rated, given := describe.Get[quantity.Ampere](s.Fields, "rated")
 	if !given {
-		r, w, err := sizing.ContactLoad(sizing.ContactInput{Class: relayClass(p.Site.Duty.Nominal.Val), Volt: p.Highest, Current: load, Lamps: p.filaments()})
+		r, w, err := p.contactLoad(p.relayFor(s))
 		if err != nil {
 			p.block(k.Designation, k.At, w.Source, err)
 		}

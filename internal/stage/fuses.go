@@ -183,19 +183,53 @@ func (p *Plan) settleFuses() {
 	}
 	flows, _ := sizing.Prospective(sizing.FaultInput{Source: p.Full, Internal: p.Internal, Loop: []sizing.Series{{Name: "way to the cabinet", Ohm: p.CabinetOhm}}})
 	for _, f := range p.F.Fuses {
-		if _, raw := p.sources[f.Part]; raw || f.Part == p.part(s, "fuse") || f.Breaking >= flows {
+		if _, raw := p.sources[f.Part]; raw || f.Part == p.part(s, "fuse") {
 			continue
 		}
-		class, rating, ok := p.breaks(f, flows)
-		if !ok {
-			continue // the finding on breaking capacity says so
+		if f.Breaking < flows {
+			if class, rating, ok := p.breaks(f, flows); ok { // else the finding on breaking capacity says so
+				p.link(f, class, rating)
+				if p.chargerFuse(f) {
+					p.ChargeSize, _ = p.leastFor(f.Part.Designation, class, rating, catalogue.LeastFixed, 1)
+				}
+			}
 		}
-		p.link(f, class, rating)
-		if f.CableSize == p.ChargeSize && p.chargerFuse(f) {
-			p.ChargeSize, f.CableAmpacity = p.leastFor(f.Part.Designation, class, rating, catalogue.LeastFixed, 1)
-			f.CableSize = p.ChargeSize
+		if p.chargerFuse(f) {
+			p.ChargeSize = p.withstands(f, p.ChargeSize)
+		} else {
+			p.ControlSize = thicker(p.ControlSize, p.withstands(f, controlWire[p.System]))
 		}
 	}
+	for _, f := range p.F.Fuses {
+		if _, raw := p.sources[f.Part]; raw || f.Part == p.part(s, "fuse") {
+			continue
+		}
+		f.CableSize = p.controlSize()
+		if p.chargerFuse(f) {
+			f.CableSize = p.ChargeSize
+		}
+		f.CableAmpacity = p.ampacity(f.CableSize, 1)
+	}
+}
+
+// withstands returns the thinnest size from size up that stands a short behind a fuse of
+// the cabinet until it opens.
+func (p *Plan) withstands(f *facts.Fuse, size quantity.WireSize) quantity.WireSize {
+	for _, c := range p.sizes() {
+		if c.Size.Area < size.Area-areaSlack {
+			continue
+		}
+		size = c.Size
+		lead := 2 * quantity.Ohm(leadLength) * sizing.PerMetre(c, p.running(c.Size))
+		i, _ := sizing.LeastFault(sizing.FaultInput{
+			Source: p.Empty, Internal: p.Internal * usedBattery, Loop: []sizing.Series{{Name: "loop", Ohm: p.CabinetOhm + quantity.Ohm(fuseOhm(f.Rating)) + lead}},
+		})
+		t, _, err := sizing.OpeningTime(sizing.OpeningInput{Class: f.Class, Rating: f.Rating, Current: i})
+		if err != nil || t.Latest <= sizing.Withstand(c.Size.Area, i, adiabaticK) {
+			break
+		}
+	}
+	return size
 }
 
 // breaks returns a class and rating for a fuse that break a current.

@@ -201,7 +201,7 @@ func partFuse() *PartKind {
 			rating := partField[quantity.Ampere](d, "rating")
 			if p.onBattery(f) {
 				x := p.fit(f, p.classOf(rating, p.fuseClasses()[0]), rating, "part "+d.Name.Val, 0, true)
-				x.CableSize = controlWire[p.System]
+				x.CableSize = p.controlSize()
 				x.CableAmpacity = p.ampacity(x.CableSize, 1)
 				return
 			}
@@ -285,7 +285,7 @@ func partRelay() *PartKind {
 		Symbol: "coil", Polar: true, Part: circuit.Relay, Text: "Relay", Model: "coil", Ends: [2]string{"A1", "A2"},
 		Size: func(p *Plan, d *describe.SinglePart, k *circuit.Part) {
 			v := partField[quantity.Volt](d, "rated")
-			class := relayClass(v)
+			class := p.coilClasses(v)[0]
 			ohm, given := describe.Get[quantity.Ohm](d.Fields, "coil_resistance")
 			if !given {
 				ohm.Val = class.CoilResistance(v)

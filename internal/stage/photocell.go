@@ -170,28 +170,16 @@ func (p *Plan) sizeCell(cell *circuit.Part, c catalogue.LightResistor) {
 		circuit.Param{Name: "r10", Value: float64(c.At10), Tol: float64((c.At10Hi-c.At10Low)/2) / float64(c.At10)},
 		circuit.Param{Name: "gamma", Value: c.Gamma, Tol: (c.GammaHigh - c.GammaLow) / 2 / c.Gamma},
 	)
+	if c.Dark != catalogue.CadmiumSulphide5.Dark { // the model's own dark resistance is the usual cell's
+		params(cell, "", circuit.Param{Name: "rdark", Value: float64(c.Dark)})
+	}
 }
 
-// coilOf returns the resistance of the coil that a photocell holds, its tolerance and
-// its limits, and how many sources feed it.
-func (p *Plan) coilOf(s *describe.Stage) (ohm quantity.Ohm, class catalogue.RelayClass, feeds int) {
-	r := must[describe.Ref](s, "holds")
-	nominal := p.Site.Duty.Nominal.Val
-	class = relayClass(nominal)
-	ohm = class.CoilResistance(nominal)
-	relay := p.stageOf(r.Stage)
-	if v, ok := describe.Get[quantity.Ohm](relay.Fields, "coil_resistance"); ok {
-		ohm = v.Val
-	}
-	if _, ok := describe.Get[describe.Ref](relay.Fields, "coil"); ok {
-		feeds++
-	}
-	for _, o := range p.Site.Stages {
-		if h, ok := describe.Get[describe.Ref](o.Fields, "holds"); ok && o.Kind.Val == "photocell" && h.Val.Stage == r.Stage {
-			feeds++
-		}
-	}
-	return ohm, class, feeds
+// coilOf returns the resistance of the coil that a photocell holds and its limits.
+func (p *Plan) coilOf(s *describe.Stage) (quantity.Ohm, catalogue.RelayClass) {
+	relay := p.stageOf(must[describe.Ref](s, "holds").Stage)
+	class := p.relayFor(relay)
+	return p.coilOhm(relay, class), class
 }
 
 // twilightRatio is the illuminance at which it is light again, as a multiple of that
@@ -205,7 +193,7 @@ func (p *Plan) controlFuse(f *circuit.Part, feeds string) {
 		rating = class.Ratings[len(class.Ratings)-1]
 	}
 	x := p.fit(f, class, rating, feeds, controlFuse*controlShare, false)
-	x.CableSize = controlWire[p.System]
+	x.CableSize = p.controlSize()
 	x.CableAmpacity = p.ampacity(x.CableSize, 1)
 }
 

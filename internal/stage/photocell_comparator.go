@@ -97,7 +97,7 @@ func expandComparator(b *Build, s *describe.Stage) {
 func sizeComparator(p *Plan, s *describe.Stage, dark, light quantity.Lux) {
 	k, q, pot := p.part(s, "comparator"), p.part(s, "driver"), p.part(s, "set")
 	cell, comp, pnp := catalogue.CadmiumSulphide5, catalogue.ComparatorDual, catalogue.PNPSmall
-	coil, class, _ := p.coilOf(s)
+	coil, class := p.coilOf(s)
 	nominal := p.Site.Duty.Nominal.Val
 	in := sizing.TwilightInput{Cell: cell, Dark: dark, Bright: light, Most: p.Highest}
 	drive := sizing.CoilDriverInput{Transistor: pnp, Comparator: comp, Low: p.End, High: p.Highest, Coil: coil, CoilTol: class.CoilTol}

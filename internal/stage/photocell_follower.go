@@ -59,22 +59,41 @@ func expandFollower(b *Build, s *describe.Stage) {
 // network's model.
 var feedDiode = catalogue.Diode{Saturation: 30e-6, Ideality: 1.05, Series: 0.1}
 
+// follower sizes a follower on a relay of a class with the first transistor and cell
+// that bear it.
+func (p *Plan) follower(s, relay *describe.Stage, class catalogue.RelayClass) (in sizing.EmitterFollowerInput, f sizing.EmitterFollower, ws []sizing.Working, err error) {
+	nominal := p.Site.Duty.Nominal.Val
+	in.Cell, in.Transistor = catalogue.CadmiumSulphide5, catalogue.NPNSmall
+	warm, err := p.warmPickUp(class)
+	if err != nil {
+		return in, f, nil, err
+	}
+	in = sizing.EmitterFollowerInput{
+		Cell: in.Cell, Transistor: in.Transistor, Dark: must[quantity.Lux](s, "dark_below"), Supply: p.Full, High: p.Highest, Coil: p.coilOhm(relay, class),
+		PickUp: nominal * quantity.Volt(class.PickUp), DropOut: nominal * quantity.Volt(class.DropOut),
+		Low: p.End, Warm: warm, Ambient: p.Site.Duty.CableAmbient.Val,
+	}
+	if p.coilFeeds(relay) > 1 {
+		in.Feed = feedDiode
+	}
+	for _, in.Cell = range []catalogue.LightResistor{catalogue.CadmiumSulphide5, catalogue.CadmiumSulphideHigh} {
+		for _, in.Transistor = range []catalogue.Transistor{catalogue.NPNSmall, catalogue.NPNMedium} {
+			if f, ws, err = sizing.FollowerPhotocell(in); err == nil {
+				return in, f, ws, nil
+			}
+		}
+	}
+	return in, f, ws, err
+}
+
 // sizeFollower chooses the load resistor so that the relay lets go at the dark
 // threshold. Where it picks up again follows from the relay.
 func sizeFollower(p *Plan, s *describe.Stage, dark, light quantity.Lux, given bool) {
 	q := p.part(s, "driver")
-	cell, npn := catalogue.CadmiumSulphide5, catalogue.NPNSmall
-	coil, class, feeds := p.coilOf(s)
+	coil, class := p.coilOf(s)
 	nominal := float64(p.Site.Duty.Nominal.Val)
-	in := sizing.EmitterFollowerInput{
-		Cell: cell, Transistor: npn, Dark: dark, Supply: p.Full, High: p.Highest, Coil: coil,
-		PickUp: quantity.Volt(nominal * float64(class.PickUp)), DropOut: quantity.Volt(nominal * float64(class.DropOut)),
-		Ambient: p.Site.Duty.CableAmbient.Val,
-	}
-	if feeds > 1 {
-		in.Feed = feedDiode
-	}
-	f, ws, err := sizing.FollowerPhotocell(in)
+	in, f, ws, err := p.follower(s, p.stageOf(must[describe.Ref](s, "holds").Stage), class)
+	cell, npn := in.Cell, in.Transistor
 	if err != nil {
 		p.block(q.Designation, q.At, "", err)
 	} else if given && f.Bright > light*(1+followerSlack) {

@@ -58,6 +58,7 @@ type Plan struct {
 	Internal quantity.Ohm
 
 	TrunkSize, ChargeSize quantity.WireSize
+	ControlSize           quantity.WireSize // of control wires, where a short circuit asks more than usual; zero: the usual
 
 	ambient  quantity.Celsius // of the cables
 	grouping int              // loaded circuits run together
@@ -66,9 +67,10 @@ type Plan struct {
 	Block catalogue.Block
 
 	more     Reserve
-	prices   map[string]float64         // by the name of the thing
-	sells    map[string]bool            // first words of the names that have a price
-	aux      map[string]quantity.Ampere // what auxiliary supplies feed, by stage name
+	prices   map[string]float64                       // by the name of the thing
+	sells    map[string]bool                          // first words of the names that have a price
+	aux      map[string]quantity.Ampere               // what auxiliary supplies feed, by stage name
+	relays   map[*describe.Stage]catalogue.RelayClass // the classes chosen
 	cabled   bool
 	wayClass *catalogue.FuseClass // of the ways of circuits
 	loads    map[string]Load
@@ -87,7 +89,7 @@ func Size(site *describe.Site, c *circuit.Circuit, f *facts.Facts, more Reserve)
 	p := &Plan{
 		more: more, Site: site, C: c, F: f, System: catalogue.System(site.Practice.Conductors.Val),
 		aux: map[string]quantity.Ampere{}, loads: map[string]Load{}, parts: map[string]*circuit.Part{},
-		sources: map[*circuit.Part]raw{},
+		sources: map[*circuit.Part]raw{}, relays: map[*describe.Stage]catalogue.RelayClass{},
 	}
 	for _, part := range c.Parts {
 		p.parts[part.Key] = part

@@ -40,7 +40,12 @@ func (p *Plan) protect() {
 		}
 		near, far := p.reach(f, ref, at)
 		if f == main {
+			// Its cable ends at the boards. Leads to the fuses of cards are thinner and short:
+			// IEC 60364-4-43 clause 434.2.1 leaves them to the way they are laid.
 			near = 0
+			if len(p.C.Boards) > 0 {
+				far = 0
+			}
 			for _, b := range p.C.Boards {
 				if b.Parent == nil {
 					far = max(far, at(b.Plus.Pin("in"), b.Minus.Pin("in")))
@@ -83,7 +88,7 @@ func (p *Plan) reach(f *facts.Fuse, ref *circuit.Pin, at func(a, b *circuit.Pin)
 
 // leadOhm is the resistance of the two control wires behind a fuse of the cabinet.
 func leadOhm(p *Plan) float64 {
-	c, _ := catalogue.ConductorOf(controlWire[p.System])
+	c, _ := catalogue.ConductorOf(p.controlSize())
 	return 2 * float64(leadLength) * float64(sizing.PerMetre(c, p.running(c.Size)))
 }
 

@@ -72,7 +72,7 @@ func sizeShunt(p *Plan, s *describe.Stage) {
 	}
 	pinned, fixed := describe.Get[quantity.Ohm](s.Fields, "dropper")
 	in := sizing.CoilFeedInput{
-		Low: low, High: high, Coil: coil, CoilTol: relayClass(nominal).CoilTol, Ambient: p.Site.Duty.CableAmbient.Val, Pinned: pinned.Val,
+		Low: low, High: high, Coil: coil, CoilTol: p.coilClasses(nominal)[0].CoilTol, Ambient: p.Site.Duty.CableAmbient.Val, Pinned: pinned.Val,
 	}
 	f, zener, ws, err := coilFeedWith(in, volts.Val)
 	if err != nil {

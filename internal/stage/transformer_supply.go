@@ -193,7 +193,7 @@ func sizeTransformer(p *Plan, s *describe.Stage) {
 
 	given, _ := describe.Get[quantity.Ampere](s.Fields, "fuse")
 	f := p.systemFuse(p.part(s, "fuse"), "raw supply", load, given)
-	f.CableSize = controlWire[p.System]
+	f.CableSize = p.controlSize()
 	f.CableAmpacity = p.ampacity(f.CableSize, 1)
 	p.sources[f.Part] = r
 	if p.F.Supply == nil {

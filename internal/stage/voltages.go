@@ -1,6 +1,7 @@
 package stage
 
 import (
+	"fmt"
 	"math"
 
 	"gloamwright/internal/catalogue"
@@ -20,9 +21,33 @@ func (p *Plan) voltages() {
 	}
 	p.Class = catalogue.BatteryClassOf(must[string](s, "cells"))
 	p.Cells = p.Class.CellsFor(nominal)
+	p.cellVoltages()
 	if v, ok := describe.Get[int](s.Fields, "series"); ok {
 		p.Cells = v.Val
+		p.cellVoltages()
+	} else if p.Highest > catalogue.ExtraLow {
+		p.fewerCells()
 	}
+}
+
+// fewerCells takes cells off a battery until its highest voltage keeps the extra-low
+// limit, as the trade does with 48 V of nickel-cadmium cells, whose boost is high.
+func (p *Plan) fewerCells() {
+	usual, most := p.Cells, p.Highest
+	for least := 1; p.Cells > least && p.Highest > catalogue.ExtraLow; {
+		p.Cells--
+		p.cellVoltages()
+	}
+	if p.F != nil {
+		p.work("battery", "cells in series", sizing.Working{
+			Formula: "n ≤ n_usual × 60 V ÷ U_highest, whole cells", Value: float64(p.Cells), Source: "IEC 61140 (60 V DC, ripple-free)",
+			Substituted: fmt.Sprintf("%d × 60 V ÷ %s V → %d", usual, sizing.Digits(float64(most)), p.Cells),
+		})
+	}
+}
+
+// cellVoltages sets the voltages of the whole battery from those of its cells.
+func (p *Plan) cellVoltages() {
 	n := quantity.Volt(p.Cells)
 	p.Empty = n * p.Class.RestVolt(0)
 	p.Full = n * p.Class.RestVolt(1)

@@ -16,6 +16,20 @@ var controlWire = map[catalogue.System]quantity.WireSize{
 	catalogue.AWG:    {Area: catalogue.LeastControl.Least(catalogue.AWG), Gauge: catalogue.LeastControl.Gauge},
 }
 
+// controlSize is the size of those wires here: thicker where the short-circuit current of
+// the battery asks it.
+func (p *Plan) controlSize() quantity.WireSize {
+	return thicker(controlWire[p.System], p.ControlSize)
+}
+
+// thicker returns the thicker of two sizes.
+func thicker(a, b quantity.WireSize) quantity.WireSize {
+	if a.Area > b.Area {
+		return a
+	}
+	return b
+}
+
 // wires gives every conductor that no step has sized its size, every one its colour
 // and resistance.
 func (p *Plan) wires() {
@@ -73,7 +87,7 @@ func (p *Plan) wireSize(w *circuit.Conductor) quantity.WireSize {
 	if p.chargeWire(w) {
 		return p.ChargeSize
 	}
-	return controlWire[p.System]
+	return p.controlSize()
 }
 
 // metricOr returns a size in the firm's system: as it is, or the gauge not thinner.
@@ -99,7 +113,7 @@ func (p *Plan) spareWire(b *circuit.Board) quantity.WireSize {
 		}
 	}
 	if s.Area == 0 {
-		return controlWire[p.System]
+		return p.controlSize()
 	}
 	return s
 }
