@@ -49,7 +49,7 @@ var seriesRows = []ContactRating{
 	{Volt: 30, Current: 10, Lamp: 3, Evidence: Evidence{Source: "relay ratings, 30 V DC resistive", Seen: true}},
 	{Volt: 48, Current: 5, Evidence: Evidence{Source: "typical load-limit curves, two poles in series"}},
 	{Volt: 60, Current: 3, Evidence: Evidence{Source: "typical load-limit curves, two poles in series"}},
-	{Volt: 110, Current: 1, Evidence: Evidence{Source: "typical load-limit curves, two poles in series"}},
+	{Volt: 110, Current: 0.8, Evidence: Evidence{Source: "typical load-limit curves, two poles in series"}},
 }
 
 // RelayGeneral is a general-purpose power relay. Coil limits read in a catalogue
@@ -102,9 +102,9 @@ func contactor(name, title string, coil quantity.Watt, one, two, lamp quantity.A
 
 // Contactors of three frame sizes, by their AC-1 current.
 var (
-	Contactor25 = contactor("contactor-25", "Contactor with break poles, 25 A frame", 4, 20, 20, 9)
-	Contactor40 = contactor("contactor-40", "Contactor with break poles, 40 A frame", 6, 32, 32, 18)
-	Contactor63 = contactor("contactor-63", "Contactor with break poles, 63 A frame", 8, 50, 50, 32)
+	Contactor25 = contactor("contactor-25", "Contactor with break poles, 25 A frame", 3, 20, 20, 9)
+	Contactor40 = contactor("contactor-40", "Contactor with break poles, 40 A frame", 5, 32, 32, 18)
+	Contactor63 = contactor("contactor-63", "Contactor with break poles, 63 A frame", 7, 50, 50, 32)
 )
 
 // RelayClasses lists the classes in the order in which they are tried.

@@ -51,6 +51,25 @@ func TestContact(t *testing.T) {
 		t.Error(err)
 	}
 	blocked(t, load(catalogue.RelayAutomotive, 24, 13.4, false), LimitContact)
+	// Two poles in series share the voltage: never more than one gap at half of it.
+	series := func(c catalogue.RelayClass, v quantity.Volt, i quantity.Ampere) error {
+		_, _, err := ContactLoad(ContactInput{Class: c, Volt: v, Current: i, Series: true})
+		return err
+	}
+	if err := series(catalogue.RelayGeneral, 58, 3); err != nil {
+		t.Error(err)
+	}
+	blocked(t, series(catalogue.RelayGeneral, 58, 3.1), LimitContact)
+	if err := series(catalogue.Contactor40, 59.9, 32); err != nil {
+		t.Error(err)
+	}
+	blocked(t, series(catalogue.Contactor40, 59.9, 32.1), LimitContact)
+	for _, r := range catalogue.RelayGeneral.SeriesRows {
+		half, _, _ := ContactLoad(ContactInput{Class: catalogue.RelayGeneral, Volt: r.Volt / 2})
+		if r.Current > half {
+			t.Errorf("two poles at %v: %v, one gap at half of it: %v", r.Volt, r.Current, half)
+		}
+	}
 	unknown(t, load(catalogue.RelayClass{}, 24, 1, false))
 }
 

@@ -41,6 +41,10 @@ type MainFuse struct {
 	OverSmaller bool // it stands above the largest fuse behind it by the ratio asked
 }
 
+// mostCopper is how much thicker than with a later class the cable may be for the sake of
+// an earlier one (common practice, no source).
+const mostCopper = 4
+
 // ChooseMainFuse tries class after class and size after size for the battery's main
 // fuse until all of this holds: I_B ÷ k ≤ I_n ≤ I_z and I_2 ≤ 1.45 I_z (IEC 60364-4-43
 // clause 433.1), rated voltage and breaking capacity (clause 434.5.1), a short at the far
@@ -50,6 +54,7 @@ type MainFuse struct {
 // breaks and what would free it; the candidate is returned with it.
 func ChooseMainFuse(in MainFuseInput) (MainFuse, error) {
 	for _, above := range []bool{true, false} {
+		var best MainFuse
 		for _, c := range in.Classes {
 			rating, ok := in.rating(c, above)
 			if !ok || c.Volt < in.System || c.BreakingCapacity(rating) < in.Prospective {
@@ -59,10 +64,17 @@ func ChooseMainFuse(in MainFuseInput) (MainFuse, error) {
 				continue
 			}
 			for _, o := range in.Cables {
-				if in.protects(c, rating, o) {
-					return MainFuse{c, rating, o, above}, nil
+				if !in.protects(c, rating, o) {
+					continue
 				}
+				if best.Class == nil || best.Cable.Size.Area > mostCopper*o.Size.Area {
+					best = MainFuse{c, rating, o, above}
+				}
+				break
 			}
+		}
+		if best.Class != nil {
+			return best, nil
 		}
 		if in.Above == 0 || in.Pinned > 0 {
 			break

@@ -153,7 +153,9 @@ func expandChangeover(b *Build, s *describe.Stage) {
 	from, _ := b.ref(s, "from")
 	x := 26
 	x = b.poles(k, "break", brk, "2", from, b.outRail(s, "break"), "in", x)
-	b.poles(k, "make", mk, "4", from, b.outRail(s, "make"), "in2", x)
+	if len(mk) > 0 {
+		b.poles(k, "make", mk, "4", from, b.outRail(s, "make"), "in2", x)
+	}
 	b.point(b.TestPoint("coil", "Coil of the changeover", k.Pin("A1")), 15, 29, "E")
 	b.number(down, 15, 48.5)
 }
@@ -174,9 +176,6 @@ func changeoverPoles(series, makeUsed bool) (brk, mk []string) {
 // poles draws the contacts of one port in series from x on, with the leads before and
 // behind them, and returns where the next port's begin.
 func (b *Build) poles(k *circuit.Part, symbol string, poles []string, end, from, to, in string, x int) int {
-	if len(poles) == 0 {
-		return x
-	}
 	const level, half, step, next = 17, 2, 8, 8
 	at := x + half + 3 // of the first contact
 	up := b.lead(circuit.OpIn, in, k.Pin(poles[0]+"1"), from, x, upEnd, x, level, at-half, level)
@@ -221,9 +220,9 @@ func sizeRelay(p *Plan, s *describe.Stage) {
 	if inSeries(p.Site) {
 		poles = 2
 	}
-	k.Description = class.Title
+	k.Description = class.Title + ", two poles"
 	if poles > 1 {
-		k.Description += ", two poles in series"
+		k.Description += " in series"
 		k.Note = "link 12 to 21 on the relay"
 		if k.Pin("41") != nil {
 			k.Note += " and 34 to 41"

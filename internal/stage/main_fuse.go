@@ -1,6 +1,7 @@
 package stage
 
 import (
+	"cmp"
 	"slices"
 
 	"gloamwright/internal/catalogue"
@@ -79,10 +80,21 @@ func (p *Plan) mainClasses(s *describe.Stage, given quantity.Ampere) []*catalogu
 		return []*catalogue.FuseClass{catalogue.FuseClassOf(v.Val)}
 	}
 	list := p.ratedClasses()
+	// Knife links stand farther above the fuses behind them than cylindrical ones of the
+	// same order: they come first, and cylindrical ones where a short opens no knife link.
+	slices.SortStableFunc(list, func(a, b *catalogue.FuseClass) int { return cmp.Compare(cylindrical(a), cylindrical(b)) })
 	if c := p.classOf(given, list[0]); given > 0 && !slices.Contains(list, c) {
 		list = append(list, c)
 	}
 	return list
+}
+
+// cylindrical is 1 for classes of cylindrical links.
+func cylindrical(c *catalogue.FuseClass) int {
+	if c == catalogue.FuseCylinder10 || c == catalogue.FuseCylinder14 {
+		return 1
+	}
+	return 0
 }
 
 // trunkCables lists the sizes that the battery cable may take with the loop from the

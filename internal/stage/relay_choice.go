@@ -40,7 +40,7 @@ func (p *Plan) relayFor(s *describe.Stage) catalogue.RelayClass {
 		}
 		may, _, err := p.contactLoad(c)
 		fits := err == nil || rated
-		if fits && p.followersWork(s, c) {
+		if fits && p.photocellsWork(s, c) {
 			p.relays[s] = c
 			return c
 		}
@@ -74,11 +74,22 @@ func (p *Plan) contactLoad(c catalogue.RelayClass) (quantity.Ampere, sizing.Work
 	})
 }
 
-// followersWork reports whether every follower that holds a relay can work its coil.
-func (p *Plan) followersWork(s *describe.Stage, c catalogue.RelayClass) bool {
+// feedLoss is what the Schottky diode of the feed and a closed driver take off the
+// voltage of a coil that a photocell holds (common practice, no source).
+const feedLoss quantity.Volt = 0.7
+
+// photocellsWork reports whether every photocell that holds a relay can work its coil on
+// the nearly empty battery.
+func (p *Plan) photocellsWork(s *describe.Stage, c catalogue.RelayClass) bool {
 	for _, o := range p.Site.Stages {
 		h, ok := describe.Get[describe.Ref](o.Fields, "holds")
-		if !ok || o.Kind.Val != "photocell" || h.Val.Stage != s.Name.Val || must[string](o, "built") != "follower" {
+		if !ok || o.Kind.Val != "photocell" || h.Val.Stage != s.Name.Val {
+			continue
+		}
+		if must[string](o, "built") != "follower" {
+			if warm, err := p.warmPickUp(c); err != nil || warm > p.End-feedLoss {
+				return false
+			}
 			continue
 		}
 		if _, _, _, err := p.follower(o, s, c); err != nil {
