@@ -119,12 +119,15 @@ func TestEitherWayAgreesWithTheCoil(t *testing.T) {
 			t.Errorf("%s: a relay stands either way", name)
 		}
 	}
-	for _, c := range sitegen.Controls {
-		d, err := design.Make(generated(t, 10, sitegen.Options{Control: c}), nil)
-		if err != nil {
-			t.Fatal(err)
+	// At 24 V the relay of a follower picks up early; at 36 V none is made that does.
+	for _, volts := range []int{24, 36} {
+		for _, c := range sitegen.Controls {
+			d, err := design.Make(generated(t, 10, sitegen.Options{Volts: volts, Control: c}), nil)
+			if err != nil {
+				t.Fatal(err)
+			}
+			check(fmt.Sprintf("%d V, %s", volts, c), d)
 		}
-		check(string(c), d)
 	}
 	if found == 0 {
 		t.Error("no generated control stands either way")
