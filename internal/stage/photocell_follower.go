@@ -83,6 +83,9 @@ func (p *Plan) follower(s, relay *describe.Stage, class catalogue.RelayClass) (i
 			}
 		}
 	}
+	// Nothing fits: what the usual parts break is told.
+	in.Cell, in.Transistor = catalogue.CadmiumSulphide5, catalogue.NPNSmall
+	f, ws, err = sizing.FollowerPhotocell(in)
 	return in, f, ws, err
 }
 
