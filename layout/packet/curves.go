@@ -24,36 +24,16 @@ func (b *book) curves() *section {
 	s := &section{key: keyCurves, title: "Curves: fuses and hours", document: "Curves", letter: "U", label: "See also",
 		purpose: "Use this sheet to see which fuse opens first, and how long the lights last.",
 		note:    fmt.Sprintf("%s and %s give the same figures as numbers.", b.upperSheets(keyFuses), b.sheets(keyBasis))}
-	for _, path := range b.fusePaths() {
+	large, small := b.fusePaths()
+	for _, path := range large {
 		s.blocks = append(s.blocks, b.fusePlot(path)...)
 	}
 	s.blocks = append(s.blocks, b.hours()...)
+	s.blocks = append(s.blocks, b.smallPlots(small)...)
 	if len(s.blocks) == 0 {
 		return nil
 	}
 	return s
-}
-
-// fusePaths lists a chain of fuses for each board, from the way to the battery: that
-// way of the board whose fuse parts from the one before it up to the least current.
-func (b *book) fusePaths() [][]*facts.Fuse {
-	var out [][]*facts.Fuse
-	for _, bd := range b.d.Circuit.Boards {
-		var leaf *facts.Fuse
-		for _, f := range b.d.Fuses {
-			if f.Board != bd || f.Way == nil || f.Way.Lighting == nil || len(f.Slowest) == 0 {
-				continue
-			}
-			if leaf == nil || f.DiscriminatesTo < leaf.DiscriminatesTo || f.DiscriminatesTo == leaf.DiscriminatesTo && f.Rating > leaf.Rating {
-				leaf = f
-			}
-		}
-		if leaf == nil {
-			continue
-		}
-		out = append(out, chainOf(leaf))
-	}
-	return out
 }
 
 // Measures of the fuse picture, mm.
@@ -64,8 +44,9 @@ const (
 	plotRight      = 6
 )
 
-// fusePlot is the time-current picture of one chain of fuses.
-func (b *book) fusePlot(chain []*facts.Fuse) []block {
+// fusePlot is the time-current picture of one path.
+func (b *book) fusePlot(path *fusePath) []block {
+	chain := path.chain
 	leaf := chain[0]
 	x, y := b.currentAxis(chain), logAxis(shortestTime, longestTime)
 	wide := b.pg.width - plotLeft - plotRight
@@ -74,7 +55,11 @@ func (b *book) fusePlot(chain []*facts.Fuse) []block {
 	over := above*float64(most+1) + 1.5
 	title := "From the battery to " + leaf.Feeds
 	const under = 6
-	picture := block{h: over + fusePlotHeight + under, next: true, fill: true, most: over + fusePlotMost + under, draw: func(p *pad, top, h float64) {
+	var marks []string
+	for _, f := range path.leaves() {
+		marks = append(marks, curveMark(f))
+	}
+	picture := block{h: over + fusePlotHeight + under, next: true, marks: marks, fill: true, most: over + fusePlotMost + under, draw: func(p *pad, top, h float64) {
 		g := p.plot(x, y, ink.Rect{X: p.pg.l + plotLeft, Y: top + over, W: wide, H: h - over - under})
 		for i, f := range slices.Backward(chain) {
 			g.strip(f, i)
@@ -87,14 +72,14 @@ func (b *book) fusePlot(chain []*facts.Fuse) []block {
 		}
 		g.selective(leaf)
 		g.wires(chain)
-		for i, f := range chain {
-			g.fuseName(f, i)
+		for _, f := range chain {
+			g.fuseName(f)
 		}
 		g.close()
 		p.write(p.pg.l, top+over-5, "s", noteText.in(ink.Mid), ink.Start)
 	}}
 	return []block{b.head(0, b.pg.width, title, "across: current in A; upwards: time in s"), picture,
-		b.paragraph(b.fuseWords(chain), noteText, 0)}
+		b.paragraph(strings.TrimSpace(alsoHolds(path)+" "+b.fuseWords(chain)), noteText, 0)}
 }
 
 // current is an upright line of the picture.
@@ -195,17 +180,21 @@ func (g *plot) stripEdges(f *facts.Fuse, i int) {
 	g.curve(edge(f, f.Slowest, g.x.max), 0.5, curveDashes[i])
 }
 
-func (g *plot) fuseName(f *facts.Fuse, i int) {
-	kind := figure(f.Rating)
+func (g *plot) fuseName(f *facts.Fuse) {
+	g.name(g.besideStrip(f), f.Part.Designation, figure(f.Rating))
+}
+
+// besideStrip lists places on the right edge of a strip, for its name.
+func (g *plot) besideStrip(f *facts.Fuse) []xy {
 	var at []xy
 	slow := edge(f, f.Slowest, g.x.max)
 	if len(slow) == 0 {
-		return // its opening times are not known; the words below say so
+		return nil // its opening times are not known; the words below say so
 	}
 	for _, t := range []float64{3000, 1500, 700, 300, 100, 30, 10} {
 		at = append(at, xy{slowAt(slow, t), t})
 	}
-	g.name(at, f.Part.Designation, kind)
+	return at
 }
 
 // slowAt is the current at which an edge passes a time.

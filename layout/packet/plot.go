@@ -145,8 +145,11 @@ func (g *plot) level(y float64, words string) {
 }
 
 // name writes the name of a curve beside one of its values, the first whose
-// neighbourhood is free; the first line is bold.
+// neighbourhood is free; the first line is bold. Without a place there is no name.
 func (g *plot) name(values []xy, lines ...string) {
+	if len(values) == 0 {
+		return
+	}
 	w := 0.0
 	for _, l := range lines {
 		w = max(w, spans(l, noteText.as(ink.Bold)).width())

@@ -17,7 +17,8 @@ const (
 // TimeCurrent draws the time-current picture of every path from the battery to a
 // lighting circuit, one below the other, as one SVG file: the gates of the fuses in
 // series, the load, the shorts at the last lamp and at each fuse, and what the wires
-// stand. The packet shows the worst path of each board. It returns nil if no fuse has
+// stand. The packet shows the worst path of each board large and the others small. It
+// returns nil if no fuse has
 // published opening times.
 func TimeCurrent(d *design.Design) ([]byte, error) {
 	b := newBook(d, nil)
@@ -25,10 +26,10 @@ func TimeCurrent(d *design.Design) ([]byte, error) {
 	var blocks []block
 	high := 2. * pictureMargin
 	for _, f := range d.Fuses {
-		if f.Way == nil || f.Way.Lighting == nil || len(f.Slowest) == 0 {
+		if !drawable(f) {
 			continue
 		}
-		for i, bl := range b.fusePlot(chainOf(f)) {
+		for i, bl := range b.fusePlot(&fusePath{chain: chainOf(f)}) {
 			if i == 0 && len(blocks) > 0 {
 				bl.gap = pictureGap
 			}
