@@ -9,6 +9,7 @@ import (
 	"image/png"
 	"io/fs"
 	"os"
+	"path"
 	"path/filepath"
 	"strings"
 
@@ -35,13 +36,13 @@ func readFirm(r *reader, t *Texts, top node) {
 				r.report(v.at(), "a firm without a name", "")
 			}
 		case "logo":
-			t.Firm.Logo = r.logo(v)
+			t.Firm.Logo = r.logo(t, v)
 		}
 	})
 }
 
 // logo reads the file that a node names, an SVG or a PNG of the folder of texts.
-func (r *reader) logo(n node) *ink.Picture {
+func (r *reader) logo(t *Texts, n node) *ink.Picture {
 	name := r.word(n)
 	if !filepath.IsLocal(name) {
 		r.report(n.at(), fmt.Sprintf("the logo %q is outside the folder of texts", name), "Name a file of this folder.")
@@ -57,6 +58,7 @@ func (r *reader) logo(n node) *ink.Picture {
 		r.report(n.at(), fmt.Sprintf("the logo %q cannot be read", name), detail)
 		return nil
 	}
+	t.Files = append(t.Files, File{path.Clean(filepath.ToSlash(name)), src})
 	switch strings.ToLower(filepath.Ext(name)) {
 	case ".svg":
 		return r.svg(file, src)

@@ -22,6 +22,13 @@ type Texts struct {
 	Legend     []LegendGroup
 	Remedies   []Remedy
 	Firm       Firm
+	Files      []File // of the firm that were read, in that order
+}
+
+// File is a file of the firm's folder of texts.
+type File struct {
+	Name string // in the folder, with /
+	Data []byte
 }
 
 // Caution is one warning and what it is printed for.
@@ -107,6 +114,7 @@ func Load(dir string) (*Texts, describe.List, describe.Sources) {
 			switch text, err := os.ReadFile(own); {
 			case err == nil:
 				src, name = text, own
+				t.Files = append(t.Files, File{f.name, text})
 			case !errors.Is(err, fs.ErrNotExist):
 				r.report(describe.Span{File: own}, "unreadable text file", err.Error())
 			}
@@ -117,6 +125,7 @@ func Load(dir string) (*Texts, describe.List, describe.Sources) {
 		own := filepath.Join(dir, firmFile)
 		switch text, err := os.ReadFile(own); {
 		case err == nil:
+			t.Files = append(t.Files, File{firmFile, text})
 			r.file(own, text, func(n node) { readFirm(r, t, n) })
 		case !errors.Is(err, fs.ErrNotExist):
 			r.report(describe.Span{File: own}, "unreadable text file", err.Error())

@@ -2,9 +2,13 @@ package job
 
 import (
 	"fmt"
+	"path"
+	"path/filepath"
 	"strings"
 
 	"gloamwright/internal/release"
+	"gloamwright/internal/stage"
+	"gloamwright/layout/packet"
 )
 
 // Issuance is what became of issuing a revision.
@@ -38,7 +42,7 @@ func Issue(path string) (*Issuance, error) {
 		}
 	}
 	if last := j.Released.Last(); last != nil {
-		if err := last.Verify(); err != nil {
+		if err := j.Released.Verify(last, stage.Schema()); err != nil {
 			return nil, err
 		}
 	}
@@ -53,9 +57,31 @@ func Issue(path string) (*Issuance, error) {
 	if err != nil {
 		return nil, err
 	}
+	texts, err := j.texts()
+	if err != nil {
+		return nil, err
+	}
 	out.Documents = len(files)
-	out.Folder, err = j.Released.Freeze(j.Design, files)
+	out.Folder, err = j.Released.Freeze(j.Design, files, texts)
 	return out, err
+}
+
+// texts are the firm's texts that the documents were made with, named from the
+// description's folder.
+func (j *Job) texts() ([]release.File, error) {
+	list, err := packet.TextFiles(j.Design)
+	if err != nil || len(list) == 0 {
+		return nil, err
+	}
+	dir, err := filepath.Rel(filepath.Dir(j.Path), j.Design.Site.Practice.Texts.Val)
+	if err != nil {
+		return nil, err
+	}
+	var out []release.File
+	for _, f := range list {
+		out = append(out, release.File{Name: path.Join(filepath.ToSlash(dir), f.Name), Data: f.Data})
+	}
+	return out, nil
 }
 
 // String says what was done.

@@ -69,15 +69,22 @@ func stops(d *design.Design) string {
 }
 
 // Freeze issues the revision of a design: documents, the description as it is, the
-// register and checksums appear together in the revision's folder, in one step; then
-// the register takes its place. A run that is interrupted in between is completed by
-// the next. It returns the folder.
-func (p *Project) Freeze(d *design.Design, documents []File) (string, error) {
+// firm's texts, the register and checksums appear together in the revision's folder, in
+// one step; then the register takes its place. A run that is interrupted in between is
+// completed by the next. texts are named from the description's folder, so that the
+// revision can be built again from its own. It returns the folder.
+func (p *Project) Freeze(d *design.Design, documents, texts []File) (string, error) {
 	if err := p.MayIssue(d); err != nil {
 		return "", err
 	}
 	revision := d.Site.Job.Revision.Val
 	reg := p.Register.Next(revision, d.Labels, d.Site, d.Circuit)
+	if len(texts) > 0 {
+		if reg.Texts == nil {
+			reg.Texts = map[string]string{}
+		}
+		reg.Texts[revision] = sumOfTexts(texts)
+	}
 	encoded, err := reg.Encode(filepath.Base(p.Description))
 	if err != nil {
 		return "", err
@@ -85,6 +92,9 @@ func (p *Project) Freeze(d *design.Design, documents []File) (string, error) {
 	files := append([]File(nil), documents...)
 	for _, name := range circuit.SortedKeys(d.Site.Sources) {
 		files = append(files, File{path.Join(descriptionFolder, filepath.ToSlash(name)), d.Site.Sources[name]})
+	}
+	for _, f := range texts {
+		files = append(files, File{path.Join(descriptionFolder, f.Name), f.Data})
 	}
 	files = append(files, File{registerFile, encoded})
 	if d.Changes != nil {

@@ -100,7 +100,7 @@ func (d *desk) issue() error {
 	if _, err := p.Complete(); err != nil {
 		d.t.Fatal(err)
 	}
-	_, err := p.Freeze(made, documents(d.t, made))
+	_, err := p.Freeze(made, documents(d.t, made), nil)
 	return err
 }
 
@@ -299,5 +299,41 @@ func TestDamage(t *testing.T) {
 	var dam *Damaged
 	if _, err := p.Last().record(); !errors.As(err, &dam) || !strings.Contains(err.Error(), "not as it was issued") {
 		t.Errorf("changed results: %v", err)
+	}
+}
+
+// The texts of a revision are checked against the register, so that exchanging a text
+// together with its line in the list of checksums is found.
+func TestTextsAreChecked(t *testing.T) {
+	d := newDesk(t, "juniper-flat")
+	d.edit("  paper: ansi", "  paper: ansi\n  texts: words")
+	p, made := d.open()
+	if _, err := p.Freeze(made, documents(t, made), []File{{"words/firm.yaml", []byte("name: Hollow\n")}}); err != nil {
+		t.Fatal(err)
+	}
+	p, _ = d.open()
+	last := p.Last()
+	if err := p.Verify(last, stage.Schema()); err != nil {
+		t.Fatal(err)
+	}
+	file := filepath.Join(last.Dir, descriptionFolder, "words", "firm.yaml")
+	other := []byte("name: Hill\n")
+	if err := os.WriteFile(file, other, 0o644); err != nil {
+		t.Fatal(err)
+	}
+	if err := p.Verify(last, stage.Schema()); err == nil || !strings.Contains(err.Error(), "checksum differs") {
+		t.Errorf("a changed text: %v", err)
+	}
+	list := filepath.Join(last.Dir, checksumsFile)
+	sums, err := os.ReadFile(list)
+	if err != nil {
+		t.Fatal(err)
+	}
+	was, is := sumsOf([]File{{"x", []byte("name: Hollow\n")}}).Data[:64], sumsOf([]File{{"x", other}}).Data[:64]
+	if err := os.WriteFile(list, bytes.ReplaceAll(sums, was, is), 0o644); err != nil {
+		t.Fatal(err)
+	}
+	if err := p.Verify(last, stage.Schema()); err == nil || !strings.Contains(err.Error(), "register names") {
+		t.Errorf("a text exchanged with its checksum: %v", err)
 	}
 }

@@ -11,6 +11,7 @@ import (
 	"sort"
 	"strings"
 
+	"gloamwright/internal/circuit"
 	"gloamwright/internal/describe"
 )
 
@@ -90,6 +91,28 @@ func (r *Issued) Verify() error {
 	return nil
 }
 
+// texts returns the firm's texts of the revision, in the folder that its description
+// names.
+func (r *Issued) texts(folder string) ([]File, error) {
+	sums, err := r.sums()
+	if err != nil {
+		return nil, err
+	}
+	var out []File
+	within := path.Join(descriptionFolder, folder) + "/"
+	for _, name := range circuit.SortedKeys(sums) {
+		if !strings.HasPrefix(name, within) {
+			continue
+		}
+		data, err := r.verify(name, sums)
+		if err != nil {
+			return nil, err
+		}
+		out = append(out, File{strings.TrimPrefix(name, descriptionFolder+"/"), data})
+	}
+	return out, nil
+}
+
 // record returns the results that were issued.
 func (r *Issued) record() (*record, error) {
 	data, err := r.checked(resultsFile)
@@ -143,6 +166,12 @@ func (r *Issued) description() (string, error) {
 		return "", damaged("%s does not tell which of its files is the description.", dir)
 	}
 	return files[0], nil
+}
+
+// sumOfTexts is one checksum over files: of the lines that sumsOf writes.
+func sumOfTexts(files []File) string {
+	sum := sha256.Sum256(sumsOf(files).Data)
+	return hex.EncodeToString(sum[:])
 }
 
 // sumsOf writes the checksums of files, in the form that sha256sum reads.

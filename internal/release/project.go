@@ -178,6 +178,30 @@ func (p *Project) Complete() (bool, error) {
 	return true, nil
 }
 
+// Verify checks every file of an issued revision against its checksum, and the firm's
+// texts against the register.
+func (p *Project) Verify(r *Issued, schema *describe.Schema) error {
+	if err := r.Verify(); err != nil {
+		return err
+	}
+	want := p.Register.Texts[r.Revision]
+	if want == "" {
+		return nil
+	}
+	site, err := r.site(schema)
+	if err != nil {
+		return err
+	}
+	texts, err := r.texts(site.Practice.Texts.Val)
+	if err != nil {
+		return err
+	}
+	if sumOfTexts(texts) != want {
+		return damaged("The firm's texts of revision %s are not those that the register names. Bring %s back from version control or a backup.", r.Revision, r.Dir)
+	}
+	return nil
+}
+
 // Last returns the last issued revision, nil if there is none.
 func (p *Project) Last() *Issued {
 	if len(p.Issued) == 0 {

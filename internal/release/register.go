@@ -2,6 +2,7 @@ package release
 
 import (
 	"cmp"
+	"maps"
 	"regexp"
 	"slices"
 	"strings"
@@ -14,6 +15,9 @@ import (
 // issued revision. A label never moves to another thing and is never used again.
 type Register struct {
 	Revisions []string // issued, in order
+	// Texts holds, by revision, the checksum of the firm's texts that it was made with; a
+	// revision without texts of the firm has none.
+	Texts map[string]string
 	// Labels holds the labels in use by stable key. A key begins with the sort of thing:
 	// "part/store/battery", "terminal-X1/guard/terminal/cabinet/in".
 	Labels  circuit.Labels
@@ -94,6 +98,7 @@ func (r *Register) Next(revision string, labels circuit.Labels, site *describe.S
 	}
 	if r != nil {
 		n.Revisions = slices.Clone(r.Revisions)
+		n.Texts = maps.Clone(r.Texts)
 		n.Retired = slices.Clone(r.Retired)
 		type given struct{ sort, label string }
 		inUse := map[given]bool{}

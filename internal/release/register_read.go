@@ -142,14 +142,23 @@ func (d *registerReader) each(n *yaml.Node, what string, f func(key, value *yaml
 	}
 }
 
-// fields reads the keys of one mapping; every one of them must be there.
+// optional ends a key that need not be there.
+const optional = "?"
+
+// fields reads the keys of one mapping; every one must be there that does not end in
+// optional.
 func (d *registerReader) fields(n *yaml.Node, what string, read map[string]func(*yaml.Node)) {
 	missing := map[string]bool{}
 	for k := range read {
-		missing[k] = true
+		if !strings.HasSuffix(k, optional) {
+			missing[k] = true
+		}
 	}
 	d.each(n, what, func(k, v *yaml.Node) {
 		f, ok := read[k.Value]
+		if !ok {
+			f, ok = read[k.Value+optional]
+		}
 		if !ok {
 			d.report(codeRegisterForm, "unknown key", k, "%s has no key %s. %s", what, k.Value, restore)
 			return
@@ -212,6 +221,16 @@ func (d *registerReader) read(top *yaml.Node) {
 					d.report(codeRegisterForm, "revision out of order", c, "Here %s must stand, not %s. %s", want, s, restore)
 				}
 				d.reg.Revisions = append(d.reg.Revisions, s)
+			})
+		},
+		"texts" + optional: func(n *yaml.Node) {
+			d.each(n, "texts", func(revision, sum *yaml.Node) {
+				if s, ok := d.text(sum, "A checksum"); ok {
+					if d.reg.Texts == nil {
+						d.reg.Texts = map[string]string{}
+					}
+					d.reg.Texts[revision.Value] = s
+				}
 			})
 		},
 		"labels": func(n *yaml.Node) {

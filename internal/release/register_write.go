@@ -29,6 +29,13 @@ func (r *Register) Encode(description string) ([]byte, error) {
 	top := mapping()
 	put(top, "register", plain(registerVersion))
 	put(top, "revisions", flow(texts(r.Revisions...)))
+	if len(r.Texts) > 0 {
+		sums := mapping()
+		for _, revision := range circuit.SortedKeys(r.Texts) {
+			put(sums, revision, text(r.Texts[revision]))
+		}
+		put(top, "texts", sums)
+	}
 
 	labels := mapping()
 	var group *yaml.Node

@@ -51,6 +51,16 @@ func loadTexts(d *design.Design) (*templates.Texts, error) {
 	return texts, nil
 }
 
+// TextFiles are the files of the firm's folder of texts that the packet of d is made
+// with.
+func TextFiles(d *design.Design) ([]templates.File, error) {
+	texts, err := loadTexts(d)
+	if err != nil {
+		return nil, err
+	}
+	return texts.Files, nil
+}
+
 // readTexts fills the standing texts in.
 func (b *book) readTexts() error {
 	texts, err := loadTexts(b.d)
