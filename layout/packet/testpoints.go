@@ -22,7 +22,8 @@ func (b *book) testPoints() *section {
 	t := &table{st: tableText, min: plainRow, cols: []column{{head: "Point", w: 13}, {head: "What it shows", w: 40}, {head: "Red probe", w: 20.5},
 		{head: "Black probe", w: 20.5}, {head: "Low V", w: 12, a: endAnchor}, {head: "Typical V", w: 17, a: endAnchor}, {head: "High V", w: 13, a: endAnchor},
 		{head: "Measured V", w: 23, a: midAnchor}, {head: "OK", w: 9, a: midAnchor}, {head: "Else", w: 12, a: midAnchor}}}
-	for _, c := range b.shown() {
+	shown := b.shown()
+	for _, c := range shown {
 		i := b.conditionIndex(c)
 		topic := fmt.Sprint(c.Number)
 		head := b.conditionHead(c)
@@ -49,7 +50,7 @@ func (b *book) testPoints() *section {
 			}
 		}
 		if n := len(rows); n > 0 {
-			rows[n-1].next = false
+			rows[n-1].next = c == shown[len(shown)-1] // the words below it stay with the last
 		}
 		s.blocks = append(s.blocks, rows...)
 	}

@@ -119,9 +119,9 @@ func (b *book) workingTitle(subject string) string {
 // Measures of a working, mm.
 const (
 	workNumber = 14.0
-	workLead   = 4.6
+	workLead   = 4.2
 	resultWide = 34.0
-	resultHigh = 8.0
+	resultHigh = 7.2
 )
 
 var workingNumber = style{ink.MonoBold, 8.97, 4, ink.Black}
@@ -159,19 +159,19 @@ func (b *book) working(n int, w *sizing.Working, usedBy []int) block {
 			under = fmt.Sprintf("used by W%d, W%d", usedBy[0], usedBy[1])
 		}
 	}
-	h := max(float64(len(lines))*workLead, resultHigh+1.2)
+	h := max(float64(len(lines))*workLead, resultHigh+1)
 	if under != "" {
-		h = max(h, resultHigh+4.4)
+		h = max(h, resultHigh+4.2)
 	}
-	return block{h: h + 1.8, draw: func(p *pad, y, h float64) {
+	return block{h: h + 1.4, draw: func(p *pad, y, h float64) {
 		l := p.pg.l
-		p.write(l, y+0.9+rise*workLead, fmt.Sprintf("W%d", n), workingNumber, ink.Start)
-		p.lines(l+workNumber, y+0.9+rise*workLead, lines, workLead)
+		p.write(l, y+0.7+rise*workLead, fmt.Sprintf("W%d", n), workingNumber, ink.Start)
+		p.lines(l+workNumber, y+0.7+rise*workLead, lines, workLead)
 		x := p.pg.right() - resultWide
-		p.frame(x, y+1, resultWide-0.25, resultHigh, 0.5, ink.Black)
-		p.result(p.pg.right()-3, y+1+resultHigh/2+1.65, w)
+		p.frame(x, y+0.8, resultWide-0.25, resultHigh, 0.5, ink.Black)
+		p.result(p.pg.right()-3, y+0.8+resultHigh/2+1.6, w)
 		if under != "" {
-			p.fit(p.pg.right(), y+1+resultHigh+3.3, under, noteText, resultWide+2, ink.End)
+			p.fit(p.pg.right(), y+0.8+resultHigh+3.2, under, noteText, resultWide+2, ink.End)
 		}
 		p.rule(l, y+h, p.pg.width, hairline, ink.Rule)
 	}}
