@@ -53,7 +53,7 @@ func (p *PDF) Output() ([]byte, error) {
 	if err := errors.Join(faults...); err != nil {
 		return nil, err
 	}
-	d := &pdfDoc{marks: findMarks(p.sheets)}
+	d := &pdfDoc{marks: findMarks(p.sheets), runes: findRunes(p.sheets)}
 	d.f = gofpdf.NewCustom(&gofpdf.InitType{UnitStr: "mm", Size: gofpdf.SizeType{Wd: p.sheets[0].W, Ht: p.sheets[0].H}})
 	d.f.SetCatalogSort(true)
 	d.f.SetMargins(0, 0, 0)
@@ -121,6 +121,35 @@ func findMarks(sheets []*Recorder) map[markKey]place {
 	return marks
 }
 
+// findRunes lists what is written in each face, sign for sign.
+func findRunes(sheets []*Recorder) (out [len(faceNames)][]rune) {
+	var seen [len(faceNames)]map[rune]bool
+	for i := range seen {
+		seen[i] = map[rune]bool{}
+	}
+	var walk func(calls []Call)
+	walk = func(calls []Call) {
+		for _, c := range calls {
+			switch c := c.(type) {
+			case Grouped:
+				walk(c.Calls)
+			case Written:
+				f := c.Font.Face
+				for _, r := range c.Text {
+					if !seen[f][r] {
+						seen[f][r] = true
+						out[f] = append(out[f], r)
+					}
+				}
+			}
+		}
+	}
+	for _, s := range sheets {
+		walk(s.Calls)
+	}
+	return out
+}
+
 type markKey struct {
 	sheet int
 	name  string
@@ -134,6 +163,7 @@ type pdfDoc struct {
 	page   int
 	loaded [len(faceNames)]bool
 	marks  map[markKey]place
+	runes  [len(faceNames)][]rune // written in each face
 	links  []pendingLink
 	faults []error
 }
@@ -184,7 +214,10 @@ func (d *pdfDoc) draw(p *Path, operator string) {
 func (d *pdfDoc) Text(at Point, s string, f Font, a Anchor, c Color, turn bool) {
 	d.font(f)
 	d.f.SetTextColor(rgb(c))
-	shift := anchorShift(a, Width(s, f))
+	shift := 0.0
+	if a != Start {
+		shift = anchorShift(a, Width(s, f))
+	}
 	if !turn {
 		d.f.Text(at.X-shift, at.Y, s)
 		return
@@ -195,13 +228,18 @@ func (d *pdfDoc) Text(at Point, s string, f Font, a Anchor, c Color, turn bool) 
 	d.f.TransformEnd()
 }
 
-// font selects f and gives the document its own copy of the face when it is new:
-// gofpdf writes into the slice it is given, and a shared one would carry over
-// from document to document (TestSameBytesAfterOtherDocuments).
+// font selects f. A face that is new is given to the document as a subset: gofpdf takes
+// long to read a whole one, and writes into the slice it is given, so that a shared one
+// would carry over from document to document (TestSameBytesAfterOtherDocuments).
 func (d *pdfDoc) font(f Font) {
 	name := f.Face.String()
 	if !d.loaded[f.Face] {
-		d.f.AddUTF8FontFromBytes(name, "", slices.Clone(fontFile(f.Face)))
+		file, err := subsetFont(fontFile(f.Face), &metrics(f.Face).cmap, d.runes[f.Face])
+		if err != nil {
+			d.faults = append(d.faults, fmt.Errorf("face %s: %w", name, err))
+			file = slices.Clone(fontFile(f.Face))
+		}
+		d.f.AddUTF8FontFromBytes(name, "", file)
 		d.loaded[f.Face] = true
 	}
 	d.f.SetFont(name, "", f.Size*pointsPerMM)
