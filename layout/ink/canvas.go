@@ -69,6 +69,10 @@ type Object struct {
 	Class string // "part", "wire", "dot", "testpoint", "frame", …
 	Title string // what a pointer resting on it tells
 	Data  []Attr // data-NAME attributes, in order
+	// Hit is where a pointer meets the object besides its strokes, in SVG alone: the
+	// inside of the path or, with Along, a band along it. It is never seen or printed.
+	Hit   *Path
+	Along bool
 }
 
 // Attr is one data attribute of an Object.

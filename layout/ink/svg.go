@@ -103,11 +103,15 @@ func (d *svgDoc) survey(calls []Call) {
 	}
 }
 
+// hitBand is how wide a line is for a pointer, in mm: just under the pitch of 2.5 mm at
+// which lines run side by side.
+const hitBand = 2.2
+
 // style writes the faces and the colours of dark screens. Plain attributes carry
 // the colours of paper, so viewers without style sheets show those.
 func (d *svgDoc) style() (string, error) {
 	var b strings.Builder
-	b.WriteString("\n:root{color-scheme:light dark}\n.link{fill:none;pointer-events:all}\ntext{white-space:pre}\n")
+	b.WriteString("\n:root{color-scheme:light dark}\n.link,.hit{fill:none;pointer-events:all}\n.along{stroke-width:" + number(hitBand) + ";pointer-events:stroke}\ntext{white-space:pre}\n")
 	for face, runes := range d.runes {
 		if len(runes) == 0 {
 			continue
@@ -121,6 +125,9 @@ func (d *svgDoc) style() (string, error) {
 		fmt.Fprintf(&b, "@font-face{font-family:%q;src:url(data:font/ttf;base64,%s) format(\"truetype\")}\n",
 			d.families[face], base64.StdEncoding.EncodeToString(file))
 	}
+	// A window narrower than the sheet shows all of it; on paper and in editors it has its
+	// real size.
+	b.WriteString("@media screen{svg:root{max-width:100%;height:auto}}\n")
 	b.WriteString("@media screen and (prefers-color-scheme:dark){\n")
 	for _, c := range d.colors {
 		fmt.Fprintf(&b, ".s%06X{stroke:#%06[2]X}.f%06[1]X{fill:#%06[2]X}\n", uint32(c), uint32(Dark(c)))
@@ -205,6 +212,13 @@ func (d *svgDoc) Group(o Object, draw func()) {
 	d.svg.Group(list...)
 	if o.Title != "" {
 		d.svg.Title(Clean(o.Title))
+	}
+	if o.Hit != nil {
+		class := "hit"
+		if o.Along {
+			class = "along"
+		}
+		d.svg.Path(pathData(o.Hit), attr("class", class))
 	}
 	draw()
 	d.svg.Gend()

@@ -18,9 +18,11 @@ func (s *scene) finish(b *book) {
 	s.drawWires(b)
 	s.drawDots()
 	for _, y := range s.symbols {
-		y.draw(s)
+		y.draw(s, b)
 	}
 	for _, p := range s.points {
+		r := p.box()
+		p.obj.hit(r)
 		p.obj.add(p)
 	}
 	for _, n := range s.numbers {
@@ -181,6 +183,7 @@ func (s *scene) drawWires(b *book) {
 			pen = railPen
 		}
 		o.add(&stroke{pts: points(w.pts), pen: pen})
+		o.along(w.pts)
 		w.owner = o
 	}
 }
@@ -235,6 +238,7 @@ func (s *scene) drawDots() {
 		if d >= 3 && !marked[n] {
 			o := s.object(classDot, fmt.Sprintf("%d-%d", n.X, n.Y), "Junction: "+of, ink.Attr{Name: "on", Value: of})
 			o.add(&disc{n.point(), r})
+			o.hit(around(n.point(), jointReach))
 		}
 	}
 }

@@ -25,6 +25,9 @@ func (s *scene) conductor(b *book, c *circuit.Conductor) *object {
 	if f := b.current[c]; f != nil && f.Current > 0 {
 		t += ", " + f.Current.String() + " at most"
 	}
+	if v := b.typicalAt(c.From); v != "" {
+		t += ", " + v
+	}
 	data := []ink.Attr{{Name: "conductor", Value: c.Number}, {Name: "from", Value: c.From.String()}, {Name: "to", Value: c.To.String()}}
 	if c.Circuit != "" {
 		data = append(data, ink.Attr{Name: "circuit", Value: c.Circuit})

@@ -4,19 +4,12 @@ import (
 	"fmt"
 	"slices"
 	"strings"
-	"unicode"
-	"unicode/utf8"
 
 	"gloamwright/internal/circuit"
 	"gloamwright/internal/describe"
 	"gloamwright/internal/quantity"
 	"gloamwright/layout/ink"
 )
-
-func lower(s string) string {
-	r, n := utf8.DecodeRuneInString(s)
-	return string(unicode.ToLower(r)) + s[n:]
-}
 
 // mainPart is the part that a stage is there for.
 func mainPart(st *circuit.Stage) *circuit.Part {

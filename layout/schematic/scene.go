@@ -52,6 +52,34 @@ type object struct {
 
 func (o *object) add(d ...drawable) { o.items = append(o.items, d...) }
 
+// hit adds a rectangle, in modules, in which a pointer meets the object.
+func (o *object) hit(r ink.Rect) {
+	if o.Hit == nil {
+		o.Hit = &ink.Path{}
+	}
+	o.Hit.Rect(ink.Rect{X: r.X * module, Y: r.Y * module, W: r.W * module, H: r.H * module})
+}
+
+// along adds a line along which a pointer meets the object.
+func (o *object) along(pts []node) {
+	if o.Hit == nil {
+		o.Hit, o.Along = &ink.Path{}, true
+	}
+	for i, n := range pts {
+		at := mm(n.point())
+		if i == 0 {
+			o.Hit.Move(at.X, at.Y)
+		} else {
+			o.Hit.Line(at.X, at.Y)
+		}
+	}
+}
+
+// around is the square around a place.
+func around(at point, half float64) ink.Rect {
+	return ink.Rect{X: at.X - half, Y: at.Y - half, W: 2 * half, H: 2 * half}
+}
+
 // scene is one sheet's drawing before it meets a canvas.
 type scene struct {
 	objects []*object

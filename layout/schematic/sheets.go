@@ -49,6 +49,7 @@ type book struct {
 	on      map[*circuit.Rail][]int // sheet numbers that draw pins of the rail
 	reading map[*circuit.TestPoint]*facts.Reading
 	current map[*circuit.Conductor]*facts.Conductor
+	wiresAt map[*circuit.Pin][]string // numbers of the conductors that end there
 	lengths quantity.LengthUnit
 
 	boardSheets []*boardSheet
@@ -71,6 +72,7 @@ func newBook(d *design.Design) *book {
 		places: map[string]*place{}, railOf: map[*circuit.Pin]*circuit.Rail{}, railKey: map[*circuit.Rail]string{},
 		on: map[*circuit.Rail][]int{}, reading: map[*circuit.TestPoint]*facts.Reading{},
 		current: map[*circuit.Conductor]*facts.Conductor{},
+		wiresAt: map[*circuit.Pin][]string{},
 	}
 	if d.Site != nil {
 		b.lengths = d.Site.Practice.LengthUnit()
@@ -86,6 +88,9 @@ func newBook(d *design.Design) *book {
 	}
 	for _, r := range d.Readings {
 		b.reading[r.Point] = r
+	}
+	for _, c := range b.c.Conductors {
+		b.wiresAt[c.From], b.wiresAt[c.To] = append(b.wiresAt[c.From], c.Number), append(b.wiresAt[c.To], c.Number)
 	}
 	for _, c := range d.Conductors {
 		b.current[c.Conductor] = c
@@ -238,6 +243,9 @@ func (s *Sheet) Draw(c ink.Canvas, o Options) {
 		c.Mark(pl.anchor, mm(pl.at))
 	}
 	for _, obj := range s.scene.objects {
+		if len(obj.items) == 0 {
+			continue
+		}
 		c.Group(obj.Object, func() {
 			for _, d := range obj.items {
 				d.draw(p)

@@ -80,11 +80,21 @@ func (y *symbol) pinsAt() []pinAt {
 	return out
 }
 
+// A pointer meets a pin within half a module, a joint a little nearer, a symbol a
+// little beyond its strokes.
+const (
+	pinReach   = 0.45
+	jointReach = 0.35
+	hitMargin  = 0.2
+)
+
 // draw adds the symbol and its pins to its object.
-func (y *symbol) draw(s *scene) {
+func (y *symbol) draw(s *scene, b *book) {
 	if y.fixed == nil {
 		y.obj.add(&symbolMark{y.sym, y.at, y.turn, y.mark})
 		y.obj.Data = append(y.obj.Data, ink.Attr{Name: "symbol", Value: y.sym.ID})
+		r := y.sym.Bounds(y.turn)
+		y.obj.hit(ink.Rect{X: float64(y.at.X) + r.X - hitMargin, Y: float64(y.at.Y) + r.Y - hitMargin, W: r.W + 2*hitMargin, H: r.H + 2*hitMargin})
 	}
 	for _, p := range y.pinsAt() {
 		if p.name == "" || p.part == nil {
@@ -94,9 +104,12 @@ func (y *symbol) draw(s *scene) {
 		if p.part.Kind == circuit.MainsConnection {
 			id = p.part.Key + ":" + p.name
 		}
-		y.obj.add(&pinMark{ink.Object{ID: s.id("pin-" + id), Class: "pin", Title: id,
+		o := object{Object: ink.Object{ID: s.id("pin-" + id), Class: "pin", Title: id,
 			Data: []ink.Attr{{Name: "pin", Value: id}, {Name: "part", Value: partName(p.part)}, {Name: "name", Value: p.name}, {Name: "own", Value: p.own},
-				{Name: "x", Value: decimal(p.at.X)}, {Name: "y", Value: decimal(p.at.Y)}}}})
+				{Name: "x", Value: decimal(p.at.X)}, {Name: "y", Value: decimal(p.at.Y)}}}}
+		b.tellPin(&o, p.part.Pin(p.name))
+		o.hit(around(p.at.point(), pinReach))
+		y.obj.add(&pinMark{o.Object})
 	}
 }
 

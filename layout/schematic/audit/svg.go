@@ -92,7 +92,8 @@ func objectOf(attrs []xml.Attr) ink.Object {
 }
 
 func (p *Page) path(a map[string]string, g *Group) error {
-	if strings.Contains(a["class"], "link") {
+	switch a["class"] {
+	case "link", "hit", "along": // not seen
 		return nil
 	}
 	path, err := pathOf(a["d"])
