@@ -49,7 +49,7 @@ func (s *SVG) Output() ([]byte, error) {
 	d.svg = svgo.New(&out)
 	d.svg.Decimals = 3
 	d.svg.Startraw(attr("width", number(s.W)+"mm"), attr("height", number(s.H)+"mm"),
-		attr("viewBox", "0 0 "+number(s.W)+" "+number(s.H)), attr("role", "img"), attr("xml:space", "preserve"))
+		attr("viewBox", "0 0 "+number(s.W)+" "+number(s.H)), attr("role", "img"), attr("xml:lang", language), attr("xml:space", "preserve"))
 	d.svg.Title(Clean(s.Title))
 	if s.description != "" {
 		d.svg.Desc(Clean(s.description))
@@ -103,6 +103,9 @@ func (d *svgDoc) survey(calls []Call) {
 	}
 }
 
+// language is that of all texts, as a screen reader is told.
+const language = "en"
+
 // hitBand is how wide a line is for a pointer, in mm: just under the pitch of 2.5 mm at
 // which lines run side by side.
 const hitBand = 2.2
@@ -127,6 +130,7 @@ func (d *svgDoc) style() (string, error) {
 	}
 	// A window narrower than the sheet shows all of it; on paper and in editors it has its
 	// real size.
+	fmt.Fprintf(&b, "@page{size:%smm %smm;margin:0}\n", number(d.recording.W), number(d.recording.H))
 	b.WriteString("@media screen{svg:root{max-width:100%;height:auto}}\n")
 	b.WriteString("@media screen and (prefers-color-scheme:dark){\n")
 	for _, c := range d.colors {

@@ -170,3 +170,42 @@ func TestDarkContrast(t *testing.T) {
 		t.Errorf("black becomes %06X, not a grey", uint32(d))
 	}
 }
+
+// On paper the file has its real size, in a window it fits, and it says its language.
+func TestSVGSizeAndLanguage(t *testing.T) {
+	file := string(testSVG(t))
+	for _, want := range []string{`width="420mm"`, `height="297mm"`, `@page{size:420mm 297mm;margin:0}`,
+		`@media screen{svg:root{max-width:100%;height:auto}}`, `xml:lang="en"`, `role="img"`} {
+		if !strings.Contains(file, want) {
+			t.Errorf("no %s", want)
+		}
+	}
+}
+
+// A hit area is in the SVG file alone, and nothing there could be seen.
+func TestHitAreas(t *testing.T) {
+	s := ink.NewSVG(100, 100, "", "")
+	o := ink.Object{ID: "a", Hit: new(ink.Path).Rect(ink.Rect{X: 1, Y: 2, W: 3, H: 4})}
+	s.Group(o, func() {})
+	s.Group(ink.Object{ID: "b", Hit: new(ink.Path).Move(1, 1).Line(9, 1), Along: true}, func() {})
+	out, err := s.Output()
+	if err != nil {
+		t.Fatal(err)
+	}
+	found := 0
+	for _, e := range parseXML(t, out) {
+		switch e.attr["class"] {
+		case "hit", "along":
+			found++
+			if len(e.attr) != 2 || e.attr["d"] == "" {
+				t.Errorf("a hit area with %v", e.attr)
+			}
+		}
+	}
+	if found != 2 {
+		t.Errorf("%d hit areas, want 2", found)
+	}
+	if !strings.Contains(string(out), ".hit{fill:none;pointer-events:all}") {
+		t.Error("a pointer would not meet the hit area")
+	}
+}

@@ -108,7 +108,7 @@ func (b *book) probe(sh *Sheet, tp *circuit.TestPoint, at node, side string) {
 	if r := b.reading[tp]; r != nil {
 		for i, c := range b.d.Conditions {
 			if c.Shown && i < len(r.Bands) {
-				t += fmt.Sprintf("; %s: %s", c.Name, r.Bands[i].Typical)
+				t += "; " + c.Name + ": " + volts(r.Bands[i].Typical)
 			}
 		}
 	}
