@@ -8,7 +8,8 @@
 //
 // Symbol numbers of the IEC 60617 database are given only where number and name
 // were seen together in a published extract; all other shapes follow the
-// standard as handbooks print it. Class letters are those of IEC 81346-2.
+// standard as handbooks print it. Class letters are those of IEC 81346-2:2009, main
+// classes (from memory).
 package symbols
 
 import "gloamwright/layout/ink"

@@ -95,6 +95,7 @@ func pages() ([]release.File, error) {
 		{Name: "docs/description.md", Data: description()},
 		{Name: "docs/findings.md", Data: findings()},
 		{Name: "docs/models.md", Data: models()},
+		{Name: "docs/letters.md", Data: letters()},
 	}
 	for _, p := range []struct {
 		name string

@@ -6,8 +6,7 @@ import (
 	"strings"
 )
 
-// Letter returns the class letter of a part kind after IEC 81346-2:2009 main
-// classes, with the battery as G.
+// Letter returns the class letter of a part kind after LetterEdition.
 func (k Kind) Letter() string {
 	switch k {
 	case Fuse, Suppressor:

@@ -39,19 +39,13 @@ func (s *boardSheet) end() int {
 }
 
 // key draws how to read a way, with the labels of the first lighting way as an
-// example. It is a figure: nothing in it is connected.
-func (b *book) key(sh *Sheet, left int) {
-	var w *circuit.Way
-	for _, bd := range b.c.Boards {
-		for _, v := range bd.Ways {
-			if w == nil && v.Lighting != nil {
-				w = v
-			}
-		}
+// example, and reports whether there is one. It is a figure: nothing in it is connected.
+func (b *book) key(sh *Sheet, left int) bool {
+	l := b.firstLighting()
+	if l == nil || l.TestPoint == nil {
+		return false
 	}
-	if w == nil || w.Lighting.TestPoint == nil {
-		return
-	}
+	w := l.Way
 	o := sh.scene.object(classNote, "key", "How to read a way")
 	x, fx := left+keyCore, float64(left+keyCore)
 	o.add(textAt(float64(left), 8.5, "How to read a way", headStyle, ink.Start))
@@ -100,4 +94,5 @@ func (b *book) key(sh *Sheet, left int) {
 	say(lamp-2.5, minusCore+0.4, "length of this leg")
 	say(lamp, minusCore+0.4, "number, type, place")
 	say(lamp+farEnd, tagGap+symbols.TagBox(ink.Point{}, w.Lighting.TestPoint.Label, ink.Start).W/module+0.5, "test point, far end")
+	return true
 }

@@ -147,12 +147,18 @@ func (b *book) make() error {
 			return err
 		}
 	}
+	legend := b.sheet(legendDiagram, "Legend")
 	for i := range overviews {
 		if err := b.drawOverview(b.sheets[i], i); err != nil {
 			return err
 		}
 	}
 	for _, s := range b.sheets {
+		if s == legend { // the last: it tells what the others show
+			if err := b.drawLegend(s); err != nil {
+				return err
+			}
+		}
 		s.scene.finish(b)
 		if c := b.d.Changes; c != nil && s.scene.markChanged(c.Touched) {
 			if err := b.note(s, s.cautions, append([]string{"A filled triangle marks what revision " + c.To + " changes."}, s.notes...)); err != nil {
