@@ -370,7 +370,7 @@ type group struct{ label, content string }
 var (
 	groupStart = regexp.MustCompile(`<g id="([^"]*)" class="(?:wire|rail|cable|part|testpoint)"([^>]*)>`)
 	labelled   = regexp.MustCompile(`data-(?:conductor|cable|part|testpoint)="([^"]*)"`)
-	pointedAt  = regexp.MustCompile(`, [0-9.]+ [nµm]?A at most|(<title>TP[0-9]+ [^;<]*);[^<]*`)
+	pointedAt  = regexp.MustCompile(`, [0-9.]+ [nµm]?A at most|, -?[0-9.]+ V with [^<]*|(<title>TP[0-9]+ [^;<]*);[^<]*`)
 	fontName   = regexp.MustCompile(`font-family="[^"]*"`) // holds a checksum of the glyphs in use
 )
 

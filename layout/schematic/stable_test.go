@@ -6,37 +6,64 @@ import (
 	"strings"
 	"testing"
 
+	"gloamwright/internal/design"
 	"gloamwright/internal/sitegen"
 	"gloamwright/layout/ink"
 	"gloamwright/layout/schematic/audit"
 )
 
-// The order in which a description names things does not show: the same bytes.
+// svgs are the files of all sheets.
+func svgs(t *testing.T, d *design.Design) [][]byte {
+	t.Helper()
+	sheets, err := Sheets(d)
+	if err != nil {
+		t.Fatal(err)
+	}
+	var out [][]byte
+	for _, s := range sheets {
+		data, err := s.SVG()
+		if err != nil {
+			t.Fatal(err)
+		}
+		out = append(out, data)
+	}
+	return out
+}
+
+// same reports sheets that differ.
+func same(t *testing.T, what string, a, b [][]byte) {
+	t.Helper()
+	if len(a) != len(b) {
+		t.Errorf("%s: %d sheets became %d", what, len(a), len(b))
+		return
+	}
+	for i := range a {
+		if !bytes.Equal(a[i], b[i]) {
+			t.Errorf("%s: sheet %d differs", what, i+1)
+		}
+	}
+}
+
+// The order in which a description names things does not show: the same bytes, with
+// the keys of all mappings in any order.
 func TestOrderOfTheFileDoesNotShow(t *testing.T) {
-	for i := range 24 {
+	list := samples(t)
+	for i := range 12 {
 		n, o := sitegen.Varied(i)
-		var files [2][][]byte
-		for k, back := range []bool{false, true} {
-			o.Backwards = back
-			sheets, err := Sheets(dressed(t, parsed(t, sitegen.Site(n, o))))
-			if err != nil {
-				t.Fatal(err)
-			}
-			for _, s := range sheets {
-				data, err := s.SVG()
-				if err != nil {
-					t.Fatal(err)
-				}
-				files[k] = append(files[k], data)
-			}
+		list[fmt.Sprintf("site %d", i)] = sitegen.Site(n, o)
+		o.Backwards = true
+		same(t, fmt.Sprintf("site %d backwards", i), svgs(t, dressed(t, parsed(t, list[fmt.Sprintf("site %d", i)]))),
+			svgs(t, dressed(t, parsed(t, sitegen.Site(n, o)))))
+	}
+	list["crowded"] = crowded()
+	for name, src := range list {
+		count := 20
+		if strings.HasPrefix(name, "site") || name == "crowded" || testing.Short() {
+			count = 3
 		}
-		if len(files[0]) != len(files[1]) {
-			t.Fatalf("site %d: %d sheets forward, %d backward", i, len(files[0]), len(files[1]))
-		}
-		for s := range files[0] {
-			if !bytes.Equal(files[0][s], files[1][s]) {
-				t.Errorf("site %d, sheet %d differs when the file is written backwards", i, s+1)
-			}
+		want := svgs(t, dressed(t, parsed(t, src)))
+		for seed := range count {
+			same(t, fmt.Sprintf("%s, shuffled by %d", name, seed), want, svgs(t, dressed(t, parsed(t, sitegen.Shuffled(src, uint64(seed))))))
 		}
 	}
 }
