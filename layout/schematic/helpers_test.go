@@ -61,8 +61,14 @@ func samples(tb testing.TB) map[string][]byte {
 // the sizing: what a drawing must have room for.
 func dressed(tb testing.TB, site *describe.Site) *design.Design {
 	tb.Helper()
+	return dressedWith(tb, site, nil)
+}
+
+// dressedWith is the same with labels that were given before.
+func dressedWith(tb testing.TB, site *describe.Site, kept circuit.Labels) *design.Design {
+	tb.Helper()
 	c := stage.Expand(site)
-	c.Label(nil)
+	c.Label(kept)
 	ratings := map[circuit.Kind][]string{
 		circuit.Fuse: {"7.5 A"}, circuit.Battery: {"48 V 1200 Ah", "flooded"}, circuit.Supply: {"24 V 0.75 A"},
 		circuit.ChargerUnit: {"48 V 12.5 A", "float 54.5 V", "boost 57.6 V"}, circuit.Resistor: {"1.05 kΩ"},

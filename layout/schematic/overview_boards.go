@@ -37,7 +37,8 @@ const (
 	boardTree   = 44 // on a sheet of their own
 	boardRow    = 1.92
 	boardHead   = 9.2 // first row below the top
-	boardsTop   = 22
+	boardsTop   = 22.0
+	boardsLeast = 9
 	boardsGap   = 11 // over a board that the one above feeds: its cable's texts stand there
 	boardsClear = 5  // over another
 	boardArrive = 3  // where a feeder arrives, below the top
@@ -107,7 +108,7 @@ func (b *book) boardsBeside(o *overview, all []*vertex) bool {
 	if sides > 0 {
 		w = boardNarrow
 	}
-	y := float64(boardsTop)
+	y := 0.0
 	o.beside = nil
 	for i, bd := range order {
 		k := boardBlock{board: bd, x: colBoards, y: y, w: w}
@@ -124,9 +125,13 @@ func (b *book) boardsBeside(o *overview, all []*vertex) bool {
 		y = k.y + b.boardHeight(bd)
 		o.beside = append(o.beside, k)
 	}
-	if sides > sideTracks || y > b.down(77) {
+	top := min(boardsTop, math.Floor(b.down(roomBelow)-y)) // higher where the room asks for it
+	if sides > sideTracks || top < boardsLeast {
 		o.beside = nil
 		return false
+	}
+	for i := range o.beside {
+		o.beside[i].y += top
 	}
 	track := 0
 	for i := range o.beside {

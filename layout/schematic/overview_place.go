@@ -3,6 +3,8 @@ package schematic
 import (
 	"cmp"
 	"slices"
+
+	"gloamwright/internal/circuit"
 )
 
 // cell is a place for a block; row 0 is the energy's row, row -1 the one above it.
@@ -411,6 +413,9 @@ func (b *book) planOverview() []string {
 		return titles
 	}
 	o.beside = nil
+	if o.sheets[0].way.tables && !slices.ContainsFunc(b.c.Boards, func(bd *circuit.Board) bool { return bd.Parent != nil }) {
+		return titles // every board is a block already, and its own sheets list its ways
+	}
 	titles = append(titles, b.pageBoards(o, !o.sheets[0].way.tables)...)
 	return titles
 }

@@ -6,8 +6,10 @@ import (
 	"strings"
 	"testing"
 
+	"gloamwright/internal/circuit"
 	"gloamwright/internal/design"
 	"gloamwright/internal/sitegen"
+	"gloamwright/internal/stage"
 	"gloamwright/layout/ink"
 	"gloamwright/layout/schematic/audit"
 )
@@ -135,6 +137,76 @@ func TestAWayAtTheEndMovesNothing(t *testing.T) {
 			if now, ok := is[id]; !ok || now != at {
 				t.Errorf("sheet %d: %s moved from %s to %s", i+1, id, at, now)
 			}
+		}
+	}
+}
+
+// A circuit added on a board, with the labels that were given before, moves nothing on
+// the sheets of stages and of other boards.
+func TestACircuitOnABoardMovesNothingElsewhere(t *testing.T) {
+	src := samples(t)["bracken-reach"]
+	more := append(bytes.TrimRight(src, "\n"), "\n  - {name: Wash house, board: annex, lit: outage-night, points: [4 m corridor, 3 m corridor]}\n"...)
+	kept := stage.Expand(parsed(t, src)).Label(nil)
+	a, b := drawn(t, dressed(t, parsed(t, src)), false), drawn(t, dressedWith(t, parsed(t, more), kept), false)
+	if len(a) != len(b) {
+		t.Fatalf("%d sheets became %d", len(a), len(b))
+	}
+	fresh := 0
+	for i := range a {
+		was, is := objects(a[i].Page), objects(b[i].Page)
+		_, here := is["part-F201"] // the sheet of the board that the circuit is added on
+		for id := range is {
+			if _, ok := was[id]; !ok {
+				fresh++
+				if !here {
+					t.Errorf("sheet %d: %s is new", i+1, id)
+				}
+			}
+		}
+		for id, at := range was {
+			if now, ok := is[id]; (!ok || now != at) && !here {
+				t.Errorf("sheet %d: %s moved from %s to %s", i+1, id, at, now)
+			}
+		}
+	}
+	if fresh == 0 {
+		t.Error("the circuit is not drawn")
+	}
+}
+
+// A part that is renamed moves nothing.
+func TestARenamedPartMovesNothing(t *testing.T) {
+	for name, src := range samples(t) {
+		before, after := dressed(t, parsed(t, src)), dressed(t, parsed(t, src))
+		was := ""
+		for _, p := range after.Circuit.Parts {
+			if p.Kind == circuit.Fuse && p.Designation == "-F2" {
+				was, p.Designation = p.Designation, "-F9"
+			}
+		}
+		if was == "" {
+			t.Fatalf("%s has no -F2", name)
+		}
+		a, b := drawn(t, before, false), drawn(t, after, false)
+		renamed := 0
+		for i := range a {
+			for k, s := range a[i].Page.Strokes {
+				if n := b[i].Page.Strokes[k]; fmt.Sprint(s.Width, s.Path) != fmt.Sprint(n.Width, n.Path) {
+					t.Errorf("%s sheet %d: %s moved", name, i+1, s.Group.ID)
+				}
+			}
+			for k, x := range a[i].Page.Texts {
+				n := b[i].Page.Texts[k]
+				if x.S != n.S {
+					renamed++
+					if strings.ReplaceAll(x.S, was, "-F9") != n.S {
+						t.Errorf("%s sheet %d: %q became %q", name, i+1, x.S, n.S)
+					}
+				}
+			}
+		}
+		if renamed == 0 {
+			t.Errorf("%s: -F9 is nowhere", name)
 		}
 	}
 }
