@@ -61,6 +61,12 @@ type Leg struct {
 	Ends func(*Option) float64
 }
 
+// Condition is another state of a tree in which the same sizes must keep the voltages.
+type Condition struct {
+	Volts   quantity.Volt
+	MinVolt []quantity.Volt // by leg; 0: no limit
+}
+
 // Tree is a source with everything that hangs on it. A leg's index is above its
 // parent's.
 type Tree struct {
@@ -69,7 +75,18 @@ type Tree struct {
 	Legs    []Leg
 	Options []Option            // standard or stocked sizes, by rising area
 	Taper   bool                // legs of one circuit may get thinner down the run
+	Also    []Condition         // in which the sizes must keep the voltages too
 	Lengths quantity.LengthUnit // in which remedies are worded
+}
+
+// in returns the tree as it stands in another condition.
+func (t *Tree) in(c Condition) *Tree {
+	o := *t
+	o.Volts, o.Also, o.Legs = c.Volts, nil, append([]Leg(nil), t.Legs...)
+	for i := range o.Legs {
+		o.Legs[i].MinVolt = c.MinVolt[i]
+	}
+	return &o
 }
 
 // TreeResult is a chosen set of sizes with its electrical state.

@@ -24,8 +24,20 @@ func (p *plan) shortages(sizes []*Option, r *TreeResult) (drop, loop []float64) 
 	return drop, loop
 }
 
-// verdict names the limit that the sizes break most; nil if they keep all.
+// verdict names the limit that the sizes break most, in the first condition in which they
+// break one; nil if they keep all. r is their state.
 func (p *plan) verdict(sizes []*Option, r *TreeResult) error {
+	err := p.verdictHere(sizes, r)
+	for _, q := range p.also {
+		if err == nil {
+			err = q.verdictHere(sizes, q.result(sizes))
+		}
+	}
+	return err
+}
+
+// verdictHere does so for one condition.
+func (p *plan) verdictHere(sizes []*Option, r *TreeResult) error {
 	for i, o := range sizes {
 		l := &p.t.Legs[i]
 		switch {
@@ -212,6 +224,17 @@ func (p *plan) relaxed() *TreeResult {
 		if loop[i] > 0 {
 			loose.Legs[i].Loop = 0
 		}
+	}
+	loose.Also = nil
+	for k, q := range p.also {
+		short, _ := q.shortages(sizes, q.result(sizes))
+		c := Condition{Volts: q.t.Volts, MinVolt: append([]quantity.Volt(nil), p.t.Also[k].MinVolt...)}
+		for i := range short {
+			if short[i] > 0 {
+				c.MinVolt[i] = collapsed * c.Volts
+			}
+		}
+		loose.Also = append(loose.Also, c)
 	}
 	q, err := loose.plan()
 	if err == nil {

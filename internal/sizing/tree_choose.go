@@ -47,15 +47,43 @@ const searchWork = 200_000
 // search is the state of one Choose.
 type search struct {
 	*plan
-	best     *TreeResult
-	open     [][]int     // by group: options that may be part of a cheaper choice
-	rests                // from the last relaxed pass over open
-	with     [][]float64 // by group and option: least cost of a choice with it
-	bound    float64
-	pass     pass
-	cap      int  // see pass
-	passWork int  // states made in the last pass
-	hopeless bool // no choice keeps all limits
+	conditions []*condition // of the tree, the plan's own first
+	binding    *condition   // that which asked most in the last relaxed pass
+	best       *TreeResult
+	open       [][]int // by group: options that may be part of a cheaper choice
+	bound      float64
+	cap        int  // see pass
+	passWork   int  // states made in the last pass
+	hopeless   bool // no choice keeps all limits
+}
+
+// condition is a state in which the tree must keep its limits, with what the last relaxed
+// pass there says.
+type condition struct {
+	*plan
+	rests
+	with [][]float64 // by group and option: least cost of a choice with it
+	pass pass
+	cost float64
+}
+
+// search begins a search.
+func (p *plan) search(states int) *search {
+	s := &search{plan: p, open: slices.Clone(p.allowed), cap: states}
+	for _, q := range append([]*plan{p}, p.also...) {
+		s.conditions = append(s.conditions, &condition{plan: q})
+	}
+	s.binding = s.conditions[0]
+	return s
+}
+
+// states is how many states were made so far.
+func (s *search) states() int {
+	n := 0
+	for _, c := range s.conditions {
+		n += c.work
+	}
+	return n
 }
 
 // tieSlack is how far two costs may differ by rounding and still be equal.
@@ -63,11 +91,11 @@ const tieSlack = 1e-9
 
 // seek searches with at first so many states at a point.
 func (p *plan) seek(states int) *search {
-	s := &search{plan: p, open: slices.Clone(p.allowed), cap: states}
+	s := p.search(states)
 	for s.refine() {
 		s.cap *= finer
 	}
-	if before := s.work; !s.hopeless && !s.closed() && s.passWork*leastNodes < searchWork {
+	if before := s.states(); !s.hopeless && !s.closed() && s.passWork*leastNodes < searchWork {
 		s.bound = max(s.bound, s.branch(s.open, before+searchWork))
 	}
 	if s.best != nil {
@@ -93,9 +121,9 @@ const (
 // and strikes out what cannot be part of a cheaper one. It reports whether a finer pass
 // is of use.
 func (s *search) refine() bool {
-	before := s.work
+	before := s.states()
 	cost, picks, ok := s.relax(s.open)
-	s.passWork = s.work - before
+	s.passWork = s.states() - before
 	if !ok {
 		if s.best != nil {
 			s.bound = s.best.Cost // nothing cheaper is left
@@ -104,7 +132,9 @@ func (s *search) refine() bool {
 		return false
 	}
 	s.bound = max(s.bound, cost)
-	s.rests, s.with = s.pass.complete(cost)
+	for _, c := range s.conditions {
+		c.rests, c.with = c.pass.complete(c.cost)
+	}
 	s.repair(picks)
 	if s.best == nil {
 		s.candidates()
@@ -113,7 +143,7 @@ func (s *search) refine() bool {
 	if s.best == nil || s.closed() {
 		return false
 	}
-	if s.work > refineWork && s.best.Cost <= s.bound*(1+goodGap) || s.work > refineWork+refineByLeg*len(s.t.Legs) {
+	if work := s.states(); work > refineWork && s.best.Cost <= s.bound*(1+goodGap) || work > refineWork+refineByLeg*len(s.t.Legs) {
 		return false
 	}
 	return s.tighten() || s.cap < lastCap
@@ -130,13 +160,23 @@ func (s *search) limit() float64 {
 	return s.best.Cost * (1 + tieSlack)
 }
 
-// relax makes a relaxed pass over the options in question. ok is false if no choice
-// among them fits, or none that is cheaper than the best.
+// relax makes a relaxed pass over the options in question for each condition: no choice
+// costs less than the dearest of them. ok is false if no choice among them fits, or none
+// that is cheaper than the best.
 func (s *search) relax(open [][]int) (cost float64, picks []int, ok bool) {
-	s.pass.cap = s.cap
-	s.pass.plan, s.pass.open, s.pass.relaxed, s.pass.lift = s.plan, open, true, 0
-	s.pass.floor, s.pass.rests, s.pass.limit = s.leastAmps(open), s.rests, s.limit()
-	return s.pass.run()
+	cost = -1
+	for _, c := range s.conditions {
+		c.pass.plan, c.pass.open, c.pass.relaxed, c.pass.cap = c.plan, open, true, s.cap
+		c.pass.floor, c.pass.rests, c.pass.limit = c.leastAmps(open), c.rests, s.limit()
+		least, of, ok := c.pass.run()
+		if !ok {
+			return 0, nil, false
+		}
+		if c.cost = least; least > cost {
+			cost, picks, s.binding = least, of, c
+		}
+	}
+	return cost, picks, true
 }
 
 // tighten strikes out options that no cheaper choice holds; false if there are none.
@@ -145,7 +185,7 @@ func (s *search) tighten() bool {
 	for g, all := range s.open {
 		var keep []int
 		for _, k := range all {
-			if s.with[g][k] <= limit {
+			if !slices.ContainsFunc(s.conditions, func(c *condition) bool { return c.with[g][k] > limit }) {
 				keep = append(keep, k)
 			}
 		}
@@ -165,17 +205,22 @@ func (s *search) offer(picks []int) (short float64, ok bool) {
 	if !s.t.clears(sizes) {
 		return 0, false
 	}
-	v, a, ok := s.t.Solve(sizes)
-	if !ok {
-		return 0, false
-	}
-	for i := range v {
-		short = max(short, float64(s.t.Legs[i].MinVolt-v[i]))
+	r := &TreeResult{Sizes: sizes}
+	for n, c := range s.conditions {
+		v, a, ok := c.t.Solve(sizes)
+		if !ok {
+			return 0, false
+		}
+		for i := range v {
+			short = max(short, float64(c.t.Legs[i].MinVolt-v[i]))
+		}
+		if n == 0 {
+			r.Volts, r.Amps = v, a
+		}
 	}
 	if short > voltSlack {
 		return short, false
 	}
-	r := &TreeResult{Sizes: sizes, Volts: v, Amps: a}
 	for i, o := range sizes {
 		r.Cost += s.cost(i, o)
 	}
@@ -188,7 +233,8 @@ func (s *search) offer(picks []int) (short float64, ok bool) {
 // candidates looks for true choices: with a little more than the least voltages until one
 // meets all limits, else with the greatest currents there can be, else the thickest sizes.
 func (s *search) candidates() {
-	p := &pass{plan: s.plan, open: s.open, rests: s.rests, limit: s.limit(), floor: s.pass.floor, cap: s.cap}
+	c := s.binding
+	p := &pass{plan: c.plan, open: s.open, rests: c.rests, limit: s.limit(), floor: c.pass.floor, cap: s.cap}
 	const rounds = 5
 	for range rounds {
 		_, picks, ok := p.run()
@@ -207,7 +253,7 @@ func (s *search) candidates() {
 	if s.best != nil {
 		return
 	}
-	p.floor, p.lift = s.mostAmps(), 0
+	p.floor, p.lift = c.mostAmps(), 0
 	if _, picks, ok := p.run(); ok {
 		s.offer(picks)
 	}
@@ -237,7 +283,7 @@ func (s *search) branch(open [][]int, budget int) float64 {
 	}
 	least := s.limit()
 	for n := range open[at] {
-		if s.work > budget {
+		if s.states() > budget {
 			return bound
 		}
 		next := slices.Clone(open)

@@ -59,7 +59,7 @@ func TestChooseLarge(t *testing.T) {
 			if err != nil {
 				t.Fatal(err)
 			}
-			s := &search{plan: p, cap: firstCap}
+			s := p.search(firstCap)
 			s.relax(p.allowed)
 			per = append(per, float64(p.work)/float64(n))
 		}

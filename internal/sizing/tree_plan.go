@@ -16,8 +16,9 @@ type plan struct {
 	common   map[string]int // group of a circuit whose legs share one size
 	shared   []bool         // by leg: its circuit shares one size
 	priced   bool
-	inactive []bool // by leg: its loop limit holds for every allowed choice
-	work     int    // states made so far
+	inactive []bool  // by leg: its loop limit holds for every allowed choice
+	also     []*plan // the tree in its other conditions
+	work     int     // states made so far
 }
 
 // free stands for "no option" and "no group".
@@ -67,6 +68,13 @@ func (t *Tree) plan() (*plan, error) {
 		p.allowed = append(p.allowed, a)
 	}
 	p.markInactive()
+	for _, c := range t.Also {
+		q, err := t.in(c).plan()
+		if err != nil {
+			return nil, err
+		}
+		p.also = append(p.also, q)
+	}
 	return p, nil
 }
 

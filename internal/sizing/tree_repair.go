@@ -89,16 +89,35 @@ func (s *search) thickening(g int, picks []int) (groups []int, to int) {
 	return groups, to
 }
 
-// lacks solves the sizes and returns what is missing at and behind each leg, in V and Ω.
+// lacks solves the sizes and returns what is missing at and behind each leg, in V and Ω,
+// in the condition in which the voltages are furthest from their limits.
 func (s *search) lacks(sizes []*Option) (lacks []lack, amps []float64, ok bool) {
-	v, a, ok := s.t.Solve(sizes)
+	worst := -1.0
+	for _, c := range s.conditions {
+		l, a, ok := c.t.lacks(sizes)
+		if !ok {
+			return nil, nil, false
+		}
+		short := 0.0
+		for i := range l {
+			short = max(short, l[i].volts)
+		}
+		if short > worst {
+			lacks, amps, worst = l, a, short
+		}
+	}
+	return lacks, amps, true
+}
+
+func (t *Tree) lacks(sizes []*Option) (lacks []lack, amps []float64, ok bool) {
+	v, a, ok := t.Solve(sizes)
 	if !ok {
 		return nil, nil, false
 	}
 	lacks, amps = make([]lack, len(sizes)), make([]float64, len(sizes))
-	loops := s.t.loops(sizes)
+	loops := t.loops(sizes)
 	for i := len(sizes) - 1; i >= 0; i-- {
-		leg, l := &s.t.Legs[i], &lacks[i]
+		leg, l := &t.Legs[i], &lacks[i]
 		amps[i] = float64(a[i])
 		if d := float64(leg.MinVolt - v[i]); d > voltSlack {
 			l.volts, l.nVolts = max(l.volts, d), l.nVolts+1

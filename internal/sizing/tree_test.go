@@ -84,7 +84,12 @@ func exhaustive(t *Tree) (best float64, found bool) {
 	var try func(i int)
 	try = func(i int) {
 		if i == len(t.Legs) {
-			if _, _, ok := t.meets(sizes); ok {
+			ok := true
+			for _, c := range append([]Condition{{t.Volts, minVolts(t)}}, t.Also...) {
+				_, _, fits := t.in(c).meets(sizes)
+				ok = ok && fits
+			}
+			if ok {
 				if c := t.Copper(sizes); c < best {
 					best, found = c, true
 				}
@@ -110,6 +115,14 @@ func exhaustive(t *Tree) (best float64, found bool) {
 	}
 	try(0)
 	return best, found
+}
+
+func minVolts(t *Tree) []quantity.Volt {
+	out := make([]quantity.Volt, len(t.Legs))
+	for i := range out {
+		out[i] = t.Legs[i].MinVolt
+	}
+	return out
 }
 
 // agrees applies the rule of one size a circuit, or of thinning down the run, to the
@@ -215,6 +228,43 @@ func TestCoarseEqualsExhaustive(t *testing.T) {
 	}
 }
 
+// TestTwoConditionsEqualExhaustive: with a second condition in which resistors and strings
+// draw more, the sizes keep both sets of limits with the least copper.
+func TestTwoConditionsEqualExhaustive(t *testing.T) {
+	r := rand.New(rand.NewPCG(29, 31))
+	fits, dearer := 0, 0
+	for n := range 400 {
+		tree := randomTree(r, 2+r.IntN(5))
+		alone, _ := exhaustive(tree)
+		const higher = 5 // V above the first condition
+		c := Condition{tree.Volts + higher, minVolts(tree)}
+		for i, v := range c.MinVolt {
+			if v > 0 {
+				c.MinVolt[i] = v + higher - quantity.Volt(0.3*r.Float64())
+			}
+		}
+		tree.Also = append(tree.Also, c)
+		want, found := exhaustive(tree)
+		got, err := tree.Choose()
+		if (err == nil) != found {
+			t.Errorf("tree %d: %v, exists %v", n, err, found)
+		}
+		if err != nil || !found {
+			continue
+		}
+		fits++
+		if want > alone*(1+1e-9) {
+			dearer++
+		}
+		if !got.Proven || math.Abs(got.Cost-want) > 1e-6*want {
+			t.Errorf("tree %d: %.4f cm³ (proven %v), least is %.4f", n, got.Cost, got.Proven, want)
+		}
+	}
+	if fits < 100 || dearer < 20 {
+		t.Errorf("%d trees fit, in %d the second condition asks more", fits, dearer)
+	}
+}
+
 // TestBoundBelowExhaustive: one relaxed pass with few states at a point, before and after
 // the rests are known, promises no less than the best choice costs.
 func TestBoundBelowExhaustive(t *testing.T) {
@@ -234,13 +284,14 @@ func TestBoundBelowExhaustive(t *testing.T) {
 			continue
 		}
 		fits++
-		s := &search{plan: p, cap: 1 + n%3}
+		s := p.search(1 + n%3)
 		for range 3 {
 			cost, _, ok := s.relax(p.allowed)
 			if !ok || cost > want*(1+1e-9) {
 				t.Fatalf("tree %d: bound %.6f (%v) above the least %.6f", n, cost, ok, want)
 			}
-			if s.rests, s.with = s.pass.complete(cost); cost > want*0.999 {
+			c := s.conditions[0]
+			if c.rests, c.with = c.pass.complete(cost); cost > want*0.999 {
 				tight++
 			}
 			s.cap += 2

@@ -2,7 +2,6 @@ package stage
 
 import (
 	"fmt"
-	"slices"
 	"strings"
 
 	"gloamwright/internal/catalogue"
@@ -31,9 +30,7 @@ func sizeBoard(p *Plan, _ *describe.Stage) {
 	best := p.bestTree()
 	best.commit()
 	if best.err == nil && p.sells[""] {
-		if best.res, best.err = best.choose(); best.err == nil && best.drawsMore() {
-			best.res, best.err = best.full(best.res)
-		}
+		best.res, best.err = best.choose()
 	}
 	if best.err != nil {
 		p.block("Cables", p.C.Boards[0].At, "", best.err)
@@ -59,10 +56,10 @@ func (p *Plan) grow(lights, feeders *catalogue.FuseClass, above bool) *tree {
 			t.board(b, trunk)
 		}
 	}
-	t.res, t.err = t.Choose()
-	if t.err == nil && t.drawsMore() {
-		t.res, t.err = t.full(t.res)
+	if t.drawsMore() {
+		t.Also = append(t.Also, t.full())
 	}
+	t.res, t.err = t.Choose()
 	return t
 }
 
@@ -77,46 +74,21 @@ func (t *tree) drawsMore() bool {
 	return false
 }
 
-// costSlack is how far two costs may differ by rounding and still be equal.
-const costSlack = 1e-9
-
-// full holds the choice against the limits with the battery full, or on float where
-// circuits are lit while mains is on. If it breaks them, it chooses once more there and
-// returns for each leg the thicker of both choices.
-func (t *tree) full(end *sizing.TreeResult) (*sizing.TreeResult, error) {
-	high := t.Tree
-	high.Volts = t.p.Full
-	for _, c := range t.p.Site.Circuits {
-		if c.Lit.Val == "night" || c.Lit.Val == "always" {
-			high.Volts = max(high.Volts, t.p.Float)
+// full is the tree with the battery full, or on float where circuits are lit while mains
+// is on.
+func (t *tree) full() sizing.Condition {
+	c := sizing.Condition{Volts: t.p.Full, MinVolt: make([]quantity.Volt, len(t.Legs))}
+	for _, s := range t.p.Site.Circuits {
+		if s.Lit.Val == "night" || s.Lit.Val == "always" {
+			c.Volts = max(c.Volts, t.p.Float)
 		}
 	}
-	high.Legs = slices.Clone(t.Legs)
-	for i := range high.Legs {
-		if high.Legs[i].MinVolt > 0 {
-			high.Legs[i].MinVolt = high.Volts - t.p.permittedDrop()
+	for i := range t.Legs {
+		if t.Legs[i].MinVolt > 0 {
+			c.MinVolt[i] = c.Volts - t.p.permittedDrop()
 		}
 	}
-	if _, err := high.Check(end.Sizes); err == nil {
-		return end, nil
-	}
-	res, err := high.Choose()
-	if err != nil {
-		return res, err
-	}
-	sizes := slices.Clone(res.Sizes)
-	for i, o := range end.Sizes {
-		if o.Size.Area > sizes[i].Size.Area {
-			sizes[i] = o
-		}
-	}
-	both, err := t.Check(sizes)
-	if err != nil {
-		return both, err
-	}
-	both.Bound = max(end.Bound, res.Bound)
-	both.Proven = both.Cost <= both.Bound*(1+costSlack)
-	return both, nil
+	return c
 }
 
 // tree is the tree of feeders and legs with what belongs to each leg.
