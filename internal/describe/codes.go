@@ -40,6 +40,7 @@ const (
 	codeLoop        = "D035"
 	codeFeedsNone   = "D036"
 	codeNotBoard    = "D037"
+	codeSecond      = "D038"
 
 	codeNoCircuits = "D040"
 	codeNoPoints   = "D041"
@@ -90,6 +91,7 @@ var Codes = []Code{
 	{codeLoop, "stages or boards that feed each other in a loop"},
 	{codeFeedsNone, "stage that feeds nothing"},
 	{codeNotBoard, "circuit on a stage that is no board"},
+	{codeSecond, "second stage of a kind of which a job has one"},
 	{codeNoCircuits, "no circuits"},
 	{codeNoPoints, "circuit or branch without points"},
 	{codeWay, "way pinned twice, or one that the board does not have"},

@@ -18,6 +18,7 @@ func (d *decoder) resolve() {
 	r.loops()
 	r.circuits()
 	r.feedsNothing()
+	r.seconds()
 	r.formerNames()
 	r.nets()
 	r.lamps()
@@ -239,6 +240,24 @@ func (r *resolver) feedsNothing() {
 			continue
 		}
 		r.report(codeFeedsNone, k.Name+" that feeds nothing", s.Name.Pos, fmt.Sprintf("No stage takes from %s. Let one: give it from: %s, or remove %s.", s.Name.Val, s.Name.Val, s.Name.Val))
+	}
+}
+
+// seconds finds stages of kinds of which a job has at most one: the sizing of a second one
+// would need to know which lights hang on which.
+func (r *resolver) seconds() {
+	first := map[string]*Stage{}
+	for _, s := range r.site.Stages {
+		k := r.stageKind(s)
+		if k == nil || !k.Single {
+			continue
+		}
+		if one := first[k.Name]; one != nil {
+			r.report(codeSecond, "second "+k.Name, s.Name.Pos, fmt.Sprintf("A job has one %s, and %s is it. Remove %s, or describe its lights as a job of their own.", k.Name, one.Name.Val, s.Name.Val),
+				Related{one.Name.Pos, "the first is here"})
+			continue
+		}
+		first[k.Name] = s
 	}
 }
 

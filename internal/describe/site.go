@@ -154,6 +154,8 @@ type Kind struct {
 	Fields []Field
 	// MustFeed: a stage of this kind that no other takes from is a mistake.
 	MustFeed bool
+	// Single: a job has at most one stage of this kind.
+	Single bool
 	// Nets are further names, besides ports, under which parts and test points may
 	// name a net of this stage, as in "store.plus". Nil: such names are not checked here.
 	Nets []string

@@ -94,7 +94,7 @@ func attempt(site *describe.Site, kept circuit.Labels, more stage.Reserve) (*Des
 		return nil, err
 	}
 	m.dropWorkings()
-	m.relay()
+	m.relays()
 	if err := m.faultsBeside(func() error {
 		if err := m.thresholds(); err != nil {
 			return err

@@ -205,12 +205,15 @@ func (m *maker) function() {
 	}
 }
 
-// relay records the coil's lowest voltage in the conditions in which it must hold.
-func (m *maker) relay() {
-	r := m.f.Relay
-	if r == nil {
-		return
+// relays records the lowest voltage of each coil in the conditions in which it must hold.
+func (m *maker) relays() {
+	for _, r := range m.f.Relays {
+		m.relay(r)
 	}
+}
+
+// relay records a coil's lowest voltage.
+func (m *maker) relay(r *facts.Relay) {
 	r.LowestFeed = quantity.Volt(math.Inf(1))
 	coil := r.Part.Designation + ".coil"
 	for _, c := range m.f.Conditions {

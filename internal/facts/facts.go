@@ -24,9 +24,11 @@ type Facts struct {
 	Fuses      []*Fuse
 	Battery    Battery
 	Charger    Charger
-	Relay      *Relay  // nil: the job has none
-	CutOff     *CutOff // nil: the job has none
-	Supply     *Supply
+	Relays     []*Relay  // changeover relays, in the order of their stages
+	Relay      *Relay    // the one of them that a photocell holds, else the first; nil: the job has none
+	CutOff     *CutOff   // nil: the job has none
+	Supplies   []*Supply // auxiliary and raw supplies
+	Supply     *Supply   // the first of them that mains feeds; nil: the job has none
 	Endurance  Endurance
 	Function   []*FunctionRow
 	Loops      []*Loop // feeders first, then circuits

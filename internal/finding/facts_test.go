@@ -99,9 +99,9 @@ func sound() *facts.Facts {
 		Part: part("-T1", circuit.ChargerUnit, 32, "+", "-"), Current: 3, Required: 2.4, Limit: 8.25,
 		Float: 27.48, Boost: 29.04, PerKelvin: -0.036, Compensated: true,
 	}
-	f.Supply = &facts.Supply{Part: part("-T2", circuit.Supply, 33, "+", "-"), Volt: 24, Rated: 0.5, Current: 0.04}
+	f.Supplies = []*facts.Supply{{Part: part("-T2", circuit.Supply, 33, "+", "-"), Volt: 24, Rated: 0.5, Current: 0.04}}
 	f.CutOff = &facts.CutOff{Part: part("-Q1", circuit.CutOff, 34, "in", "out", "-"), Opens: 21, Recloses: 25.2, Current: 1.5, Rated: 5}
-	f.Relay = &facts.Relay{Part: part("-K1", circuit.Relay, 35, "A1", "A2"), PickUp: 19.6, LowestFeed: 23.5, Contact: 1.5, Rated: 8}
+	f.Relays = []*facts.Relay{{Part: part("-K1", circuit.Relay, 35, "A1", "A2"), PickUp: 19.6, LowestFeed: 23.5, Contact: 1.5, Rated: 8}}
 
 	board := func(name, title string, line int) *circuit.Board {
 		b := &circuit.Board{Name: name, Title: title, Number: len(c.Boards) + 1, At: describe.Span{File: "site.yaml", Line: line, Col: 3}}

@@ -70,9 +70,9 @@ func spoiled() *facts.Facts {
 	f.Site.Practice.Negative.Val = "RD"
 	f.Site.Duty.BatteryRoom.Val.High = 45
 	f.Fuses[1].Rating = 19
-	f.Relay.Contact = 9
+	f.Relays[0].Contact = 9
 	f.Site.Job.Date.Val = ""
-	f.Supply.Current = 1
+	f.Supplies[0].Current = 1
 	f.Charger.Current = 20
 	f.Conditions[1].Settled = false
 	return f

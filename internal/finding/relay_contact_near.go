@@ -19,20 +19,21 @@ var relayContactNear = &Check{
 	Doc:    "Lamp drivers charge their capacitors when they start: for some milliseconds they draw several times their current. A contact used above 80 % of its rating wears or welds early.",
 	Source: "common practice, no source",
 	Run: func(f *facts.Facts, report func(Finding)) {
-		r := f.Relay
-		if r == nil || r.Rated <= 0 || over(r.Contact, r.Rated) {
-			return
+		for _, r := range f.Relays {
+			if r.Rated <= 0 || over(r.Contact, r.Rated) {
+				continue
+			}
+			share := quantity.Ratio(r.Contact / r.Rated)
+			if !over(share, contactReserve) {
+				continue
+			}
+			v, bound := pair(share, contactReserve)
+			report(Finding{
+				Severity: Caution, Subject: r.Part.Designation, At: r.Part.At,
+				Message: fmt.Sprintf("%s: contact carries %s, %s of its rating, limit %s", title(r.Part.Designation, "changeover"), say(r.Contact), v, bound),
+				Remedy:  fmt.Sprintf("A relay rated %s DC or more.", sayUp(quantity.Ampere(float64(r.Contact)/float64(contactReserve)))),
+				Value:   percent(share), Limit: percent(contactReserve), Unit: "%",
+			})
 		}
-		share := quantity.Ratio(r.Contact / r.Rated)
-		if !over(share, contactReserve) {
-			return
-		}
-		v, bound := pair(share, contactReserve)
-		report(Finding{
-			Severity: Caution, Subject: r.Part.Designation, At: r.Part.At,
-			Message: fmt.Sprintf("%s: contact carries %s, %s of its rating, limit %s", title(r.Part.Designation, "changeover"), say(r.Contact), v, bound),
-			Remedy:  fmt.Sprintf("A relay rated %s DC or more.", sayUp(quantity.Ampere(float64(r.Contact)/float64(contactReserve)))),
-			Value:   percent(share), Limit: percent(contactReserve), Unit: "%",
-		})
 	},
 }

@@ -14,16 +14,17 @@ var relayPickUp = &Check{
 		"while the relay must hold has to reach it. Take a coil of lower voltage or a stiffer supply.",
 	Source: "IEC 61810-1 clause 5 (operative range); copper's temperature law of IEC 60028",
 	Run: func(f *facts.Facts, report func(Finding)) {
-		r := f.Relay
-		if r == nil || !under(r.LowestFeed, r.PickUp) {
-			return
+		for _, r := range f.Relays {
+			if !under(r.LowestFeed, r.PickUp) {
+				continue
+			}
+			v, bound := pair(r.LowestFeed, r.PickUp)
+			report(Finding{
+				Severity: Stop, Subject: r.Part.Designation, At: r.Part.At,
+				Message: fmt.Sprintf("%s: coil gets %s, picks up hot at %s", title(r.Part.Designation, "changeover"), v, bound),
+				Remedy:  fmt.Sprintf("A supply that gives %s more at low mains, or a coil that picks up at %s.", sayUp(r.PickUp-r.LowestFeed), sayDown(r.LowestFeed)),
+				Value:   float64(r.LowestFeed), Limit: float64(r.PickUp), Unit: "V", Over: true,
+			})
 		}
-		v, bound := pair(r.LowestFeed, r.PickUp)
-		report(Finding{
-			Severity: Stop, Subject: r.Part.Designation, At: r.Part.At,
-			Message: fmt.Sprintf("%s: coil gets %s, picks up hot at %s", title(r.Part.Designation, "changeover"), v, bound),
-			Remedy:  fmt.Sprintf("A supply that gives %s more at low mains, or a coil that picks up at %s.", sayUp(r.PickUp-r.LowestFeed), sayDown(r.LowestFeed)),
-			Value:   float64(r.LowestFeed), Limit: float64(r.PickUp), Unit: "V", Over: true,
-		})
 	},
 }

@@ -14,16 +14,17 @@ var relayPickUpCold = &Check{
 		"empty the battery. Take a coil of lower voltage or a higher end of discharge.",
 	Source: "IEC 61810-1 clause 5 (operative range)",
 	Run: func(f *facts.Facts, report func(Finding)) {
-		r := f.Relay
-		if r == nil || r.PickUpCold <= 0 || !under(r.LowestCold, r.PickUpCold) {
-			return
+		for _, r := range f.Relays {
+			if r.PickUpCold <= 0 || !under(r.LowestCold, r.PickUpCold) {
+				continue
+			}
+			v, bound := pair(r.LowestCold, r.PickUpCold)
+			report(Finding{
+				Severity: Stop, Subject: r.Part.Designation, At: r.Part.At,
+				Message: fmt.Sprintf("%s: coil gets %s from the nearly empty battery, picks up at %s", title(r.Part.Designation, "changeover"), v, bound),
+				Remedy:  fmt.Sprintf("A coil that picks up at %s, or an end of discharge higher by %s.", sayDown(r.LowestCold), sayUp(r.PickUpCold-r.LowestCold)),
+				Value:   float64(r.LowestCold), Limit: float64(r.PickUpCold), Unit: "V", Over: true,
+			})
 		}
-		v, bound := pair(r.LowestCold, r.PickUpCold)
-		report(Finding{
-			Severity: Stop, Subject: r.Part.Designation, At: r.Part.At,
-			Message: fmt.Sprintf("%s: coil gets %s from the nearly empty battery, picks up at %s", title(r.Part.Designation, "changeover"), v, bound),
-			Remedy:  fmt.Sprintf("A coil that picks up at %s, or an end of discharge higher by %s.", sayDown(r.LowestCold), sayUp(r.PickUpCold-r.LowestCold)),
-			Value:   float64(r.LowestCold), Limit: float64(r.PickUpCold), Unit: "V", Over: true,
-		})
 	},
 }

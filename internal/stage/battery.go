@@ -26,6 +26,7 @@ func battery() *Kind {
 				{Name: "charge", Doc: "where a charger feeds in; the same rail", Sink: true, Max: 1},
 			},
 			MustFeed: true,
+			Single:   true,
 			Fields: fields(
 				describe.Field{Name: "cells", Type: describe.Choice, Required: true, Choices: cellChoices(), Doc: "Battery class."},
 				describe.Field{Name: "capacity", Type: describe.Capacity, Min: "0.5 Ah", Max: "5000 Ah", Doc: "Capacity of the whole battery at its class's rated time; without it sized."},

@@ -255,7 +255,9 @@ func sizeRelay(p *Plan, s *describe.Stage) {
 	if r, ok := describe.Get[describe.Ref](s.Fields, "coil"); ok {
 		p.aux[r.Val.Stage] += i
 	}
-	p.F.Relay = &facts.Relay{Part: k, Coil: ohm, CoilA: i, PickUp: pick.Needs, PickUpCold: dawn, DropOut: quantity.Volt(float64(nominal) * float64(class.DropOut))}
+	p.F.Relays = append(p.F.Relays, &facts.Relay{
+		Part: k, Coil: ohm, CoilA: i, PickUp: pick.Needs, PickUpCold: dawn, DropOut: quantity.Volt(float64(nominal) * float64(class.DropOut)),
+	})
 }
 
 // diode records a small rectifier diode: 1N4004 class, 1 A.
@@ -308,7 +310,11 @@ func sizeContact(p *Plan, s *describe.Stage) {
 		rated.Val = r
 	}
 	set(k, "contact", rated.Val.String()+" DC", float64(rated.Val), "A", false, given)
-	p.F.Relay.Contact, p.F.Relay.Rated = load, rated.Val
+	for _, r := range p.F.Relays {
+		if r.Part == k {
+			r.Contact, r.Rated = load, rated.Val
+		}
+	}
 }
 
 // filaments reports whether any lamp is of the incandescent kind, whose inrush

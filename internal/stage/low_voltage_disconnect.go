@@ -16,8 +16,9 @@ import (
 func lowVoltageDisconnect() *Kind {
 	return &Kind{
 		Kind: describe.Kind{
-			Name: "low-voltage-disconnect",
-			Doc:  "Cut-off: takes the load off a battery that is nearly empty and puts it back when it has been charged.",
+			Name:   "low-voltage-disconnect",
+			Single: true,
+			Doc:    "Cut-off: takes the load off a battery that is nearly empty and puts it back when it has been charged.",
 			Ports: []describe.Port{
 				{Name: "out", Doc: "plus behind the cut-off"},
 			},

@@ -117,6 +117,7 @@ func Size(site *describe.Site, c *circuit.Circuit, f *facts.Facts, more Reserve)
 			p.settleFuses()
 		}
 	}
+	p.foremost()
 	p.singles()
 	p.wires()
 	p.protect()

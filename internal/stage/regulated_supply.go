@@ -79,5 +79,5 @@ func sizeSupply(p *Plan, s *describe.Stage) {
 	set(t, "mains", mains.String(), float64(mains.Nominal), "V", false, true)
 	params(t, "", circuit.Param{Name: "volt", Value: float64(rated.Val.Volt), Tol: float64(acc)},
 		circuit.Param{Name: "limit_ampere", Value: float64(rated.Val.Ampere), Tol: powerTol})
-	p.F.Supply = &facts.Supply{Part: t, Volt: rated.Val.Volt, Rated: rated.Val.Ampere, Current: load, Mains: mains, Pinned: given}
+	p.F.Supplies = append(p.F.Supplies, &facts.Supply{Part: t, Volt: rated.Val.Volt, Rated: rated.Val.Ampere, Current: load, Mains: mains, Pinned: given})
 }

@@ -196,9 +196,7 @@ func sizeTransformer(p *Plan, s *describe.Stage) {
 	f.CableSize = p.controlSize()
 	f.CableAmpacity = p.ampacity(f.CableSize, 1)
 	p.sources[f.Part] = r
-	if p.F.Supply == nil {
-		p.F.Supply = &facts.Supply{Part: t, Volt: r.rated.Volt, Rated: r.rated.Ampere, Current: load, Mains: r.mains, Pinned: true}
-	}
+	p.F.Supplies = append(p.F.Supplies, &facts.Supply{Part: t, Volt: r.rated.Volt, Rated: r.rated.Ampere, Current: load, Mains: r.mains, Pinned: true})
 }
 
 // Figures that stand for what a description leaves open: the open-circuit voltage of a
