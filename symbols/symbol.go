@@ -126,6 +126,18 @@ func (s *Symbol) Bounds(t Turn) ink.Rect { return s.box(t, false) }
 // is drawn.
 func (s *Symbol) Body(t Turn) ink.Rect { return s.box(t, true) }
 
+// Below is how far the symbol's own lettering stands below Bounds in turn t, in modules;
+// 0 where it does not.
+func (s *Symbol) Below(t Turn) float64 {
+	r, most := s.Bounds(t), 0.0
+	for _, sh := range s.shapes {
+		if sh.path == nil && sh.shows(t) && !sh.slot {
+			most = max(most, sh.textAt(t).Y-r.Y-r.H)
+		}
+	}
+	return most
+}
+
 func (s *Symbol) box(t Turn, body bool) ink.Rect {
 	var all ink.Path
 	for _, sh := range s.shapes {

@@ -139,12 +139,13 @@ func (b *book) legendSymbols(sh *Sheet) float64 {
 	for _, e := range b.legendEntries() {
 		turn := levelTurn(e.sym)
 		r := e.sym.Bounds(turn)
-		h := max(legendLeast, r.H+legendGap)
+		h, below := max(legendLeast, r.H+legendGap), e.sym.Below(turn)
+		h += below
 		if y+h > bottom && col+1 < legendColumns {
 			col, y = col+1, legendTop+2.5
 		}
 		left := colText + legendColumn*float64(col)
-		at := node{int(left + legendCell/2 - r.X - r.W/2), int(y + h/2 - r.Y - r.H/2)}
+		at := node{int(left + legendCell/2 - r.X - r.W/2), int(y + (h-below)/2 - r.Y - r.H/2)}
 		o.add(&symbolMark{e.sym, at, turn, e.mark})
 		name := strings.ToUpper(e.sym.Name[:1]) + e.sym.Name[1:]
 		room := legendColumn - legendCell - 2
