@@ -29,6 +29,7 @@ var Values = []Word{
 	{"job-number", "number of the job"},
 	{"revision", "revision letter"},
 	{"nominal", "nominal voltage"},
+	{"highest", "highest voltage that the system reaches"},
 	{"outage", "outage asked for"},
 	{"battery-room", "temperatures of the battery's room"},
 	{"lamp-drop", "drop that is permitted"},

@@ -406,4 +406,5 @@ type Totals struct {
 	Bound      quantity.Ratio // least copper or cost that any choice needs, of the chosen
 	Proven     bool           // the choice is the least possible
 	LowestV    quantity.Volt
+	HighestV   quantity.Volt // that the system reaches, boost in the coldest room, whole volts upwards
 }

@@ -1,15 +1,16 @@
 package stage
 
 import (
+	"slices"
+	"strconv"
+	"strings"
+
 	"gloamwright/internal/catalogue"
+	"gloamwright/internal/circuit"
+	"gloamwright/internal/describe"
 	"gloamwright/internal/facts"
 	"gloamwright/internal/quantity"
 	"gloamwright/internal/sizing"
-	"math"
-	"strconv"
-
-	"gloamwright/internal/circuit"
-	"gloamwright/internal/describe"
 )
 
 // changeoverRelay lights its boards through a break contact when nothing holds its
@@ -221,6 +222,9 @@ func sizeRelay(p *Plan, s *describe.Stage) {
 		poles = 2
 	}
 	k.Description = class.Title + ", two poles"
+	if len(class.SeriesRows) == 0 && onePole(k) {
+		k.Description = class.Title + ", one pole"
+	}
 	if poles > 1 {
 		k.Description += " in series"
 		k.Note = "link 12 to 21 on the relay"
@@ -260,6 +264,21 @@ func sizeRelay(p *Plan, s *describe.Stage) {
 	})
 }
 
+// onePole reports whether only the first pole of a relay is used, and takes the spare one
+// off it: classes that are not made with two poles have none.
+func onePole(k *circuit.Part) bool {
+	if slices.ContainsFunc(k.Elements, furtherPole) {
+		return false
+	}
+	k.Pins = slices.DeleteFunc(k.Pins, func(n *circuit.Pin) bool { return strings.HasPrefix(n.Name, "2") })
+	return true
+}
+
+// furtherPole reports whether an element is a contact of another pole than the first.
+func furtherPole(e *circuit.Element) bool {
+	return e.Model == "contact" && !strings.HasPrefix(e.Pins[0].Pin.Name, "1")
+}
+
 // diode records a small rectifier diode: 1N4004 class, 1 A.
 func (p *Plan) diode(d *circuit.Part) {
 	set(d, "type", "1 A, 100 V", 1, "A", true, false)
@@ -273,14 +292,12 @@ func (p *Plan) diode(d *circuit.Part) {
 // lamps do not mind some tens of milliseconds, so the diode stands alone.
 func (p *Plan) suppress(d, k *circuit.Part, coil quantity.Ohm, class catalogue.RelayClass) {
 	in := sizing.SuppressionInput{Supply: p.Highest, Coil: coil, Forward: catalogue.Diode1N4004.Drop(quantity.Ampere(float64(p.Highest) / float64(coil)))}
-	across, times, w := sizing.Suppression(in, class.DropOut)
+	across, _, w := sizing.Suppression(in, class.DropOut)
 	p.work(d.Designation, "", w)
 	p.work(d.Designation, "voltage across what switches the coil", sizing.Working{
 		Formula: "U = U_max + U_F", Value: float64(across), Unit: "V", Source: "inductive discharge into a clamp (circuit textbooks)",
 		Substituted: sizing.Digits(float64(in.Supply)) + " V + " + sizing.Digits(float64(in.Forward)) + " V",
 	})
-	const tenths = 10
-	d.Note += "; " + k.Designation + " lets go " + sizing.Digits(math.Round(times*tenths)/tenths) + " L/R of its coil later"
 }
 
 // schottky records a small Schottky diode, 60 V 1 A. Its law is the model's own.

@@ -2,7 +2,6 @@ package stage
 
 import (
 	"fmt"
-	"math"
 	"slices"
 
 	"gloamwright/internal/catalogue"
@@ -156,7 +155,7 @@ func (p *Plan) link(f *facts.Fuse, class *catalogue.FuseClass, rating quantity.A
 	part.Description = class.Title + " and holder"
 	part.Note = ""
 	if class.Sheet {
-		part.Note = "its own sheet must state at least " + quantity.Volt(math.Ceil(float64(p.Highest))).String() + " DC"
+		part.Note = "its own sheet must state this"
 	}
 	for i := range part.Values {
 		if v := &part.Values[i]; v.Name == "rating" {

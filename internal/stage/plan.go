@@ -3,6 +3,7 @@ package stage
 import (
 	"errors"
 	"fmt"
+	"math"
 
 	"gloamwright/internal/catalogue"
 	"gloamwright/internal/circuit"
@@ -97,6 +98,7 @@ func Size(site *describe.Site, c *circuit.Circuit, f *facts.Facts, more Reserve)
 	p.laying()
 	p.readPrices()
 	p.voltages()
+	p.F.Totals.HighestV = quantity.Volt(math.Ceil(float64(p.Highest) - stepSlack))
 	p.wayClass = p.fuseClasses()[0]
 	for _, t := range site.Luminaires {
 		p.loads[t.Name.Val] = luminaireKindOf(t.Kind.Val).Load(p, t)

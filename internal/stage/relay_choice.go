@@ -1,6 +1,8 @@
 package stage
 
 import (
+	"slices"
+
 	"gloamwright/internal/catalogue"
 	"gloamwright/internal/describe"
 	"gloamwright/internal/quantity"
@@ -35,7 +37,7 @@ func (p *Plan) relayFor(s *describe.Stage) catalogue.RelayClass {
 	most := quantity.Ampere(-1)
 	carries := false
 	for _, c := range p.coilClasses(p.Site.Duty.Nominal.Val) {
-		if inSeries(p.Site) && len(c.SeriesRows) == 0 {
+		if p.twoPoles(s) && len(c.SeriesRows) == 0 {
 			continue // not made with two poles
 		}
 		may, _, err := p.contactLoad(c)
@@ -53,6 +55,12 @@ func (p *Plan) relayFor(s *describe.Stage) catalogue.RelayClass {
 	}
 	p.relays[s] = best
 	return best
+}
+
+// twoPoles reports whether a changeover needs a second pole: for two gaps in series, or
+// because both its break and its make contact feed something.
+func (p *Plan) twoPoles(s *describe.Stage) bool {
+	return inSeries(p.Site) || slices.ContainsFunc(p.part(s, "relay").Elements, furtherPole)
 }
 
 // coilClasses lists the classes that are made with a coil of that rated voltage, in the

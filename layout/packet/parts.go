@@ -194,10 +194,12 @@ func (b *book) describe(p *circuit.Part) (what, must string) {
 		if d.Charger.Compensated {
 			must += "; probe"
 		}
-	case d.Supply != nil && p == d.Supply.Part:
-		must = fmt.Sprintf("%v regulated; ≥ %s", d.Supply.Volt, figure(d.Supply.Current))
-	case d.Relay != nil && p == d.Relay.Part:
-		must = fmt.Sprintf("coil picks up ≤ %s hot; contact ≥ %s DC", figure(d.Relay.LowestFeed), figure(d.Relay.Contact))
+	case b.supplyOf(p) != nil:
+		s := b.supplyOf(p)
+		must = fmt.Sprintf("%v regulated; ≥ %s", s.Volt, figure(s.Current))
+	case b.relayOf(p) != nil:
+		r := b.relayOf(p)
+		must = fmt.Sprintf("coil picks up ≤ %s hot; contact ≥ %s at %v DC", figure(r.LowestFeed), figure(r.Contact), d.Totals.HighestV)
 	case d.CutOff != nil && p == d.CutOff.Part:
 		must = fmt.Sprintf("opens %v; closes %v; ≥ %s", d.CutOff.Opens, d.CutOff.Recloses, figure(d.CutOff.Current))
 	case p.Kind == circuit.Fuse:
@@ -205,7 +207,7 @@ func (b *book) describe(p *circuit.Part) (what, must string) {
 			if f.Colour != "" {
 				what += ", " + f.Colour
 			}
-			must = fmt.Sprintf("DC ≥ %v; breaks ≥ %s", d.Site.Duty.Nominal.Val, figure(b.worstShort(f)))
+			must = fmt.Sprintf("DC ≥ %v; breaks ≥ %s", d.Totals.HighestV, figure(b.worstShort(f)))
 		}
 	case p.Kind == circuit.LuminaireLamp:
 		if l := b.lamp(p); l != nil {
@@ -235,6 +237,25 @@ func (b *book) describe(p *circuit.Part) (what, must string) {
 		must = "the same values"
 	}
 	return what, must
+}
+
+// supplyOf and relayOf are what was found of a part; nil of any other.
+func (b *book) supplyOf(p *circuit.Part) *facts.Supply {
+	for _, s := range b.d.Supplies {
+		if s.Part == p && p.Kind != circuit.Transformer {
+			return s
+		}
+	}
+	return nil
+}
+
+func (b *book) relayOf(p *circuit.Part) *facts.Relay {
+	for _, r := range b.d.Relays {
+		if r.Part == p {
+			return r
+		}
+	}
+	return nil
 }
 
 // worstShort is the greatest current that a fuse of the same kind and rating may have to

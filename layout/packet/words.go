@@ -171,6 +171,7 @@ func (b *book) valuesOfJob() map[string]string {
 		v[w.Name] = ""
 	}
 	v["job-number"], v["revision"] = job.Number.Val, job.Revision.Val
+	v["highest"] = d.Totals.HighestV.String()
 	v["nominal"], v["outage"] = d.Site.Duty.Nominal.Val.String(), d.Site.Duty.Outage.Val.String()
 	v["battery-room"], v["lamp-drop"] = degrees(d.Site.Duty.BatteryRoom.Val), p.LampDrop.Val.String()
 	v["positive"], v["negative"] = p.Positive.Val, p.Negative.Val
