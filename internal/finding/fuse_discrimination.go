@@ -34,9 +34,13 @@ var fuseDiscrimination = &Check{
 			if n > 1 {
 				more = "; " + count(n-1, "fuse") + " more likewise"
 			}
+			from := "above " + v
+			if worst.DiscriminatesTo <= 0 {
+				from = "at any current"
+			}
 			report(Finding{
 				Severity: Caution, Subject: up.Part.Designation, At: up.Part.At,
-				Message: fmt.Sprintf("%s: a short behind %s may open both above %s, %s can flow%s", fuseTitle(up), worst.Part.Designation, v, bound, more),
+				Message: fmt.Sprintf("%s: a short behind %s may open both %s, %s can flow%s", fuseTitle(up), worst.Part.Designation, from, bound, more),
 				Remedy: fmt.Sprintf("A larger step between the ratings than %s to %s; after such a fault look at both fuses.",
 					say(worst.Rating), say(up.Rating)),
 				Value: float64(worst.DiscriminatesTo), Limit: float64(worst.Prospective), Unit: "A", Over: true,

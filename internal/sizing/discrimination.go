@@ -57,7 +57,11 @@ func Discriminate(in DiscriminationInput) (Discrimination, Working, error) {
 		if math.IsInf(float64(t), 1) || e <= 0 {
 			return -1
 		}
-		return math.Log(float64(e / t))
+		m := math.Log(float64(e / t))
+		if m == 0 && i <= up.Fastest[0].Multiple*float64(in.Upper.Rating) {
+			m = slack // the lower one opens within the conventional time, the upper one not within it
+		}
+		return m
 	}
 	if margin(start) > 0 {
 		d.From = quantity.Ampere(start)

@@ -133,7 +133,7 @@ func TestCurrentToOpenInverts(t *testing.T) {
 // below the upper's earliest at every current tried; just beyond its end it is not.
 func TestDiscriminationHolds(t *testing.T) {
 	rapid.Check(t, func(t *rapid.T) {
-		classes := []*catalogue.FuseClass{catalogue.FuseBlade, catalogue.FuseBladeHigh, catalogue.FuseKnife, catalogue.FuseCartridgeT}
+		classes := []*catalogue.FuseClass{catalogue.FuseBlade, catalogue.FuseBladeHigh, catalogue.FuseKnife, catalogue.FuseCylinder10, catalogue.FuseCartridgeT}
 		up := rapid.SampledFrom(classes).Draw(t, "upper")
 		lo := rapid.SampledFrom(classes).Draw(t, "lower")
 		in := DiscriminationInput{
@@ -170,7 +170,13 @@ func TestDiscriminationHolds(t *testing.T) {
 			t.Fatalf("still holds at %v beyond %v", d.To*1.0001, d.To)
 		}
 	})
-	_, _, err := Discriminate(DiscriminationInput{Upper: Link{catalogue.FuseStrip, 100}, Lower: Link{catalogue.FuseBlade, 5}, Fault: 500})
+	// IEC 60269-1 table 3 (from memory): 16 A gG holds 85 A for 0.1 s, and 2 A has opened
+	// within 0.1 s from 23 A on; below 20 A the larger never opens within its hour.
+	d, _, err := Discriminate(DiscriminationInput{Upper: Link{catalogue.FuseKnife, 16}, Lower: Link{catalogue.FuseCylinder10, 2}, Fault: 500})
+	if err != nil || math.Abs(float64(d.From)-4.2) > 1e-9 || math.Abs(float64(d.To)-85) > 1e-6 || d.Full {
+		t.Errorf("2 A gG below 16 A gG: %+v, %v; want 4.2 A to 85 A", d, err)
+	}
+	_, _, err = Discriminate(DiscriminationInput{Upper: Link{catalogue.FuseStrip, 100}, Lower: Link{catalogue.FuseBlade, 5}, Fault: 500})
 	unknown(t, err)
 }
 
