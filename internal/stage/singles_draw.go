@@ -35,6 +35,7 @@ func (x *singles) alone(n *net, left int) int {
 	for _, t := range n.points {
 		term := lead("tp/"+t.Name.Val, left+labelColumn, stubLength)
 		tp := b.TestPoint(t.Name.Val, capital(t.Name.Val), term.Pin("in"))
+		term.Key, tp.Key = partsStage+"/terminal/"+cabinet+"/tp/"+t.Name.Val, partsStage+"/tp/"+t.Name.Val // wherever it is drawn
 		side := "S"
 		if n.minus() {
 			side = "N"

@@ -128,6 +128,7 @@ func (g *group) width() int {
 
 // draw fills blocks with the groups from left to right.
 func (x *singles) draw(groups []*group) {
+	groups = slices.DeleteFunc(groups, x.hosted)
 	var blocks [][]*group
 	left := 0
 	for _, g := range groups {
