@@ -181,15 +181,6 @@ func (b *book) placeBlocks(way arrangement, todo []*vertex) *blockSheet {
 			s.put(cell{1 + k%way.chain, k / way.chain}, v)
 		}
 	}
-	for _, v := range todo { // further batteries, each behind its charger
-		if waiting(v) && v.kind() == "battery" {
-			list := []*vertex{v}
-			if c := v.energyFrom(); waiting(c) {
-				list = append([]*vertex{c}, list...)
-			}
-			s.row(list, 0, cell{1 - len(list) + 1, 1}, true)
-		}
-	}
 	for _, v := range todo { // branches of the energy's way
 		if waiting(v) && v.energyFrom() != nil && !v.fed() && v.kind() != "linear-charger" {
 			at := cell{1, 1}
