@@ -163,9 +163,12 @@ func fusedExhaustive(t *Tree, ways []FusedWay, ratio float64) (best float64, fou
 // TestFusedEqualsExhaustive holds the choice of cables, terminals and fuses together
 // against trying everything.
 func TestFusedEqualsExhaustive(t *testing.T) {
-	const ratio = 1.6
+	const (
+		ratio  = 1.6
+		rounds = 10 // the trees are small and quick: some hundreds, even in a short run
+	)
 	fits, dearer := 0, 0
-	rapid.Check(t, func(rt *rapid.T) {
+	check := func(rt *rapid.T) {
 		tree, ways := fusedTree(rt)
 		got, picks, err := tree.ChooseFused(ways, ratio)
 		var b *BlockedError
@@ -187,7 +190,10 @@ func TestFusedEqualsExhaustive(t *testing.T) {
 			rt.Fatalf("costs %v (proven %v), the least is %v", cost, got.Proven, want)
 		}
 		fits++
-	})
+	}
+	for range rounds {
+		rapid.Check(t, check)
+	}
 	if fits < 20 || dearer < 5 {
 		t.Errorf("only %d trees fit, %d fuses are not the smallest: the trees prove little", fits, dearer)
 	}
