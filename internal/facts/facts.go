@@ -215,6 +215,8 @@ type Battery struct {
 	Blocks            int    // blocks in series
 	Parallel          int
 	BlockVolt         quantity.Volt
+	BlockAh           quantity.AmpereHour // capacity of one block
+	BlockNeed         quantity.AmpereHour // what one block must have at least
 	Capacity          quantity.AmpereHour
 	RatedHours        float64 // discharge time that Capacity is stated for
 	Required          quantity.AmpereHour

@@ -24,7 +24,7 @@ func Summary(w io.Writer, d *design.Design) {
 	duty := d.Site.Duty
 	b := d.Battery
 	if b.Part != nil {
-		row("Battery", "%s %s, %d × %v V %s; needs %s", b.Part.Designation, b.Capacity, b.Blocks*b.Parallel, float64(b.BlockVolt), b.ClassName, b.Required)
+		row("Battery", "%s %s, %d × %v %v %s; needs %s", b.Part.Designation, b.Capacity, b.Blocks*b.Parallel, b.BlockVolt, b.BlockAh, b.ClassName, b.Required)
 	}
 	if d.Endurance.Held > 0 {
 		row("Holds", "%s at %v, end of life; %v asked", hours(d.Endurance.Held), duty.BatteryRoom.Val.Low, duty.Outage.Val)
@@ -56,7 +56,12 @@ func without(b *facts.Bill) string {
 	if len(b.Without) == 0 {
 		return ""
 	}
-	return "; without a price: " + strings.Join(b.Without, ", ")
+	names := b.Without[:min(len(b.Without), mostNamed)]
+	s := "; without a price: " + strings.Join(names, ", ")
+	if more := len(b.Without) - len(names); more > 0 {
+		s += fmt.Sprintf(" and %d more", more)
+	}
+	return s
 }
 
 func fuseLine(d *design.Design) string {

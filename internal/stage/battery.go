@@ -234,6 +234,7 @@ func sizeBattery(p *Plan, s *describe.Stage) {
 	params(g, "", circuit.Param{Name: "emf", Value: float64(p.Full)}, circuit.Param{Name: "ohm", Value: float64(p.Internal)})
 	*b = facts.Battery{
 		Part: g, Class: p.Class.Name, ClassName: p.Class.Title, Series: p.Cells, Blocks: bank.Series, Parallel: bank.Parallel,
+		BlockAh: bank.Block.Capacity, BlockNeed: need / quantity.AmpereHour(max(1, bank.Parallel)),
 		BlockVolt: quantity.Volt(bank.Block.Cells) * p.Class.Cell, Capacity: bank.Capacity, Required: need, Pinned: pinned,
 		RatedHours: p.Class.RatedTime.Hours(), Rates: rates, EndVolt: p.End, FullVolt: p.Full, FloatVolt: p.Float, Resistance: p.Internal,
 		Fuse: p.part(s, "fuse"), Removed: quantity.AmpereHour(float64(amps) * outage.Hours()),

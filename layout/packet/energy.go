@@ -23,7 +23,7 @@ func (b *book) powerBoxes() []box {
 		out = append(out, box{"Charger", c.Part.Designation, []string{fmt.Sprintf("%v %v", d.Site.Duty.Nominal.Val, c.Current), "float " + quantity.Fixed(c.Float, 1), "at 20 °C"}, false})
 	}
 	if t := d.Battery; t.Part != nil {
-		x := box{head: "Battery", name: t.Part.Designation, lines: []string{fmt.Sprintf("%d × %v %v", max(1, t.Blocks*t.Parallel), t.BlockVolt, t.Capacity)}}
+		x := box{head: "Battery", name: t.Part.Designation, lines: []string{fmt.Sprintf("%d × %v %v", max(1, t.Blocks*t.Parallel), t.BlockVolt, t.BlockAh)}}
 		if f := b.mainFuse(); f != nil {
 			x.lines = append(x.lines, fmt.Sprintf("main fuse %v", f.Rating), f.Part.Designation)
 		}

@@ -184,8 +184,8 @@ func (b *book) describe(p *circuit.Part) (what, must string) {
 	switch {
 	case p == d.Battery.Part:
 		bt := d.Battery
-		what = fmt.Sprintf("%s %v %v, %s", bold("Battery block"), bt.BlockVolt, bt.Capacity, bt.ClassName)
-		must = "≥ " + figure(bt.Required)
+		what = fmt.Sprintf("%s %v %v, %s", bold("Battery block"), bt.BlockVolt, bt.BlockAh, bt.ClassName)
+		must = "≥ " + figure(bt.BlockNeed)
 		if bt.Blocks*bt.Parallel > 1 {
 			must += "; all of one batch"
 		}
