@@ -78,9 +78,13 @@ func Judge(f *facts.Facts) []Finding {
 	return out
 }
 
+// NothingFits reports whether the finding is a step of sizing for which nothing fits, from
+// which others may follow.
+func (f Finding) NothingFits() bool { return f.Check == blocked.Name }
+
 // follows is 0 for a step of sizing for which nothing fits, 1 for all else.
 func follows(f Finding) int {
-	if f.Check == blocked.Name {
+	if f.NothingFits() {
 		return 0
 	}
 	return 1

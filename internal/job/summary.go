@@ -56,12 +56,7 @@ func without(b *facts.Bill) string {
 	if len(b.Without) == 0 {
 		return ""
 	}
-	names := b.Without[:min(len(b.Without), mostNamed)]
-	s := "; without a price: " + strings.Join(names, ", ")
-	if more := len(b.Without) - len(names); more > 0 {
-		s += fmt.Sprintf(" and %d more", more)
-	}
-	return s
+	return "; without a price: " + someOf(b.Without)
 }
 
 func fuseLine(d *design.Design) string {
@@ -113,7 +108,7 @@ const (
 // likewise returns the findings of f's check and severity. A step for which nothing fits
 // is always shown in full.
 func likewise(all []finding.Finding, f finding.Finding) []*finding.Finding {
-	if f.Check == "blocked" {
+	if f.NothingFits() {
 		return nil
 	}
 	var out []*finding.Finding
@@ -128,11 +123,17 @@ func likewise(all []finding.Finding, f finding.Finding) []*finding.Finding {
 // subjects names what findings are about.
 func subjects(list []*finding.Finding) string {
 	var names []string
-	for _, f := range list[:min(len(list), mostNamed)] {
+	for _, f := range list {
 		names = append(names, f.Subject)
 	}
-	s := strings.Join(names, ", ")
-	if more := len(list) - len(names); more > 0 {
+	return someOf(names)
+}
+
+// someOf lists the first names and counts the rest.
+func someOf(names []string) string {
+	some := names[:min(len(names), mostNamed)]
+	s := strings.Join(some, ", ")
+	if more := len(names) - len(some); more > 0 {
 		s += fmt.Sprintf(" and %d more", more)
 	}
 	return s

@@ -216,24 +216,6 @@ func abs(x float64) float64 {
 // voltSlack is how far a voltage may stand below its limit by rounding.
 const voltSlack = 1e-9
 
-// meets reports whether sizes keep every voltage and loop limit; sizes are within
-// the allowed ones. On success the solved state is returned.
-func (t *Tree) meets(sizes []*Option) ([]quantity.Volt, []quantity.Ampere, bool) {
-	if !t.clears(sizes) {
-		return nil, nil, false
-	}
-	v, a, ok := t.Solve(sizes)
-	if !ok {
-		return nil, nil, false
-	}
-	for i := range t.Legs {
-		if float64(v[i]) < float64(t.Legs[i].MinVolt)-voltSlack {
-			return nil, nil, false
-		}
-	}
-	return v, a, true
-}
-
 // loops returns the fault loop from the source to the end of each leg.
 func (t *Tree) loops(sizes []*Option) []float64 {
 	l := make([]float64, len(t.Legs))

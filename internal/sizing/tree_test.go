@@ -301,3 +301,21 @@ func TestBoundBelowExhaustive(t *testing.T) {
 		t.Errorf("%d trees fit, %d bounds were tight", fits, tight)
 	}
 }
+
+// meets reports whether sizes keep every voltage and loop limit; sizes are within
+// the allowed ones. On success the solved state is returned.
+func (t *Tree) meets(sizes []*Option) ([]quantity.Volt, []quantity.Ampere, bool) {
+	if !t.clears(sizes) {
+		return nil, nil, false
+	}
+	v, a, ok := t.Solve(sizes)
+	if !ok {
+		return nil, nil, false
+	}
+	for i := range t.Legs {
+		if float64(v[i]) < float64(t.Legs[i].MinVolt)-voltSlack {
+			return nil, nil, false
+		}
+	}
+	return v, a, true
+}

@@ -218,7 +218,7 @@ func sizeRelay(p *Plan, s *describe.Stage) {
 		p.block(k.Designation, k.At, "", err)
 	}
 	poles := quantity.Ohm(1)
-	if inSeries(p.Site) {
+	if p.inSeries() {
 		poles = 2
 	}
 	k.Description = class.Title + ", two poles"

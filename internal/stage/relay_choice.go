@@ -18,8 +18,11 @@ const oneGap quantity.Volt = 30
 func inSeries(site *describe.Site) bool {
 	p := &Plan{Site: site}
 	p.voltages()
-	return p.Highest > oneGap
+	return p.inSeries()
 }
+
+// inSeries is the same where the voltages are known.
+func (p *Plan) inSeries() bool { return p.Highest > oneGap }
 
 // relayFor is the class of a changeover relay: the first whose contact breaks the load
 // at the highest voltage and whose coil the photocells that hold it can work; a class
@@ -60,7 +63,7 @@ func (p *Plan) relayFor(s *describe.Stage) catalogue.RelayClass {
 // twoPoles reports whether a changeover needs a second pole: for two gaps in series, or
 // because both its break and its make contact feed something.
 func (p *Plan) twoPoles(s *describe.Stage) bool {
-	return inSeries(p.Site) || slices.ContainsFunc(p.part(s, "relay").Elements, furtherPole)
+	return p.inSeries() || slices.ContainsFunc(p.part(s, "relay").Elements, furtherPole)
 }
 
 // coilClasses lists the classes that are made with a coil of that rated voltage, in the
@@ -78,7 +81,7 @@ func (p *Plan) coilClasses(rated quantity.Volt) []catalogue.RelayClass {
 // contactLoad holds the contacts of a class against the lighting load.
 func (p *Plan) contactLoad(c catalogue.RelayClass) (quantity.Ampere, sizing.Working, error) {
 	return sizing.ContactLoad(sizing.ContactInput{
-		Class: c, Volt: p.Highest, Current: p.Light, Lamps: p.filaments(), Series: inSeries(p.Site),
+		Class: c, Volt: p.Highest, Current: p.Light, Lamps: p.filaments(), Series: p.inSeries(),
 	})
 }
 

@@ -181,6 +181,7 @@ func (b *book) describe(p *circuit.Part) (what, must string) {
 	if holder {
 		what += ", with holder"
 	}
+	supply, relay := b.supplyOf(p), b.relayOf(p)
 	switch {
 	case p == d.Battery.Part:
 		bt := d.Battery
@@ -194,12 +195,10 @@ func (b *book) describe(p *circuit.Part) (what, must string) {
 		if d.Charger.Compensated {
 			must += "; probe"
 		}
-	case b.supplyOf(p) != nil:
-		s := b.supplyOf(p)
-		must = fmt.Sprintf("%v regulated; ≥ %s", s.Volt, figure(s.Current))
-	case b.relayOf(p) != nil:
-		r := b.relayOf(p)
-		must = fmt.Sprintf("coil picks up ≤ %s hot; contact ≥ %s at %v DC", figure(r.LowestFeed), figure(r.Contact), d.Totals.HighestV)
+	case supply != nil && p.Kind != circuit.Transformer:
+		must = fmt.Sprintf("%v regulated; ≥ %s", supply.Volt, figure(supply.Current))
+	case relay != nil:
+		must = fmt.Sprintf("coil picks up ≤ %s hot; contact ≥ %s at %v DC", figure(relay.LowestFeed), figure(relay.Contact), d.Totals.HighestV)
 	case d.CutOff != nil && p == d.CutOff.Part:
 		must = fmt.Sprintf("opens %v; closes %v; ≥ %s", d.CutOff.Opens, d.CutOff.Recloses, figure(d.CutOff.Current))
 	case p.Kind == circuit.Fuse:
@@ -239,25 +238,6 @@ func (b *book) describe(p *circuit.Part) (what, must string) {
 	return what, must
 }
 
-// supplyOf and relayOf are what was found of a part; nil of any other.
-func (b *book) supplyOf(p *circuit.Part) *facts.Supply {
-	for _, s := range b.d.Supplies {
-		if s.Part == p && p.Kind != circuit.Transformer {
-			return s
-		}
-	}
-	return nil
-}
-
-func (b *book) relayOf(p *circuit.Part) *facts.Relay {
-	for _, r := range b.d.Relays {
-		if r.Part == p {
-			return r
-		}
-	}
-	return nil
-}
-
 // worstShort is the greatest current that a fuse of the same kind and rating may have to
 // break, so that all of them are one item.
 func (b *book) worstShort(f *facts.Fuse) quantity.Ampere {
@@ -273,24 +253,6 @@ func (b *book) worstShort(f *facts.Fuse) quantity.Ampere {
 func stripOf(p *circuit.Part) string {
 	s, _, _ := strings.Cut(p.Designation, ":")
 	return s
-}
-
-func (b *book) fuseOf(p *circuit.Part) *facts.Fuse {
-	for _, f := range b.d.Fuses {
-		if f.Part == p {
-			return f
-		}
-	}
-	return nil
-}
-
-func (b *book) lamp(p *circuit.Part) *facts.Luminaire {
-	for _, l := range b.d.Luminaires {
-		if l.Part == p {
-			return l
-		}
-	}
-	return nil
 }
 
 // wireItems are cables and single wires by size, colour apart for wires.
