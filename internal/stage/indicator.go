@@ -27,13 +27,7 @@ func indicator() *Kind {
 			b.Element(p, "", "led", "A", "1", "K", "2")
 			from, _ := b.ref(s, "from")
 			b.sketch(16, "shows that", "it is live")
-			up := b.lead(circuit.OpUp, "plus", r.Pin("1"), from, 12, 12, 12, upEnd)
-			b.symbol("resistor", r, 12, 14, "V", "L")
-			b.line(b.Wire(r.Pin("2"), p.Pin("1"), true, bridgeLength), 12, 16, 12, 24)
-			b.symbol("signal_lamp", p, 12, 26, "V", "L")
-			down := b.lead(circuit.OpDown, "minus", p.Pin("2"), Minus, 12, 28, 12, downEnd)
-			b.number(up, 12, 9)
-			b.number(down, 12, 42)
+			b.hangTwo(from, "resistor", r, "signal_lamp", p)
 		},
 		Steps: []Step{{Control, sizeIndicator}},
 	}

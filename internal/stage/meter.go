@@ -52,13 +52,7 @@ func meter() *Kind {
 			p := b.Part("meter", circuit.Voltmeter, "Voltmeter", "1", "2")
 			b.Element(p, "", "meter", "1", "1", "2", "2")
 			b.sketch(15, "shows the", "volts")
-			up := b.lead(circuit.OpUp, "plus", f.Pin("1"), from, 12, 12, 12, upEnd)
-			b.symbol("fuse", f, 12, 14, "V", "L")
-			b.line(b.Wire(f.Pin("2"), p.Pin("1"), true, bridgeLength), 12, 16, 12, 24)
-			b.symbol("voltmeter", p, 12, 26, "V", "L")
-			down := b.lead(circuit.OpDown, "minus", p.Pin("2"), Minus, 12, 28, 12, downEnd)
-			b.number(up, 12, 9)
-			b.number(down, 12, 42)
+			b.hangTwo(from, "fuse", f, "voltmeter", p)
 		},
 		Steps: []Step{{Trunk, sizeMeter}},
 	}

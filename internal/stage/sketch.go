@@ -115,3 +115,15 @@ func (b *Build) output(s *describe.Stage, port string, pin *circuit.Pin, y, x, c
 	b.add(circuit.SketchItem{Op: circuit.OpRight, Name: port, Y: float64(y)})
 	b.outs[key] = pin
 }
+
+// hangTwo draws two parts with pins 1 and 2 one under the other, from a plus rail down to
+// L−.
+func (b *Build) hangTwo(from, upperSymbol string, upper *circuit.Part, lowerSymbol string, lower *circuit.Part) {
+	up := b.lead(circuit.OpUp, "plus", upper.Pin("1"), from, 12, 12, 12, upEnd)
+	b.symbol(upperSymbol, upper, 12, 14, "V", "L")
+	b.line(b.Wire(upper.Pin("2"), lower.Pin("1"), true, bridgeLength), 12, 16, 12, 24)
+	b.symbol(lowerSymbol, lower, 12, 26, "V", "L")
+	down := b.lead(circuit.OpDown, "minus", lower.Pin("2"), Minus, 12, 28, 12, downEnd)
+	b.number(up, 12, 9)
+	b.number(down, 12, 42)
+}
